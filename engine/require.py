@@ -1,0 +1,55 @@
+"""Checks at the door of every formula: finite numbers inside a stated range, or an error with a reason.
+
+Every check returns its argument as a float array (0-d for a scalar), so a formula validates and
+converts in one line: ``T = above(0, "T", T)``.
+"""
+
+from __future__ import annotations
+
+from collections.abc import Iterable
+
+import numpy as np
+from numpy.typing import ArrayLike, NDArray
+
+from engine.errors import ImpossibleValue, MissingValue, NotApplicable, WrongType
+
+Array = NDArray[np.float64]
+
+
+def finite(name: str, value: ArrayLike) -> Array:
+    """Return ``value`` as floats; refuse blanks, text, booleans, NaN and infinities."""
+    array = np.asarray(value)
+    if array.dtype.kind not in "fiu":
+        raise (MissingValue if value is None else WrongType)(name, value, "must be a number")
+    array = array.astype(np.float64, copy=False)
+    if not np.isfinite(array.sum()) and not np.isfinite(array).all():
+        raise ImpossibleValue(name, float(array[~np.isfinite(array)].flat[0]), "must be a finite number")
+    return array
+
+
+def above(bound: float, name: str, value: ArrayLike, clause: str = "") -> Array:
+    """Return ``value``; refuse anything at or below ``bound``."""
+    array = finite(name, value)
+    if array.size and array.min() <= bound:
+        raise ImpossibleValue(name, float(array.min()), f"must be above {bound:g}", clause)
+    return array
+
+
+def at_least(bound: float, name: str, value: ArrayLike, clause: str = "") -> Array:
+    """Return ``value``; refuse anything below ``bound``."""
+    array = finite(name, value)
+    if array.size and array.min() < bound:
+        raise ImpossibleValue(name, float(array.min()), f"must be at least {bound:g}", clause)
+    return array
+
+
+def choice(name: str, value: object, allowed: Iterable[str], clause: str = "") -> str:
+    """Return ``value`` if it is one of the allowed words (exact spelling)."""
+    words = tuple(allowed)
+    if value is None or value == "":
+        raise MissingValue(name, None, f"must be one of {', '.join(words)}", clause)
+    if not isinstance(value, str):
+        raise WrongType(name, value, f"must be text, one of {', '.join(words)}", clause)
+    if value not in words:
+        raise NotApplicable(name, value, f"must be one of {', '.join(words)}", clause)
+    return value

@@ -1,0 +1,1 @@
+"""The bridge from the engine to spreadsheets: catalogue, adapter, front ends, audit, command."""
