@@ -1,0 +1,125 @@
+"""From one kind of cell value to another, as a spreadsheet does it by context.
+
+A blank is 0, "" or FALSE; a text that is a number counts as that number in arithmetic; an error ends the
+evaluation of whatever it enters. Text whose number depends on the user's settings (dates, currencies,
+decimal commas) is refused rather than guessed.
+"""
+
+from __future__ import annotations
+
+import re
+from datetime import date
+from decimal import Decimal
+from typing import Final
+
+from xlbridge.headless.operands import Area, NotEvaluated, Operand
+from xlbridge.values import CellError, Grid, Omitted, Scalar
+
+#: two numbers that agree to fifteen digits are equal to a spreadsheet, and their difference is zero.
+FIFTEEN_DIGITS: Final = 2.0**-48
+
+_NUMBER: Final = re.compile(r"\s*[-+]?(\d{1,3}(,\d{3})+|\d+)?(\.\d*)?(E[-+]?\d+)?\s*%?\s*", re.IGNORECASE)
+_ISO_DATE: Final = re.compile(r"\s*(\d{4})-(\d{1,2})-(\d{1,2})\s*")
+_BY_SETTINGS: Final = re.compile(
+    r"[\s\d/:.,$€£¥()%+-]*\d[\s\d/:.,$€£¥()%+-]*(am|pm|jan|feb|mar|apr|may|jun|jul|aug|sep|oct|nov|dec)?"
+    r"[a-z]*[\s\d/:.,$€£¥()%+-]*",
+    re.IGNORECASE,
+)
+#: day 0 of the 1900 date system from 1900-03-01 on; before it the system counts a 29 February 1900.
+_DAY_ZERO: Final = date(1899, 12, 30).toordinal()
+
+
+class Fault(Exception):
+    """Ends the evaluation of a function or operator with an error value."""
+
+    def __init__(self, code: str | CellError, reason: str = "") -> None:
+        self.error = code if isinstance(code, CellError) else CellError(code, reason)
+        super().__init__(str(self.error))
+
+
+def plain(operand: Operand) -> Scalar | Grid:
+    """Return the values behind an operand: a scalar for a single cell, a grid for a larger area."""
+    if isinstance(operand, Area):
+        grid = operand.grid
+        return grid[0][0] if operand.is_cell else grid
+    return None if isinstance(operand, Omitted) else operand
+
+
+def number(value: Scalar) -> float:
+    """Return the number a value stands for in arithmetic; an error or other text is a fault."""
+    if type(value) is float:
+        return value
+    if value is None:
+        return 0.0
+    if isinstance(value, CellError):
+        raise Fault(value)
+    if isinstance(value, str):
+        return _number_of_text(value)
+    return float(value)
+
+
+def text(value: Scalar) -> str:
+    """Return the text a value stands for in a concatenation; an error is a fault."""
+    if type(value) is str:
+        return value
+    if type(value) is float:
+        return general(value)
+    if isinstance(value, CellError):
+        raise Fault(value)
+    return "" if value is None else str(value).upper()
+
+
+def logical(value: Scalar) -> bool:
+    """Return the truth a value stands for in a condition; text other than TRUE and FALSE is a fault."""
+    if type(value) is bool:
+        return value
+    if isinstance(value, CellError):
+        raise Fault(value)
+    if isinstance(value, str):
+        if value.upper() in ("TRUE", "FALSE"):
+            return value.upper() == "TRUE"
+        raise Fault("#VALUE!", f"{value!r} is not a logical value")
+    return bool(value)
+
+
+def parse_number(words: str) -> float | None:
+    """Return the number a text spells in every setting, or None; refuse one that depends on settings."""
+    if _NUMBER.fullmatch(words) and any(sign.isdigit() for sign in words):
+        digits = words.strip().replace(",", "")
+        return float(digits[:-1]) / 100.0 if digits.endswith("%") else float(digits)
+    if iso := _ISO_DATE.fullmatch(words):
+        return _serial(*map(int, iso.groups()))
+    if _BY_SETTINGS.fullmatch(words):
+        raise NotEvaluated(f"whether the text {words!r} is a number, a date or text depends on settings")
+    return None
+
+
+def general(value: float) -> str:
+    """Return a number in the General format: fifteen significant digits, an exponent where it is long."""
+    if value == int(value) and abs(value) < 1e15:
+        return str(int(value))
+    mantissa, exponent = f"{value:.14E}".split("E")
+    if -10 < int(exponent) < 20:
+        shown = format(Decimal(f"{mantissa}E{exponent}"), "f")
+        return shown.rstrip("0").rstrip(".") if "." in shown else shown
+    return f"{mantissa.rstrip('0').rstrip('.')}E{exponent}"
+
+
+def nearly_equal(left: float, right: float) -> bool:
+    """Return whether two numbers agree to fifteen digits."""
+    return left == right or abs(left - right) < FIFTEEN_DIGITS * min(abs(left), abs(right))
+
+
+def _number_of_text(words: str) -> float:
+    found = parse_number(words)
+    if found is None:
+        raise Fault("#VALUE!", f"{words!r} is not a number")
+    return found
+
+
+def _serial(year: int, month: int, day: int) -> float | None:
+    try:
+        ordinal = date(year, month, day).toordinal() - _DAY_ZERO
+    except ValueError:
+        return None
+    return float(ordinal if ordinal > 60 else ordinal - 1) if ordinal > 1 else None
