@@ -6,14 +6,23 @@ converts in one line: ``T = above(0, "T", T)``.
 
 from __future__ import annotations
 
-from collections.abc import Iterable
+from collections.abc import Callable, Iterable, Sequence
+from functools import wraps
+from typing import ParamSpec, TypeAlias, TypeVar, cast
 
 import numpy as np
 from numpy.typing import ArrayLike, NDArray
 
 from engine.errors import ImpossibleValue, MissingValue, NotApplicable, WrongType
 
-Array = NDArray[np.float64]
+Array: TypeAlias = NDArray[np.float64]
+#: what a formula returns: a float64 for scalar arguments, an array of the broadcast shape otherwise
+Result: TypeAlias = Array | np.float64
+#: what a formula in words returns: a text for scalar arguments, an array of texts otherwise
+Words: TypeAlias = str | NDArray[np.str_]
+
+P = ParamSpec("P")
+R = TypeVar("R")
 
 
 def finite(name: str, value: ArrayLike) -> Array:
@@ -43,6 +52,14 @@ def at_least(bound: float, name: str, value: ArrayLike, clause: str = "") -> Arr
     return array
 
 
+def at_most(bound: float, name: str, value: ArrayLike, clause: str = "") -> Array:
+    """Return ``value``; refuse anything above ``bound``."""
+    array = finite(name, value)
+    if array.size and array.max() > bound:
+        raise ImpossibleValue(name, float(array.max()), f"must be at most {bound:g}", clause)
+    return array
+
+
 def choice(name: str, value: object, allowed: Iterable[str], clause: str = "") -> str:
     """Return ``value`` if it is one of the allowed words (exact spelling)."""
     words = tuple(allowed)
@@ -53,3 +70,25 @@ def choice(name: str, value: object, allowed: Iterable[str], clause: str = "") -
     if value not in words:
         raise NotApplicable(name, value, f"must be one of {', '.join(words)}", clause)
     return value
+
+
+def formula(function: Callable[P, R]) -> Callable[P, R]:
+    """Decorate a formula: shapes that do not fit are refused with a reason, 0-d results become scalars."""
+
+    @wraps(function)
+    def checked(*args: P.args, **kwargs: P.kwargs) -> R:
+        try:
+            result = function(*args, **kwargs)
+        except ValueError as error:
+            if "broadcast" not in str(error):
+                raise
+            raise WrongType("arguments", str(error), "the shapes must fit together") from None
+        return cast(R, result[()]) if isinstance(result, np.ndarray) else result
+
+    return checked
+
+
+def worded(texts: Sequence[str], index: ArrayLike) -> Words:
+    """Return the text at each index: a plain text for one index."""
+    place = np.asarray(index, dtype=np.intp)
+    return texts[int(place)] if place.ndim == 0 else np.array(texts)[place]
