@@ -11,7 +11,7 @@ import numpy as np
 from numpy.typing import ArrayLike
 
 from engine import levels
-from engine.require import Result, Words, above, at_least, formula, worded
+from engine.require import Result, Words, above, at_least, finite, formula, worded
 
 BOUNDS: Final = (
     "w_px sum(F_i)/sum(w_i), Eq. 12.10-1",
@@ -51,7 +51,7 @@ def unlimited_force(
     """
     h = levels.checked_heights(heights)
     w = levels.checked_weights(weights, h)
-    F = levels.per_level("forces", forces, h)
+    F = levels.per_level("forces", finite("forces", forces), h)
     place = levels.position(h_x, h, base=False)
     w_px = at_least(0, "w_px", w_px)
     levels.refuse_heavier(w_px, place, w, h)

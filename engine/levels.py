@@ -12,7 +12,7 @@ import numpy as np
 from numpy.typing import ArrayLike, NDArray
 
 from engine.errors import ImpossibleValue, NotApplicable, WrongType
-from engine.require import Array, above, at_least, finite
+from engine.require import Array, above, at_least
 
 MAX_LEVELS: Final = 1000
 TOLERANCE: Final = 1e-9
@@ -31,14 +31,14 @@ def checked_heights(heights: ArrayLike) -> Array:
 def checked_weights(weights: ArrayLike, heights: Array) -> Array:
     """Return the weights of the levels: none below 0, at least one above 0 in every building."""
     array = per_level("weights", at_least(0, "weights", weights), heights)
-    if not (array.max(axis=-1) > 0).all():
+    if array.min() == 0 and not (highest(array) > 0).all():
         raise ImpossibleValue("weights", "all 0", "at least one level must have a weight above 0")
     return array
 
 
-def per_level(name: str, values: ArrayLike, heights: Array) -> Array:
+def per_level(name: str, values: Array, heights: Array) -> Array:
     """Return one value for each level; refuse another number of values than levels."""
-    array = np.atleast_1d(finite(name, values))
+    array = np.atleast_1d(values)
     if array.shape[-1] != heights.shape[-1]:
         raise WrongType(
             name, f"{array.shape[-1]} values", f"must be one for each of {heights.shape[-1]} levels"

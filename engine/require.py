@@ -27,10 +27,7 @@ R = TypeVar("R")
 
 def finite(name: str, value: ArrayLike) -> Array:
     """Return ``value`` as floats; refuse blanks, text, booleans, NaN and infinities."""
-    array = np.asarray(value)
-    if array.dtype.kind not in "fiu":
-        raise (MissingValue if value is None else WrongType)(name, value, "must be a number")
-    array = array.astype(np.float64, copy=False)
+    array = _numbers(name, value)
     if not np.isfinite(array.sum()) and not np.isfinite(array).all():
         raise ImpossibleValue(name, float(array[~np.isfinite(array)].flat[0]), "must be a finite number")
     return array
@@ -57,6 +54,14 @@ def at_most(bound: float, name: str, value: ArrayLike, clause: str = "") -> Arra
     array = finite(name, value)
     if array.size and array.max() > bound:
         raise ImpossibleValue(name, float(array.max()), f"must be at most {bound:g}", clause)
+    return array
+
+
+def within(low: float, high: float, name: str, value: ArrayLike, clause: str = "") -> Array:
+    """Return ``value``; refuse anything below ``low`` or above ``high``."""
+    array = _numbers(name, value)
+    if array.size and not (array.min() >= low and array.max() <= high):
+        at_most(high, name, at_least(low, name, array, clause), clause)
     return array
 
 
@@ -92,3 +97,10 @@ def worded(texts: Sequence[str], index: ArrayLike) -> Words:
     """Return the text at each index: a plain text for one index."""
     place = np.asarray(index, dtype=np.intp)
     return texts[int(place)] if place.ndim == 0 else np.array(texts)[place]
+
+
+def _numbers(name: str, value: ArrayLike) -> Array:
+    array = np.asarray(value)
+    if array.dtype.kind not in "fiu":
+        raise (MissingValue if value is None else WrongType)(name, value, "must be a number")
+    return array.astype(np.float64, copy=False)

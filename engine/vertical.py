@@ -13,7 +13,7 @@ from numpy.typing import ArrayLike
 
 from engine import levels
 from engine.errors import NotApplicable
-from engine.require import Array, Result, above, at_least, at_most, choice, finite, formula
+from engine.require import Array, Result, above, choice, finite, formula, within
 
 EXPONENT_RULES: Final = ("interpolate", "two")
 SHORT_PERIOD: Final = 0.5
@@ -130,7 +130,7 @@ def story_force(V: ArrayLike, C_vx: ArrayLike) -> Result:
     Reference
         rule F_x: 7-16 12.8.3, Eq. 12.8-11; 7-22 12.8.3, Eq. 12.8-12
     """
-    return at_most(1, "C_vx", at_least(0, "C_vx", C_vx)) * above(0, "V", V)
+    return within(0, 1, "C_vx", C_vx) * above(0, "V", V)
 
 
 @formula
@@ -155,7 +155,7 @@ def story_shear(h_x: ArrayLike, forces: ArrayLike, heights: ArrayLike) -> Result
         rule V_x: 7-16 12.8.4, Eq. 12.8-13; 7-22 12.8.4, Eq. 12.8-14
     """
     h = levels.checked_heights(heights)
-    F = levels.per_level("forces", forces, h)
+    F = levels.per_level("forces", finite("forces", forces), h)
     below = levels.is_below(levels.position(h_x, h, base=True), h)
     return levels.total(np.where(below, 0.0, F))
 
@@ -182,7 +182,7 @@ def overturning_moment(h_x: ArrayLike, forces: ArrayLike, heights: ArrayLike) ->
         rule M_x: 7-16 12.8.5; 7-22 12.8.5
     """
     h = levels.checked_heights(heights)
-    F = levels.per_level("forces", forces, h)
+    F = levels.per_level("forces", finite("forces", forces), h)
     place = levels.position(h_x, h, base=True)
     return levels.total(F * np.where(levels.is_below(place, h), 0.0, h - place))
 
@@ -236,7 +236,7 @@ def value_below(h_x: ArrayLike, values: ArrayLike, heights: ArrayLike) -> Result
         rule story_height: 7-16 11.3; 7-22 11.3
     """
     h = levels.checked_heights(heights)
-    held = levels.per_level("values", values, h)
+    held = levels.per_level("values", finite("values", values), h)
     lower = _next_lower(levels.position(h_x, h, base=False), h)
     there = np.abs(h - lower) <= levels.slack(h)
     least = np.where(there, held, np.inf).min(axis=-1)
@@ -251,7 +251,7 @@ def value_below(h_x: ArrayLike, values: ArrayLike, heights: ArrayLike) -> Result
 
 
 def _exponent(k: ArrayLike) -> Array:
-    return at_most(2, "k", at_least(1, "k", k))
+    return within(1, 2, "k", k)
 
 
 def _on_levels(value: Array) -> Array | float:
