@@ -9,7 +9,7 @@ nothing that is not finite reaches a cell. Every error carries its reason in wor
 from __future__ import annotations
 
 from collections.abc import Mapping, Sequence
-from itertools import product
+from itertools import chain, product
 from math import isfinite
 from typing import Any
 
@@ -19,6 +19,8 @@ from engine.errors import EngineError, ImpossibleValue, MissingValue, WrongType
 from xlbridge.catalogue.entry import Argument as Declared
 from xlbridge.catalogue.entry import Kind, SheetFunction
 from xlbridge.values import OMITTED, Argument, CellError, Grid, Omitted, Scalar, Value
+
+_NUMBER = frozenset({float, int})
 
 
 def call(entry: SheetFunction, arguments: Sequence[Argument]) -> Value:
@@ -120,7 +122,7 @@ def _scalar(declared: Declared, cell: Any) -> Any:
         words = f"one of {', '.join(declared.choices)}"
         error = WrongType if cell is not None and cell != "" else MissingValue
         raise error(declared.symbol, cell or None, f"must be text, {words}")
-    if kind is float or kind is int:
+    if kind in _NUMBER:
         return cell
     raise _not_a_number(declared.symbol, cell)
 
@@ -140,19 +142,24 @@ def _levels(ranges: list[tuple[Declared, Argument]]) -> dict[str, Any]:
     if len({len(c) for c in columns}) > 1:
         sizes = ", ".join(f"{a.symbol} has {len(c)}" for (a, _), c in zip(ranges, columns, strict=True))
         raise WrongType("level ranges", sizes, "must have the same number of cells")
-    rows = [(n, row) for n, row in enumerate(zip(*columns, strict=True), 1) if row.count(None) < len(row)]
+    blank = (None,) * len(columns)
+    rows = [row for row in zip(*columns, strict=True) if row != blank]
     if not rows:
         raise MissingValue(ranges[0][0].symbol, None, "the range holds no level")
-    for n, row in rows:
-        for (declared, _), cell in zip(ranges, row, strict=True):
-            if type(cell) is not float and type(cell) is not int:
-                raise _Through(cell) if isinstance(cell, CellError) else _bad_level(declared, n, cell)
-    vectors = np.array([row for _, row in rows], dtype=float).T
+    if not set(map(type, chain.from_iterable(rows))) <= _NUMBER:
+        _refuse_level([a for a, _ in ranges], columns)
+    vectors = np.array(rows, dtype=float).T
     return {a.name: vector for (a, _), vector in zip(ranges, vectors, strict=True)}
 
 
-def _bad_level(declared: Declared, row: int, cell: object) -> EngineError:
-    return _not_a_number(f"{declared.symbol} in row {row} of its range", cell)
+def _refuse_level(ranges: list[Declared], columns: list[Sequence[Scalar]]) -> None:
+    """Raise for the first cell that is no number in a row that is not all blank."""
+    for n, row in enumerate(zip(*columns, strict=True), 1):
+        for declared, cell in zip(ranges, row, strict=True):
+            if isinstance(cell, CellError):
+                raise _Through(cell)
+            if type(cell) not in _NUMBER and row.count(None) < len(row):
+                raise _not_a_number(f"{declared.symbol} in row {n} of its range", cell)
 
 
 def _column(declared: Declared, value: Argument) -> Sequence[Scalar]:
@@ -162,11 +169,11 @@ def _column(declared: Declared, value: Argument) -> Sequence[Scalar]:
         return (value,)
     if len(value) == 1:
         return value[0]
-    if any(len(row) != 1 for row in value):
-        raise WrongType(
-            declared.symbol, f"{len(value)} x {len(value[0])} cells", "must be one column or one row"
-        )
-    return [row[0] for row in value]
+    try:
+        return [cell for (cell,) in value]
+    except ValueError:
+        size = f"{len(value)} x {len(value[0])} cells"
+        raise WrongType(declared.symbol, size, "must be one column or one row") from None
 
 
 def _finite(entry: SheetFunction, number: float) -> float:
