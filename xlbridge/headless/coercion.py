@@ -8,10 +8,10 @@ decimal commas) is refused rather than guessed.
 from __future__ import annotations
 
 import re
-from datetime import date
 from decimal import Decimal
 from typing import Final
 
+from xlbridge.headless.day_numbers import day_number
 from xlbridge.headless.operands import Area, NotEvaluated, Operand
 from xlbridge.values import CellError, Grid, Omitted, Scalar
 
@@ -25,8 +25,6 @@ _BY_SETTINGS: Final = re.compile(
     r"[a-z]*[\s\d/:.,$€£¥()%+-]*",
     re.IGNORECASE,
 )
-#: day 0 of the 1900 date system from 1900-03-01 on; before it the system counts a 29 February 1900.
-_DAY_ZERO: Final = date(1899, 12, 30).toordinal()
 
 
 class Fault(Exception):
@@ -88,7 +86,7 @@ def parse_number(words: str) -> float | None:
         digits = words.strip().replace(",", "")
         return float(digits[:-1]) / 100.0 if digits.endswith("%") else float(digits)
     if iso := _ISO_DATE.fullmatch(words):
-        return _serial(*map(int, iso.groups()))
+        return day_number(*map(int, iso.groups()))
     if _BY_SETTINGS.fullmatch(words):
         raise NotEvaluated(f"whether the text {words!r} is a number, a date or text depends on settings")
     return None
@@ -115,11 +113,3 @@ def _number_of_text(words: str) -> float:
     if found is None:
         raise Fault("#VALUE!", f"{words!r} is not a number")
     return found
-
-
-def _serial(year: int, month: int, day: int) -> float | None:
-    try:
-        ordinal = date(year, month, day).toordinal() - _DAY_ZERO
-    except ValueError:
-        return None
-    return float(ordinal if ordinal > 60 else ordinal - 1) if ordinal > 1 else None

@@ -9,11 +9,39 @@ from collections.abc import Mapping
 from types import MappingProxyType
 from typing import Final
 
-from xlbridge.headless.builtins import aggregate, logic, volatile
+from xlbridge.headless.builtins import (
+    aggregate,
+    conditional,
+    dates,
+    information,
+    logic,
+    lookup,
+    mathematics,
+    matrix,
+    rounding,
+    statistics,
+    subtotal,
+    text,
+    volatile,
+)
 from xlbridge.headless.builtins.builtin import Builtin, invoke
 from xlbridge.headless.builtins.volatile import VOLATILE
 
-_KINDS: Final = (logic, aggregate, volatile)
+_KINDS: Final = (
+    logic,
+    aggregate,
+    subtotal,
+    conditional,
+    statistics,
+    mathematics,
+    rounding,
+    matrix,
+    lookup,
+    text,
+    information,
+    dates,
+    volatile,
+)
 
 BUILTINS: Final[Mapping[str, Builtin]] = MappingProxyType(
     {builtin.name: builtin for kind in _KINDS for builtin in kind.FUNCTIONS}

@@ -13,7 +13,7 @@ from typing import Final
 from xlbridge.headless.builtins.builtin import Builtin
 from xlbridge.headless.builtins.collect import cells, every_value, grid_of, nothing, numbers
 from xlbridge.headless.coercion import Fault, parse_number
-from xlbridge.headless.operands import Area, NotEvaluated, Operand
+from xlbridge.headless.operands import Area, Operand
 from xlbridge.values import Scalar
 
 
@@ -83,15 +83,6 @@ def _factor(cell: Scalar) -> float:
     return numbers([((cell,),)])[0] if not isinstance(cell, str | bool | None) else 0.0
 
 
-def _subtotal(code: float, *areas: Operand) -> Operand:
-    kind = int(code)
-    if 101 <= kind <= 111:
-        raise NotEvaluated("SUBTOTAL codes from 101 depend on hidden rows")
-    if kind not in SUBTOTALS:
-        raise Fault("#VALUE!", f"SUBTOTAL has no code {code:g}")
-    return SUBTOTALS[kind](*areas)
-
-
 def minimum(*operands: Operand) -> float:
     """MIN; of no numbers it is 0."""
     return _extreme(min, numbers(operands))
@@ -102,16 +93,6 @@ def maximum(*operands: Operand) -> float:
     return _extreme(max, numbers(operands))
 
 
-#: what SUBTOTAL computes for each code; the statistics module adds its own.
-SUBTOTALS: Final[dict[int, Callable[..., Operand]]] = {
-    1: average,
-    2: count,
-    3: count_filled,
-    4: maximum,
-    5: minimum,
-    6: product,
-    9: total,
-}
 FUNCTIONS: Final = (
     Builtin("SUM", "g*", total),
     Builtin("AVERAGE", "g*", average),
@@ -126,5 +107,4 @@ FUNCTIONS: Final = (
     Builtin("MAXA", "g*", lambda *operands: _extreme(max, every_value(operands))),
     Builtin("AVERAGEA", "g*", lambda *operands: mean("AVERAGEA", every_value(operands))),
     Builtin("SUMPRODUCT", "g*", _sumproduct, array=True),
-    Builtin("SUBTOTAL", "na*", _subtotal),
 )
