@@ -5,3 +5,44 @@ Arguments are checked at the door: a refusal is an :class:`EngineError` that nam
 and what is allowed. Results are an aid to a licensed engineer's judgement: confirm every value against the
 standard adopted by the authority having jurisdiction.
 """
+
+from engine import (
+    base_shear,
+    diaphragm,
+    drift,
+    hazard,
+    occupancy,
+    period,
+    stability,
+    torsion,
+    vertical,
+)
+from engine.building import Building, Package, from_mapping, solve, to_mapping
+from engine.editions import EDITIONS, clause
+from engine.errors import EngineError, ImpossibleValue, MissingValue, NotApplicable, WrongType
+from engine.version import __version__
+
+__all__ = [
+    "EDITIONS",
+    "Building",
+    "EngineError",
+    "ImpossibleValue",
+    "MissingValue",
+    "NotApplicable",
+    "Package",
+    "WrongType",
+    "__version__",
+    "base_shear",
+    "clause",
+    "diaphragm",
+    "drift",
+    "from_mapping",
+    "hazard",
+    "occupancy",
+    "period",
+    "solve",
+    "stability",
+    "to_mapping",
+    "torsion",
+    "vertical",
+]

@@ -1,0 +1,20 @@
+"""The model route: inputs of one building in, the whole equivalent lateral force package out."""
+
+from __future__ import annotations
+
+from engine.building.reading import from_mapping, to_mapping
+from engine.building.records import DIRECTIONS, Building, Direction, Level, Site
+from engine.building.solve import DirectionResult, Package, solve
+
+__all__ = [
+    "DIRECTIONS",
+    "Building",
+    "Direction",
+    "DirectionResult",
+    "Level",
+    "Package",
+    "Site",
+    "from_mapping",
+    "solve",
+    "to_mapping",
+]

@@ -1,0 +1,88 @@
+"""A building from and to plain mappings, as BUILDING.toml holds them."""
+
+from __future__ import annotations
+
+from collections.abc import Mapping
+from dataclasses import fields
+from difflib import get_close_matches
+from typing import Any, TypeVar
+
+from engine.building.records import Building, Direction, Level, Site, level_label, may_be_left_out
+from engine.errors import MissingValue, NotApplicable, WrongType
+
+Record = TypeVar("Record", Site, Direction, Level, Building)
+
+
+def from_mapping(data: Mapping[str, Any]) -> Building:
+    """Return the building that a mapping describes; an error names the field by its path.
+
+    >>> from_mapping({"title": "A", "edition": "7-22", "units": "us", "level": [], "site": {"S_ds": 1.0}})
+    Traceback (most recent call last):
+    engine.errors.NotApplicable: site.S_ds = 1: unknown key, did you mean S_DS?
+    """
+    parts = dict(data)
+    if "site" in parts:
+        parts["site"] = _record(Site, "site.", parts["site"])
+    if "direction" in parts:
+        directions = _table("direction", parts["direction"])
+        parts["direction"] = {
+            name: _record(Direction, f"direction.{name}.", entry) for name, entry in directions.items()
+        }
+    if "level" in parts:
+        parts["level"] = tuple(_levels(parts["level"]))
+    for free in ("job", "sources"):
+        parts[free] = dict(_table(free, parts.get(free, {})))
+    return _record(Building, "", parts)
+
+
+def to_mapping(building: Building) -> dict[str, Any]:
+    """Return the plain mapping of a building; what has its default value is left out."""
+    data = _plain(building)
+    data["site"] = _plain(building.site)
+    data["direction"] = {name: _plain(entry) for name, entry in building.direction.items()}
+    data["level"] = [_plain(level) for level in building.level]
+    return {key: data[key] for key in data if data[key] != {}}
+
+
+def _levels(entries: object) -> list[Level]:
+    if not isinstance(entries, list | tuple):
+        raise WrongType("level", entries, "must be an array of tables")
+    labels = (
+        level_label(place, entry.get("name", "")) if isinstance(entry, Mapping) else f"level {place}"
+        for place, entry in enumerate(entries, start=1)
+    )
+    return [_record(Level, f"{label}: ", entry) for label, entry in zip(labels, entries, strict=True)]
+
+
+def _record(kind: type[Record], prefix: str, data: object) -> Record:
+    table = _table(prefix.rstrip(".: "), data)
+    known = {entry.name: may_be_left_out(entry) for entry in fields(kind)}
+    for key in table:
+        if key not in known:
+            raise NotApplicable(f"{prefix}{key}", table[key], _hint(key, tuple(known)))
+    for key, optional in known.items():
+        if key not in table and not optional:
+            raise MissingValue(f"{prefix}{key}", None, "must be given")
+    return kind(**table)
+
+
+def _table(name: str, data: object) -> Mapping[str, Any]:
+    if not isinstance(data, Mapping):
+        raise WrongType(name, data, "must be a table")
+    return data
+
+
+def _hint(key: str, known: tuple[str, ...]) -> str:
+    folded = {word.lower(): word for word in known}
+    close = get_close_matches(key.lower(), folded, n=1)
+    return (
+        f"unknown key, did you mean {folded[close[0]]}?"
+        if close
+        else f"unknown key; known are {', '.join(known)}"
+    )
+
+
+def _plain(record: Any) -> dict[str, Any]:
+    values = {entry.name: getattr(record, entry.name) for entry in fields(record)}
+    defaults = {entry.name: entry.default for entry in fields(record)}
+    return {key: value for key, value in values.items() if value != defaults[key]}

@@ -1,0 +1,177 @@
+"""The inputs of one building as frozen records; each field carries its own check.
+
+Heights and weights in the unit system's length and force units, displacements in its displacement unit.
+"""
+
+from __future__ import annotations
+
+from collections.abc import Callable, Mapping
+from dataclasses import MISSING, Field, dataclass, field, fields
+from functools import partial
+from typing import Any, Final
+
+from engine.drift import DRIFT_STRUCTURES
+from engine.editions import EDITIONS
+from engine.errors import ImpossibleValue, MissingValue, WrongType
+from engine.levels import MAX_LEVELS
+from engine.occupancy import RISK_CATEGORIES
+from engine.period import PERIOD_SYSTEMS
+from engine.require import above, at_least, choice, finite, within
+from engine.units import SYSTEMS
+from engine.vertical import EXPONENT_RULES
+
+DIRECTIONS: Final = ("X", "Y")
+Check = Callable[[str, Any], object]
+
+
+def checked(check: Check, default: Any = MISSING) -> Any:
+    """Declare a field with its check; a field with a default may be left out."""
+    return field(default=default, metadata={"check": check})
+
+
+def is_text(name: str, value: object) -> object:
+    """Refuse anything but a text that says something."""
+    if not isinstance(value, str):
+        raise WrongType(name, value, "must be text")
+    if not value.strip():
+        raise MissingValue(name, None, "must be a text that is not blank")
+    return value
+
+
+def is_flag(name: str, value: object) -> object:
+    """Refuse anything but true or false."""
+    if not isinstance(value, bool):
+        raise WrongType(name, value, "must be true or false")
+    return value
+
+
+def is_word(words: tuple[str, ...], name: str, value: object) -> object:
+    """Refuse anything but one of the words."""
+    return choice(name, value, words)
+
+
+def one_number(check: Check, name: str, value: object) -> object:
+    """Refuse anything but a single number that the check accepts."""
+    if isinstance(value, list | tuple):
+        raise WrongType(name, value, "must be a single number")
+    return check(name, value)
+
+
+def number(check: Check, default: Any = MISSING) -> Any:
+    """Declare a field that holds one number."""
+    return checked(partial(one_number, check), default)
+
+
+def word(words: tuple[str, ...], default: Any = MISSING) -> Any:
+    """Declare a field that holds one of the words."""
+    return checked(partial(is_word, words), default)
+
+
+@dataclass(frozen=True, slots=True, kw_only=True)
+class Site:
+    """Ground motion [g, s], Risk Category, and the elevation of the base [ft or m]."""
+
+    S_DS: float = number(partial(above, 0))
+    S_D1: float = number(partial(above, 0))
+    S_1: float = number(partial(at_least, 0))
+    T_L: float = number(partial(above, 0))
+    risk_category: str = word(RISK_CATEGORIES)
+    base_elevation: float = number(finite, 0.0)
+
+
+@dataclass(frozen=True, slots=True, kw_only=True)
+class Direction:
+    """The seismic force-resisting system of one plan direction.
+
+    ``rho`` divides the allowable drift only where ``moment_frames_only`` is true.
+    """
+
+    system: str = checked(is_text)
+    R: float = number(partial(at_least, 1))
+    Omega_0: float = number(partial(at_least, 1))
+    C_d: float = number(partial(at_least, 1))
+    period_system: str = word(PERIOD_SYSTEMS)
+    drift_structure: str = word(DRIFT_STRUCTURES)
+    T_computed: float | None = number(partial(above, 0), None)
+    k_rule: str = word(EXPONENT_RULES, "interpolate")
+    rho: float = number(partial(at_least, 1), 1.0)
+    moment_frames_only: bool = checked(is_flag, False)
+    beta: float = number(lambda name, value: above(0, name, within(0, 1, name, value)), 1.0)
+
+
+@dataclass(frozen=True, slots=True, kw_only=True)
+class Level:
+    """One level: elevation [ft or m], weight and P_x [kip or kN], elastic displacements [in or mm]."""
+
+    name: str = checked(is_text)
+    elevation: float = number(finite)
+    weight: float = number(partial(at_least, 0))
+    P_x: float | None = number(partial(at_least, 0), None)
+    delta_xe_X: float | None = number(finite, None)
+    delta_xe_Y: float | None = number(finite, None)
+
+
+@dataclass(frozen=True, slots=True, kw_only=True)
+class Building:
+    """Everything the equivalent lateral force procedure needs to know of one building."""
+
+    title: str = checked(is_text)
+    edition: str = word(EDITIONS)
+    units: str = word(SYSTEMS)
+    site: Site
+    direction: Mapping[str, Direction]
+    level: tuple[Level, ...]
+    job: Mapping[str, object] = field(default_factory=dict)
+    sources: Mapping[str, str] = field(default_factory=dict)
+
+    def __post_init__(self) -> None:
+        """Check every field of every record, then what fields say together."""
+        check_fields("", self)
+        check_fields("site.", self.site)
+        if not self.direction:
+            raise MissingValue("direction", None, "must have a table X or Y or both")
+        for name, direction in self.direction.items():
+            choice("direction", name, DIRECTIONS)
+            check_fields(f"direction.{name}.", direction)
+        _check_levels(self.level, self.site.base_elevation)
+
+
+def check_fields(prefix: str, record: Any) -> None:
+    """Apply the check of each field that has one; a blank is allowed where blank is the default."""
+    for entry in fields(record):
+        value = getattr(record, entry.name)
+        if "check" in entry.metadata and not (value is None and may_be_left_out(entry)):
+            entry.metadata["check"](f"{prefix}{entry.name}", value)
+
+
+def may_be_left_out(entry: Field[Any]) -> bool:
+    """Tell whether a field has a default."""
+    return entry.default is not MISSING or entry.default_factory is not MISSING
+
+
+def level_label(place: int, name: object) -> str:
+    """Name a level in a message, counted from 1 as listed."""
+    return f'level {place} ("{name}")'
+
+
+def _check_levels(levels: tuple[Level, ...], base: float) -> None:
+    if not 1 <= len(levels) <= MAX_LEVELS:
+        raise ImpossibleValue("level", f"{len(levels)} levels", f"must be 1 to {MAX_LEVELS} levels")
+    for place, level in enumerate(levels, start=1):
+        label = level_label(place, level.name)
+        check_fields(f"{label}: ", level)
+        if level.elevation <= base:
+            raise ImpossibleValue(
+                f"{label}: elevation", level.elevation, f"must be above the base at {base:g}"
+            )
+        for optional in ("P_x", "delta_xe_X", "delta_xe_Y"):
+            if (getattr(level, optional) is None) != (getattr(levels[0], optional) is None):
+                raise _half_filled(levels, optional)
+    if not any(level.weight > 0 for level in levels):
+        raise ImpossibleValue("level", "all weights 0", "at least one level must have a weight above 0")
+
+
+def _half_filled(levels: tuple[Level, ...], optional: str) -> MissingValue:
+    place = next(i for i, level in enumerate(levels, start=1) if getattr(level, optional) is None)
+    name = f"{level_label(place, levels[place - 1].name)}: {optional}"
+    return MissingValue(name, None, "must be given at all levels or at none")

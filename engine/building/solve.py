@@ -1,0 +1,268 @@
+"""The whole equivalent lateral force package of one building, from its inputs alone."""
+
+from __future__ import annotations
+
+from dataclasses import dataclass, fields, replace
+from typing import Any, Final
+
+import numpy as np
+
+from engine import base_shear, diaphragm, drift, hazard, occupancy, period, stability, vertical
+from engine.building.records import Building, Direction, level_label
+from engine.editions import clause
+from engine.errors import ImpossibleValue
+from engine.levels import TOLERANCE
+from engine.require import Array
+from engine.units import DISPLACEMENT_PER_LENGTH
+
+#: the rules that the package applies, in the order of the work
+RULES: Final = (
+    *("I_e", "T_0", "T_S", "T_a", "C_u", "T_max", "T"),
+    *("C_s_plateau", "C_s_cap", "C_s_cap_long", "C_s_min", "C_s_min_S1", "C_s", "V"),
+    *("exponent", "exponent_two", "C_vx", "F_x", "V_x", "M_x", "story_height"),
+    *("F_px", "F_px_min", "F_px_max"),
+    *("delta_x", "Delta", "Delta_a", "rho_drift"),
+    *("theta", "theta_max", "beta", "theta_amplifier"),
+)
+
+
+@dataclass(frozen=True, slots=True, kw_only=True, eq=False)
+class DirectionResult:
+    """Every step of one plan direction; arrays hold the levels as listed, ``None`` what had no inputs.
+
+    Drifts and their limits are in the displacement unit. Diaphragm forces take the whole weight of each
+    level. ``Delta_amplified`` carries the factor for P-delta, where vertical loads are given.
+    """
+
+    T_a: float
+    C_u: float
+    T_max: float
+    T: float
+    C_s_plateau: float
+    C_s_cap: float
+    C_s_min: float
+    C_s_min_S1: float
+    C_s: float
+    governing_bound: str
+    V: float
+    k: float
+    C_vx: Array
+    F_x: Array
+    V_x: Array
+    V_base: float
+    M_x: Array
+    M_base: float
+    F_px_unlimited: Array
+    F_px_min: Array
+    F_px_max: Array
+    F_px: Array
+    F_px_bound: tuple[str, ...]
+    Delta_a: Array
+    beta: float
+    theta_max: float
+    delta_x: Array | None = None
+    Delta: Array | None = None
+    drift_ratio: Array | None = None
+    theta: Array | None = None
+    theta_factor: Array | None = None
+    theta_verdict: tuple[str, ...] | None = None
+    Delta_amplified: Array | None = None
+    drift_over_limit: Array | None = None
+
+
+@dataclass(frozen=True, slots=True, kw_only=True, eq=False)
+class Package:
+    """The results of one building: its levels as listed, and each plan direction."""
+
+    title: str
+    edition: str
+    units: str
+    I_e: float
+    T_0: float
+    T_S: float
+    W: float
+    h_n: float
+    levels: tuple[str, ...]
+    w_x: Array
+    h_x: Array
+    h_sx: Array
+    direction: dict[str, DirectionResult]
+    warnings: tuple[str, ...]
+
+    def to_json(self) -> dict[str, Any]:
+        """Return plain numbers, texts and lists, with the clause and any doubt of every rule applied."""
+        clauses = {key: clause(self.edition, key) for key in RULES}
+        return {
+            **_plain(self),
+            "direction": {name: _plain(result) for name, result in self.direction.items()},
+            "clauses": {key: str(found) for key, found in clauses.items()},
+            "notes": {key: found.note for key, found in clauses.items() if found.note},
+        }
+
+
+def solve(building: Building) -> Package:
+    """Return the whole package of a building; a refusal names the field or the level."""
+    site = building.site
+    h = np.array([level.elevation - site.base_elevation for level in building.level])
+    w = np.array([level.weight for level in building.level], dtype=np.float64)
+    package = Package(
+        title=building.title,
+        edition=building.edition,
+        units=building.units,
+        I_e=float(occupancy.importance_factor(site.risk_category)),
+        T_0=float(hazard.corner_period_T0(site.S_DS, site.S_D1)),
+        T_S=float(hazard.corner_period_TS(site.S_DS, site.S_D1)),
+        W=float(w.sum()),
+        h_n=float(h.max()),
+        levels=tuple(level.name for level in building.level),
+        w_x=w,
+        h_x=h,
+        h_sx=np.asarray(vertical.story_height(h, h)),
+        direction={},
+        warnings=(*_shared_heights(building, h), *_raised_ratios(building)),
+    )
+    return replace(
+        package, direction={name: _direction(building, package, name) for name in building.direction}
+    )
+
+
+def _direction(building: Building, package: Package, name: str) -> DirectionResult:
+    given = building.direction[name]
+    strength = _strength(building, package, given)
+    levels = _levels(building, package, strength)
+    limits = _limits(building, package, given)
+    drifts = _drifts(building, package, name)
+    second = _second_order(building, package, given, {**levels, **limits, **drifts})
+    return DirectionResult(**strength, **levels, **limits, **drifts, **second)
+
+
+def _strength(building: Building, package: Package, given: Direction) -> dict[str, Any]:
+    site, I_e, R = building.site, package.I_e, given.R
+    T_a = float(period.approximate_period(package.h_n, given.period_system, building.units))
+    C_u = float(period.upper_limit_coefficient(site.S_D1))
+    T = T_a if given.T_computed is None else float(period.design_period(T_a, C_u, given.T_computed))
+    spectrum = (site.S_DS, site.S_D1, site.S_1, T, site.T_L, R, I_e, building.edition)
+    C_s = float(base_shear.response_coefficient(*spectrum))
+    return {
+        "T_a": T_a,
+        "C_u": C_u,
+        "T_max": float(period.period_limit(C_u, T_a)),
+        "T": T,
+        "C_s_plateau": float(base_shear.coefficient_plateau(site.S_DS, R, I_e)),
+        "C_s_cap": float(base_shear.coefficient_cap(site.S_D1, T, site.T_L, R, I_e)),
+        "C_s_min": float(base_shear.coefficient_minimum(site.S_DS, I_e)),
+        "C_s_min_S1": float(base_shear.coefficient_minimum_near_fault(site.S_1, R, I_e)),
+        "C_s": C_s,
+        "governing_bound": base_shear.governing_bound(*spectrum),
+        "V": float(base_shear.base_shear(C_s, package.W)),
+        "k": float(vertical.exponent(T, given.k_rule)),
+    }
+
+
+def _levels(building: Building, package: Package, strength: dict[str, Any]) -> dict[str, Any]:
+    w, h, S_DS, I_e = package.w_x, package.h_x, building.site.S_DS, package.I_e
+    C_vx = vertical.distribution_factors(w, h, strength["k"])
+    F = vertical.story_force(strength["V"], C_vx)
+    return {
+        "C_vx": C_vx,
+        "F_x": F,
+        "V_x": vertical.story_shear(h, F, h),
+        "V_base": float(vertical.story_shear(0.0, F, h)),
+        "M_x": vertical.overturning_moment(h, F, h),
+        "M_base": float(vertical.overturning_moment(0.0, F, h)),
+        "F_px_unlimited": diaphragm.unlimited_force(w, h, F, w, h),
+        "F_px_min": diaphragm.minimum_force(w, S_DS, I_e),
+        "F_px_max": diaphragm.maximum_force(w, S_DS, I_e),
+        "F_px": diaphragm.design_force(w, h, F, w, h, S_DS, I_e),
+        "F_px_bound": _texts(diaphragm.design_force_bound(w, h, F, w, h, S_DS, I_e)),
+    }
+
+
+def _limits(building: Building, package: Package, given: Direction) -> dict[str, Any]:
+    rho = given.rho if given.moment_frames_only else 1.0
+    beta = float(stability.demand_ratio(given.beta, given.Omega_0, building.edition))
+    allowable = drift.allowable_drift(package.h_sx, given.drift_structure, building.site.risk_category, rho)
+    return {
+        "Delta_a": allowable * DISPLACEMENT_PER_LENGTH[building.units],
+        "beta": beta,
+        "theta_max": float(stability.stability_limit(given.C_d, beta)),
+    }
+
+
+def _drifts(building: Building, package: Package, name: str) -> dict[str, Any]:
+    given, h = building.direction[name], package.h_x
+    elastic = [getattr(level, f"delta_xe_{name}") for level in building.level]
+    if elastic[0] is None:
+        return {}
+    lower = vertical.value_below(h, elastic, h)
+    Delta = drift.design_story_drift(elastic, lower, given.C_d, package.I_e)
+    return {
+        "delta_x": drift.amplified_deflection(elastic, given.C_d, package.I_e),
+        "Delta": Delta,
+        "drift_ratio": Delta / (package.h_sx * DISPLACEMENT_PER_LENGTH[building.units]),
+    }
+
+
+def _second_order(
+    building: Building, package: Package, given: Direction, known: dict[str, Any]
+) -> dict[str, Any]:
+    if "Delta" not in known:
+        return {}
+    if building.level[0].P_x is None:
+        return {"drift_over_limit": known["Delta"] / known["Delta_a"]}
+    P_x = np.array([level.P_x for level in building.level], dtype=np.float64)
+    _refuse_where(
+        building, "V_x", known["V_x"], known["V_x"] <= 0, "must be above 0 for a stability coefficient"
+    )
+    h_sx = package.h_sx * DISPLACEMENT_PER_LENGTH[building.units]
+    theta = np.asarray(
+        stability.stability_coefficient(P_x, known["Delta"], package.I_e, known["V_x"], h_sx, given.C_d)
+    )
+    _refuse_where(building, "theta", theta, theta >= 1, "must be below 1: the story is unstable")
+    factor = stability.second_order_factor(theta)
+    return {
+        "theta": theta,
+        "theta_factor": factor,
+        "theta_verdict": _texts(stability.stability_verdict(theta, known["theta_max"])),
+        "Delta_amplified": known["Delta"] * factor,
+        "drift_over_limit": known["Delta"] * factor / known["Delta_a"],
+    }
+
+
+def _refuse_where(building: Building, symbol: str, values: Array, bad: Any, allowed: str) -> None:
+    for place in np.flatnonzero(bad):
+        label = level_label(int(place) + 1, building.level[place].name)
+        raise ImpossibleValue(f"{label}: {symbol}", float(values[place]), allowed)
+
+
+def _shared_heights(building: Building, h: Array) -> list[str]:
+    order = np.argsort(h, kind="stable")
+    close = np.diff(h[order]) <= TOLERANCE * h.max()
+    return [
+        f"two levels at one elevation: {building.level[a].name} and {building.level[b].name}"
+        for a, b, same in zip(order[:-1], order[1:], close, strict=True)
+        if same
+    ]
+
+
+def _raised_ratios(building: Building) -> list[str]:
+    return [
+        f"direction {name}: beta = {given.beta:g} raised to 1.25/Omega_0 = {floor:.4g}"
+        for name, given in building.direction.items()
+        if (floor := float(stability.demand_ratio(given.beta, given.Omega_0, building.edition))) > given.beta
+    ]
+
+
+def _texts(words: Any) -> tuple[str, ...]:
+    return tuple(str(text) for text in words)
+
+
+def _plain(record: Any) -> dict[str, Any]:
+    values = {entry.name: getattr(record, entry.name) for entry in fields(record)}
+    return {key: _plain_value(value) for key, value in values.items() if value is not None}
+
+
+def _plain_value(value: Any) -> Any:
+    if isinstance(value, np.ndarray):
+        return value.tolist()
+    return list(value) if isinstance(value, tuple) else value
