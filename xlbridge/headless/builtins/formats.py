@@ -9,9 +9,9 @@ from __future__ import annotations
 import re
 from typing import Final
 
-from xlbridge.headless.day_numbers import calendar_date
 from xlbridge.headless.builtins.rounding import decimal, rounded
 from xlbridge.headless.coercion import Fault, general, parse_number, text
+from xlbridge.headless.day_numbers import calendar_date
 from xlbridge.headless.operands import NotEvaluated
 from xlbridge.values import Scalar
 
