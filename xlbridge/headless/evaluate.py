@@ -11,12 +11,11 @@ from dataclasses import dataclass
 from typing import Final, TypeVar
 
 from xlbridge.headless.book import Book, Formula, Position
-from xlbridge.headless.grammar import parse
 from xlbridge.headless.interpreter import Function, Interpreter, Observer, Place
-from xlbridge.headless.nodes import Node
-from xlbridge.headless.operands import Area, NotEvaluated, Operand
+from xlbridge.headless.operands import Area, NotEvaluated
 from xlbridge.headless.references import Bounds, Cell
-from xlbridge.values import CellError, Grid, Omitted, Scalar, Value
+from xlbridge.headless.shapes import parse
+from xlbridge.values import CellError, Grid, Scalar, Value
 
 _T = TypeVar("_T")
 
@@ -84,7 +83,7 @@ class Evaluator:
 
     def interpreter(self, observer: Observer | None = None) -> Interpreter:
         """An interpreter on this workbook; ``observer`` sees every call of a custom function."""
-        return Interpreter(self.book, self.functions, self.read, observer)
+        return Interpreter(self.book, self.functions, self.read, self.read_cell, observer)
 
     def value(self, sheet: str, row: int, column: int) -> Scalar:
         """The value of a cell; raises :class:`NotEvaluated` where it has none."""
@@ -111,7 +110,7 @@ class Evaluator:
         if sheet is not None and title is None:
             raise NotEvaluated(f"the workbook has no sheet {sheet}")
         node = parse(text)
-        return self.settle(lambda: self._array_value(self._interpreter, node, Place(None, title)))
+        return self.settle(lambda: self._interpreter.result(node, Place(None, title), True))
 
     def settle(self, compute: Callable[[], _T]) -> _T:
         """Do a computation that reads cells, once the cells it reads are computed."""
@@ -122,19 +121,12 @@ class Evaluator:
                 for cell in pending.cells:
                     self._run(cell)
 
-    def compute(self, formula: Formula, interpreter: Interpreter | None = None) -> Grid | Scalar:
+    def compute(self, formula: Formula, interpreter: Interpreter | None = None) -> Value:
         """Evaluate a formula at its place, by this workbook's interpreter or one with an observer."""
         if formula.refusal:
             raise NotEvaluated(formula.refusal)
-        interpreter = interpreter or self._interpreter
         place = Place(formula.cell if formula.fills.is_cell else None, formula.cell.sheet)
-        try:
-            node = parse(formula.text)
-            if formula.is_array:
-                return self._array_value(interpreter, node, place)
-            return _one(interpreter.scalar(interpreter.evaluate(node, place, False), False))
-        except RecursionError:
-            raise NotEvaluated("the formula is nested too deeply") from None
+        return (interpreter or self._interpreter).result(parse(formula.text), place, formula.is_array)
 
     def read(self, area: Area) -> Grid:
         """The values of an area; what it needs first is asked for, what has no value is passed on."""
@@ -149,33 +141,41 @@ class Evaluator:
             self._grids[key] = grid
         return grid
 
-    def _array_value(self, interpreter: Interpreter, node: Node, place: Place) -> Grid | Scalar:
-        operand = interpreter.scalar(interpreter.evaluate(node, place, True), True)
-        return operand if isinstance(operand, tuple) else _one(operand)
+    def read_cell(self, sheet: str, row: int, column: int) -> Scalar:
+        """The value of one cell, as :meth:`read` gives it."""
+        value = self._values[sheet].get((row, column))
+        if value is None:
+            need = self._need(sheet, row, column)
+            if need is not None:
+                raise _Pending([need])
+        return value
 
     def _collect(self, area: Area) -> Grid:
         get = self._values[area.sheet].get
         columns = range(area.left, area.right + 1)
         grid = tuple(
-            tuple([get((row, column)) for column in columns]) for row in range(area.top, area.bottom + 1)
+            [tuple([get((row, column)) for column in columns]) for row in range(area.top, area.bottom + 1)]
         )
-        pending = list(self._pending(area, grid))
+        needs = [
+            self._need(area.sheet, row, column)
+            for row, values in enumerate(grid, area.top)
+            if None in values
+            for column, value in enumerate(values, area.left)
+            if value is None
+        ]
+        pending = [need for need in needs if need is not None]
         if pending:
             raise _Pending(pending)
         return grid
 
-    def _pending(self, area: Area, grid: Grid) -> Iterator[Cell]:
-        """The formulas behind the blanks of a grid; a formula cell with a value is never blank."""
-        formulas = self.book.formulas[area.sheet]
-        for row, values in enumerate(grid, area.top):
-            if None not in values:
-                continue
-            for column, value in enumerate(values, area.left):
-                formula = formulas.get((row, column)) if value is None else None
-                if formula is not None:
-                    if formula.cell in self._failures:
-                        raise Waiting(Cell(area.sheet, row, column), self._failures[formula.cell])
-                    yield formula.cell
+    def _need(self, sheet: str, row: int, column: int) -> Cell | None:
+        """The formula to compute before a blank cell can be read; one with a value is never blank."""
+        formula = self.book.formulas[sheet].get((row, column))
+        if formula is None:
+            return None
+        if formula.cell in self._failures:
+            raise Waiting(Cell(sheet, row, column), self._failures[formula.cell])
+        return formula.cell
 
     def _result(self, cell: Cell) -> CellResult:
         try:
@@ -185,30 +185,30 @@ class Evaluator:
 
     def _run(self, start: Cell) -> None:
         """Compute a cell and, before it, whatever it needs."""
-        if self._is_done(start):
-            return
-        path: dict[Cell, Iterator[Cell]] = {start: iter(())}
+        path: dict[Cell, Iterator[Cell]] = {}
+        self._attempt(start, path)
         while path:
             cell, needs = next(reversed(path.items()))
             need = next((need for need in needs if not self._is_done(need)), None)
-            if need in path:
-                self._fail_cycle(path, need)
-            elif need is not None:
-                path[need] = iter(())
-            else:
+            if need is None:
+                del path[cell]
                 self._attempt(cell, path)
+            elif need in path:
+                self._fail_cycle(path, need)
+            else:
+                self._attempt(need, path)
 
     def _attempt(self, cell: Cell, path: dict[Cell, Iterator[Cell]]) -> None:
-        formula = self.book.formula(cell)
-        assert formula is not None
+        """Compute a cell, or put it on the path with the cells it needs first."""
+        if self._is_done(cell):
+            return
+        formula = self.book.formulas[cell.sheet][cell.row, cell.column]
         try:
             self._store(formula, self.compute(formula))
         except _Pending as pending:
             path[cell] = iter(pending.cells)
-            return
         except NotEvaluated as reason:
             self._failures[cell] = reason
-        del path[cell]
 
     def _fail_cycle(self, path: dict[Cell, Iterator[Cell]], first: Cell) -> None:
         """Take the cells of a cycle off the path, each with the cycle from its own point of view."""
@@ -222,13 +222,16 @@ class Evaluator:
     def _is_done(self, cell: Cell) -> bool:
         return (cell.row, cell.column) in self._values[cell.sheet] or cell in self._failures
 
-    def _store(self, formula: Formula, value: Grid | Scalar) -> None:
+    def _store(self, formula: Formula, value: Value) -> None:
         values = self._values[formula.cell.sheet]
+        if formula.fills.is_cell and not isinstance(value, tuple):
+            values[formula.cell[1:]] = value
+            return
         for (row, column), item in _spread(formula.fills, value):
             values[row, column] = item
 
 
-def _spread(fills: Bounds, value: Grid | Scalar) -> Iterator[tuple[Position, Scalar]]:
+def _spread(fills: Bounds, value: Value) -> Iterator[tuple[Position, Scalar]]:
     """The value of each cell an array formula fills: one row or column repeats, the excess is #N/A."""
     grid = value if isinstance(value, tuple) else ((value,),)
     height, width = len(grid), len(grid[0])
@@ -237,11 +240,3 @@ def _spread(fills: Bounds, value: Grid | Scalar) -> Iterator[tuple[Position, Sca
             y, x = 0 if height == 1 else row, 0 if width == 1 else column
             item = grid[y][x] if y < height and x < width else _NO_VALUE
             yield (fills.top + row, fills.left + column), 0.0 if item is None else item
-
-
-def _one(operand: Operand) -> Scalar:
-    """A formula's single result; a blank cell counts as 0."""
-    if isinstance(operand, Area):
-        operand = operand.grid[0][0]
-    assert not isinstance(operand, tuple)
-    return 0.0 if operand is None or isinstance(operand, Omitted) else operand

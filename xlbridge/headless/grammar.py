@@ -4,7 +4,6 @@ from __future__ import annotations
 
 import math
 import re
-from functools import lru_cache
 from typing import Final
 
 from xlbridge.headless.nodes import (
@@ -20,22 +19,19 @@ from xlbridge.headless.nodes import (
     Missing,
     Name,
     Node,
-    Reference,
     Unary,
 )
 from xlbridge.headless.operands import NotEvaluated
-from xlbridge.headless.references import MAX_COLUMNS, MAX_ROWS, Bounds, column_number
+from xlbridge.headless.reference_text import read_reference, split_sheet
 from xlbridge.headless.structured import parse_table_reference
 from xlbridge.headless.tokens import Token, tokens, unreadable
 from xlbridge.values import CellError, Scalar
 
 _FILE_PREFIXES: Final = re.compile(r"(?:_XLFN\.|_XLWS\.|_XLL\.)+")
-_CORNER: Final = re.compile(r"\$?([A-Za-z]*)\$?([0-9]*)\Z")
 _STARTS: Final = frozenset({"string", "error", "reference", "number", "call", "name", "table"})
 
 
-@lru_cache(maxsize=100_000)
-def parse(text: str) -> Node:
+def read_formula(text: str) -> Node:
     """The formula's nodes; the leading equals sign may be missing, as in a defined name.
 
     Raises :class:`NotEvaluated`, with the position, for what cannot be read.
@@ -174,8 +170,9 @@ def _atom(token: Token) -> Node:
         return Constant(CellError("#REF!" if "#REF!" in token.text else token.text))
     if token.kind == "table":
         return parse_table_reference(token.text, token.start)
-    sheet, text = _split_sheet(token.text)
-    return _reference(token, sheet, text) if token.kind == "reference" else _name(sheet, text)
+    if token.kind == "reference":
+        return read_reference(token.text)
+    return _name(*split_sheet(token.text))
 
 
 def _number(token: Token) -> float:
@@ -189,46 +186,3 @@ def _name(sheet: str | None, text: str) -> Node:
     if sheet is None and text.upper() in ("TRUE", "FALSE"):
         return Constant(text.upper() == "TRUE")
     return Name(sheet, text)
-
-
-def _split_sheet(text: str) -> tuple[str | None, str]:
-    """The sheet a reference names, if any, and what follows it."""
-    prefix, mark, rest = text.rpartition("!")
-    if not mark:
-        return None, text
-    quoted = prefix.startswith("'")
-    sheet = prefix[1:-1].replace("''", "'") if quoted else prefix
-    if "[" in sheet:
-        raise NotEvaluated(f"{text} refers to another workbook")
-    if ":" in sheet:
-        raise NotEvaluated(f"{text} refers to several sheets at once")
-    return sheet, rest
-
-
-def _reference(token: Token, sheet: str | None, text: str) -> Node:
-    first, mark, last = text.partition(":")
-    left, top = _corner(first)
-    right, bottom = _corner(last) if mark else (left, top)
-    whole_lines = not (left and top)
-    if max(left, right) > MAX_COLUMNS or max(top, bottom) > MAX_ROWS or _is_zero_row(text):
-        if mark:
-            raise unreadable(token.start, f"{text} lies outside the sheet")
-        return _name(sheet, text)
-    bounds = Bounds(
-        min(top, bottom) or 1,
-        min(left, right) or 1,
-        max(top, bottom) or MAX_ROWS,
-        max(left, right) or MAX_COLUMNS,
-    )
-    return Reference(token.text, sheet, bounds, whole_lines)
-
-
-def _corner(text: str) -> tuple[int, int]:
-    """Column and row of a corner; 0 stands for the one that whole columns or rows leave out."""
-    found = _CORNER.match(text)
-    letters, digits = found.groups() if found else ("", "")
-    return column_number(letters), int(digits or 0)
-
-
-def _is_zero_row(text: str) -> bool:
-    return any(re.search(r"\A\$?[A-Za-z]*\$?0+\Z", corner) for corner in text.split(":"))

@@ -31,7 +31,7 @@ from xlbridge.headless.operands import Area, NotEvaluated, Operand
 from xlbridge.headless.operators import binary, unary
 from xlbridge.headless.references import Bounds, Cell
 from xlbridge.headless.structured import Table, resolve
-from xlbridge.values import OMITTED, Argument, Grid, Omitted, Value
+from xlbridge.values import OMITTED, Argument, Grid, Omitted, Scalar, Value
 
 Function: TypeAlias = Callable[[Sequence[Argument]], Value]
 Observer: TypeAlias = Callable[[Call, tuple[Argument, ...], Value], None]
@@ -56,18 +56,20 @@ class WholeLines(Area):
 
 
 class Interpreter:
-    """Evaluates nodes; ``read`` gives the values of an area, ``observer`` sees custom calls."""
+    """Evaluates nodes; ``read`` and ``read_cell`` give cell values, ``observer`` sees custom calls."""
 
     def __init__(
         self,
         book: Book,
         functions: Mapping[str, Function],
         read: Callable[[Area], Grid],
+        read_cell: Callable[[str, int, int], Scalar],
         observer: Observer | None = None,
     ) -> None:
         self._book = book
         self._functions = {name.upper(): function for name, function in functions.items()}
         self._read = read
+        self._read_cell = read_cell
         self._observer = observer
         self._rules: dict[type, Callable[[Any, Place, bool], Operand]] = {
             Constant: lambda node, place, array: node.value,
@@ -82,12 +84,25 @@ class Interpreter:
             Call: self._call,
         }
 
+    def result(self, node: Node, place: Place, array: bool) -> Value:
+        """The value of a whole formula; a blank cell counts as 0, and an array needs array mode."""
+        try:
+            value = _argument(self._one(node, place, array))
+        except RecursionError:
+            raise NotEvaluated("the formula is nested too deeply") from None
+        return 0.0 if value is None or isinstance(value, Omitted) else value
+
     def evaluate(self, node: Node, place: Place, array: bool) -> Operand:
         """The operand a node stands for; :class:`NotEvaluated` where that is outside the subset."""
         return self._rules[type(node)](node, place, array)
 
-    def scalar(self, operand: Operand, array: bool) -> Operand:
+    def _one(self, node: Node, place: Place, array: bool) -> Operand:
         """The operand where one value belongs; several values only in array mode."""
+        if type(node) is Reference:
+            top, left, bottom, right = node.bounds
+            if top == bottom and left == right:
+                return self._read_cell(self._sheet(node, place), top, left)
+        operand = self.evaluate(node, place, array)
         if isinstance(operand, Area):
             return operand if operand.is_cell else self._several(operand, array)
         if isinstance(operand, tuple):
@@ -153,16 +168,16 @@ class Interpreter:
         return None
 
     def _unary(self, node: Unary, place: Place, array: bool) -> Operand:
-        return unary(node.op, self.scalar(self.evaluate(node.operand, place, array), array))
+        return unary(node.op, self._one(node.operand, place, array))
 
     def _binary(self, node: Binary, place: Place, array: bool) -> Operand:
         """Walks down the left edge: a long sum is thousands of nodes deep there."""
         edge = [node]
         while isinstance(edge[-1].left, Binary):
             edge.append(edge[-1].left)
-        left = self.scalar(self.evaluate(edge[-1].left, place, array), array)
+        left = self._one(edge[-1].left, place, array)
         for part in reversed(edge):
-            right = self.scalar(self.evaluate(part.right, place, array), array)
+            right = self._one(part.right, place, array)
             left = binary(part.op, left, right)
         return left
 
@@ -215,8 +230,7 @@ class Interpreter:
     def _operand(self, kind: str, node: Node, place: Place, array: bool) -> Operand | Callable[[], Operand]:
         if kind == "l":
             return lambda: self.evaluate(node, place, array)
-        operand = self.evaluate(node, place, array)
-        return operand if kind in "ga" else self.scalar(operand, array)
+        return self.evaluate(node, place, array) if kind in "ga" else self._one(node, place, array)
 
     def _own_cell(self, node: Call, place: Place) -> Area:
         if place.cell is None:

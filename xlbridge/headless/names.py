@@ -3,9 +3,9 @@
 from __future__ import annotations
 
 from xlbridge.headless.book import Book
-from xlbridge.headless.grammar import parse
 from xlbridge.headless.nodes import Name, Node, Reference, walk
 from xlbridge.headless.operands import NotEvaluated
+from xlbridge.headless.shapes import parse
 
 
 def definition(book: Book, name: Name, sheet: str | None) -> Node:

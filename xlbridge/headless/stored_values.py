@@ -61,7 +61,7 @@ def _values(archive: zipfile.ZipFile, part: str) -> Stored:
             for cell in row.iterchildren("{*}c"):
                 address, kind = cell.get("r"), cell.get("t", "n")
                 text = cell.findtext("{*}v")
-                if address and text is not None and kind != "s":
+                if address and text and kind != "s":
                     values[parse_address(str(address))] = _value(str(kind), text)
             row.clear()
     return values

@@ -16,11 +16,15 @@ _COLUMN: Final = r"\$?[A-Za-z]{1,3}(?![\w.(\[!?\\])"
 _ROW: Final = r"\$?[0-9]{1,7}(?![\w.(\[!?\\])"
 _LOST: Final = rf"\#REF!(?:{_CELL}(?::{_CELL})?)?"
 
+_REFERENCE: Final = rf"{_PREFIX}?(?:{_CELL}(?::{_CELL})?|{_COLUMN}:{_COLUMN}|{_ROW}:{_ROW})"
+
+REFERENCE: Final = re.compile(rf"(?<![\w.\\$!'\]])({_REFERENCE})")
+"""What looks like a reference anywhere in a formula, in a quoted text too."""
 _TOKEN: Final = re.compile(
     rf"""
       (?P<string>"(?:[^"]|"")*")
     | (?P<error>{_PREFIX}?{_LOST}|\#(?:NULL!|DIV/0!|VALUE!|NAME\?|NUM!|N/A))
-    | (?P<reference>{_PREFIX}?(?:{_CELL}(?::{_CELL})?|{_COLUMN}:{_COLUMN}|{_ROW}:{_ROW}))
+    | (?P<reference>{_REFERENCE})
     | (?P<number>(?:[0-9]+(?:\.[0-9]*)?|\.[0-9]+)(?:[eE][+-]?[0-9]+)?)
     | (?P<call>{_IDENTIFIER}\()
     | (?P<name>{_PREFIX}?{_IDENTIFIER}(?!\[))

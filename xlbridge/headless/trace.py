@@ -7,11 +7,11 @@ from dataclasses import dataclass
 
 from xlbridge.headless.book import Formula
 from xlbridge.headless.evaluate import Evaluator
-from xlbridge.headless.grammar import parse
 from xlbridge.headless.interpreter import Interpreter, Place
 from xlbridge.headless.nodes import Call, Name, Node, Reference, TableReference, render, walk
 from xlbridge.headless.operands import Area, NotEvaluated, Operand
 from xlbridge.headless.references import Bounds, Cell, parse_address, quote_sheet
+from xlbridge.headless.shapes import parse
 from xlbridge.values import Argument, Omitted, Scalar, Value
 
 
