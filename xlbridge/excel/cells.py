@@ -9,6 +9,7 @@ from __future__ import annotations
 from collections.abc import Callable, Mapping
 from datetime import datetime
 from decimal import Decimal
+from itertools import chain
 from types import MappingProxyType
 from typing import Any, Final, TypeAlias
 
@@ -61,7 +62,7 @@ def _read(value: Any) -> Argument:
         cell: Scalar | Omitted = _cell(value)
         return cell
     rows = value if value and isinstance(value[0], tuple | list) else (value,)
-    if {type(cell) for row in rows for cell in row} <= _PLAIN:
+    if set(map(type, chain.from_iterable(rows))) <= _PLAIN:
         return tuple(map(tuple, rows))
     return tuple(tuple(map(_cell, row)) for row in rows)
 
