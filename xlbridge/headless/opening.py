@@ -6,7 +6,7 @@ import io
 import warnings
 import zipfile
 from pathlib import Path
-from typing import Final
+from typing import Any, Final
 
 from openpyxl import Workbook
 from openpyxl.reader.excel import ExcelReader
@@ -26,6 +26,10 @@ class _Reader(ExcelReader):
     def read_worksheets(self) -> None:
         vars(self.wb).update(_date_formats=set(), _timedelta_formats=set())
         super().read_worksheets()
+
+    def read_chartsheet(self, sheet: Any, rel: object) -> None:
+        """Keep only the place of a sheet without cells: sheet-level names are numbered by it."""
+        vars(self.wb.create_chartsheet(sheet.name)).update(defined_names={})
 
 
 def read_file(path: Path) -> bytes:
