@@ -1,0 +1,71 @@
+"""Build a workbook: lay out, draw every sheet, save with the same bytes for the same inputs."""
+
+from __future__ import annotations
+
+import io
+import re
+import zipfile
+from collections.abc import Mapping
+from datetime import datetime
+from typing import Any
+
+from openpyxl import Workbook
+
+from engine.version import __version__
+from workbook_templates import (
+    draw_checks,
+    draw_cover,
+    draw_criteria,
+    draw_figures,
+    draw_functions,
+    draw_levels,
+)
+from workbook_templates.inputs import Inputs, starter
+from workbook_templates.layout import CHECKS, COVER, CRITERIA, FIGURES, FUNCTIONS, LEVELS, Layout
+
+#: written into every package, so that two builds are the same to the byte.
+EPOCH = datetime(2020, 1, 1)
+
+
+def build(given: Mapping[str, Any], level_count: int = 6) -> bytes:
+    """Return the package of the workbook for the tables of a BUILDING.toml.
+
+    ``given`` needs ``edition`` and ``units``; what else is missing starts from marked starter values,
+    ``level_count`` levels of them if no level is given.
+    """
+    inputs = Inputs(given, starter(level_count, str(given["units"])))
+    layout = Layout(len(inputs.levels), inputs.parts)
+    workbook = Workbook()
+    workbook.remove(workbook.worksheets[0])
+    cover, criteria, levels, checks, figures, functions = (
+        workbook.create_sheet(name) for name in (COVER, CRITERIA, LEVELS, CHECKS, FIGURES, FUNCTIONS)
+    )
+    draw_cover.draw(cover, layout, inputs)
+    draw_criteria.draw(criteria, layout, inputs)
+    draw_levels.draw(levels, layout, inputs)
+    draw_checks.draw(checks, layout, inputs)
+    draw_figures.draw(figures, levels, layout, inputs)
+    draw_functions.draw(functions, inputs)
+    return _package(workbook)
+
+
+def _package(workbook: Workbook) -> bytes:
+    workbook.properties.creator = f"Storyledger {__version__}"
+    workbook.properties.created = EPOCH
+    drawn = io.BytesIO()
+    workbook.save(drawn)
+    fixed = io.BytesIO()
+    with zipfile.ZipFile(drawn) as source, zipfile.ZipFile(fixed, "w", zipfile.ZIP_DEFLATED) as target:
+        for name in source.namelist():
+            part = zipfile.ZipInfo(name, EPOCH.timetuple()[:6])
+            part.compress_type = zipfile.ZIP_DEFLATED
+            target.writestr(part, _undated(name, source.read(name)))
+    return fixed.getvalue()
+
+
+def _undated(name: str, data: bytes) -> bytes:
+    """Put the fixed date into the document properties, where the library writes the clock."""
+    if name != "docProps/core.xml":
+        return data
+    stamp = f"{EPOCH:%Y-%m-%dT%H:%M:%SZ}".encode()
+    return re.sub(rb"(<dcterms:modified[^>]*>)[^<]*", rb"\g<1>" + stamp, data)

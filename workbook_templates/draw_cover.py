@@ -1,0 +1,150 @@
+"""Draw the cover: the job, where the workbook stands, what it may be used for, how to read and change it."""
+
+from __future__ import annotations
+
+import textwrap
+
+from openpyxl.worksheet.hyperlink import Hyperlink
+from openpyxl.worksheet.worksheet import Worksheet
+
+from engine.editions import rules
+from engine.units import symbol
+from engine.version import __version__
+from workbook_templates import layout as places
+from workbook_templates import sheets, style
+from workbook_templates.declare import DIRECTIONS, Part, Quantity, Role
+from workbook_templates.inputs import Inputs
+from workbook_templates.layout import COVER, Layout
+
+JOB = {
+    "title": "Building",
+    "number": "Job number",
+    "engineer": "Engineer",
+    "checker": "Checker",
+    "revision": "Revision",
+    "date": "Date",
+}
+CAUTIONS = (
+    sheets.CAUTION,
+    "Rows marked “from memory” could not be read in a public source; rows marked “uncertain” carry a doubt "
+    "that their note puts in words. Look both up in the standard before use.",
+    "Cells named ELF_… need the Storyledger add-in to be recalculated. The numbers stored in a computed copy "
+    "show without it.",
+)
+LEGEND = {
+    Role.INPUT: "an entry of yours: value, and its source beside it",
+    Role.FIXED: "fixed when the workbook is made; make a new one to change it",
+    Role.LINK: "taken from another sheet",
+    Role.CALCULATION: "calculated",
+    Role.RESULT: "a result that the design uses",
+    Role.VERDICT: "a verdict: ✓ holds, ✗ does not, ! to be looked at",
+}
+CONTENTS = {
+    places.CRITERIA: "site, occupancy, systems and base shear of both directions",
+    places.LEVELS: "the story table: weights, forces, drift and stability, one row a level",
+    places.CHECKS: "what must hold, line by line",
+    places.FIGURES: "forces, shears and drifts over the height",
+    places.FUNCTIONS: "every worksheet function with its equation and clause",
+}
+GUIDE = (
+    "Insert a level: insert a row between the two grey guard rows of the story table, fill it down (or up) "
+    "from a neighbour, then enter name, elevation, weight and the rest. Rows may stand in any order.",
+    "Replace a starter value: type the value and write where it comes from into its source cell.",
+)
+LOG = ("Revision", "Date", "By", "What was issued, and why")
+
+
+def draw(sheet: Worksheet, layout: Layout, inputs: Inputs) -> None:
+    """Fill the cover."""
+    sheets.head(sheet, "Seismic story forces")
+    for letter, width in zip("ABCDE", (20, 34, 16, 16, 46), strict=True):
+        sheet.column_dimensions[letter].width = width
+    row = _draw_job(sheet, inputs, 4)
+    row = _draw_headlines(sheet, layout, inputs, row + 1)
+    row = _draw_texts(sheet, "Cautions", CAUTIONS, row + 1)
+    row = _draw_legend(sheet, row + 1)
+    row = _draw_contents(sheet, row + 1)
+    row = _draw_texts(sheet, "Working with the table", GUIDE, row + 1)
+    _draw_log(sheet, row + 1)
+    sheets.page(sheet, inputs.units, "1:2", landscape=False)
+
+
+def _draw_job(sheet: Worksheet, inputs: Inputs, row: int) -> int:
+    for key, label in JOB.items():
+        style.write(sheet.cell(row, 1), label, style.BOLD)
+        cell = sheet.cell(row, 2, inputs.job(key))
+        style.dress(cell, Role.INPUT, "@")
+        sheets.name(sheet, f"job_{key}", f"$B${row}")
+        row += 1
+    standard = next(iter(rules(inputs.edition).values())).standard
+    units = f"{symbol('force', inputs.units)} and {symbol('length', inputs.units)}"
+    style.write(sheet.cell(row, 1), "Made for", style.BOLD)
+    style.write(sheet.cell(row, 2), f"{standard}, {units}; template {__version__}")
+    return row + 1
+
+
+def _headlines(layout: Layout) -> list[tuple[str, str, str]]:
+    lines = [
+        ("Base shear V", "force", "={V}"),
+        ("Overturning at the base", "moment", "={M_x:base}"),
+        ("Period T", "time", "={T}"),
+    ]
+    if Part.DRIFT in layout.parts:
+        lines += [
+            ("Largest drift over limit", "none", "={drift_ratio:total}"),
+            ("Largest theta", "none", "={theta:total}"),
+        ]
+    return lines
+
+
+def _draw_headlines(sheet: Worksheet, layout: Layout, inputs: Inputs, row: int) -> int:
+    style.write(sheet.cell(row, 1), "Results", style.HEADING)
+    for column, text in ((3, "Direction X"), (4, "Direction Y")):
+        style.write(sheet.cell(row, column), text, style.BOLD, style.RIGHT)
+    for text, unit, formula in _headlines(layout):
+        row += 1
+        style.write(sheet.cell(row, 1), text)
+        style.write(sheet.cell(row, 2), symbol(unit, inputs.units))
+        number_format = style.number_format(Quantity("", "", unit, Role.LINK), inputs.units)
+        for column, direction in zip((3, 4), DIRECTIONS, strict=True):
+            sheet.cell(row, column, layout.write(formula, COVER, direction))
+            style.dress(sheet.cell(row, column), Role.LINK, number_format)
+    return row + 1
+
+
+def _draw_texts(sheet: Worksheet, title: str, texts: tuple[str, ...], row: int) -> int:
+    """Write each text into one cell, broken over lines that fit the width of the page."""
+    style.write(sheet.cell(row, 1), title, style.HEADING)
+    for text in texts:
+        for line in textwrap.wrap(text, 125):
+            row += 1
+            style.write(sheet.cell(row, 1), line)
+    return row + 1
+
+
+def _draw_legend(sheet: Worksheet, row: int) -> int:
+    style.write(sheet.cell(row, 1), "Letters, borders and fills", style.HEADING)
+    for role, text in LEGEND.items():
+        row += 1
+        sample = sheet.cell(row, 1, f"{style.letter(role)}   {role.value}")
+        style.dress(sample, role)
+        style.write(sheet.cell(row, 2), text)
+    return row + 1
+
+
+def _draw_contents(sheet: Worksheet, row: int) -> int:
+    style.write(sheet.cell(row, 1), "Contents", style.HEADING)
+    for name, text in CONTENTS.items():
+        row += 1
+        style.write(sheet.cell(row, 1), name, style.LINKED)
+        sheet.cell(row, 1).hyperlink = Hyperlink(ref=f"A{row}", location=f"'{name}'!A1", display=name)
+        style.write(sheet.cell(row, 2), text)
+    return row + 1
+
+
+def _draw_log(sheet: Worksheet, row: int) -> None:
+    style.write(sheet.cell(row, 1), "Issue log", style.HEADING)
+    for column, text in enumerate(LOG, 1):
+        style.write(sheet.cell(row + 1, column), text, style.BOLD)
+        for line in range(row + 2, row + 6):
+            style.dress(sheet.cell(line, column), Role.INPUT, "@")

@@ -1,0 +1,72 @@
+"""Draw the criteria sheet: one row a quantity, one column a direction."""
+
+from __future__ import annotations
+
+from collections.abc import Mapping
+from typing import Any
+
+from openpyxl.worksheet.worksheet import Worksheet
+
+from engine.units import DISPLACEMENT_PER_LENGTH, symbol
+from workbook_templates import sheets, style
+from workbook_templates.declare import DIRECTIONS, Block, Quantity, Role
+from workbook_templates.inputs import Inputs
+from workbook_templates.layout import CRITERIA, CRITERIA_COLUMN, CRITERIA_TOP, Layout
+
+HEADERS = ("", "Quantity", "Symbol", "X, or both", "Y", "Unit", "Clause", "Source of the entry", "Note")
+WIDTHS = (3, 46, 13, 27, 27, 7, 22, 24, 50)
+
+
+def draw(sheet: Worksheet, layout: Layout, inputs: Inputs) -> None:
+    """Fill the criteria sheet and give every value its defined name."""
+    sheets.head(sheet, "Criteria")
+    sheets.table_head(sheet, 4, HEADERS, WIDTHS)
+    top = CRITERIA_TOP
+    for block in layout.criteria:
+        style.write(sheet.cell(top, 2), block.title, style.HEADING)
+        for q in block.quantities:
+            _draw_row(sheet, layout, inputs, block, q)
+        top += len(block.quantities) + 2
+    sheet.freeze_panes = "D5"
+    sheets.page(sheet, inputs.units, "1:4")
+
+
+def _draw_row(sheet: Worksheet, layout: Layout, inputs: Inputs, block: Block, q: Quantity) -> None:
+    row = layout.rows[q.key]
+    labels = {
+        1: style.letter(q.role),
+        2: q.text,
+        3: q.shown_symbol,
+        6: symbol(q.unit, inputs.units).replace("text", ""),
+        7: sheets.clause_text(q, inputs.edition),
+        9: sheets.clause_note(q, inputs.edition),
+    }
+    for column, text in labels.items():
+        font = style.SMALL if column in (1, 9) else style.BODY
+        style.write(sheet.cell(row, column), text, font, style.WRAP)
+    sheet.cell(row, 6).alignment = style.CENTRE
+    for direction in DIRECTIONS if block.per_direction else (None,):
+        cell = sheet[f"{CRITERIA_COLUMN[direction]}{row}"]
+        cell.value = _content(layout, inputs, q, direction)
+        style.dress(cell, q.role, style.number_format(q, inputs.units))
+        sheets.name(sheet, layout.name(q.key, direction), layout.criteria_cell(q.key, direction))
+        if q.role is Role.INPUT and (rule := sheets.validation(q)) is not None:
+            rule.add(cell)
+            sheet.add_data_validation(rule)
+    if q.role is Role.INPUT:
+        source = sheet.cell(row, 8, inputs.source(q.key, block.per_direction))
+        style.dress(source, Role.INPUT, "@")
+    sheets.fit_row(sheet, row, WIDTHS)
+
+
+def _content(layout: Layout, inputs: Inputs, q: Quantity, direction: str | None) -> Any:
+    if q.role is Role.INPUT:
+        return inputs.criterion(q.key, direction)
+    if q.role is Role.FIXED:
+        fixed: Mapping[str, Any] = {
+            "edition": inputs.edition,
+            "units": inputs.units,
+            "displacement_per_length": DISPLACEMENT_PER_LENGTH[inputs.units],
+        }
+        return fixed[q.key]
+    return layout.write(q.formula, CRITERIA, direction)

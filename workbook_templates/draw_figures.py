@@ -1,0 +1,103 @@
+"""Draw the figures: native charts over the story table, levels in building order, limits as lines."""
+
+from __future__ import annotations
+
+from openpyxl.chart import BarChart, Reference, ScatterChart, Series
+from openpyxl.chart.shapes import GraphicalProperties
+from openpyxl.drawing.line import LineProperties
+from openpyxl.worksheet.worksheet import Worksheet
+
+from engine.units import symbol
+from workbook_templates import sheets, style
+from workbook_templates.declare import DIRECTIONS, Part, Role
+from workbook_templates.inputs import Inputs
+from workbook_templates.layout import TOP_GUARD, Layout
+
+#: direction -> colour and dash; they differ in lightness too, so they hold in black and white.
+LINES = {"X": ("1F3A5F", "solid"), "Y": ("B8651B", "sysDash")}
+LIMIT_ROW = 4
+WIDTH, HEIGHT, ROWS = 19.0, 7.6, 16  # cm, cm, sheet rows: three charts on one upright page
+
+
+def draw(sheet: Worksheet, levels: Worksheet, layout: Layout, inputs: Inputs) -> None:
+    """Place the charts one below the other."""
+    sheets.head(sheet, "Figures")
+    sheet.column_dimensions["A"].width = 30
+    forces = f"[{symbol('force', inputs.units)}]"
+    charts = [
+        _bars(levels, layout, "F_x", f"Story forces F_x {forces}"),
+        _profile(levels, layout, inputs, "V_x", f"Story shears V_x {forces}"),
+    ]
+    if Part.DRIFT in layout.parts:
+        drift = _profile(levels, layout, inputs, "drift_ratio", "Story drift over its limit, Delta/Delta_a")
+        drift.series.append(_limit_line(sheet))
+        charts.append(drift)
+    for number, chart in enumerate(charts):
+        chart.width, chart.height = WIDTH, HEIGHT
+        sheet.add_chart(chart, f"A{LIMIT_ROW + 3 + ROWS * number}")
+    sheets.page(sheet, inputs.units, "1:2", landscape=False)
+    sheet.page_setup.fitToHeight = 1
+
+
+def _range(levels: Worksheet, layout: Layout, key: str, direction: str | None) -> Reference:
+    column = levels[f"{layout.column(key, direction)}1"].column
+    return Reference(levels, min_col=column, min_row=TOP_GUARD, max_row=layout.bottom_guard)
+
+
+def _bars(levels: Worksheet, layout: Layout, key: str, title: str) -> BarChart:
+    chart = BarChart()
+    chart.type, chart.gapWidth = "bar", 60
+    for direction in DIRECTIONS:
+        series = Series(_range(levels, layout, key, direction), title=f"Direction {direction}")
+        series.graphicalProperties = GraphicalProperties(solidFill=LINES[direction][0])
+        chart.series.append(series)
+    chart.set_categories(_range(levels, layout, "name", None))
+    chart.x_axis.scaling.orientation = "maxMin"  # the first row of the table is the highest level
+    chart.y_axis.crosses = "max"
+    _finish(chart, title, "Level", title)
+    return chart
+
+
+def _profile(levels: Worksheet, layout: Layout, inputs: Inputs, key: str, title: str) -> ScatterChart:
+    """A quantity over the height above the base."""
+    chart = ScatterChart()
+    chart.style, chart.scatterStyle = 13, "lineMarker"
+    for direction in DIRECTIONS:
+        x, y = _range(levels, layout, key, direction), _range(levels, layout, "h_x", None)
+        series = Series(y, x, title=f"Direction {direction}")
+        _stroke(series, *LINES[direction])
+        series.marker.symbol, series.marker.size = ("circle" if direction == "X" else "diamond"), 6
+        chart.series.append(series)
+    chart.x_axis.scaling.min = chart.y_axis.scaling.min = 0
+    _finish(chart, title, title, f"Height above base h_x [{symbol('length', inputs.units)}]")
+    return chart
+
+
+def _limit_line(sheet: Worksheet) -> Series:
+    """The limit as a vertical line: two points in cells that anyone can read."""
+    style.write(sheet.cell(LIMIT_ROW, 1), "Limit line: ratio, height", style.SMALL)
+    for column, (ratio, height) in enumerate(((1, 0), (1, "=h_n")), 2):
+        for row, value in ((LIMIT_ROW, ratio), (LIMIT_ROW + 1, height)):
+            sheet.cell(row, column, value)
+            style.dress(sheet.cell(row, column), Role.LINK, "0.00")
+    x = Reference(sheet, min_col=2, max_col=3, min_row=LIMIT_ROW)
+    y = Reference(sheet, min_col=2, max_col=3, min_row=LIMIT_ROW + 1)
+    series = Series(y, x, title="Limit")
+    _stroke(series, "8A0F1E", "lgDash")
+    series.marker.symbol = "none"
+    return series
+
+
+def _stroke(series: Series, colour: str, dash: str) -> None:
+    series.graphicalProperties = GraphicalProperties(
+        ln=LineProperties(solidFill=colour, prstDash=dash, w=22000)
+    )
+    series.smooth = False
+
+
+def _finish(chart: BarChart | ScatterChart, title: str, x_title: str, y_title: str) -> None:
+    chart.title, chart.legend.position = title, "r"
+    chart.x_axis.title, chart.y_axis.title = x_title, y_title
+    chart.x_axis.delete = chart.y_axis.delete = False
+    chart.y_axis.number_format, chart.y_axis.numFmt.sourceLinked = "General", False
+    chart.display_blanks = "gap"

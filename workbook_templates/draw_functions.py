@@ -1,0 +1,34 @@
+"""Draw the list of worksheet functions: made from the catalogue, row by row."""
+
+from __future__ import annotations
+
+from openpyxl.worksheet.worksheet import Worksheet
+
+from engine.editions import clause
+from workbook_templates import sheets, style
+from workbook_templates.inputs import Inputs
+from xlbridge.catalogue import CATALOGUE, SheetFunction
+from xlbridge.catalogue.validate import describe
+from xlbridge.work import equation
+
+HEADERS = ("Function", "What it gives", "Clause", "Equation", "Arguments", "Confidence and notes")
+WIDTHS = (34, 34, 24, 44, 62, 44)
+
+
+def draw(sheet: Worksheet, inputs: Inputs) -> None:
+    """Fill the list."""
+    sheets.head(sheet, "Worksheet functions")
+    sheets.table_head(sheet, 4, HEADERS, WIDTHS)
+    for row, entry in enumerate(CATALOGUE.values(), 5):
+        for column, text in enumerate(_texts(entry, inputs.edition), 1):
+            style.write(sheet.cell(row, column), text, style.BOLD if column == 1 else style.BODY, style.WRAP)
+        sheets.fit_row(sheet, row, WIDTHS)
+    sheet.freeze_panes = "B5"
+    sheets.page(sheet, inputs.units, "1:4")
+
+
+def _texts(entry: SheetFunction, edition: str) -> tuple[str, ...]:
+    rule = clause(edition, entry.rule)
+    arguments = "\n".join(f"{a.name}: {describe(a)}" for a in entry.arguments)
+    notes = "\n".join(text for text in (rule.note, entry.note) if text)
+    return entry.usage, entry.summary, str(rule), equation(entry), arguments, notes

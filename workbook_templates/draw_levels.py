@@ -1,0 +1,131 @@
+"""Draw the story table: levels top-down between two guard rows, then the base and the totals.
+
+Every range in a formula runs from guard row to guard row. A row put in anywhere between them, the top and
+the bottom included, is inside every range; blank guard rows count for nothing.
+"""
+
+from __future__ import annotations
+
+from itertools import groupby
+
+from openpyxl.utils import column_index_from_string
+from openpyxl.worksheet.pagebreak import Break
+from openpyxl.worksheet.worksheet import Worksheet
+
+from engine.units import symbol
+from workbook_templates import layout as places
+from workbook_templates import sheets, style
+from workbook_templates.declare import Role
+from workbook_templates.inputs import Inputs
+from workbook_templates.layout import FIRST_LEVEL, LEVELS, TOP_GUARD, Column, Layout
+
+TOTALS = {"sum": "SUM", "max": "MAX"}
+PAGE_WIDTH = 176  # units of column width on one landscape page at SCALE
+SCALE = 70  # per cent
+
+
+def draw(sheet: Worksheet, layout: Layout, inputs: Inputs) -> None:
+    """Fill the story table."""
+    breaks = _break_pages(sheet, layout)
+    sheets.head(sheet, "Story table", ("B", *breaks))
+    for column in layout.table:
+        _draw_header(sheet, inputs, column)
+        _draw_cells(sheet, layout, inputs, column)
+        _draw_foot(sheet, layout, inputs, column)
+        _watch(sheet, layout, column)
+    for row, height in ((places.TEXT_ROW, 36), (places.CLAUSE_ROW, 24), (places.SYMBOL_ROW, 26)):
+        sheet.row_dimensions[row].height = height
+    for row in (TOP_GUARD, layout.bottom_guard):
+        sheet.row_dimensions[row].height = 5
+    area = f"$A${places.SYMBOL_ROW}:${layout.table[-1].letter}${layout.bottom_guard}"
+    sheets.name(sheet, "level_table", area)
+    sheet.freeze_panes = f"B{TOP_GUARD}"
+    sheets.page(sheet, inputs.units, f"1:{places.ROLE_ROW}")
+    sheet.sheet_properties.pageSetUpPr.fitToPage = False
+    sheet.page_setup.scale = SCALE
+    sheet.print_title_cols = "A:A"
+
+
+def _draw_header(sheet: Worksheet, inputs: Inputs, column: Column) -> None:
+    q, first = column.quantity, column.quantity is column.band.quantities[0]
+    lines = {
+        places.BAND_ROW: f"{column.band.title} {column.direction or ''}".strip() if first else None,
+        places.TEXT_ROW: q.text,
+        places.SYMBOL_ROW: column.heading,
+        places.UNIT_ROW: symbol(q.unit, inputs.units).replace("text", ""),
+        places.CLAUSE_ROW: sheets.clause_text(q, inputs.edition),
+        places.MARK_ROW: sheets.clause_mark(q, inputs.edition),
+        places.ROLE_ROW: style.letter(q.role),
+    }
+    for row, text in lines.items():
+        cell = sheet[f"{column.letter}{row}"]
+        font = style.BOLD if row in (places.BAND_ROW, places.SYMBOL_ROW) else style.SMALL
+        style.write(cell, text, font, style.LEFT if row == places.BAND_ROW else style.CENTRE)
+        cell.fill = style.BAND_FILL
+    sheet.column_dimensions[column.letter].width = q.width
+
+
+def _draw_cells(sheet: Worksheet, layout: Layout, inputs: Inputs, column: Column) -> None:
+    q, direction = column.quantity, column.direction
+    number_format = style.number_format(q, inputs.units)
+    for row in range(FIRST_LEVEL, layout.bottom_guard):
+        cell = sheet[f"{column.letter}{row}"]
+        if q.role is Role.INPUT:
+            cell.value = inputs.level(row - FIRST_LEVEL, q.key, direction)
+        else:
+            cell.value = layout.write(q.formula, LEVELS, direction, row)
+        style.dress(cell, q.role, number_format)
+    for row in (TOP_GUARD, layout.bottom_guard):
+        sheet[f"{column.letter}{row}"].fill = style.GUARD_FILL
+
+
+def _draw_foot(sheet: Worksheet, layout: Layout, inputs: Inputs, column: Column) -> None:
+    for row, value in ((layout.base_row, _base(layout, column)), (layout.total_row, _total(layout, column))):
+        if value is not None:
+            cell = sheet[f"{column.letter}{row}"]
+            cell.value = value
+            style.dress(cell, Role.RESULT, style.number_format(column.quantity, inputs.units))
+
+
+def _base(layout: Layout, column: Column) -> str | int | None:
+    q = column.quantity
+    if q.base:
+        return layout.write(q.base, LEVELS, column.direction, layout.base_row)
+    return {"name": "Base", "elevation": "=base_elevation", "h_x": 0}.get(q.key)
+
+
+def _total(layout: Layout, column: Column) -> str | None:
+    """A total counts first, so that no cell that failed can drop out of it in silence."""
+    q = column.quantity
+    if q.key == "name":
+        return "Total or largest"
+    if not q.total:
+        return None
+    template = f"=IF(COUNT({{{q.key}:all}})=COUNTA({{name:all}}),{TOTALS[q.total]}({{{q.key}:all}}),NA())"
+    return layout.write(template, LEVELS, column.direction)
+
+
+def _watch(sheet: Worksheet, layout: Layout, column: Column) -> None:
+    """Put the entry rule on an input column, the verdict colours on a verdict column."""
+    area = f"{column.letter}{TOP_GUARD}:{column.letter}{layout.bottom_guard}"
+    if column.quantity.role is Role.INPUT and (rule := sheets.validation(column.quantity)) is not None:
+        rule.allow_blank = True
+        rule.add(area)
+        sheet.add_data_validation(rule)
+    if column.quantity.role is Role.VERDICT:
+        sheets.flag_verdicts(sheet, area)
+
+
+def _break_pages(sheet: Worksheet, layout: Layout) -> list[str]:
+    """Break the pages between bands; return the first column of each page after the first."""
+    names = used = layout.table[0].quantity.width
+    starts = []
+    for _, columns in groupby(layout.table[1:], key=lambda c: (c.band, c.direction)):
+        band = list(columns)
+        wide = sum(c.quantity.width for c in band)
+        if used + wide > PAGE_WIDTH:
+            starts.append(band[0].letter)
+            sheet.col_breaks.append(Break(id=column_index_from_string(band[0].letter) - 1))
+            used = names
+        used += wide
+    return starts

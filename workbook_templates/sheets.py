@@ -1,0 +1,132 @@
+"""What every sheet shares: title line with job and status, page set-up, entry rules, clause texts."""
+
+from __future__ import annotations
+
+from collections.abc import Iterable
+from math import ceil
+from typing import Final, cast
+
+from openpyxl import Workbook
+from openpyxl.formatting.rule import Rule
+from openpyxl.utils import get_column_letter
+from openpyxl.workbook.defined_name import DefinedName
+from openpyxl.worksheet.datavalidation import DataValidation
+from openpyxl.worksheet.worksheet import Worksheet
+
+from engine.editions import clause
+from workbook_templates import style
+from workbook_templates.declare import Quantity
+
+CAUTION: Final = (
+    "An aid to a licensed engineer's judgement. Confirm every value against the standard adopted by the "
+    "authority having jurisdiction, its supplements and local amendments."
+)
+PAPER: Final = {"us": 1, "si": 9}  # Letter, A4
+
+
+def head(sheet: Worksheet, title: str, columns: Iterable[str] = "A") -> None:
+    """Write the two lines on top of a sheet: what it is and for which job, and the state of the checks.
+
+    ``columns`` are those where a printed page begins.
+    """
+    for column in columns:
+        style.write(
+            sheet[f"{column}1"], f'="{title}   |   "&job_title&"   |   Rev. "&job_revision', style.TITLE
+        )
+        style.write(sheet[f"{column}2"], "=workbook_status", style.BOLD)
+        flag_verdicts(sheet, f"{column}2")
+    sheet.row_dimensions[1].height = 22
+    sheet.sheet_view.showGridLines = False
+
+
+def name(sheet: Worksheet, word: str, address: str) -> None:
+    """Give cells of a sheet a defined name in the workbook."""
+    workbook = cast(Workbook, sheet.parent)
+    workbook.defined_names[word] = DefinedName(word, attr_text=f"{sheet.title}!{address}")
+
+
+def page(sheet: Worksheet, units: str, title_rows: str, landscape: bool = True) -> None:
+    """Set up the printed page: one page wide, header rows repeated, file, date and page x of y below."""
+    sheet.page_setup.paperSize = PAPER[units]
+    sheet.page_setup.orientation = "landscape" if landscape else "portrait"
+    sheet.page_setup.fitToWidth, sheet.page_setup.fitToHeight = 1, 0
+    sheet.sheet_properties.pageSetUpPr.fitToPage = True
+    sheet.print_title_rows = title_rows
+    sheet.oddHeader.left.text, sheet.oddHeader.right.text = f"&8{CAUTION}", "&A"
+    sheet.oddFooter.left.text, sheet.oddFooter.right.text = "&F", "&D   page &P of &N"
+    sheet.page_margins.left = sheet.page_margins.right = 0.5
+    sheet.page_margins.top, sheet.page_margins.bottom = 0.7, 0.85
+
+
+def table_head(sheet: Worksheet, row: int, texts: Iterable[str], widths: Iterable[float]) -> None:
+    """Write the header row of a plain table and set the widths of its columns."""
+    for column, (text, width) in enumerate(zip(texts, widths, strict=True), 1):
+        cell = sheet.cell(row, column)
+        style.write(cell, text, style.HEADING, style.WRAP)
+        cell.fill = style.BAND_FILL
+        sheet.column_dimensions[get_column_letter(column)].width = width
+
+
+def fit_row(sheet: Worksheet, row: int, widths: Iterable[float], line: float = 13.5) -> None:
+    """Make a row as high as its longest wrapped text asks for."""
+    lines = 1
+    for column, width in enumerate(widths, 1):
+        text = str(sheet.cell(row, column).value or "")
+        if not text.startswith("="):
+            lines = max(lines, sum(max(1, ceil(1.12 * len(part) / width)) for part in text.split("\n")))
+    sheet.row_dimensions[row].height = line * lines
+
+
+def flag_verdicts(sheet: Worksheet, area: str) -> None:
+    """Colour the verdicts of an area; the sign and the words say the same without colour."""
+    first = area.split(":")[0].replace("$", "")
+    for sign, look in (("✗", style.FAIL), ("!", style.LOOK)):
+        formula = f'LEFT({first},1)="{sign}"'
+        sheet.conditional_formatting.add(area, Rule(type="expression", dxf=look, formula=[formula]))
+
+
+def validation(q: Quantity) -> DataValidation | None:
+    """Return the entry rule of an input: a list of words, a range of numbers, or none for free text."""
+    if q.choices:
+        rule = DataValidation(type="list", formula1=f'"{",".join(q.choices)}"', allow_blank=q.optional)
+        allowed = "one of: " + ", ".join(q.choices)
+    elif q.span is not None:
+        rule = _number_rule(q)
+        allowed = f"a number, {q.span}"
+    else:
+        return None
+    rule.error = f"{q.shown_symbol}: {allowed}."[:255]
+    rule.errorTitle = q.text[:32]
+    rule.prompt = f"{q.text}: {allowed}."[:255]
+    rule.promptTitle = q.shown_symbol[:32]
+    rule.showErrorMessage = rule.showInputMessage = True
+    return rule
+
+
+def _number_rule(q: Quantity) -> DataValidation:
+    span = q.span
+    assert span is not None
+    low = -1e12 if span.low is None else span.low
+    if span.high is not None:
+        return DataValidation(
+            type="decimal", operator="between", formula1=f"{low:g}", formula2=f"{span.high:g}"
+        )
+    operator = "greaterThan" if span.low_open else "greaterThanOrEqual"
+    return DataValidation(type="decimal", operator=operator, formula1=f"{low:g}", allow_blank=q.optional)
+
+
+def clause_text(q: Quantity, edition: str) -> str:
+    """Return the clause of a quantity as printed in its row."""
+    return str(clause(edition, q.clause_rule)) if q.clause_rule else ""
+
+
+def clause_note(q: Quantity, edition: str) -> str:
+    """Return what the user must know of the clause: from memory, or the doubt in words."""
+    return clause(edition, q.clause_rule).note if q.clause_rule else ""
+
+
+def clause_mark(q: Quantity, edition: str) -> str:
+    """Return the short mark of a clause that is not confirmed by a public source."""
+    if not q.clause_rule:
+        return ""
+    return {"H": "", "M": "from memory", "U": "uncertain"}[clause(edition, q.clause_rule).confidence]

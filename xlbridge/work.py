@@ -1,0 +1,57 @@
+"""Show the work of a worksheet function: its equation in symbols, and with the numbers put in."""
+
+from __future__ import annotations
+
+import inspect
+from collections.abc import Sequence
+from typing import Any
+
+from xlbridge.catalogue.entry import SheetFunction
+from xlbridge.values import OMITTED, Argument
+
+SHOWN = 6  # significant digits of a number in an equation
+
+
+def equation(entry: SheetFunction) -> str:
+    """Return the equation in symbols.
+
+    >>> from xlbridge.catalogue import CATALOGUE
+    >>> equation(CATALOGUE["ELF_FX"])
+    'F_x = C_vx·V'
+    """
+    symbols = {part.name: part.symbol for part in (*entry.arguments, *entry.terms)}
+    return f"{entry.result.symbol} = {entry.expression.format_map(symbols)}"
+
+
+def numbers(entry: SheetFunction, arguments: Sequence[Argument]) -> str:
+    """Return the right side of the equation with the numbers put in.
+
+    >>> from xlbridge.catalogue import CATALOGUE
+    >>> numbers(CATALOGUE["ELF_FX"], [286.0, 0.28])
+    '0.28·286'
+    """
+    given = {a.name: v for a, v in zip(entry.arguments, arguments, strict=False) if v is not OMITTED}
+    values = {**entry.defaults, **given}
+    terms = {term.name: term.compute(**_own(term.compute, values)) for term in entry.terms}
+    return entry.expression.format_map({name: shown(v) for name, v in (values | terms).items()})
+
+
+def shown(value: Any) -> str:
+    """Return a value as it stands in an equation: a range is cut to its ends."""
+    if isinstance(value, tuple):
+        cells = [cell for row in value for cell in row if cell is not None]
+        inner = cells if len(cells) <= 4 else [*cells[:2], "…", cells[-1]]
+        return f"[{', '.join(map(shown, inner))}]"
+    return value if isinstance(value, str) else f"{float(value):.{SHOWN}g}"
+
+
+def _own(compute: Any, values: dict[str, Any]) -> dict[str, Any]:
+    """The arguments that a term asks for by name, ranges as plain lists."""
+    names = inspect.signature(compute).parameters
+    return {n: _plain(values[n]) for n in names}
+
+
+def _plain(value: Any) -> Any:
+    if isinstance(value, tuple):
+        return [cell for row in value for cell in row if cell is not None]
+    return value
