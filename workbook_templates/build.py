@@ -12,16 +12,10 @@ from typing import Any
 from openpyxl import Workbook
 
 from engine.version import __version__
-from workbook_templates import (
-    draw_checks,
-    draw_cover,
-    draw_criteria,
-    draw_figures,
-    draw_functions,
-    draw_levels,
-)
+from workbook_templates import layout as places
+from workbook_templates.draw import checks, cover, criteria, figures, functions, levels
 from workbook_templates.inputs import Inputs, starter
-from workbook_templates.layout import CHECKS, COVER, CRITERIA, FIGURES, FUNCTIONS, LEVELS, Layout
+from workbook_templates.layout import Layout
 
 #: written into every package, so that two builds are the same to the byte.
 EPOCH = datetime(2020, 1, 1)
@@ -37,15 +31,13 @@ def build(given: Mapping[str, Any], level_count: int = 6) -> bytes:
     layout = Layout(len(inputs.levels), inputs.parts)
     workbook = Workbook()
     workbook.remove(workbook.worksheets[0])
-    cover, criteria, levels, checks, figures, functions = (
-        workbook.create_sheet(name) for name in (COVER, CRITERIA, LEVELS, CHECKS, FIGURES, FUNCTIONS)
-    )
-    draw_cover.draw(cover, layout, inputs)
-    draw_criteria.draw(criteria, layout, inputs)
-    draw_levels.draw(levels, layout, inputs)
-    draw_checks.draw(checks, layout, inputs)
-    draw_figures.draw(figures, levels, layout, inputs)
-    draw_functions.draw(functions, inputs)
+    sheets = {name: workbook.create_sheet(name) for name in places.SHEETS}
+    cover.draw(sheets[places.COVER], layout, inputs)
+    criteria.draw(sheets[places.CRITERIA], layout, inputs)
+    levels.draw(sheets[places.LEVELS], layout, inputs)
+    checks.draw(sheets[places.CHECKS], layout, inputs)
+    figures.draw(sheets[places.FIGURES], sheets[places.LEVELS], layout, inputs)
+    functions.draw(sheets[places.FUNCTIONS], inputs)
     return _package(workbook)
 
 

@@ -18,6 +18,7 @@ LEVELS: Final = "Levels"
 CHECKS: Final = "Checks"
 FIGURES: Final = "Figures"
 FUNCTIONS: Final = "Functions"
+SHEETS: Final = (COVER, CRITERIA, LEVELS, CHECKS, FIGURES, FUNCTIONS)
 
 CRITERIA_TOP: Final = 5
 CRITERIA_COLUMN: Final = {None: "D", "X": "D", "Y": "E"}

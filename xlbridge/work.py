@@ -3,10 +3,11 @@
 from __future__ import annotations
 
 import inspect
-from collections.abc import Sequence
+from collections.abc import Iterable, Sequence
 from typing import Any
 
-from xlbridge.catalogue.entry import SheetFunction
+from xlbridge.catalogue.entry import Argument as Declared
+from xlbridge.catalogue.entry import SheetFunction, Term
 from xlbridge.values import OMITTED, Argument
 
 SHOWN = 6  # significant digits of a number in an equation
@@ -19,8 +20,13 @@ def equation(entry: SheetFunction) -> str:
     >>> equation(CATALOGUE["ELF_FX"])
     'F_x = C_vx·V'
     """
-    symbols = {part.name: part.symbol for part in (*entry.arguments, *entry.terms)}
+    symbols = {part.name: part.symbol for part in _parts(entry)}
     return f"{entry.result.symbol} = {entry.expression.format_map(symbols)}"
+
+
+def _parts(entry: SheetFunction) -> Iterable[Declared | Term]:
+    yield from entry.arguments
+    yield from entry.terms
 
 
 def numbers(entry: SheetFunction, arguments: Sequence[Argument]) -> str:

@@ -5,9 +5,9 @@ from __future__ import annotations
 from openpyxl.worksheet.worksheet import Worksheet
 
 from engine.units import symbol
-from workbook_templates import sheets, style
 from workbook_templates.checks import CHECKS
 from workbook_templates.declare import DIRECTIONS, Check, Quantity, Role
+from workbook_templates.draw import sheets, style
 from workbook_templates.inputs import STARTER, Inputs
 from workbook_templates.layout import CHECKS as SHEET
 from workbook_templates.layout import CRITERIA, Layout

@@ -8,8 +8,8 @@ from openpyxl.drawing.line import LineProperties
 from openpyxl.worksheet.worksheet import Worksheet
 
 from engine.units import symbol
-from workbook_templates import sheets, style
 from workbook_templates.declare import DIRECTIONS, Part, Role
+from workbook_templates.draw import sheets, style
 from workbook_templates.inputs import Inputs
 from workbook_templates.layout import TOP_GUARD, Layout
 

@@ -8,8 +8,8 @@ from typing import Any
 from openpyxl.worksheet.worksheet import Worksheet
 
 from engine.units import DISPLACEMENT_PER_LENGTH, symbol
-from workbook_templates import sheets, style
 from workbook_templates.declare import DIRECTIONS, Block, Quantity, Role
+from workbook_templates.draw import sheets, style
 from workbook_templates.inputs import Inputs
 from workbook_templates.layout import CRITERIA, CRITERIA_COLUMN, CRITERIA_TOP, Layout
 

@@ -6,6 +6,7 @@ the bottom included, is inside every range; blank guard rows count for nothing.
 
 from __future__ import annotations
 
+from collections.abc import Mapping
 from itertools import groupby
 
 from openpyxl.utils import column_index_from_string
@@ -14,12 +15,13 @@ from openpyxl.worksheet.worksheet import Worksheet
 
 from engine.units import symbol
 from workbook_templates import layout as places
-from workbook_templates import sheets, style
 from workbook_templates.declare import Role
+from workbook_templates.draw import sheets, style
 from workbook_templates.inputs import Inputs
 from workbook_templates.layout import FIRST_LEVEL, LEVELS, TOP_GUARD, Column, Layout
 
 TOTALS = {"sum": "SUM", "max": "MAX"}
+BASE: Mapping[str, str | int] = {"name": "Base", "elevation": "=base_elevation", "h_x": 0}
 PAGE_WIDTH = 176  # units of column width on one landscape page at SCALE
 SCALE = 70  # per cent
 
@@ -91,7 +93,7 @@ def _base(layout: Layout, column: Column) -> str | int | None:
     q = column.quantity
     if q.base:
         return layout.write(q.base, LEVELS, column.direction, layout.base_row)
-    return {"name": "Base", "elevation": "=base_elevation", "h_x": 0}.get(q.key)
+    return BASE.get(q.key)
 
 
 def _total(layout: Layout, column: Column) -> str | None:

@@ -5,7 +5,7 @@ from __future__ import annotations
 from openpyxl.worksheet.worksheet import Worksheet
 
 from engine.editions import clause
-from workbook_templates import sheets, style
+from workbook_templates.draw import sheets, style
 from workbook_templates.inputs import Inputs
 from xlbridge.catalogue import CATALOGUE, SheetFunction
 from xlbridge.catalogue.validate import describe

@@ -14,8 +14,8 @@ from openpyxl.worksheet.datavalidation import DataValidation
 from openpyxl.worksheet.worksheet import Worksheet
 
 from engine.editions import clause
-from workbook_templates import style
 from workbook_templates.declare import Quantity
+from workbook_templates.draw import style
 
 CAUTION: Final = (
     "An aid to a licensed engineer's judgement. Confirm every value against the standard adopted by the "

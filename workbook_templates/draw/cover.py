@@ -11,8 +11,8 @@ from engine.editions import rules
 from engine.units import symbol
 from engine.version import __version__
 from workbook_templates import layout as places
-from workbook_templates import sheets, style
 from workbook_templates.declare import DIRECTIONS, Part, Quantity, Role
+from workbook_templates.draw import sheets, style
 from workbook_templates.inputs import Inputs
 from workbook_templates.layout import COVER, Layout
 
