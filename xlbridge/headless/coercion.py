@@ -20,9 +20,10 @@ FIFTEEN_DIGITS: Final = 2.0**-48
 
 _NUMBER: Final = re.compile(r"\s*[-+]?(\d{1,3}(,\d{3})+|\d+)?(\.\d*)?(E[-+]?\d+)?\s*%?\s*", re.IGNORECASE)
 _ISO_DATE: Final = re.compile(r"\s*(\d{4})-(\d{1,2})-(\d{1,2})\s*")
+_SIGNS: Final = r"[\s\d/:.,$€£¥()%+-]*"
+_MONTHS: Final = "jan|feb|mar|apr|may|jun|jul|aug|sep|oct|nov|dec|january|february|march|april|june|july"
 _BY_SETTINGS: Final = re.compile(
-    r"[\s\d/:.,$€£¥()%+-]*\d[\s\d/:.,$€£¥()%+-]*(am|pm|jan|feb|mar|apr|may|jun|jul|aug|sep|oct|nov|dec)?"
-    r"[a-z]*[\s\d/:.,$€£¥()%+-]*",
+    rf"(?=.*\d){_SIGNS}(?:(?: am| pm| a| p|{_MONTHS}|august|september|october|november|december){_SIGNS})?",
     re.IGNORECASE,
 )
 

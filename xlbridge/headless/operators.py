@@ -7,6 +7,7 @@ have it (Excel for the last operation of a formula).
 from __future__ import annotations
 
 import math
+import sys
 from collections.abc import Callable
 from typing import Final, TypeAlias
 
@@ -17,6 +18,8 @@ from xlbridge.values import CellError, Scalar, Value
 
 _Operator: TypeAlias = Callable[[Scalar, Scalar], Scalar]
 _TOO_LARGE: Final = CellError("#NUM!", "the result is too large")
+#: a smaller result is 0 (Excel specifications and limits, "smallest allowed positive number").
+SMALLEST: Final = sys.float_info.min
 _BY_ZERO: Final = CellError("#DIV/0!", "division by zero")
 
 
@@ -70,6 +73,8 @@ def _subtract(left: float, right: float) -> float:
 
 def _arithmetic(compute: Callable[[float, float], float]) -> _Operator:
     def operate(left: Scalar, right: Scalar) -> Scalar:
+        if isinstance(left, CellError) or isinstance(right, CellError):
+            return left if isinstance(left, CellError) else right
         try:
             result = compute(number(left), number(right))
         except Fault as fault:
@@ -78,7 +83,9 @@ def _arithmetic(compute: Callable[[float, float], float]) -> _Operator:
             return _BY_ZERO
         except OverflowError:
             return _TOO_LARGE
-        return result + 0.0 if math.isfinite(result) else _TOO_LARGE
+        if not math.isfinite(result):
+            return _TOO_LARGE
+        return result if abs(result) >= SMALLEST else 0.0
 
     return operate
 

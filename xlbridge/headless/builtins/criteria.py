@@ -1,7 +1,7 @@
 """Criteria of COUNTIF and its kin: a comparison, a text with wildcards, or a plain value.
 
 ``?`` stands for one character, ``*`` for any number of them, ``~`` before one of the three takes it
-literally. Texts are compared whole and without regard to case; a criterion that spells a number meets
+literally. Texts are compared whole and without regard to case; a criterion that is or spells a number meets
 numbers and, where it asks for equality, texts that spell the same number.
 """
 
@@ -30,6 +30,8 @@ def criterion(value: Scalar) -> Test:
     if isinstance(value, str):
         return _written(value)
     wanted = 0.0 if value is None else value
+    if isinstance(wanted, float):
+        return lambda cell: _as_number(cell) == wanted
     return lambda cell: type(cell) is type(wanted) and cell == wanted
 
 

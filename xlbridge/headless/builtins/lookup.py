@@ -129,12 +129,16 @@ def _xlookup(
     return _part(results, 0, place) if across else _part(results, place, 0)
 
 
-def _rows(area: Area) -> Operand:
+def _rows(area: Area | None = None) -> Operand:
+    if area is None:
+        raise NotEvaluated("ROW() outside a cell")
     rows: Grid = tuple((float(row),) for row in range(area.top, area.bottom + 1))
     return rows if len(rows) > 1 else rows[0][0]
 
 
-def _columns(area: Area) -> Operand:
+def _columns(area: Area | None = None) -> Operand:
+    if area is None:
+        raise NotEvaluated("COLUMN() outside a cell")
     columns = tuple(float(column) for column in range(area.left, area.right + 1))
     return (columns,) if len(columns) > 1 else columns[0]
 
@@ -166,8 +170,8 @@ FUNCTIONS: Final = (
     Builtin("LOOKUP", "sgg", _lookup, 2, array=True),
     Builtin("XMATCH", "sgnn", _xmatch, 2),
     Builtin("XLOOKUP", "sgglnn", _xlookup, 3),
-    Builtin("ROW", "a", _rows),
-    Builtin("COLUMN", "a", _columns),
+    Builtin("ROW", "a", _rows, 0),
+    Builtin("COLUMN", "a", _columns, 0),
     Builtin("ROWS", "g", lambda operand: float(shape(operand)[0])),
     Builtin("COLUMNS", "g", lambda operand: float(shape(operand)[1])),
     Builtin("ADDRESS", "nnsst", _address, 2),

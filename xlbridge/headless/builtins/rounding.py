@@ -44,7 +44,7 @@ def _away(value: float) -> float:
 def _mround(value: float, multiple: float) -> float:
     if value * multiple < 0.0:
         raise Fault("#NUM!", "MROUND: number and multiple have different signs")
-    return multiple * floor(value / multiple + 0.5) if multiple else 0.0
+    return multiple * math.floor(value / multiple + 0.5) if multiple else 0.0
 
 
 def _same_sign(name: str, value: float, step: float) -> None:

@@ -17,6 +17,8 @@ from xlbridge.values import Scalar
 
 def exact(value: Scalar, cells: Sequence[Scalar], wildcards: bool = True, backwards: bool = False) -> int:
     """Return the place (from 1) of the first cell equal to the value, or of the last one."""
+    if value is None and 0.0 in cells:
+        raise NotEvaluated("whether a blank finds 0 depends on the program")
     if isinstance(value, str) and wildcards and has_wildcards(value):
         pattern = wildcard(value)
         found = [isinstance(cell, str) and pattern.fullmatch(cell) is not None for cell in cells]
@@ -42,6 +44,7 @@ def at_least(value: Scalar, cells: Sequence[Scalar]) -> int:
 
 def nearest(value: Scalar, cells: Sequence[Scalar], below: bool) -> int:
     """Return the place of an equal cell, else of the next smaller or larger one, in any order of cells."""
+    _refuse_blank(value)
     wanted = _key(value)
     keys = [(_key(cell), place) for place, cell in enumerate(cells, 1) if _alike(cell, value)]
     if below:
@@ -60,6 +63,11 @@ def not_found(value: Scalar) -> Fault:
     return Fault("#N/A", f"{value!r} is not found")
 
 
+def _refuse_blank(value: Scalar) -> None:
+    if value is None:
+        raise NotEvaluated("a nearest match for a blank cell")
+
+
 def _alike(cell: Scalar, value: Scalar) -> bool:
     return type(cell) is (float if value is None else type(value))
 
@@ -69,6 +77,7 @@ def _key(value: Scalar) -> float | str:
 
 
 def _sorted_keys(value: Scalar, cells: Sequence[Scalar], descending: bool) -> list[tuple[int, float | str]]:
+    _refuse_blank(value)
     keys = [(place, _key(cell)) for place, cell in enumerate(cells, 1) if _alike(cell, value)]
     if any(_out_of_order(left, right, descending) for (_, left), (_, right) in pairwise(keys)):
         raise NotEvaluated(f"a nearest match needs {'descending' if descending else 'ascending'} cells")

@@ -73,6 +73,11 @@ def _found(place: int, wanted: str, words: str, start: float) -> float:
     return place + 1.0
 
 
+def _upper(words: str) -> str:
+    """Upper case, letter by letter; a letter that would become two stays."""
+    return "".join(sign.upper() if len(sign.upper()) == 1 else sign for sign in words)
+
+
 def _proper(words: str) -> str:
     return re.sub(r"[^\W\d_]+", lambda word: word[0].capitalize(), words)
 
@@ -117,7 +122,7 @@ FUNCTIONS: Final = (
     Builtin("RIGHT", "tn", _right, 1),
     Builtin("MID", "tnn", _mid),
     Builtin("TRIM", "t", lambda words: re.sub(" +", " ", words).strip(" ")),
-    Builtin("UPPER", "t", str.upper),
+    Builtin("UPPER", "t", _upper),
     Builtin("LOWER", "t", str.lower),
     Builtin("PROPER", "t", _proper),
     Builtin("CONCATENATE", "t*", lambda *words: _fitting("".join(words))),
