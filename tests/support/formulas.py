@@ -1,0 +1,77 @@
+"""Every public formula of the engine's concept modules, with one valid call each."""
+
+from __future__ import annotations
+
+from collections.abc import Callable, Iterator
+from types import ModuleType
+from typing import Any
+
+from engine import base_shear, diaphragm, drift, hazard, occupancy, period, stability, torsion, vertical
+
+CONCEPTS: tuple[ModuleType, ...] = (
+    *(occupancy, hazard, period, base_shear, vertical),
+    *(torsion, drift, stability, diaphragm),
+)
+
+SITE = {"S_DS": 0.9, "S_D1": 0.45, "S_1": 0.65, "T": 0.8, "T_L": 6.0, "R": 6.0, "I_e": 1.25}
+LEVELS = {"heights": [11.0, 25.0, 38.0], "weights": [300.0, 250.0, 120.0]}
+FORCES = {"heights": LEVELS["heights"], "forces": [20.0, 45.0, 35.0]}
+DIAPHRAGM = {"w_px": 240.0, "h_x": 25.0, **LEVELS, "forces": FORCES["forces"]}
+LIMITS = {"S_DS": 0.9, "I_e": 1.25}
+
+#: dotted name below ``engine`` -> a valid call, no two arguments alike so that a swap shows
+CALLS: dict[str, dict[str, Any]] = {
+    "occupancy.importance_factor": {"risk_category": "III"},
+    "hazard.corner_period_T0": {"S_DS": 0.9, "S_D1": 0.45},
+    "hazard.corner_period_TS": {"S_DS": 0.9, "S_D1": 0.45},
+    "hazard.spectral_acceleration": {"T": 0.8, "S_DS": 0.9, "S_D1": 0.45, "T_L": 6.0},
+    "period.approximate_period": {"h_n": 38.0, "system": "steel moment frame", "units": "us"},
+    "period.approximate_period_stories": {"N": 7.0},
+    "period.upper_limit_coefficient": {"S_D1": 0.17},
+    "period.period_limit": {"C_u": 1.4, "T_a": 0.6},
+    "period.design_period": {"T_a": 0.6, "C_u": 1.4, "T_computed": 0.8},
+    "base_shear.coefficient_plateau": {"S_DS": 0.9, "R": 6.0, "I_e": 1.25},
+    "base_shear.coefficient_cap": {"S_D1": 0.45, "T": 0.8, "T_L": 6.0, "R": 5.0, "I_e": 1.25},
+    "base_shear.coefficient_minimum": {"S_DS": 0.9, "I_e": 1.25},
+    "base_shear.coefficient_minimum_near_fault": {"S_1": 0.65, "R": 6.0, "I_e": 1.25},
+    "base_shear.response_coefficient": {**SITE, "edition": "7-22"},
+    "base_shear.governing_bound": {**SITE, "edition": "7-22"},
+    "base_shear.base_shear": {"C_s": 0.1, "W": 670.0},
+    "vertical.exponent": {"T": 0.8, "rule": "interpolate"},
+    "vertical.distribution_factors": {**LEVELS, "k": 1.15},
+    "vertical.distribution_factor": {"w_x": 250.0, "h_x": 25.0, **LEVELS, "k": 1.15},
+    "vertical.story_force": {"V": 100.0, "C_vx": 0.45},
+    "vertical.story_shear": {"h_x": 25.0, **FORCES},
+    "vertical.overturning_moment": {"h_x": 25.0, **FORCES},
+    "vertical.story_height": {"h_x": 25.0, "heights": LEVELS["heights"]},
+    "vertical.value_below": {"h_x": 25.0, "values": [0.3, 0.8, 1.2], "heights": LEVELS["heights"]},
+    "torsion.amplification": {"d_max": 1.5, "d_avg": 1.0},
+    "drift.amplified_deflection": {"delta_xe": 0.8, "C_d": 5.0, "I_e": 1.25},
+    "drift.design_story_drift": {"d_upper": 0.8, "d_lower": 0.3, "C_d": 5.0, "I_e": 1.25},
+    "drift.allowable_drift": {**{"h_sx": 14.0, "structure": "all other", "risk_category": "III", "rho": 1.3}},
+    "stability.stability_coefficient": {
+        **{"P_x": 900.0, "Delta": 2.0, "I_e": 1.25, "V_x": 80.0, "h_sx": 168.0, "C_d": 5.0}
+    },
+    "stability.stability_limit": {"C_d": 5.0, "beta": 0.7},
+    "stability.demand_ratio": {"beta": 0.3, "Omega_0": 2.5, "edition": "7-22"},
+    "stability.second_order_factor": {"theta": 0.15},
+    "stability.stability_verdict": {"theta": 0.15, "theta_max": 0.2},
+    "diaphragm.unlimited_force": DIAPHRAGM,
+    "diaphragm.minimum_force": {"w_px": 240.0, **LIMITS},
+    "diaphragm.maximum_force": {"w_px": 240.0, **LIMITS},
+    "diaphragm.design_force": {**DIAPHRAGM, **LIMITS},
+    "diaphragm.design_force_bound": {**DIAPHRAGM, **LIMITS},
+}
+
+
+def public_functions() -> Iterator[tuple[str, Callable[..., Any]]]:
+    """Yield every public function that a concept module defines, by its dotted name below ``engine``."""
+    for module in CONCEPTS:
+        for name, member in vars(module).items():
+            if callable(member) and not name.startswith("_") and member.__module__ == module.__name__:
+                yield f"{module.__name__.removeprefix('engine.')}.{name}", member
+
+
+def function(name: str) -> Callable[..., Any]:
+    """Return a formula by its dotted name."""
+    return dict(public_functions())[name]
