@@ -12,7 +12,7 @@ import numpy as np
 from numpy.typing import ArrayLike
 
 from engine.editions import EDITIONS, clause
-from engine.require import Result, Words, above, at_least, choice, finite, formula, worded
+from engine.require import Result, Words, above, agree, at_least, choice, finite, formula, worded
 
 S_1_THRESHOLD: Final = 0.6
 C_S_FLOOR: Final = 0.01
@@ -196,13 +196,13 @@ def governing_bound(
     """
     C_s = response_coefficient(S_DS, S_D1, S_1, T, T_L, R, I_e, edition)
     long = finite("T", T) > finite("T_L", T_L)
-    minimum = coefficient_minimum(S_DS, I_e)
+    cap, minimum = coefficient_cap(S_D1, T, T_L, R, I_e), coefficient_minimum(S_DS, I_e)
     conditions = [
-        coefficient_plateau(S_DS, R, I_e) == C_s,
-        (coefficient_cap(S_D1, T, T_L, R, I_e) == C_s) & ~long,
-        (coefficient_cap(S_D1, T, T_L, R, I_e) == C_s) & long,
-        (minimum == C_s) & (minimum > C_S_FLOOR),
-        minimum == C_s,
+        agree(coefficient_plateau(S_DS, R, I_e), C_s),
+        agree(cap, C_s) & ~long,
+        agree(cap, C_s) & long,
+        agree(minimum, C_s) & (minimum > C_S_FLOOR),
+        agree(minimum, C_s),
     ]
     return worded(_bounds(edition), np.select(conditions, range(len(conditions)), len(conditions)))
 

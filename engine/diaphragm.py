@@ -11,7 +11,7 @@ import numpy as np
 from numpy.typing import ArrayLike
 
 from engine import levels
-from engine.require import Result, Words, above, at_least, finite, formula, worded
+from engine.require import Result, Words, above, agree, at_least, finite, formula, worded
 
 BOUNDS: Final = (
     "w_px sum(F_i)/sum(w_i), Eq. 12.10-1",
@@ -189,4 +189,5 @@ def design_force_bound(
     """
     force = unlimited_force(w_px, h_x, forces, weights, heights)
     low, high = minimum_force(w_px, S_DS, I_e), maximum_force(w_px, S_DS, I_e)
-    return worded(BOUNDS, np.select([force < low, force > high], [1, 2], 0))
+    tie = agree(force, low) | agree(force, high)
+    return worded(BOUNDS, np.select([tie, force < low, force > high], [0, 1, 2], 0))

@@ -8,7 +8,7 @@ from __future__ import annotations
 
 from collections.abc import Callable, Iterable, Sequence
 from functools import wraps
-from typing import ParamSpec, TypeAlias, TypeVar, cast
+from typing import Final, ParamSpec, TypeAlias, TypeVar, cast
 
 import numpy as np
 from numpy.typing import ArrayLike, NDArray
@@ -20,6 +20,9 @@ Array: TypeAlias = NDArray[np.float64]
 Result: TypeAlias = Array | np.float64
 #: what a formula in words returns: a text for scalar arguments, an array of texts otherwise
 Words: TypeAlias = str | NDArray[np.str_]
+
+#: two results closer than this part of themselves count as one
+ROUND_OFF: Final = 1e-12
 
 P = ParamSpec("P")
 R = TypeVar("R")
@@ -91,6 +94,11 @@ def formula(function: Callable[P, R]) -> Callable[P, R]:
         return cast(R, result[()]) if isinstance(result, np.ndarray) else result
 
     return checked
+
+
+def agree(value: ArrayLike, other: ArrayLike) -> NDArray[np.bool_]:
+    """Tell where two results are one but for round-off, so that a tie reads the same in any order of sums."""
+    return np.isclose(value, other, rtol=ROUND_OFF, atol=0.0)
 
 
 def worded(texts: Sequence[str], index: ArrayLike) -> Words:

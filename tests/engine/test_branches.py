@@ -105,6 +105,19 @@ def test_governing_bound(changes, C_s, words, numbers, edition, place):
     assert governing_bound(**given) == f"{words}, Eq. {numbers[place]}"
 
 
+def test_a_tie_but_for_round_off_goes_to_the_plateau():
+    """T = T_S = 0.7/0.9 is not exact in binary."""
+    for T in (np.nextafter(0.7 / 0.9, 0), 0.7 / 0.9, np.nextafter(0.7 / 0.9, 1)):
+        given = {**BASE, "S_DS": 0.9, "S_D1": 0.7, "T": T, "edition": "7-22"}
+        assert governing_bound(**given).startswith("plateau")
+
+
+def test_a_diaphragm_tie_but_for_round_off_goes_to_the_sums():
+    given = {"w_px": 100.0, "h_x": 10.0, "weights": [100.0], "heights": [10.0], "S_DS": 1.0, "I_e": 1.0}
+    for force in (np.nextafter(20.0, 0), np.nextafter(40.0, 99)):
+        assert design_force_bound(forces=[force], **given).startswith("w_px sum")
+
+
 def test_upper_limit_coefficient_is_linear_between_rows():
     assert upper_limit_coefficient(S_D1=[0.1, 0.125, 0.175, 0.25]).tolist() == pytest.approx(
         [1.7, 1.65, 1.55, 1.45]
