@@ -336,6 +336,20 @@ def ELF_THETA(P_x: Any, Delta: Any, I_e: Any, V_x: Any, h_sx: Any, C_d: Any) -> 
 
 
 @xw.func(category="Storyledger: Stability")
+@xw.arg("beta", "raw", doc="Shear demand over shear capacity of the story [no unit], above 0 and at most 1.")
+@xw.arg("Omega_0", "raw", doc="Overstrength factor [no unit], at least 1.")
+@xw.arg(
+    "edition",
+    "raw",
+    doc="Edition of ASCE/SEI 7, as text (in a cell: format the cell as Text, or it turns into a date): 7-16, 7-22.",
+)
+@xw.ret("raw")
+def ELF_BETA(beta: Any, Omega_0: Any, edition: Any) -> Any:
+    """Ratio of shear demand to capacity that the stability limit may use. ASCE/SEI 7-16: 12.8.7; 7-22: 12.8.7. Partly from memory: confirm."""
+    return call("ELF_BETA", beta, Omega_0, edition)
+
+
+@xw.func(category="Storyledger: Stability")
 @xw.arg("C_d", "raw", doc="Deflection amplification factor [no unit], at least 1.")
 @xw.arg(
     "beta",

@@ -30,14 +30,17 @@ End Function
 """
 _TAIL: Final = """
 'What the cells hold, dates and currencies as plain numbers: cheaper for Python than asking the range itself.
-Private Function Contents(ByVal argument As Variant) As Variant
-    If Not IsObject(argument) Then
-        Contents = argument
-    ElseIf argument.Areas.Count > 1 Then
-        Contents = CVErr({value_error})
+Private Function Contents(Optional ByVal argument As Variant) As Variant
+    If IsObject(argument) Then
+        Contents = RangeValues(argument)
     Else
-        Contents = argument.Value2
+        Contents = argument
     End If
+End Function
+
+Private Function RangeValues(ByVal area As Object) As Variant
+    RangeValues = CVErr({value_error})
+    If area.Areas.Count = 1 Then RangeValues = area.Value2
 End Function
 
 'Error values in place of the texts that name them: one value, a row or a block.

@@ -219,6 +219,14 @@ failed:
     ELF_THETA = CVErr(2015)
 End Function
 
+Public Function ELF_BETA(beta, Omega_0, edition)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_BETA = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_BETA", Array(Contents(beta), Contents(Omega_0), Contents(edition)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_BETA = CVErr(2015)
+End Function
+
 Public Function ELF_THETA_MAX(C_d, Optional beta)
     If TypeOf Application.Caller Is Range Then On Error GoTo failed
     ELF_THETA_MAX = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_THETA_MAX", Array(Contents(C_d), Contents(beta)), ThisWorkbook, Application.Caller))
@@ -260,14 +268,17 @@ failed:
 End Function
 
 'What the cells hold, dates and currencies as plain numbers: cheaper for Python than asking the range itself.
-Private Function Contents(ByVal argument As Variant) As Variant
-    If Not IsObject(argument) Then
-        Contents = argument
-    ElseIf argument.Areas.Count > 1 Then
-        Contents = CVErr(2015)
+Private Function Contents(Optional ByVal argument As Variant) As Variant
+    If IsObject(argument) Then
+        Contents = RangeValues(argument)
     Else
-        Contents = argument.Value2
+        Contents = argument
     End If
+End Function
+
+Private Function RangeValues(ByVal area As Object) As Variant
+    RangeValues = CVErr(2015)
+    If area.Areas.Count = 1 Then RangeValues = area.Value2
 End Function
 
 'Error values in place of the texts that name them: one value, a row or a block.
