@@ -23,6 +23,11 @@ CHECKS = (
     Check("Sum of C_vx is 1", "={C_vx:total}", "=1", tolerance=1e-9, per_direction=True, decimals=4),
     Check("Sum of F_x is V", "={F_x:total}", "={V}", tolerance=1e-9, unit="force", per_direction=True),
     Check(
+        "Rows of the story table that stand outside the guard rows",
+        "=COUNTA({name:wide})-COUNTA({name:all})-2",
+        "=0",
+    ),
+    Check(
         "Story shear at the base is V",
         "={V_x:base}",
         "={V}",
@@ -48,7 +53,7 @@ CHECKS = (
     ),
     Check(
         "Largest drift over its limit",
-        "={drift_ratio:total}",
+        "={drift_over_limit:total}",
         "=1",
         "at most",
         decimals=3,

@@ -65,7 +65,7 @@ SYSTEM = Block(
     (
         Quantity("system", "System, in words", "text", INPUT, symbol="-"),
         _entry("R", "ELF_CS.R", rule="R", decimals=2),
-        Quantity("Omega_0", "Overstrength factor", "none", INPUT, span=Span(1), rule="Omega_0", decimals=2),
+        _entry("Omega_0", "ELF_BETA.Omega_0", rule="Omega_0", decimals=2),
         _entry("C_d", "ELF_DRIFT.C_d", rule="C_d", decimals=2),
         _entry("rho", "ELF_DRIFT_LIMIT.rho", "Redundancy factor", rule="rho", part=Part.DRIFT, decimals=2),
         Quantity(
@@ -81,7 +81,7 @@ SYSTEM = Block(
         _entry("drift_structure", "ELF_DRIFT_LIMIT.structure", rule="Delta_a", symbol="-", part=Part.DRIFT),
         _entry(
             "beta",
-            "ELF_THETA_MAX.beta",
+            "ELF_BETA.beta",
             "Shear demand over shear capacity of the stories; 1 is permitted",
             rule="beta",
             part=Part.DRIFT,
@@ -138,7 +138,7 @@ BASE_SHEAR = Block(
             decimals=4,
         ),
         Quantity("C_s", "Seismic response coefficient", "none", RESULT, f"=ELF_CS{_CS}", decimals=4),
-        Quantity("C_s_governs", "Which bound governs", "text", CALC, f"=ELF_CS_GOVERNS{_CS}", symbol="-"),
+        Quantity("governing_bound", "Which bound governs", "text", CALC, f"=ELF_CS_GOVERNS{_CS}", symbol="-"),
         Quantity("V", "Base shear", "force", RESULT, "=ELF_V({C_s},{W})"),
         _entry(
             "k_rule", "ELF_EXPONENT.rule", "Exponent between 0.5 s and 2.5 s", rule="exponent", symbol="-"
@@ -163,11 +163,21 @@ STABILITY = Block(
             decimals=2,
         ),
         Quantity(
+            "beta_used",
+            "Shear ratio used, with its lower limit where the edition has one",
+            "none",
+            CALC,
+            "=ELF_BETA({beta},{Omega_0},{edition})",
+            symbol="beta",
+            part=Part.DRIFT,
+            decimals=3,
+        ),
+        Quantity(
             "theta_max",
             "Upper limit of the stability coefficient",
             "none",
             CALC,
-            "=ELF_THETA_MAX({C_d},{beta})",
+            "=ELF_THETA_MAX({C_d},{beta_used})",
             part=Part.DRIFT,
             decimals=4,
         ),

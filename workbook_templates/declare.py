@@ -1,8 +1,9 @@
 """The words in which a workbook is declared: quantities, blocks of them, check lines.
 
 A formula is a template. ``{key}`` is the cell of a quantity in the same row (levels) or the same column
-(criteria); ``{key:all}`` is its whole level column, guard rows included; ``{key:total}`` and
-``{key:base}`` are its cells in the totals row and in the base row. A criteria quantity met on another
+(criteria); ``{key:all}`` is its whole level column, guard rows included; ``{key:wide}`` the
+same with one row more at either end; ``{key:total}`` and ``{key:base}`` are its cells in the totals row
+and in the base row. A criteria quantity met on another
 sheet is written by its defined name.
 """
 
@@ -71,6 +72,11 @@ class Quantity:
         return CATALOGUE[found[1]] if found else None
 
     @property
+    def is_input(self) -> bool:
+        """Whether the cell is an entry of the engineer's."""
+        return self.role is Role.INPUT
+
+    @property
     def shown_symbol(self) -> str:
         """The symbol as printed."""
         return self.symbol or self.key
@@ -109,8 +115,3 @@ class Check:
     warning: bool = False
     part: Part = Part.FORCES
     decimals: int | None = None
-
-
-def inputs(blocks: Iterable[Block]) -> Iterable[tuple[Block, Quantity]]:
-    """Return every input quantity with its block."""
-    return ((b, q) for b in blocks for q in b.quantities if q.role is Role.INPUT)

@@ -10,6 +10,7 @@ from collections.abc import Mapping, Sequence
 from dataclasses import dataclass
 from typing import Any, Final
 
+from engine.errors import MissingValue
 from engine.units import US
 from workbook_templates.declare import DIRECTIONS, Part
 
@@ -25,6 +26,7 @@ DEFAULTS: Final = {
 }
 JOB_KEYS: Final = ("number", "engineer", "checker", "revision", "date")
 DRIFT_KEYS: Final = ("P_x", *(f"delta_xe_{d}" for d in DIRECTIONS))
+UNTITLED: Final = "Untitled building"
 
 Table = Mapping[str, Any]
 
@@ -55,8 +57,11 @@ class Inputs:
     @property
     def parts(self) -> frozenset[Part]:
         """The parts that the inputs call for: drift needs displacements and vertical loads."""
-        drift = all(key in level for level in self.levels for key in DRIFT_KEYS)
-        return frozenset(Part) if drift else frozenset({Part.FORCES})
+        given = [key for key in DRIFT_KEYS if any(level.get(key) is not None for level in self.levels)]
+        if given and len(given) < len(DRIFT_KEYS):
+            missing = ", ".join(key for key in DRIFT_KEYS if key not in given)
+            raise MissingValue(missing, None, f"is needed at every level beside {', '.join(given)}")
+        return frozenset(Part) if given else frozenset({Part.FORCES})
 
     def criterion(self, key: str, direction: str | None) -> Any:
         """Return the value of a criteria row."""
@@ -82,7 +87,9 @@ class Inputs:
 
     def job(self, key: str) -> str:
         """Return a text of the cover."""
-        return str(self.given.get("title", "") if key == "title" else self.given.get("job", {}).get(key, ""))
+        if key == "title":
+            return str(self.given.get("title") or UNTITLED)
+        return str(self.given.get("job", {}).get(key, ""))
 
     @staticmethod
     def _table(tables: Table, direction: str | None) -> Table:

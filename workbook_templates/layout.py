@@ -108,6 +108,11 @@ class Layout:
         """Return the defined name of a criteria value: ``S_DS``, ``R_X``."""
         return key if self.is_site(key) else f"{key}_{direction}"
 
+    @staticmethod
+    def source_name(key: str) -> str:
+        """Return the defined name of the source cell of a criteria entry."""
+        return f"source_{key}"
+
     def level_range(self, key: str, direction: str | None) -> str:
         """Return a level column from guard row to guard row, so that rows put in at either end count."""
         column = self.column(key, direction)
@@ -126,6 +131,8 @@ class Layout:
             return self._criteria_place(key, sheet, direction)
         prefix = "" if sheet == LEVELS else f"{LEVELS}!"
         column = self.column(key, direction)
+        if part == "wide":
+            return f"{prefix}${column}${ROLE_ROW}:${column}${self.base_row}"
         if part == "all":
             return prefix + self.level_range(key, direction)
         if part is not None:

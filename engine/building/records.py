@@ -101,7 +101,10 @@ class Direction:
 
 @dataclass(frozen=True, slots=True, kw_only=True)
 class Level:
-    """One level: elevation [ft or m], weight and P_x [kip or kN], elastic displacements [in or mm]."""
+    """One level: elevation [ft or m], weight and P_x [kip or kN], elastic displacements [in or mm].
+
+    ``source`` says in words where the numbers come from.
+    """
 
     name: str = checked(is_text)
     elevation: float = number(finite)
@@ -109,6 +112,7 @@ class Level:
     P_x: float | None = number(partial(at_least, 0), None)
     delta_xe_X: float | None = number(finite, None)
     delta_xe_Y: float | None = number(finite, None)
+    source: str | None = checked(is_text, None)
 
 
 @dataclass(frozen=True, slots=True, kw_only=True)

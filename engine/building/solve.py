@@ -58,7 +58,7 @@ class DirectionResult:
     F_px: Array
     F_px_bound: tuple[str, ...]
     Delta_a: Array
-    beta: float
+    beta_used: float
     theta_max: float
     delta_x: Array | None = None
     Delta: Array | None = None
@@ -184,7 +184,7 @@ def _limits(building: Building, package: Package, given: Direction) -> dict[str,
     allowable = drift.allowable_drift(package.h_sx, given.drift_structure, building.site.risk_category, rho)
     return {
         "Delta_a": allowable * DISPLACEMENT_PER_LENGTH[building.units],
-        "beta": beta,
+        "beta_used": beta,
         "theta_max": float(stability.stability_limit(given.C_d, beta)),
     }
 

@@ -91,7 +91,7 @@ def _headlines(layout: Layout) -> list[tuple[str, str, str]]:
     ]
     if Part.DRIFT in layout.parts:
         lines += [
-            ("Largest drift over limit", "none", "={drift_ratio:total}"),
+            ("Largest drift over limit", "none", "={drift_over_limit:total}"),
             ("Largest theta", "none", "={theta:total}"),
         ]
     return lines

@@ -56,6 +56,7 @@ def _draw_row(sheet: Worksheet, layout: Layout, inputs: Inputs, block: Block, q:
     if q.role is Role.INPUT:
         source = sheet.cell(row, 8, inputs.source(q.key, block.per_direction))
         style.dress(source, Role.INPUT, "@")
+        sheets.name(sheet, layout.source_name(q.key), f"$H${row}")
     sheets.fit_row(sheet, row, WIDTHS)
 
 

@@ -29,7 +29,7 @@ def draw(sheet: Worksheet, levels: Worksheet, layout: Layout, inputs: Inputs) ->
         _profile(levels, layout, inputs, "V_x", f"Story shears V_x {forces}"),
     ]
     if Part.DRIFT in layout.parts:
-        drift = _profile(levels, layout, inputs, "drift_ratio", "Story drift over its limit, Delta/Delta_a")
+        drift = _profile(levels, layout, inputs, "drift_over_limit", "Drift over its limit, Delta/Delta_a")
         drift.series.append(_limit_line(sheet))
         charts.append(drift)
     for number, chart in enumerate(charts):

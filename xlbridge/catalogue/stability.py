@@ -2,9 +2,29 @@
 
 from __future__ import annotations
 
+from dataclasses import replace
+
 from engine import stability
-from xlbridge.catalogue.common import C_d, I_e, h_sx
-from xlbridge.catalogue.entry import NOT_NEGATIVE, POSITIVE, Argument, Example, Result, SheetFunction, Span
+from engine.editions import value
+from xlbridge.catalogue.common import C_d, I_e, edition, h_sx
+from xlbridge.catalogue.entry import (
+    NOT_NEGATIVE,
+    POSITIVE,
+    Argument,
+    Example,
+    Result,
+    SheetFunction,
+    Span,
+    Term,
+)
+
+beta = Argument("beta", "none", "Shear demand over shear capacity of the story", Span(0, 1, low_open=True))
+Omega_0 = Argument("Omega_0", "none", "Overstrength factor", Span(1))
+
+
+def _floor(edition: str) -> float:
+    return value(edition, "beta_floor_factor")
+
 
 theta = Argument("theta", "none", "Stability coefficient", NOT_NEGATIVE)
 
@@ -31,19 +51,26 @@ FUNCTIONS = (
         ),
     ),
     SheetFunction(
+        name="ELF_BETA",
+        summary="Ratio of shear demand to capacity that the stability limit may use.",
+        category="Stability",
+        rule="beta",
+        arguments=(beta, Omega_0, edition),
+        result=Result("beta", "none", "shear demand over shear capacity"),
+        function=stability.demand_ratio,
+        expression="max({beta}; {floor}/{Omega_0}), at most 1",
+        native='MAX({beta},MIN(IF({edition}="7-22",1.25,0)/{Omega_0},1))',
+        example=Example({"beta": 0.3, "Omega_0": 2.5, "edition": "7-22"}, "0.5"),
+        terms=(Term("floor", "floor", _floor),),
+    ),
+    SheetFunction(
         name="ELF_THETA_MAX",
         summary="Upper limit of the stability coefficient.",
         category="Stability",
         rule="theta_max",
         arguments=(
             C_d,
-            Argument(
-                "beta",
-                "none",
-                "Shear demand over shear capacity of the story; 1 if left out",
-                Span(0, 1, low_open=True),
-                optional=True,
-            ),
+            replace(beta, text=f"{beta.text}; 1 if left out", optional=True),
         ),
         result=Result("theta_max", "none", "upper limit of the stability coefficient"),
         function=stability.stability_limit,
