@@ -2,7 +2,6 @@
 
 from __future__ import annotations
 
-import posixpath
 import zipfile
 from collections import defaultdict
 from collections.abc import Mapping
@@ -21,6 +20,7 @@ from xlbridge.headless.archive import (
     rewrite,
     serialise,
 )
+from xlbridge.headless.parts import office_document, sheet_parts
 from xlbridge.headless.stored_cells import write_values
 from xlbridge.values import Scalar
 
@@ -28,10 +28,6 @@ __all__ = ["StoreError", "store"]
 
 #: The calculation engine of today's spreadsheet programs: a lower number means "recalculate on opening".
 CALCULATION_ID: Final = 191029
-_OFFICE_RELATIONSHIPS: Final = (
-    "http://schemas.openxmlformats.org/officeDocument/2006/relationships",
-    "http://purl.oclc.org/ooxml/officeDocument/relationships",
-)
 #: The children of a workbook part that stand before ``calcPr`` (ECMA-376 part 1, 18.2.27).
 _BEFORE_CALC_PR: Final = ("definedNames", "externalReferences", "functionGroups", "sheets")
 
@@ -67,9 +63,9 @@ def store(
 def _changed_parts(
     archive: zipfile.ZipFile, by_sheet: Mapping[str, Mapping[str, Scalar]]
 ) -> dict[str, bytes]:
-    workbook_part = _office_document(archive)
+    workbook_part = office_document(archive)
     workbook = parse_part(workbook_part, read_part(archive, workbook_part))
-    parts = _sheet_parts(archive, workbook_part, workbook.getroot())
+    parts = sheet_parts(archive, workbook_part, workbook.getroot())
     changed = {}
     for title, values in by_sheet.items():
         if title not in parts:
@@ -81,37 +77,6 @@ def _changed_parts(
     if _mark_calculated(workbook.getroot()):
         changed[workbook_part] = serialise(workbook)
     return changed
-
-
-def _office_document(archive: zipfile.ZipFile) -> str:
-    """The workbook part, as the package's own relationships name it."""
-    for relationship in parse_part("_rels/.rels", read_part(archive, "_rels/.rels")).getroot():
-        if relationship.get("Type") in tuple(f"{base}/officeDocument" for base in _OFFICE_RELATIONSHIPS):
-            part = _resolved(archive, "", relationship.get("Target", ""))
-            if part.lower().endswith(".bin"):
-                raise StoreError("a binary workbook (.xlsb); save it as .xlsx or .xlsm first")
-            return part
-    raise StoreError("the package names no workbook")
-
-
-def _sheet_parts(archive: zipfile.ZipFile, workbook_part: str, root: etree._Element) -> dict[str, str]:
-    """Sheet titles with the names of their parts."""
-    folder, name = posixpath.split(workbook_part)
-    rels = posixpath.join(folder, "_rels", f"{name}.rels")
-    targets = {item.get("Id"): item for item in parse_part(rels, read_part(archive, rels)).getroot()}
-    parts = {}
-    for sheet in root.iterfind(f"{{{etree.QName(root).namespace}}}sheets/*"):
-        identifier = next((i for base in _OFFICE_RELATIONSHIPS if (i := sheet.get(f"{{{base}}}id"))), None)
-        if identifier in targets and targets[identifier].get("Type", "").endswith("/worksheet"):
-            parts[sheet.get("name", "")] = _resolved(archive, folder, targets[identifier].get("Target", ""))
-    return parts
-
-
-def _resolved(archive: zipfile.ZipFile, folder: str, target: str) -> str:
-    """A relationship's target, relative or absolute, as the archive spells it (names ignore case)."""
-    wanted = posixpath.normpath(posixpath.join("/", folder, target)).lstrip("/")
-    spelled = {name.lower(): name for name in archive.namelist()}
-    return spelled.get(wanted.lower(), wanted)
 
 
 def _mark_calculated(root: etree._Element) -> bool:

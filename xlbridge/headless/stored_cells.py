@@ -12,9 +12,10 @@ from collections.abc import Iterator, Mapping
 from typing import Final
 
 from lxml import etree
-from openpyxl.utils.cell import coordinate_to_tuple, get_column_letter, range_boundaries
+from openpyxl.utils.cell import range_boundaries
 
 from xlbridge.headless.archive import StoreError, drop_attributes, parse_part, serialise
+from xlbridge.headless.references import address_of, parse_address
 from xlbridge.values import ERROR_CODES, CellError, Scalar
 
 MAX_TEXT: Final = 32_767
@@ -22,6 +23,7 @@ _TAGS: Final = ("c", "row", "f", "v", "is", "cols", "sheetData")
 _TRUE: Final = ("1", "true")
 _EXACT_WHOLE: Final = 1e15
 _LITERAL_ESCAPE: Final = re.compile(r"_(?=x[0-9A-Fa-f]{4}_)")
+_ESCAPE: Final = re.compile("_x([0-9A-Fa-f]{4})_")
 _ILLEGAL: Final = re.compile("[\x00-\x08\x0b\x0c\x0d\x0e-\x1f\ud800-\udfff\ufffe\uffff]")
 
 
@@ -69,6 +71,15 @@ def _text(value: str) -> str:
     return _ILLEGAL.sub(lambda match: f"_x{ord(match[0]):04X}_", escaped)
 
 
+def decode_text(stored: str) -> str:
+    """Return the text that a stored text stands for: ``_xHHHH_`` is the character of that number.
+
+    >>> decode_text("line_x000D_, literally _x005F_x000D_")
+    'line\\r, literally _x000D_'
+    """
+    return _ESCAPE.sub(lambda match: chr(int(match[1], 16)), stored)
+
+
 class _Sheet:
     """The cells of one parsed worksheet by address, and the ranges of its array formulas."""
 
@@ -103,8 +114,8 @@ class _Sheet:
         for cell in row.iterchildren(self._tag["c"]):
             given = cell.get("r")
             if not given:
-                column = coordinate_to_tuple(address)[1] + 1 if address else 1
-            address = given or f"{get_column_letter(column)}{number}"
+                column = parse_address(address)[1] + 1 if address else 1
+            address = given or address_of(number, column)
             yield address, cell
 
     def set(self, address: str, value: Scalar) -> None:
@@ -134,7 +145,7 @@ class _Sheet:
 
     def _in_array(self, address: str) -> bool:
         try:
-            row, column = coordinate_to_tuple(address)
+            row, column = parse_address(address)
         except ValueError:
             raise StoreError("not a cell address") from None
         return any(
@@ -143,11 +154,11 @@ class _Sheet:
 
     def _create(self, address: str) -> etree._Element:
         """Insert the cell in column order, formatted as the empty cell was: by its row or its column."""
-        number, column = coordinate_to_tuple(address)
+        number, column = parse_address(address)
         row = self._row(number)
         style = row.get("s") if row.get("customFormat") in _TRUE else self._column_style(column)
         cell = etree.Element(self._tag["c"], {"r": address, **({"s": style} if style else {})})
-        before = [old for at, old in self._addressed(number, row) if coordinate_to_tuple(at)[1] < column]
+        before = [old for at, old in self._addressed(number, row) if parse_address(at)[1] < column]
         row.insert(row.index(before[-1]) + 1 if before else 0, cell)
         drop_attributes(row, "spans")
         self._cells[address] = cell

@@ -12,6 +12,7 @@ import os
 import re
 import zipfile
 from pathlib import Path
+from xml.sax.saxutils import escape
 
 import openpyxl
 import pytest
@@ -27,6 +28,7 @@ from openpyxl.worksheet.datavalidation import DataValidation
 from openpyxl.worksheet.formula import ArrayFormula
 from openpyxl.worksheet.table import Table
 
+from tests.support.office import Office
 from tests.support.packages import (
     MAIN,
     OFFICE,
@@ -41,7 +43,7 @@ from tests.support.packages import (
     without_values,
 )
 from xlbridge.headless.store import StoreError, store
-from xlbridge.headless.stored_cells import encode
+from xlbridge.headless.stored_cells import decode_text, encode
 from xlbridge.values import ERROR_CODES, CellError
 
 TITLE = "Story & table"
@@ -295,6 +297,14 @@ def test_numbers_round_trip(number: float) -> None:
 def test_text_is_written_so_that_it_reads_back(value: str, written: str, book: Path, out: Path) -> None:
     part = stored(book, out, {"C2": value})
     assert shown(part, "C2") == ("str", written or None)
+    assert decode_text(written) == value
+
+
+@given(st.text(st.characters(exclude_categories=["Cs"]) | st.sampled_from("_x0Af5\r")))
+def test_any_text_round_trips(text: str) -> None:
+    _, written = encode(text)
+    assert decode_text(written) == text
+    assert etree.fromstring(f"<v>{escape(written)}</v>").text == (written or None)
 
 
 @pytest.mark.parametrize("code", ERROR_CODES)
@@ -482,3 +492,21 @@ def test_storing_twice_gives_identical_bytes(book: Path, tmp_path: Path) -> None
     for name in ("a.xlsx", "b.xlsx"):
         store(book, tmp_path / name, {(TITLE, "C1"): 1.0, (TITLE, "B5"): 2.0})
     assert (tmp_path / "a.xlsx").read_bytes() == (tmp_path / "b.xlsx").read_bytes()
+
+
+# ---- a spreadsheet program without the worksheet functions
+
+
+def test_a_program_without_the_functions_shows_the_stored_values(
+    office: Office, tmp_path: Path, out: Path
+) -> None:
+    """LibreOffice Calc knows no ELF_FX: opened, the stored number stands; recalculated, it is an error."""
+    book = openpyxl.Workbook()
+    book.active.title = "S"
+    book.active["A1"], book.active["A2"] = "=ELF_FX(286,0.28)", "=A1*2"
+    book.save(tmp_path / "plain.xlsx")
+    store(tmp_path / "plain.xlsx", out, {("S", "A1"): 80.08, ("S", "A2"): 160.16})
+    with office.open(out, recalculate=False) as opened:
+        assert opened.read("S", "A1:A2") == [[80.08], [160.16]]
+        opened.recalculate()
+        assert isinstance(opened.value("S", "A2"), CellError)
