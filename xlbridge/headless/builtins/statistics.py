@@ -11,7 +11,7 @@ from xlbridge.headless.builtins.aggregate import mean
 from xlbridge.headless.builtins.builtin import Builtin
 from xlbridge.headless.builtins.collect import grid_of, nothing, numbers, refuse_errors
 from xlbridge.headless.coercion import Fault
-from xlbridge.headless.operands import Operand
+from xlbridge.headless.operands import NotEvaluated, Operand
 
 
 def squared_deviations(values: list[float]) -> float:
@@ -76,7 +76,9 @@ def _mode(*operands: Operand) -> float:
 def _ordered(name: str, descending: bool) -> Builtin:
     def pick(data: Operand, rank: float) -> float:
         values = sorted(numbers([data]), reverse=descending)
-        place = math.ceil(rank)
+        if not rank.is_integer():
+            raise NotEvaluated(f"whether {name} rounds the place {rank:g} up or down depends on the program")
+        place = int(rank)
         if not 1 <= place <= len(values):
             raise Fault("#NUM!", f"{name}: there is no number in place {rank:g}")
         return values[place - 1]
