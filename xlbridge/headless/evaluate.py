@@ -21,6 +21,8 @@ _T = TypeVar("_T")
 
 _REMEMBERED: Final = 2_000_000
 """How many cell values the remembered grids may hold; running sums over long columns would hold more."""
+_NAMED: Final = 200
+"""How many cells of a cycle are named; every cell of it carries the text."""
 _NO_VALUE: Final = CellError("#N/A", "the array formula gives no value for this cell")
 
 
@@ -94,7 +96,7 @@ class Evaluator:
         if formula is not None:
             self._run(formula.cell)
             if formula.cell in self._failures:
-                raise self._failures[formula.cell]
+                raise self._failures[formula.cell].with_traceback(None)
         return self._values[title].get((row, column))
 
     def evaluate_all(self) -> Results:
@@ -208,15 +210,14 @@ class Evaluator:
         except _Pending as pending:
             path[cell] = iter(pending.cells)
         except NotEvaluated as reason:
-            self._failures[cell] = reason
+            self._failures[cell] = reason.with_traceback(None)  # frames would be kept alive
 
     def _fail_cycle(self, path: dict[Cell, Iterator[Cell]], first: Cell) -> None:
         """Take the cells of a cycle off the path, each with the cycle from its own point of view."""
         cells = list(path)
         cycle = cells[cells.index(first) :]
         for place, cell in enumerate(cycle):
-            names = [str(other) for other in (*cycle[place:], *cycle[: place + 1])]
-            self._failures[cell] = NotEvaluated(f"circular reference: {' -> '.join(names)}")
+            self._failures[cell] = NotEvaluated(f"circular reference: {_named(cycle, place)}")
             del path[cell]
 
     def _is_done(self, cell: Cell) -> bool:
@@ -229,6 +230,17 @@ class Evaluator:
             return
         for (row, column), item in _spread(formula.fills, value):
             values[row, column] = item
+
+
+def _named(cycle: list[Cell], place: int) -> str:
+    """The cells of a cycle from one of them round to itself; the middle of a very long one is counted."""
+    length, half = len(cycle), _NAMED // 2
+    steps = range(place, place + length + 1)
+    shown = [*steps] if length <= _NAMED else [*steps[:half], *steps[-half:]]
+    names = [str(cycle[step % length]) for step in shown]
+    if length > _NAMED:
+        names.insert(half, f"({length + 1 - _NAMED:,} more cells)")
+    return " -> ".join(names)
 
 
 def _spread(fills: Bounds, value: Value) -> Iterator[tuple[Position, Scalar]]:

@@ -18,6 +18,7 @@ _Builder: TypeAlias = Callable[[Iterator[Reference]], Node]
 
 _SHAPES: Final[dict[tuple[str, ...], _Builder | None]] = {}
 _MOST_SHAPES: Final = 10_000
+_MOST_PARTS: Final = 200
 
 
 @lru_cache(maxsize=100_000)
@@ -43,15 +44,12 @@ def parse(text: str) -> Node:
 def _builder_of(node: Node, references: list[str]) -> _Builder | None:
     """How to make the nodes of a formula of this shape; none where the text's parts are no references.
 
-    They are not where a quoted text or a column of a table looks like one.
+    They are not where a quoted text or a column of a table looks like one. Very long formulas are not
+    worth it.
     """
-    found = [part.text for part in walk(node) if isinstance(part, Reference)]
-    if found != references:
-        return None
-    try:
-        return _builder(node)
-    except RecursionError:
-        return None
+    parts = list(walk(node))
+    found = [part.text for part in parts if isinstance(part, Reference)]
+    return _builder(node) if len(parts) <= _MOST_PARTS and found == references else None
 
 
 def _builder(node: Node) -> _Builder:

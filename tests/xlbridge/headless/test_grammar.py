@@ -176,6 +176,8 @@ def test_spaces_and_commas_between_references() -> None:
 def test_a_long_sum_and_sixty_four_levels_of_nesting_are_read() -> None:
     long_sum = "=" + "+".join(["A1"] * 4000)
     assert render(parse(long_sum)) == long_sum[1:]
+    numbers = "=A1+" + "+".join(["1"] * 3000)
+    assert render(parse(numbers)) == numbers[1:]
     deep = "=" + "IF(A1," * 64 + "1" + ")" * 64
     assert render(parse(deep)) == deep[1:]
 
@@ -261,13 +263,12 @@ def test_a_rendered_formula_reads_the_same(node: Node) -> None:
 
 @settings(max_examples=200, deadline=None)
 @given(st.text(alphabet="A1$:!'\"[]{}(),;+-*/^&=<>% #@.eE_xT", max_size=25))
-def test_any_text_is_read_or_refused_in_words(text: str) -> None:
+def test_any_text_is_read_or_refused(text: str) -> None:
     try:
         node = parse("=" + text)
-    except NotEvaluated as refusal:
-        assert str(refusal)
-    else:
-        assert read_formula(render(node)) == node
+    except NotEvaluated:
+        return
+    assert read_formula(render(node)) == node
 
 
 def test_walk_goes_from_left_to_right() -> None:
