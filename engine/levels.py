@@ -70,8 +70,7 @@ def position(h_x: ArrayLike, heights: Array, base: bool) -> Array:
     if base:
         known = known | (place <= slack(heights))
     if not known.all():
-        stranger = np.broadcast_to(place, known.shape)[~known][0]
-        raise NotApplicable("h_x", float(stranger), "must be the height of a level" + " or 0" * base)
+        raise NotApplicable("h_x", first(place, ~known), "must be the height of a level" + " or 0" * base)
     return place
 
 
@@ -83,17 +82,20 @@ def is_below(place: Array, heights: Array) -> Mask:
 def refuse_heavier(w_px: Array, place: Array, weights: Array, heights: Array) -> None:
     """Refuse a diaphragm heavier than the heaviest level at its height."""
     level = np.where(np.abs(place - heights) <= slack(heights), weights, 0.0).max(axis=-1)
-    if (w_px > level * (1 + TOLERANCE)).any():
-        lost = np.broadcast_to(w_px, np.broadcast_shapes(w_px.shape, level.shape))[
-            w_px > level * (1 + TOLERANCE)
-        ]
-        raise NotApplicable("w_px", float(lost[0]), "must be at most the weight of the level at h_x")
+    excess = w_px > level * (1 + TOLERANCE)
+    if excess.any():
+        raise NotApplicable("w_px", first(w_px, excess), "must be at most the weight of the level at h_x")
 
 
 def refuse_stranger(w_x: ArrayLike, place: Array, weights: Array, heights: Array) -> None:
     """Refuse a weight and a height that are not one of the levels."""
-    weight = at_least(0, "w_x", w_x)[..., None]
-    same = (np.abs(place - heights) <= slack(heights)) & (np.abs(weight - weights) <= TOLERANCE * weights)
-    if not same.any(axis=-1).all():
-        lost = np.broadcast_to(weight, same.shape)[~same.any(axis=-1)]
-        raise NotApplicable("w_x", float(lost[0, 0]), "must be the weight of the level at h_x")
+    weight = at_least(0, "w_x", w_x)
+    same = np.abs(weight[..., None] - weights) <= TOLERANCE * weights
+    known = (same & (np.abs(place - heights) <= slack(heights))).any(axis=-1)
+    if not known.all():
+        raise NotApplicable("w_x", first(weight, ~known), "must be the weight of the level at h_x")
+
+
+def first(values: Array, where: Mask | np.bool_) -> float:
+    """Return the first of the values at the marked places, for a message."""
+    return float(np.broadcast_to(values, where.shape)[where].flat[0])

@@ -17,7 +17,6 @@ from engine.require import Array, Result, above, choice, finite, formula, within
 
 EXPONENT_RULES: Final = ("interpolate", "two")
 SHORT_PERIOD: Final = 0.5
-LONG_PERIOD: Final = 2.5
 
 
 @formula
@@ -245,7 +244,7 @@ def value_below(h_x: ArrayLike, values: ArrayLike, heights: ArrayLike) -> Result
     torn = ~at_base & (most - least > levels.TOLERANCE * np.maximum(np.abs(most), np.abs(least)))
     if torn.any():
         raise NotApplicable(
-            "values", float(most[torn][0]), "levels at the next lower height hold different values"
+            "values", levels.first(most, torn), "levels at the next lower height hold different values"
         )
     return np.where(at_base, 0.0, least)
 

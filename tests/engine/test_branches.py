@@ -14,6 +14,7 @@ from engine.base_shear import (
 )
 from engine.diaphragm import design_force, design_force_bound, unlimited_force
 from engine.drift import allowable_drift
+from engine.errors import NotApplicable
 from engine.hazard import spectral_acceleration
 from engine.period import design_period, upper_limit_coefficient
 from engine.stability import (
@@ -220,6 +221,22 @@ def test_noise_of_a_subtraction_drops_no_level():
     assert distribution_factor(
         w_x=3.0, h_x=12.0, weights=[3.0, 3.0], heights=[noisy, 24.0], k=1
     ) == pytest.approx(1 / 3)
+
+
+def test_heights_are_compared_to_a_billionth_of_the_highest():
+    heights = [12.0, 1000.0]
+    assert story_height(h_x=12.0 + 0.9e-6, heights=heights) == pytest.approx(12.0)
+    with pytest.raises(NotApplicable):
+        story_height(h_x=12.0 + 1.1e-6, heights=heights)
+    assert story_height(h_x=1000.0, heights=[*heights, 1000.0 - 0.9e-6]) == 988.0
+    assert story_height(h_x=1000.0, heights=[*heights, 1000.0 - 1.1e-6]) == pytest.approx(1.1e-6)
+
+
+def test_weights_are_compared_to_a_billionth_of_themselves():
+    given = {"h_x": 12.0, "weights": [50.0, 9.0], "heights": [12.0, 24.0], "k": 1}
+    assert distribution_factor(w_x=50.0 + 4e-8, **given) > 0
+    with pytest.raises(NotApplicable):
+        distribution_factor(w_x=50.0 + 6e-8, **given)
 
 
 def test_a_level_without_weight_has_no_force():

@@ -216,8 +216,8 @@ def test_editions_differ_in_numbers_of_equations_and_in_beta(data):
     newer = solve(from_mapping(data))
     older = solve(from_mapping({**data, "edition": "7-16"}))
     assert newer.direction["X"].V == older.direction["X"].V
-    assert older.direction["X"].beta == 0.2
-    assert newer.direction["X"].beta == pytest.approx(1.25 / 3)
+    assert older.direction["X"].beta_used == 0.2
+    assert newer.direction["X"].beta_used == pytest.approx(1.25 / 3)
     assert newer.warnings == ("direction X: beta = 0.2 raised to 1.25/Omega_0 = 0.4167",)
     assert older.to_json()["clauses"]["C_vx"] == "12.8.3, Eq. 12.8-12"
     assert newer.to_json()["clauses"]["C_vx"] == "12.8.3, Eq. 12.8-13"
@@ -246,6 +246,12 @@ def test_mapping_there_and_back(data):
     assert to_mapping(building)["job"] == {"number": "A-1", "revision": 2}
     assert to_mapping(building)["sources"] == {"site.S_DS": "geotechnical report, p. 4"}
     assert "k_rule" not in to_mapping(building)["direction"]["X"]
+
+
+def test_source_of_a_level_is_kept(data):
+    data["level"][1]["source"] = "take-off sheet 3"
+    assert to_mapping(from_mapping(data))["level"][1]["source"] == "take-off sheet 3"
+    assert "source" not in to_mapping(from_mapping(data))["level"][0]
 
 
 def test_two_roofs_at_one_elevation_are_legal_and_told(data):

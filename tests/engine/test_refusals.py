@@ -101,6 +101,16 @@ def test_zero(name, key):
 
 
 BEYOND = [
+    (
+        *("vertical.distribution_factors", ImpossibleValue, "at least one level must have"),
+        {"weights": [[1.0, 2.0, 3.0], [0.0, 0.0, 0.0]]},
+    ),
+    ("vertical.story_shear", NotApplicable, "h_x = 12: must be the height", {"h_x": [11.0, 12.0]}),
+    ("diaphragm.design_force", NotApplicable, "w_px = 251: must be", {"w_px": [240.0, 251.0], "h_x": 25.0}),
+    (
+        *("diaphragm.design_force", NotApplicable, "w_px = 0.4: must be at most the weight"),
+        {"w_px": 0.4, "weights": [300.0, 0.0, 120.0]},
+    ),
     ("period.approximate_period_stories", ImpossibleValue, "whole number", {"N": 2.5}),
     ("period.approximate_period_stories", NotApplicable, "at most 12 stories", {"N": 13.0}),
     ("base_shear.response_coefficient", ImpossibleValue, "R = 0.999: must be at least 1", {"R": 0.999}),
