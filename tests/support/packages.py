@@ -39,7 +39,8 @@ WORKBOOK = f"""{_HEAD}<workbook xmlns="{MAIN}" xmlns:r="{OFFICE}"><workbookPr de
 <bookViews><workbookView/></bookViews>\
 <sheets><sheet name="Story &amp; table" sheetId="1" r:id="rId1"/></sheets>\
 <definedNames><definedName name="k">'Story &amp; table'!$B$1</definedName></definedNames>\
-<calcPr calcId="162913" iterate="1" iterateCount="50" fullCalcOnLoad="1"/><extLst/></workbook>"""
+<calcPr calcId="162913" iterate="1" iterateCount="50" fullCalcOnLoad="1" calcCompleted="0"/>\
+<extLst/></workbook>"""
 
 
 def relationships(*rows: tuple[str, str, str], office: str = OFFICE) -> str:

@@ -42,6 +42,6 @@ def sheet_parts(archive: zipfile.ZipFile, workbook_part: str, root: etree._Eleme
 
 def _resolved(archive: zipfile.ZipFile, folder: str, target: str) -> str:
     """A relationship's target, relative or absolute, as the archive spells it (names ignore case)."""
-    wanted = posixpath.normpath(posixpath.join("/", folder, target)).lstrip("/")
+    wanted = posixpath.normpath(posixpath.join(folder, target)).lstrip("/")
     spelled = {name.lower(): name for name in archive.namelist()}
     return spelled.get(wanted.lower(), wanted)

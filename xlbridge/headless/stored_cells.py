@@ -167,10 +167,9 @@ class _Sheet:
     def _row(self, number: int) -> etree._Element:
         if number not in self._rows:
             row = etree.Element(self._tag["row"], {"r": str(number)})
-            before = [existing for at, existing in self._rows.items() if at < number]
-            self._data.insert(self._data.index(before[-1]) + 1 if before else 0, row)
+            above = max((at for at in self._rows if at < number), default=None)
+            self._data.insert(0 if above is None else self._data.index(self._rows[above]) + 1, row)
             self._rows[number] = row
-            self._rows = dict(sorted(self._rows.items()))
         return self._rows[number]
 
     def _column_style(self, column: int) -> str | None:

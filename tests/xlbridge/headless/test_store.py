@@ -42,6 +42,7 @@ from tests.support.packages import (
     relationships,
     without_values,
 )
+from xlbridge.headless import archive
 from xlbridge.headless.store import StoreError, store
 from xlbridge.headless.stored_cells import decode_text, encode
 from xlbridge.values import ERROR_CODES, CellError
@@ -239,8 +240,16 @@ def test_spilled_cells_are_created_in_order_with_the_empty_cells_format(book: Pa
     assert cells(part)["B4"].get("s") == "1"  # the row's format
     assert cells(part)["A4"].get("cm") == "1"
     assert shown(part, "B5") == ("str", "t")
-    rows = [row.get("r") for row in etree.fromstring(part).iter(f"{{{MAIN}}}row")]
-    assert rows == ["1", "2", "3", "4", "5", "6"]
+    rows = {row.get("r"): row.get("spans") for row in etree.fromstring(part).iter(f"{{{MAIN}}}row")}
+    assert list(rows) == ["1", "2", "3", "4", "5", "6"]
+    assert rows["3"] == "1:4"
+    assert rows["4"] is None  # its hint may no longer hold
+
+
+def test_rows_are_created_in_order_whatever_the_order_of_the_values(tmp_path: Path, out: Path) -> None:
+    sheet = SHEET.replace('ref="A4:B6"', 'ref="A4:B8"')
+    part = stored(hand_made(tmp_path / "b.xlsx", sheet=sheet), out, {f"A{row}": 1.0 for row in (6, 5, 7, 8)})
+    assert list(cells(part))[-5:] == ["A4", "A5", "A6", "A7", "A8"]
 
 
 def test_a_spilled_cell_takes_the_format_of_its_column(tmp_path: Path, out: Path) -> None:
@@ -260,6 +269,19 @@ def test_rows_and_cells_without_addresses_are_counted(tmp_path: Path, out: Path)
 
 def test_none_removes_a_stale_value(book: Path, out: Path) -> None:
     assert shown(stored(book, out, {"D2": None}), "D2") == (None, None)
+
+
+def test_literal_sections_stay_literal(tmp_path: Path, out: Path) -> None:
+    sheet = SHEET.replace("<f>B1*2</f>", "<f><![CDATA[IF(B1<2,2,3)]]></f>")
+    part = stored(hand_made(tmp_path / "b.xlsx", sheet=sheet), out, {"C1": 2.0})
+    assert b"<f><![CDATA[IF(B1<2,2,3)]]></f><v>2</v>" in part
+
+
+def test_part_names_ignore_case_and_may_be_relative(tmp_path: Path, out: Path) -> None:
+    for target in ("worksheets/Sheet1.XML", "../xl/worksheets/sheet1.xml", "/XL/worksheets/sheet1.xml"):
+        source = hand_made(tmp_path / "b.xlsx", rels=relationships(("rId1", "worksheet", target)))
+        store(source, out, {(TITLE, "C1"): 7.0}, force=True)
+        assert shown(parts_of(out)[SHEET_PART], "C1") == (None, "7")
 
 
 def test_strict_and_prefixed_workbooks(tmp_path: Path, out: Path) -> None:
@@ -392,6 +414,12 @@ def test_a_hostile_or_broken_package_is_one_sentence(
         store(source, out, {(TITLE, "C1"): 1.0})
     assert str(source) in str(caught.value)
     assert not out.exists()
+
+
+def test_a_part_that_swells_is_refused(book: Path, out: Path, monkeypatch: pytest.MonkeyPatch) -> None:
+    monkeypatch.setattr(archive, "MAX_PART_BYTES", 1000)
+    with pytest.raises(StoreError, match=r"sheet1\.xml is larger than"):
+        store(book, out, {(TITLE, "C1"): 1.0})
 
 
 def test_entities_that_multiply_are_refused(tmp_path: Path, out: Path) -> None:
