@@ -6,9 +6,11 @@ import inspect
 from collections.abc import Iterable, Sequence
 from typing import Any
 
+import numpy as np
+
 from xlbridge.catalogue.entry import Argument as Declared
 from xlbridge.catalogue.entry import SheetFunction, Term
-from xlbridge.values import OMITTED, Argument
+from xlbridge.values import OMITTED, Argument, Value
 
 SHOWN = 6  # significant digits of a number in an equation
 
@@ -42,13 +44,25 @@ def numbers(entry: SheetFunction, arguments: Sequence[Argument]) -> str:
     return entry.expression.format_map({name: shown(v) for name, v in (values | terms).items()})
 
 
+def numbers_line(entry: SheetFunction, arguments: Sequence[Argument], result: Value) -> str:
+    """Return the whole equation with the numbers put in, and its result.
+
+    >>> from xlbridge.catalogue import CATALOGUE
+    >>> numbers_line(CATALOGUE["ELF_FX"], [286.0, 0.28], 80.08)
+    'F_x = 0.28·286 = 80.08'
+    """
+    return f"{entry.result.symbol} = {numbers(entry, arguments)} = {shown(result)}"
+
+
 def shown(value: Any) -> str:
     """Return a value as it stands in an equation: a range is cut to its ends."""
+    if isinstance(value, np.ndarray):
+        return shown(tuple((number,) for number in value.ravel()) if value.ndim else float(value))
     if isinstance(value, tuple):
         cells = [cell for row in value for cell in row if cell is not None]
         inner = cells if len(cells) <= 4 else [*cells[:2], "…", cells[-1]]
         return f"[{', '.join(map(shown, inner))}]"
-    return value if isinstance(value, str) else f"{float(value):.{SHOWN}g}"
+    return f"{value:.{SHOWN}g}" if isinstance(value, float | int) else str(value)
 
 
 def _own(compute: Any, values: dict[str, Any]) -> dict[str, Any]:

@@ -1,0 +1,1 @@
+"""Prove a workbook: by routes that share no code above the rules themselves."""

@@ -1,0 +1,5 @@
+"""``python -m xlbridge.cli`` is the ``storyledger`` command."""
+
+from xlbridge.cli import main
+
+main()

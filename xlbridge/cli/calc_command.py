@@ -1,0 +1,71 @@
+"""``storyledger calc``: recalculate a workbook headless and store the values in a copy."""
+
+from __future__ import annotations
+
+import json
+from pathlib import Path
+from typing import Any
+
+import click
+
+from xlbridge.cli.failure import CLEAN, FINDINGS, INCOMPLETE
+from xlbridge.cli.files import refuse_existing
+from xlbridge.cli.workbook import Computed, compute_into
+from xlbridge.values import CellError, Scalar
+
+SHOWN = 20
+
+
+@click.command("calc")
+@click.argument("book", type=click.Path(path_type=Path))
+@click.option(
+    "-o",
+    "--output",
+    type=click.Path(path_type=Path),
+    help="The computed copy; BOOK-computed.xlsx if left out.",
+)
+@click.option("--json", "as_json", is_flag=True, help="Print counts, errors and every value as JSON.")
+@click.option("--force", is_flag=True, help="Replace an existing output.")
+def command(book: Path, output: Path | None, as_json: bool, force: bool) -> int:
+    """Recalculate BOOK with no spreadsheet program and store the values in a copy.
+
+    The copy shows its numbers on a machine without the add-in. Exit code 1 says that cells hold error
+    values, 2 that some could not be evaluated (they are stored as #N/A).
+    """
+    target = output or book.with_name(f"{book.stem}-computed{book.suffix}")
+    refuse_existing(target, force)
+    computed = compute_into(book, target, force)
+    if as_json:
+        click.echo(
+            json.dumps({"output": str(target), **computed.summary(), "values": _values(computed)}, indent=1)
+        )
+    else:
+        click.echo(_report(computed.summary(), target))
+    if computed.not_evaluated:
+        return INCOMPLETE
+    return FINDINGS if computed.errors else CLEAN
+
+
+def _values(computed: Computed) -> dict[str, dict[str, Any]]:
+    sheets: dict[str, dict[str, Any]] = {}
+    for (sheet, address), value in computed.values.items():
+        sheets.setdefault(sheet, {})[address] = _plain(value)
+    return sheets
+
+
+def _plain(value: Scalar) -> Any:
+    return {"error": value.code, "reason": value.reason} if isinstance(value, CellError) else value
+
+
+def _report(summary: dict[str, Any], target: Path) -> str:
+    lines = [
+        f"{summary['computed']} of {summary['formula_cells']} formula cells computed, "
+        f"{len(summary['errors'])} with an error value, {len(summary['not_evaluated'])} not evaluated"
+    ]
+    lines += [f"  {e['cell']}  {e['error']}  {e['reason']}" for e in summary["errors"][:SHOWN]]
+    lines += [
+        f"  {n['cell']}  not evaluated, because {n['reason']}" for n in summary["not_evaluated"][:SHOWN]
+    ]
+    hidden = sum(max(0, len(summary[key]) - SHOWN) for key in ("errors", "not_evaluated"))
+    lines += [f"  and {hidden} more: see --json"] if hidden else []
+    return "\n".join([*lines, f"stored in {target}"])

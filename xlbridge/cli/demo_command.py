@@ -1,0 +1,63 @@
+"""``storyledger demo``: the demonstration building, from inputs to a computed workbook."""
+
+from __future__ import annotations
+
+import json
+import tomllib
+from pathlib import Path
+
+import click
+
+from engine.building import Package, from_mapping, solve, to_mapping
+from workbook_templates.build import build
+from workbook_templates.demo import building_text
+from workbook_templates.read import Reader
+from xlbridge.audit.routes import Agreement, compare
+from xlbridge.cli.failure import FINDINGS
+from xlbridge.cli.files import refuse_existing, write_new
+from xlbridge.cli.workbook import Computed, compute_into
+
+INPUTS, BLANK, BOOK, RESULTS = "building.toml", "story.xlsx", "story-computed.xlsx", "results.json"
+
+
+@click.command("demo")
+@click.argument("directory", type=click.Path(path_type=Path, file_okay=False))
+@click.option("--force", is_flag=True, help="Replace the files of an earlier demonstration.")
+def command(directory: Path, force: bool) -> int:
+    """Leave an invented building in DIRECTORY: its inputs, its workbook computed, its results.
+
+    One story drift of the building is above its limit on purpose, so that you see what a check that does
+    not hold looks like.
+    """
+    directory.mkdir(parents=True, exist_ok=True)
+    for name in (INPUTS, BLANK, BOOK, RESULTS):
+        refuse_existing(directory / name, force)
+    building = from_mapping(tomllib.loads(building_text()))
+    package = solve(building)
+    write_new(directory / INPUTS, building_text().encode(), force)
+    write_new(directory / BLANK, build(to_mapping(building)), force)
+    computed = compute_into(directory / BLANK, directory / BOOK, force)
+    write_new(directory / RESULTS, json.dumps(package.to_json(), indent=1).encode(), force)
+    agreement = compare(Reader(computed.evaluator.evaluate_text).results(), package.to_json())
+    click.echo(_report(directory, computed, agreement, package))
+    return FINDINGS if agreement.differences or computed.not_evaluated or computed.errors else 0
+
+
+def _report(directory: Path, computed: Computed, agreement: Agreement, package: Package) -> str:
+    status = computed.evaluator.evaluate_text("=workbook_status")
+    lines = [
+        f"{package.title}, ASCE/SEI {package.edition}",
+        f"  {directory / BOOK}: {len(computed.results.cells)} formula cells computed",
+        f"  cells against the model route: {agreement.compared} results, {len(agreement.differences)} differ",
+        f"  status in the workbook: {status}",
+    ]
+    for name, result in package.direction.items():
+        over = result.drift_over_limit
+        worst = (
+            ""
+            if over is None
+            else f", largest drift over limit {over.max():.3f} at {package.levels[over.argmax()]}"
+        )
+        lines.append(f"  {name}: V = {result.V:.1f}, T = {result.T:.3f} s, k = {result.k:.3f}{worst}")
+    lines.append(f"  inputs in {directory / INPUTS}, results in {directory / RESULTS}")
+    return "\n".join(lines)

@@ -1,0 +1,89 @@
+"""``storyledger functions``: the catalogue, and the built-in functions that are evaluated headless."""
+
+from __future__ import annotations
+
+import json
+from typing import Any
+
+import click
+
+from engine.editions import EDITIONS, clause
+from xlbridge import work
+from xlbridge.catalogue import CATALOGUE, SheetFunction
+from xlbridge.catalogue.validate import describe
+from xlbridge.cli.failure import Refusal
+
+
+@click.command("functions")
+@click.argument("name", required=False)
+@click.option("--json", "as_json", is_flag=True, help="Print as JSON.")
+@click.option("--builtins", is_flag=True, help="List the built-in functions that are evaluated headless.")
+def command(name: str | None, as_json: bool, builtins: bool) -> None:
+    """List the worksheet functions, or describe one of them."""
+    if builtins:
+        from xlbridge.headless.builtins import BUILTINS
+
+        click.echo(json.dumps(sorted(BUILTINS)) if as_json else "\n".join(sorted(BUILTINS)))
+        return
+    entries = list(CATALOGUE.values()) if name is None else [_named(name)]
+    if as_json:
+        click.echo(json.dumps([record(entry) for entry in entries], indent=1, ensure_ascii=False))
+    elif name is None:
+        width = max(len(entry.name) for entry in entries)
+        click.echo("\n".join(f"{entry.name:<{width}}  {entry.summary}" for entry in entries))
+    else:
+        click.echo(_page(entries[0]))
+
+
+def _named(name: str) -> SheetFunction:
+    entry = CATALOGUE.get(name.upper())
+    if entry is None:
+        from difflib import get_close_matches
+
+        close = get_close_matches(name.upper(), CATALOGUE, 1)
+        hint = f"did you mean {close[0]}?" if close else "see 'storyledger functions'"
+        raise Refusal(f"{name}: no such worksheet function, {hint}")
+    return entry
+
+
+def record(entry: SheetFunction) -> dict[str, Any]:
+    """Return everything declared of a function, in plain data."""
+    clauses = {edition: clause(edition, entry.rule) for edition in EDITIONS}
+    return {
+        "name": entry.name,
+        "usage": entry.usage,
+        "summary": entry.summary,
+        "category": entry.category,
+        "equation": work.equation(entry),
+        "native": entry.native,
+        "arguments": [
+            {
+                "name": a.name,
+                "symbol": a.symbol,
+                "unit": a.unit,
+                "text": a.text,
+                "kind": a.kind.value,
+                "choices": list(a.choices),
+                "optional": a.optional,
+                "allowed": str(a.span),
+            }
+            for a in entry.arguments
+        ],
+        "result": {"symbol": entry.result.symbol, "unit": entry.result.unit, "text": entry.result.text},
+        "clauses": {
+            e: {"clause": str(c), "confidence": c.confidence, "note": c.note} for e, c in clauses.items()
+        },
+        "example": {"arguments": dict(entry.example.arguments), "result": entry.example.result},
+        "since": entry.since,
+    }
+
+
+def _page(entry: SheetFunction) -> str:
+    lines = [entry.usage, entry.summary, "", work.equation(entry), ""]
+    lines += [f"  {a.name}: {describe(a)}" for a in entry.arguments]
+    lines += ["", f"returns {entry.result.text} [{entry.result.unit}]"]
+    for edition in EDITIONS:
+        found = clause(edition, entry.rule)
+        lines.append(f"{found.standard} {found}{f' ({found.note})' if found.note else ''}")
+    given = ", ".join(f"{key} = {value}" for key, value in entry.example.arguments.items())
+    return "\n".join([*lines, "", f"example: {given}: {entry.example.result}"])

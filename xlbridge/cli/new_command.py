@@ -1,0 +1,56 @@
+"""``storyledger new``: make a story workbook, blank or from a BUILDING.toml."""
+
+from __future__ import annotations
+
+from pathlib import Path
+from typing import Any
+
+import click
+
+from engine.building import from_mapping, to_mapping
+from engine.editions import EDITIONS
+from engine.levels import MAX_LEVELS
+from engine.units import SYSTEMS
+from workbook_templates.build import build
+from xlbridge.cli.failure import Refusal
+from xlbridge.cli.files import read_building, write_new
+
+DEFAULT_LEVELS, DEFAULT_EDITION, DEFAULT_UNITS = 6, EDITIONS[-1], SYSTEMS[0]
+
+
+@click.command("new")
+@click.argument("book", type=click.Path(path_type=Path))
+@click.option(
+    "--levels", type=click.IntRange(1, MAX_LEVELS), help=f"Levels to start with [{DEFAULT_LEVELS}]."
+)
+@click.option("--edition", type=click.Choice(EDITIONS), help=f"Edition of ASCE/SEI 7 [{DEFAULT_EDITION}].")
+@click.option(
+    "--units", type=click.Choice(SYSTEMS), help=f"kip, ft, in (us) or kN, m, mm (si) [{DEFAULT_UNITS}]."
+)
+@click.option("--from", "building", type=click.Path(path_type=Path), help="A BUILDING.toml to fill it from.")
+@click.option("--force", is_flag=True, help="Replace an existing BOOK.")
+def command(
+    book: Path, levels: int | None, edition: str | None, units: str | None, building: Path | None, force: bool
+) -> None:
+    """Make the story workbook BOOK: criteria, story table, drift and stability, checks, figures.
+
+    Without --from it holds starter values, marked as such until each is replaced.
+    """
+    if book.suffix.lower() != ".xlsx":
+        raise Refusal(f"{book}: the name of a workbook ends in .xlsx")
+    if building is not None:
+        if levels or edition or units:
+            raise Refusal("--from brings its own levels, edition and units: leave those options out")
+        given = _given(building)
+    else:
+        given = {"edition": edition or DEFAULT_EDITION, "units": units or DEFAULT_UNITS}
+    write_new(book, build(given, levels or DEFAULT_LEVELS), force)
+    click.echo(f"{book}: made for ASCE/SEI {given['edition']}, units {given['units']}")
+
+
+def _given(building: Path) -> dict[str, Any]:
+    """Return the tables of the file, after the engine has accepted them."""
+    try:
+        return to_mapping(from_mapping(read_building(building)))
+    except ValueError as error:
+        raise Refusal(f"{building}: {error}") from error
