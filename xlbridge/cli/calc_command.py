@@ -22,7 +22,7 @@ SHOWN = 20
     "-o",
     "--output",
     type=click.Path(path_type=Path),
-    help="The computed copy; BOOK-computed.xlsx if left out.",
+    help="The computed copy [BOOK-computed.xlsx].",
 )
 @click.option("--json", "as_json", is_flag=True, help="Print counts, errors and every value as JSON.")
 @click.option("--force", is_flag=True, help="Replace an existing output.")
@@ -36,9 +36,8 @@ def command(book: Path, output: Path | None, as_json: bool, force: bool) -> int:
     refuse_existing(target, force)
     computed = compute_into(book, target, force)
     if as_json:
-        click.echo(
-            json.dumps({"output": str(target), **computed.summary(), "values": _values(computed)}, indent=1)
-        )
+        record = {"output": str(target), **computed.summary(), "values": _values(computed)}
+        click.echo(json.dumps(record, indent=1, ensure_ascii=False))
     else:
         click.echo(_report(computed.summary(), target))
     if computed.not_evaluated:

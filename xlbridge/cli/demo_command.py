@@ -8,7 +8,7 @@ from pathlib import Path
 
 import click
 
-from engine.building import Package, from_mapping, solve, to_mapping
+from engine.building import DirectionResult, Package, from_mapping, solve, to_mapping
 from workbook_templates.build import build
 from workbook_templates.demo import building_text
 from workbook_templates.read import Reader
@@ -51,13 +51,14 @@ def _report(directory: Path, computed: Computed, agreement: Agreement, package: 
         f"  cells against the model route: {agreement.compared} results, {len(agreement.differences)} differ",
         f"  status in the workbook: {status}",
     ]
-    for name, result in package.direction.items():
-        over = result.drift_over_limit
-        worst = (
-            ""
-            if over is None
-            else f", largest drift over limit {over.max():.3f} at {package.levels[over.argmax()]}"
-        )
-        lines.append(f"  {name}: V = {result.V:.1f}, T = {result.T:.3f} s, k = {result.k:.3f}{worst}")
+    lines += [_headline(name, result, package) for name, result in package.direction.items()]
     lines.append(f"  inputs in {directory / INPUTS}, results in {directory / RESULTS}")
     return "\n".join(lines)
+
+
+def _headline(name: str, result: DirectionResult, package: Package) -> str:
+    line = f"  {name}: V = {result.V:.1f}, T = {result.T:.3f} s, k = {result.k:.3f}"
+    over = result.drift_over_limit
+    if over is None:
+        return line
+    return f"{line}, largest drift over limit {over.max():.3f} at {package.levels[over.argmax()]}"

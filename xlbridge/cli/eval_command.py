@@ -16,6 +16,8 @@ from xlbridge.headless.evaluate import Evaluator
 from xlbridge.headless.operands import NotEvaluated
 from xlbridge.values import Argument, CellError, Scalar, Value
 
+Function = Callable[[Sequence[Argument]], Value]
+
 
 @dataclass(frozen=True, slots=True)
 class Call:
@@ -34,9 +36,7 @@ def command(formula: str, show_work: bool) -> int:
     calls: list[Call] = []
     functions = {name: _recorded(name, function, calls) for name, function in FUNCTIONS.items()}
     try:
-        value = Evaluator(None, functions).evaluate_text(
-            formula if formula.startswith("=") else f"={formula}"
-        )
+        value = Evaluator(None, functions).evaluate_text("=" + formula.removeprefix("="))
     except NotEvaluated as reason:
         click.echo(f"not evaluated, because {reason}")
         return INCOMPLETE
@@ -51,9 +51,7 @@ def command(formula: str, show_work: bool) -> int:
     return FINDINGS if errors else CLEAN
 
 
-def _recorded(
-    name: str, function: Callable[[Sequence[Argument]], Value], calls: list[Call]
-) -> Callable[[Sequence[Argument]], Value]:
+def _recorded(name: str, function: Function, calls: list[Call]) -> Function:
     def called(arguments: Sequence[Argument]) -> Value:
         result = function(arguments)
         calls.append(Call(name, tuple(arguments), result))

@@ -20,13 +20,9 @@ DEFAULT_LEVELS, DEFAULT_EDITION, DEFAULT_UNITS = 6, EDITIONS[-1], SYSTEMS[0]
 
 @click.command("new")
 @click.argument("book", type=click.Path(path_type=Path))
-@click.option(
-    "--levels", type=click.IntRange(1, MAX_LEVELS), help=f"Levels to start with [{DEFAULT_LEVELS}]."
-)
+@click.option("--levels", type=click.IntRange(1, MAX_LEVELS), help=f"Levels at the start [{DEFAULT_LEVELS}].")
 @click.option("--edition", type=click.Choice(EDITIONS), help=f"Edition of ASCE/SEI 7 [{DEFAULT_EDITION}].")
-@click.option(
-    "--units", type=click.Choice(SYSTEMS), help=f"kip, ft, in (us) or kN, m, mm (si) [{DEFAULT_UNITS}]."
-)
+@click.option("--units", type=click.Choice(SYSTEMS), help=f"kip, ft, in or kN, m, mm [{DEFAULT_UNITS}].")
 @click.option("--from", "building", type=click.Path(path_type=Path), help="A BUILDING.toml to fill it from.")
 @click.option("--force", is_flag=True, help="Replace an existing BOOK.")
 def command(

@@ -10,6 +10,7 @@ import click
 from engine.building import from_mapping, solve
 from xlbridge.cli.failure import Refusal
 from xlbridge.cli.files import read_building
+from xlbridge.cli.tables import package_text
 
 
 @click.command("solve")
@@ -21,9 +22,4 @@ def command(building: Path, as_json: bool) -> None:
         package = solve(from_mapping(read_building(building)))
     except ValueError as error:
         raise Refusal(f"{building}: {error}") from error
-    if as_json:
-        click.echo(json.dumps(package.to_json(), indent=1))
-    else:
-        from xlbridge.cli.tables import show_package
-
-        show_package(package)
+    click.echo(json.dumps(package.to_json(), indent=1) if as_json else package_text(package))

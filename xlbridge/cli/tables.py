@@ -1,55 +1,44 @@
-"""The package of results as plain-text tables."""
+"""The package of results as plain text."""
 
 from __future__ import annotations
 
-from collections.abc import Sequence
-
-from rich.console import Console
-from rich.table import Table
+from collections.abc import Iterator, Sequence
+from typing import Any
 
 from engine.building import DirectionResult, Package
 from engine.units import symbol
 from xlbridge.cli import CAUTION
 
-Columns = Sequence[tuple[str, Sequence[object], str]]
+#: heading, values, number format ("" for text)
+Column = tuple[str, Sequence[Any], str]
 
 
-def show_package(package: Package) -> None:
-    """Print the package: what holds for both directions, then each direction level by level."""
-    console = Console(highlight=False)
+def package_text(package: Package) -> str:
+    """Return the package: what holds for both directions, then each direction level by level."""
     force, length = symbol("force", package.units), symbol("length", package.units)
-    console.print(f"{package.title}   ASCE/SEI {package.edition}", style="bold", markup=False)
-    console.print(f"W = {package.W:.6g} {force}   h_n = {package.h_n:.6g} {length}   I_e = {package.I_e:g}")
+    lines = [
+        f"{package.title}   ASCE/SEI {package.edition}",
+        f"W = {package.W:.6g} {force}   h_n = {package.h_n:.6g} {length}   I_e = {package.I_e:g}",
+    ]
     for name, result in package.direction.items():
-        _show_direction(console, package, name, result)
-    for warning in package.warnings:
-        console.print(f"! {warning}", markup=False)
-    console.print(f"\n{CAUTION}", style="dim")
+        lines += ["", f"Direction {name}", *_summary(package, result), *_aligned(_columns(package, result))]
+    return "\n".join([*lines, "", *(f"! {warning}" for warning in package.warnings), CAUTION])
 
 
-def _show_direction(console: Console, package: Package, name: str, result: DirectionResult) -> None:
+def _summary(package: Package, result: DirectionResult) -> list[str]:
     force, moment = symbol("force", package.units), symbol("moment", package.units)
-    console.print(f"\nDirection {name}", style="bold")
-    console.print(
-        f"T = {result.T:.4g} s (T_a = {result.T_a:.4g}, C_u T_a = {result.T_max:.4g})   k = {result.k:.4g}"
-    )
-    console.print(f"C_s = {result.C_s:.4g}, {result.governing_bound}", markup=False)
-    console.print(f"V = {result.V:.6g} {force}   M at the base = {result.M_base:.6g} {moment}")
-    table = Table(box=None, pad_edge=False, padding=(0, 2))
-    for heading, values, form in _columns(package, result):
-        table.add_column(heading, justify="left" if form == "" else "right", no_wrap=form != "")
-    rows = zip(
-        *([format(v, form) for v in values] for _, values, form in _columns(package, result)), strict=True
-    )
-    for row in rows:
-        table.add_row(*row)
-    console.print(table)
+    periods = f"T_a = {result.T_a:.4g}, C_u T_a = {result.T_max:.4g}"
+    return [
+        f"T = {result.T:.4g} s ({periods})   k = {result.k:.4g}",
+        f"C_s = {result.C_s:.4g}, {result.governing_bound}",
+        f"V = {result.V:.6g} {force}   M at the base = {result.M_base:.6g} {moment}",
+    ]
 
 
-def _columns(package: Package, result: DirectionResult) -> Columns:
+def _columns(package: Package, result: DirectionResult) -> list[Column]:
     force, moment = symbol("force", package.units), symbol("moment", package.units)
     length, drift = symbol("length", package.units), symbol("displacement", package.units)
-    columns = [
+    columns: list[Column] = [
         ("level", package.levels, ""),
         (f"h_x [{length}]", package.h_x, ".2f"),
         (f"w_x [{force}]", package.w_x, ".1f"),
@@ -65,3 +54,13 @@ def _columns(package: Package, result: DirectionResult) -> Columns:
     if result.theta is not None:
         columns.append(("theta", result.theta, ".4f"))
     return columns
+
+
+def _aligned(columns: list[Column]) -> Iterator[str]:
+    """Return the columns as lines: text to the left, numbers to the right, nothing cut off."""
+    filled = []
+    for heading, values, form in columns:
+        cells = [heading, *(format(value, form) for value in values)]
+        width = max(map(len, cells))
+        filled.append([cell.rjust(width) if form else cell.ljust(width) for cell in cells])
+    return ("  ".join(row).rstrip() for row in zip(*filled, strict=True))
