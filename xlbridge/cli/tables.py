@@ -2,7 +2,7 @@
 
 from __future__ import annotations
 
-from collections.abc import Iterator, Sequence
+from collections.abc import Iterable, Iterator
 from typing import Any
 
 from engine.building import DirectionResult, Package
@@ -10,7 +10,7 @@ from engine.units import symbol
 from xlbridge.cli import CAUTION
 
 #: heading, values, number format ("" for text)
-Column = tuple[str, Sequence[Any], str]
+Column = tuple[str, Iterable[Any], str]
 
 
 def package_text(package: Package) -> str:
