@@ -12,9 +12,9 @@ from typing import Final
 
 from xlbridge.headless.builtins.builtin import Builtin
 from xlbridge.headless.builtins.collect import cells, every_value, grid_of, nothing, numbers
-from xlbridge.headless.coercion import Fault, parse_number
+from xlbridge.headless.coercion import Fault, number, parse_number
 from xlbridge.headless.operands import Area, Operand
-from xlbridge.values import Scalar
+from xlbridge.values import CellError, Scalar
 
 
 def total(*operands: Operand) -> float:
@@ -73,14 +73,15 @@ def _sumproduct(*operands: Operand) -> float:
     shapes = {(len(grid), len(grid[0])) for grid in grids}
     if len(shapes) > 1:
         raise Fault("#VALUE!", "SUMPRODUCT: the arrays have different sizes")
-    columns = [[_factor(cell) for row in grid for cell in row] for grid in grids]
+    columns = [
+        [cell if type(cell) is float else _factor(cell) for row in grid for cell in row] for grid in grids
+    ]
     return math.fsum(map(math.prod, zip(*columns, strict=True)))
 
 
 def _factor(cell: Scalar) -> float:
-    if type(cell) is float:
-        return cell
-    return numbers([((cell,),)])[0] if not isinstance(cell, str | bool | None) else 0.0
+    """What is no number counts as 0; an error is a fault."""
+    return number(cell) if isinstance(cell, CellError) else 0.0
 
 
 def minimum(*operands: Operand) -> float:

@@ -46,14 +46,16 @@ def invoke(builtin: Builtin, operands: Sequence[Operand | Lazy]) -> Operand:
     kinds = _kinds(builtin, len(operands))
     try:
         arguments = [_ARRIVES[kind](operand) for kind, operand in zip(kinds, operands, strict=True)]
-        if any(
-            type(argument) is tuple and kind in "ntbs"
-            for kind, argument in zip(kinds, arguments, strict=True)
-        ):
+        if tuple in map(type, arguments) and _has_grid_for_scalar(kinds, arguments):
             return _spread(builtin, kinds, arguments)
         return _apply(builtin, kinds, arguments)
     except Fault as fault:
         return fault.error
+
+
+def _has_grid_for_scalar(kinds: str, arguments: Sequence[Operand | Lazy]) -> bool:
+    pairs = zip(kinds, arguments, strict=True)
+    return any(kind in "ntbs" and type(argument) is tuple for kind, argument in pairs)
 
 
 def _apply(builtin: Builtin, kinds: str, arguments: Sequence[Operand | Lazy]) -> Operand:

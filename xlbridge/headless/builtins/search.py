@@ -17,14 +17,14 @@ from xlbridge.values import Scalar
 
 def exact(value: Scalar, cells: Sequence[Scalar], wildcards: bool = True, backwards: bool = False) -> int:
     """Return the place (from 1) of the first cell equal to the value, or of the last one."""
-    if value is None and 0.0 in cells:
-        raise NotEvaluated("whether a blank finds 0 depends on the program")
     if isinstance(value, str) and wildcards and has_wildcards(value):
         pattern = wildcard(value)
         found = [isinstance(cell, str) and pattern.fullmatch(cell) is not None for cell in cells]
     else:
-        wanted = _key(value)
-        found = [_alike(cell, value) and _key(cell) == wanted for cell in cells]
+        wanted, kind = _key(value), type(0.0 if value is None else value)
+        found = [type(cell) is kind and _key(cell) == wanted for cell in cells]
+    if value is None and True in found:
+        raise NotEvaluated("whether a blank finds 0 depends on the program")
     if True not in found:
         raise not_found(value)
     return len(found) - found[::-1].index(True) if backwards else found.index(True) + 1
