@@ -91,7 +91,7 @@ def _serial(value: datetime) -> float:
 
 
 _CONVERT: Final[Mapping[type, Callable[[Any], Scalar]]] = MappingProxyType(
-    {bool: bool, int: _integer, float: float, Decimal: float, str: str, datetime: _serial}
+    {int: _integer, Decimal: float, datetime: _serial}
 )
 
 
