@@ -22,8 +22,14 @@ def draw(sheet: Worksheet, layout: Layout, inputs: Inputs) -> None:
     """Fill the checks sheet."""
     sheets.head(sheet, "Checks")
     sheets.table_head(sheet, HEADER, HEADERS, WIDTHS)
-    for column in range(4, 8):
-        sheet.cell(HEADER, column).alignment = style.RIGHT
+    for column, place in {
+        4: style.RIGHT,
+        5: style.RIGHT,
+        6: style.RIGHT,
+        7: style.RIGHT,
+        8: style.CENTRE,
+    }.items():
+        sheet.cell(HEADER, column).alignment = place
     row = HEADER
     for check in (c for c in CHECKS if c.part in layout.parts):
         for direction in DIRECTIONS if check.per_direction else (None,):
@@ -93,6 +99,6 @@ def _draw_summary(sheet: Worksheet, layout: Layout, last: int) -> None:
 def _status(verdicts: str) -> str:
     return (
         f'=IF(D{STARTERS}>0,"✗ STARTER VALUES, NOT A DESIGN: "&D{STARTERS}&" entries to fill in",'
-        f'IF(D{FAIL}>0,"✗ "&D{FAIL}&" of "&ROWS({verdicts})&" checks do not hold",'
-        f'IF(D{LOOK}>0,"! all checks hold, "&D{LOOK}&" to be looked at","✓ all checks hold")))'
+        f'IF(D{FAIL}>0,"✗ checks that do not hold: "&D{FAIL}&" of "&ROWS({verdicts}),'
+        f'IF(D{LOOK}>0,"! no check fails; to be looked at: "&D{LOOK},"✓ all checks hold")))'
     )

@@ -14,7 +14,7 @@ from workbook_templates.inputs import Inputs
 from workbook_templates.layout import CRITERIA, CRITERIA_COLUMN, CRITERIA_TOP, Layout
 
 HEADERS = ("", "Quantity", "Symbol", "X, or both", "Y", "Unit", "Clause", "Source of the entry", "Note")
-WIDTHS = (3, 46, 13, 27, 27, 7, 22, 24, 50)
+WIDTHS = (3, 46, 13, 25, 25, 7, 23, 31, 50)
 
 
 def draw(sheet: Worksheet, layout: Layout, inputs: Inputs) -> None:
@@ -57,7 +57,7 @@ def _draw_row(sheet: Worksheet, layout: Layout, inputs: Inputs, block: Block, q:
         source = sheet.cell(row, 8, inputs.source(q.key, block.per_direction))
         style.dress(source, Role.INPUT, "@")
         sheets.name(sheet, layout.source_name(q.key), f"$H${row}")
-    sheets.fit_row(sheet, row, WIDTHS)
+    sheets.fit_row(sheet, row, WIDTHS, least=2 if q.unit == "text" and q.function else 1)
 
 
 def _content(layout: Layout, inputs: Inputs, q: Quantity, direction: str | None) -> Any:

@@ -55,7 +55,7 @@ def _draw_header(sheet: Worksheet, inputs: Inputs, column: Column) -> None:
         places.TEXT_ROW: q.text,
         places.SYMBOL_ROW: column.heading,
         places.UNIT_ROW: symbol(q.unit, inputs.units).replace("text", ""),
-        places.CLAUSE_ROW: sheets.clause_text(q, inputs.edition),
+        places.CLAUSE_ROW: sheets.clause_text(q, inputs.edition).replace(", ", "\n"),
         places.MARK_ROW: sheets.clause_mark(q, inputs.edition),
         places.ROLE_ROW: style.letter(q.role),
     }

@@ -8,7 +8,7 @@ from typing import Final, cast
 
 from openpyxl import Workbook
 from openpyxl.formatting.rule import Rule
-from openpyxl.utils import get_column_letter
+from openpyxl.utils import column_index_from_string, get_column_letter
 from openpyxl.workbook.defined_name import DefinedName
 from openpyxl.worksheet.datavalidation import DataValidation
 from openpyxl.worksheet.worksheet import Worksheet
@@ -21,6 +21,7 @@ CAUTION: Final = (
     "An aid to a licensed engineer's judgement. Confirm every value against the standard adopted by the "
     "authority having jurisdiction, its supplements and local amendments."
 )
+LINE: Final = 14.0  # points
 PAPER: Final = {"us": 1, "si": 9}  # Letter, A4
 
 
@@ -34,7 +35,8 @@ def head(sheet: Worksheet, title: str, columns: Iterable[str] = "A") -> None:
             sheet[f"{column}1"], f'="{title}   |   "&job_title&"   |   Rev. "&job_revision', style.TITLE
         )
         style.write(sheet[f"{column}2"], "=workbook_status", style.BOLD)
-        flag_verdicts(sheet, f"{column}2")
+        across = get_column_letter(column_index_from_string(column) + 2)
+        flag_verdicts(sheet, f"{column}2:{across}2", f"${column}$2")
     sheet.row_dimensions[1].height = 22
     sheet.sheet_view.showGridLines = False
 
@@ -67,21 +69,29 @@ def table_head(sheet: Worksheet, row: int, texts: Iterable[str], widths: Iterabl
         sheet.column_dimensions[get_column_letter(column)].width = width
 
 
-def fit_row(sheet: Worksheet, row: int, widths: Iterable[float], line: float = 13.5) -> None:
-    """Make a row as high as its longest wrapped text asks for."""
-    lines = 1
-    for column, width in enumerate(widths, 1):
-        text = str(sheet.cell(row, column).value or "")
-        if not text.startswith("="):
-            lines = max(lines, sum(max(1, ceil(1.12 * len(part) / width)) for part in text.split("\n")))
-    sheet.row_dimensions[row].height = line * lines
+def fit_row(sheet: Worksheet, row: int, widths: Iterable[float], least: int = 1) -> None:
+    """Make a row as high as its longest wrapped text asks for, ``least`` lines at the least."""
+    needed = (_lines(sheet.cell(row, column), width) for column, width in enumerate(widths, 1))
+    sheet.row_dimensions[row].height = LINE * max(least, *needed)
 
 
-def flag_verdicts(sheet: Worksheet, area: str) -> None:
-    """Colour the verdicts of an area; the sign and the words say the same without colour."""
-    first = area.split(":")[0].replace("$", "")
+def _lines(cell: style.AnyCell, width: float) -> int:
+    """Estimate the lines that a text takes in a column; a formula counts as one."""
+    text = str(cell.value or "")
+    if text.startswith("="):
+        return 1
+    room = 1.12 * width * style.BODY.size / cell.font.size - 2
+    return sum(max(1, ceil(len(part) / room)) for part in text.split("\n"))
+
+
+def flag_verdicts(sheet: Worksheet, area: str, verdict: str = "") -> None:
+    """Colour the verdicts of an area; the sign and the words say the same without colour.
+
+    ``verdict`` is the cell that decides: each cell for itself if left out.
+    """
+    cell = verdict or area.split(":")[0]
     for sign, look in (("✗", style.FAIL), ("!", style.LOOK)):
-        formula = f'LEFT({first},1)="{sign}"'
+        formula = f'LEFT({cell},1)="{sign}"'
         sheet.conditional_formatting.add(area, Rule(type="expression", dxf=look, formula=[formula]))
 
 
