@@ -6,6 +6,7 @@ import numpy as np
 import pytest
 
 from engine.base_shear import (
+    base_shear,
     coefficient_cap,
     coefficient_minimum,
     coefficient_minimum_near_fault,
@@ -69,6 +70,7 @@ def test_exponent_by_the_permitted_two(T, k):
 
 def test_cap_on_both_sides_of_T_L():
     given = {"S_D1": 0.6, "T_L": 4.0, "R": 6.0, "I_e": 1.0}
+    assert coefficient_cap(T=3.0, **given) == pytest.approx(0.6 / 18.0)
     assert coefficient_cap(T=4.0, **given) == pytest.approx(0.025)
     assert coefficient_cap(T=8.0, **given) == pytest.approx(0.6 * 4.0 / (64.0 * 6.0))
 
@@ -211,6 +213,19 @@ def test_levels_at_one_height_act_together():
 
 def test_equal_values_at_one_height_are_one_value():
     assert value_below(h_x=36.0, values=[9.0, 3.0, 3.0], heights=[36.0, 24.0, 24.0]) == 3.0
+
+
+def test_values_at_one_height_may_differ_by_round_off():
+    heights = [36.0, 24.0, 24.0]
+    assert value_below(h_x=36.0, values=[0.0, -3.0, -3.0 - 2e-9], heights=heights) == pytest.approx(-3.0)
+    with pytest.raises(NotApplicable):
+        value_below(h_x=36.0, values=[0.0, -3.0, -3.0 - 4e-9], heights=heights)
+    with pytest.raises(NotApplicable):
+        value_below(h_x=[24.0, 36.0], values=[0.0, 1.0, 2.0], heights=heights)
+
+
+def test_small_numbers_are_no_zeros():
+    assert base_shear(C_s=0.02, W=0.5) == 0.01
 
 
 def test_noise_of_a_subtraction_drops_no_level():
