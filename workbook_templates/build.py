@@ -7,7 +7,9 @@ import re
 import zipfile
 from collections.abc import Mapping
 from datetime import datetime
-from typing import Any
+from pathlib import Path
+from tempfile import TemporaryDirectory
+from typing import Any, Final
 
 from openpyxl import Workbook
 
@@ -16,12 +18,14 @@ from workbook_templates import layout as places
 from workbook_templates.draw import checks, cover, criteria, figures, functions, levels
 from workbook_templates.inputs import Inputs, starter
 from workbook_templates.layout import Layout
+from xlbridge.headless.compute import Computed, compute_into
 
+DEFAULT_LEVELS: Final = 6
 #: written into every package, so that two builds are the same to the byte.
 EPOCH = datetime(2020, 1, 1)
 
 
-def build(given: Mapping[str, Any], level_count: int = 6) -> bytes:
+def build(given: Mapping[str, Any], level_count: int = DEFAULT_LEVELS) -> bytes:
     """Return the package of the workbook for the tables of a BUILDING.toml.
 
     ``given`` needs ``edition`` and ``units``; what else is missing starts from marked starter values,
@@ -39,6 +43,16 @@ def build(given: Mapping[str, Any], level_count: int = 6) -> bytes:
     figures.draw(sheets[places.FIGURES], sheets[places.LEVELS], layout, inputs)
     functions.draw(sheets[places.FUNCTIONS], inputs)
     return _package(workbook)
+
+
+def write_workbook(
+    given: Mapping[str, Any], target: Path, level_count: int = DEFAULT_LEVELS, force: bool = False
+) -> Computed:
+    """Build a workbook, compute it headless, and write it with its values stored: numbers show anywhere."""
+    with TemporaryDirectory() as folder:
+        drawn = Path(folder) / f"drawn{target.suffix}"
+        drawn.write_bytes(build(given, level_count))
+        return compute_into(drawn, target, force)
 
 
 def _package(workbook: Workbook) -> bytes:

@@ -130,7 +130,7 @@ STORY_DRIFT = Block(
             "=ELF_PDELTA_STATUS({theta},{theta_max})",
             symbol="P-delta",
             part=DRIFT,
-            width=30,
+            width=27,
         ),
         Quantity(
             "Delta_amplified",

@@ -22,14 +22,9 @@ def draw(sheet: Worksheet, layout: Layout, inputs: Inputs) -> None:
     """Fill the checks sheet."""
     sheets.head(sheet, "Checks")
     sheets.table_head(sheet, HEADER, HEADERS, WIDTHS)
-    for column, place in {
-        4: style.RIGHT,
-        5: style.RIGHT,
-        6: style.RIGHT,
-        7: style.RIGHT,
-        8: style.CENTRE,
-    }.items():
-        sheet.cell(HEADER, column).alignment = place
+    for column in (4, 5, 6, 7):
+        sheet.cell(HEADER, column).alignment = style.RIGHT
+    sheet.cell(HEADER, 8).alignment = style.CENTRE
     row = HEADER
     for check in (c for c in CHECKS if c.part in layout.parts):
         for direction in DIRECTIONS if check.per_direction else (None,):

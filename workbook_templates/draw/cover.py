@@ -57,7 +57,7 @@ LOG = ("Revision", "Date", "By", "What was issued, and why")
 def draw(sheet: Worksheet, layout: Layout, inputs: Inputs) -> None:
     """Fill the cover."""
     sheets.head(sheet, "Seismic story forces")
-    for letter, width in zip("ABCDE", (20, 34, 16, 16, 46), strict=True):
+    for letter, width in zip("ABCDE", (21, 47, 16, 16, 30), strict=True):
         sheet.column_dimensions[letter].width = width
     row = _draw_job(sheet, inputs, 4)
     row = _draw_headlines(sheet, layout, inputs, row + 1)
@@ -128,7 +128,7 @@ def _draw_legend(sheet: Worksheet, row: int) -> int:
         row += 1
         sample = sheet.cell(row, 1, f"{style.letter(role)}   {role.value}")
         style.dress(sample, role)
-        style.write(sheet.cell(row, 2), text)
+        style.write(sheet.cell(row, 2), text, style.BODY, style.INDENTED)
     return row + 1
 
 

@@ -21,7 +21,7 @@ def draw(sheet: Worksheet, inputs: Inputs) -> None:
     sheets.table_head(sheet, 4, HEADERS, WIDTHS)
     for row, entry in enumerate(CATALOGUE.values(), 5):
         for column, text in enumerate(_texts(entry, inputs.edition), 1):
-            style.write(sheet.cell(row, column), text, style.BOLD if column == 1 else style.BODY, style.WRAP)
+            style.write(sheet.cell(row, column), text, style.BOLD if column == 1 else style.BODY, style.TOP)
         sheets.fit_row(sheet, row, WIDTHS)
     sheet.freeze_panes = "B5"
     sheets.page(sheet, inputs.units, "1:4")

@@ -22,8 +22,8 @@ from workbook_templates.layout import FIRST_LEVEL, LEVELS, TOP_GUARD, Column, La
 
 TOTALS = {"sum": "SUM", "max": "MAX"}
 BASE: Mapping[str, str | int] = {"name": "Base", "elevation": "=base_elevation", "h_x": 0}
-PAGE_WIDTH = 176  # units of column width on one landscape page at SCALE
-SCALE = 70  # per cent
+PAGE_WIDTH = 180  # units of column width on one landscape page at SCALE
+SCALE = 68  # per cent
 
 
 def draw(sheet: Worksheet, layout: Layout, inputs: Inputs) -> None:

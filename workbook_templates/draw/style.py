@@ -37,6 +37,8 @@ LOOK = DifferentialStyle(font=Font(bold=True, color="4A3400"), fill=PatternFill(
 
 RIGHT = Alignment(horizontal="right", vertical="center")
 TEXT = Alignment(horizontal="left", vertical="center", wrap_text=True, indent=1)
+INDENTED = Alignment(horizontal="left", vertical="center", indent=1)
+TOP = Alignment(wrap_text=True, vertical="top")
 LEFT = Alignment(horizontal="left", vertical="center")
 WRAP = Alignment(wrap_text=True, vertical="center")
 CENTRE = Alignment(horizontal="center", vertical="center", wrap_text=True)

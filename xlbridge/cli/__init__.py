@@ -7,13 +7,16 @@ fast.
 
 from __future__ import annotations
 
+import io
 import sys
 from importlib import import_module
+from importlib.util import find_spec
+from pathlib import Path
+from runpy import run_path
 from typing import Final
 
 import click
 
-from engine.version import __version__
 from xlbridge.cli.failure import BAD_INPUT, sentence
 
 COMMANDS: Final = ("demo", "new", "calc", "solve", "inputs", "eval", "functions")
@@ -36,14 +39,37 @@ class _Lazy(click.Group):
         return command
 
 
-@click.group(cls=_Lazy, epilog=CAUTION, context_settings={"help_option_names": ["-h", "--help"]})
-@click.version_option(__version__, prog_name="storyledger", message="%(prog)s %(version)s")
+def _print_version(context: click.Context, _: click.Parameter, wanted: bool) -> None:
+    """Print the version without importing the engine's package, which would bring all of numpy with it."""
+    if not wanted or context.resilient_parsing:
+        return
+    engine = find_spec("engine")
+    folder = engine.submodule_search_locations[0] if engine and engine.submodule_search_locations else "."
+    click.echo(f"storyledger {run_path(str(Path(folder, 'version.py')))['__version__']}")
+    context.exit()
+
+
+@click.group(
+    cls=_Lazy,
+    epilog=CAUTION,
+    no_args_is_help=False,
+    context_settings={"help_option_names": ["-h", "--help"]},
+)
+@click.option(
+    "--version",
+    is_flag=True,
+    expose_value=False,
+    is_eager=True,
+    callback=_print_version,
+    help="Show the version and exit.",
+)
 def group() -> None:
     """Seismic story forces of ASCE/SEI 7-16 and 7-22 for worksheets, headless and in plain text."""
 
 
 def main(arguments: list[str] | None = None) -> None:
     """Run the command; every refusal is one sentence on the error stream and exit code 3."""
+    _speak_utf8()
     try:
         code = group.main(arguments, prog_name="storyledger", standalone_mode=False)
     except click.exceptions.Exit as stop:
@@ -55,3 +81,10 @@ def main(arguments: list[str] | None = None) -> None:
         print(f"storyledger: {sentence(error)}", file=sys.stderr)
         code = BAD_INPUT
     sys.exit(code or 0)
+
+
+def _speak_utf8() -> None:
+    """Write UTF-8 also into a pipe or a file whose system default is an older code page."""
+    for stream in (sys.stdout, sys.stderr):
+        if isinstance(stream, io.TextIOWrapper):
+            stream.reconfigure(encoding="utf-8")

@@ -10,7 +10,7 @@ import click
 
 from xlbridge.cli.failure import CLEAN, FINDINGS, INCOMPLETE
 from xlbridge.cli.files import refuse_existing
-from xlbridge.cli.workbook import Computed, compute_into
+from xlbridge.headless.compute import Computed, compute_into
 from xlbridge.values import CellError, Scalar
 
 SHOWN = 20

@@ -9,15 +9,15 @@ from pathlib import Path
 import click
 
 from engine.building import DirectionResult, Package, from_mapping, solve, to_mapping
-from workbook_templates.build import build
+from workbook_templates.build import write_workbook
 from workbook_templates.demo import building_text
 from workbook_templates.read import Reader
 from xlbridge.audit.routes import Agreement, compare
 from xlbridge.cli.failure import FINDINGS
 from xlbridge.cli.files import refuse_existing, write_new
-from xlbridge.cli.workbook import Computed, compute_into
+from xlbridge.headless.compute import Computed
 
-INPUTS, BLANK, BOOK, RESULTS = "building.toml", "story.xlsx", "story-computed.xlsx", "results.json"
+INPUTS, BOOK, RESULTS = "building.toml", "story.xlsx", "results.json"
 
 
 @click.command("demo")
@@ -30,13 +30,12 @@ def command(directory: Path, force: bool) -> int:
     not hold looks like.
     """
     directory.mkdir(parents=True, exist_ok=True)
-    for name in (INPUTS, BLANK, BOOK, RESULTS):
+    for name in (INPUTS, BOOK, RESULTS):
         refuse_existing(directory / name, force)
     building = from_mapping(tomllib.loads(building_text()))
     package = solve(building)
     write_new(directory / INPUTS, building_text().encode(), force)
-    write_new(directory / BLANK, build(to_mapping(building)), force)
-    computed = compute_into(directory / BLANK, directory / BOOK, force)
+    computed = write_workbook(to_mapping(building), directory / BOOK, force=force)
     write_new(directory / RESULTS, json.dumps(package.to_json(), indent=1).encode(), force)
     agreement = compare(Reader(computed.evaluator.evaluate_text).results(), package.to_json())
     click.echo(_report(directory, computed, agreement, package))

@@ -11,7 +11,7 @@ from engine.editions import EDITIONS, clause
 from xlbridge import work
 from xlbridge.catalogue import CATALOGUE
 from xlbridge.cli.failure import CLEAN, FINDINGS, INCOMPLETE
-from xlbridge.cli.workbook import FUNCTIONS
+from xlbridge.headless.compute import FUNCTIONS
 from xlbridge.headless.evaluate import Evaluator
 from xlbridge.headless.operands import NotEvaluated
 from xlbridge.values import Argument, CellError, Scalar, Value

@@ -20,8 +20,8 @@ class Refusal(ValueError):
 def sentence(error: Exception) -> str:
     """Return what a user should read of an error; unexpected ones are named as faults of the tool."""
     if isinstance(error, click.UsageError):
-        hint = f" Try 'storyledger {error.ctx.info_name} --help'." if error.ctx and error.ctx.parent else ""
-        return f"{error.format_message()}{hint}"
+        command = error.ctx.command_path if error.ctx else "storyledger"
+        return f"{error.format_message()} Try '{command} --help'."
     if isinstance(error, OSError):
         return f"{error.filename}: {error.strerror}" if error.filename else str(error)
     if isinstance(error, tomllib.TOMLDecodeError | UnicodeDecodeError):

@@ -8,8 +8,8 @@ import click
 
 from workbook_templates.read import Reader, ReadError
 from xlbridge.cli.failure import Refusal
-from xlbridge.cli.files import building_text, write_new
-from xlbridge.cli.workbook import open_workbook
+from xlbridge.cli.files import building_text, refuse_existing, refuse_input, write_new
+from xlbridge.headless.compute import open_workbook
 
 
 @click.command("inputs")
@@ -18,6 +18,9 @@ from xlbridge.cli.workbook import open_workbook
 @click.option("--force", is_flag=True, help="Replace an existing output.")
 def command(book: Path, output: Path | None, force: bool) -> None:
     """Print the inputs of BOOK as a BUILDING.toml, blanks left out."""
+    if output is not None:
+        refuse_input(output, book)
+        refuse_existing(output, force)
     try:
         text = building_text(Reader(open_workbook(book).evaluate_text).inputs())
     except ReadError as error:

@@ -11,11 +11,11 @@ from engine.building import from_mapping, to_mapping
 from engine.editions import EDITIONS
 from engine.levels import MAX_LEVELS
 from engine.units import SYSTEMS
-from workbook_templates.build import build
+from workbook_templates.build import DEFAULT_LEVELS, write_workbook
 from xlbridge.cli.failure import Refusal
-from xlbridge.cli.files import read_building, write_new
+from xlbridge.cli.files import read_building, refuse_existing, refuse_input
 
-DEFAULT_LEVELS, DEFAULT_EDITION, DEFAULT_UNITS = 6, EDITIONS[-1], SYSTEMS[0]
+DEFAULT_EDITION, DEFAULT_UNITS = EDITIONS[-1], SYSTEMS[0]
 
 
 @click.command("new")
@@ -34,13 +34,16 @@ def command(
     """
     if book.suffix.lower() != ".xlsx":
         raise Refusal(f"{book}: the name of a workbook ends in .xlsx")
+    refuse_existing(book, force)
     if building is not None:
+        refuse_input(book, building)
         if levels or edition or units:
             raise Refusal("--from brings its own levels, edition and units: leave those options out")
         given = _given(building)
     else:
         given = {"edition": edition or DEFAULT_EDITION, "units": units or DEFAULT_UNITS}
-    write_new(book, build(given, levels or DEFAULT_LEVELS), force)
+    refuse_existing(book, force)
+    write_workbook(given, book, levels or DEFAULT_LEVELS, force)
     click.echo(f"{book}: made for ASCE/SEI {given['edition']}, units {given['units']}")
 
 
