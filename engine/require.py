@@ -108,7 +108,10 @@ def worded(texts: Sequence[str], index: ArrayLike) -> Words:
 
 
 def _numbers(name: str, value: ArrayLike) -> Array:
-    array = np.asarray(value)
+    try:
+        array = np.asarray(value)
+    except ValueError:
+        raise WrongType(name, value, "must be rows of one length") from None
     if array.dtype.kind not in "fiu":
         raise (MissingValue if value is None else WrongType)(name, value, "must be a number")
     return array.astype(np.float64, copy=False)

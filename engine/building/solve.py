@@ -101,7 +101,18 @@ class Package:
 
 
 def solve(building: Building) -> Package:
-    """Return the whole package of a building; a refusal names the field or the level."""
+    """Return the whole package of a building; a refusal names the field or the level.
+
+    >>> from engine.building.reading import from_mapping
+    >>> frame = {"system": "walls", "R": 5, "Omega_0": 2.5, "C_d": 5}
+    >>> frame |= {"period_system": "all other", "drift_structure": "all other"}
+    >>> site = {"S_DS": 0.6, "S_D1": 0.41, "S_1": 0.45, "T_L": 4, "risk_category": "II"}
+    >>> roof = {"name": "Roof", "elevation": 20, "weight": 300}
+    >>> job = {"title": "Shed", "edition": "7-22", "units": "us"}
+    >>> found = solve(from_mapping(job | {"site": site, "direction": {"X": frame}, "level": [roof]}))
+    >>> print(found.direction["X"].V, found.direction["X"].M_base)
+    36.0 720.0
+    """
     site = building.site
     h = np.array([level.elevation - site.base_elevation for level in building.level])
     w = np.array([level.weight for level in building.level], dtype=np.float64)

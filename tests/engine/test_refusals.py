@@ -101,6 +101,7 @@ def test_zero(name, key):
 
 
 BEYOND = [
+    ("vertical.story_shear", WrongType, "forces = .*rows of one length", {"forces": [[1.0], [2.0, 3.0]]}),
     (
         *("vertical.distribution_factors", ImpossibleValue, "at least one level must have"),
         {"weights": [[1.0, 2.0, 3.0], [0.0, 0.0, 0.0]]},
