@@ -103,16 +103,23 @@ class Evaluator:
         """Compute every formula cell."""
         return Results(tuple(self._result(cell) for cell in self.book.formula_cells()))
 
-    def evaluate_text(self, text: str, sheet: str | None = None) -> Value:
+    def evaluate_text(
+        self, text: str, sheet: str | None = None, interpreter: Interpreter | None = None
+    ) -> Value:
         """The value of a formula that stands in no cell; references without a sheet mean ``sheet``.
 
         It is evaluated as an array formula, so it may give a grid.
         """
+        place = self.place_on(sheet)
+        node = parse(text)
+        return self.settle(lambda: (interpreter or self._interpreter).result(node, place, True))
+
+    def place_on(self, sheet: str | None) -> Place:
+        """The place of a formula that stands in no cell, on a sheet or on none."""
         title = None if sheet is None else self.book.sheet_named(sheet)
         if sheet is not None and title is None:
             raise NotEvaluated(f"the workbook has no sheet {sheet}")
-        node = parse(text)
-        return self.settle(lambda: self._interpreter.result(node, Place(None, title), True))
+        return Place(None, title)
 
     def settle(self, compute: Callable[[], _T]) -> _T:
         """Do a computation that reads cells, once the cells it reads are computed."""
@@ -127,8 +134,9 @@ class Evaluator:
         """Evaluate a formula at its place, by this workbook's interpreter or one with an observer."""
         if formula.refusal:
             raise NotEvaluated(formula.refusal)
-        place = Place(formula.cell if formula.fills.is_cell else None, formula.cell.sheet)
-        return (interpreter or self._interpreter).result(parse(formula.text), place, formula.is_array)
+        return (interpreter or self._interpreter).result(
+            parse(formula.text), place_of(formula), formula.is_array
+        )
 
     def read(self, area: Area) -> Grid:
         """The values of an area; what it needs first is asked for, what has no value is passed on."""
@@ -230,6 +238,11 @@ class Evaluator:
             return
         for (row, column), item in _spread(formula.fills, value):
             values[row, column] = item
+
+
+def place_of(formula: Formula) -> Place:
+    """The place of a formula; one that fills several cells stands in none of them."""
+    return Place(formula.cell if formula.fills.is_cell else None, formula.cell.sheet)
 
 
 def _named(cycle: list[Cell], place: int) -> str:

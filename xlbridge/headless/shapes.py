@@ -14,7 +14,7 @@ from xlbridge.headless.nodes import Binary, Call, Join, Node, Reference, Unary, 
 from xlbridge.headless.reference_text import read_reference
 from xlbridge.headless.tokens import REFERENCE
 
-_Builder: TypeAlias = Callable[[Iterator[Reference]], Node]
+_Builder: TypeAlias = Callable[[Iterator[Node]], Node]
 
 _SHAPES: Final[dict[tuple[str, ...], _Builder | None]] = {}
 _MOST_SHAPES: Final = 10_000
@@ -30,15 +30,12 @@ def parse(text: str) -> Node:
     parts = REFERENCE.split(text)
     shape = tuple(parts[::2])
     build = _SHAPES.get(shape)
-    if build is None:
-        node = read_formula(text)
-        if shape not in _SHAPES and len(_SHAPES) < _MOST_SHAPES:
-            _SHAPES[shape] = _builder_of(node, parts[1::2])
-        return node
-    references = [read_reference(part) for part in parts[1::2]]
-    if all(isinstance(reference, Reference) for reference in references):
-        return build(iter(references))  # type: ignore[arg-type]
-    return read_formula(text)
+    if build is not None:
+        return build(map(read_reference, parts[1::2]))
+    node = read_formula(text)
+    if shape not in _SHAPES and len(_SHAPES) < _MOST_SHAPES:
+        _SHAPES[shape] = _builder_of(node, parts[1::2])
+    return node
 
 
 def _builder_of(node: Node, references: list[str]) -> _Builder | None:

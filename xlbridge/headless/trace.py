@@ -2,17 +2,16 @@
 
 from __future__ import annotations
 
-from collections.abc import Iterator
+from collections.abc import Callable, Iterator
 from dataclasses import dataclass
 
-from xlbridge.headless.book import Formula
-from xlbridge.headless.evaluate import Evaluator
+from xlbridge.headless.evaluate import Evaluator, place_of
 from xlbridge.headless.interpreter import Interpreter, Place
 from xlbridge.headless.nodes import Call, Name, Node, Reference, TableReference, render, walk
 from xlbridge.headless.operands import Area, NotEvaluated, Operand
 from xlbridge.headless.references import Bounds, Cell, parse_address, quote_sheet
 from xlbridge.headless.shapes import parse
-from xlbridge.values import Argument, Omitted, Scalar, Value
+from xlbridge.values import Argument, Omitted, Value
 
 
 @dataclass(frozen=True, slots=True)
@@ -40,13 +39,14 @@ class TracedCall:
 
 @dataclass(frozen=True, slots=True)
 class Trace:
-    """One cell explained; a cell without a formula has only its value."""
+    """One formula explained; a cell without a formula has only its value, a text has no cell."""
 
-    cell: Cell
+    cell: Cell | None
     formula: str
     precedents: tuple[Precedent, ...]
     calls: tuple[TracedCall, ...]
-    value: Scalar
+    """Inner calls first; where the formula has no value, the calls made before that was found out."""
+    value: Value
     reason: str | None = None
 
 
@@ -55,48 +55,44 @@ def trace(evaluator: Evaluator, sheet: str, address: str) -> Trace:
     row, column = parse_address(address)
     cell = Cell(evaluator.book.sheet_named(sheet) or sheet, row, column)
     formula = evaluator.book.formula(cell)
-    value, reason = _value(evaluator, cell)
+    value, reason = _outcome(lambda: evaluator.value(*cell))
     if formula is None:
         return Trace(cell, "", (), (), value, reason)
-    calls = traced_calls(evaluator, formula)
-    return Trace(cell, formula.text, _precedents(evaluator, formula), calls, value, reason)
-
-
-def traced_calls(evaluator: Evaluator, formula: Formula) -> tuple[TracedCall, ...]:
-    """The calls of custom functions that a formula makes, inner ones first.
-
-    Where the formula cannot be evaluated, the calls made before that was found out.
-    """
     calls: list[TracedCall] = []
+    _outcome(lambda: evaluator.compute(formula, _observing(evaluator, calls)))
+    precedents = _precedents(evaluator, formula.text, place_of(formula))
+    return Trace(cell, formula.text, precedents, tuple(calls), value, reason)
+
+
+def trace_text(evaluator: Evaluator, text: str, sheet: str | None = None) -> Trace:
+    """Explain a formula that stands in no cell, as :meth:`Evaluator.evaluate_text` evaluates it."""
+    place = evaluator.place_on(sheet)
+    value, reason = _outcome(lambda: evaluator.evaluate_text(text, sheet))
+    calls: list[TracedCall] = []
+    _outcome(lambda: evaluator.evaluate_text(text, sheet, _observing(evaluator, calls)))
+    return Trace(None, text, _precedents(evaluator, text, place), tuple(calls), value, reason)
+
+
+def _observing(evaluator: Evaluator, calls: list[TracedCall]) -> Interpreter:
+    """An interpreter that notes every call; what the formula reads has been computed before."""
 
     def observe(node: Call, arguments: tuple[Argument, ...], result: Value) -> None:
         calls.append(TracedCall(node.name, tuple(map(render, node.arguments)), arguments, result))
 
-    interpreter = evaluator.interpreter(observe)
+    return evaluator.interpreter(observe)
 
-    def again() -> None:
-        calls.clear()
-        evaluator.compute(formula, interpreter)
 
+def _outcome(compute: Callable[[], Value]) -> tuple[Value, str | None]:
     try:
-        evaluator.settle(again)
-    except NotEvaluated:
-        return tuple(calls)
-    return tuple(calls)
-
-
-def _value(evaluator: Evaluator, cell: Cell) -> tuple[Scalar, str | None]:
-    try:
-        return evaluator.value(*cell), None
+        return compute(), None
     except NotEvaluated as reason:
         return None, str(reason)
 
 
-def _precedents(evaluator: Evaluator, formula: Formula) -> tuple[Precedent, ...]:
-    place = Place(formula.cell if formula.fills.is_cell else None, formula.cell.sheet)
+def _precedents(evaluator: Evaluator, text: str, place: Place) -> tuple[Precedent, ...]:
     interpreter = evaluator.interpreter()
     try:
-        nodes = {render(node): node for node in _reading(parse(formula.text))}
+        nodes = {render(node): node for node in _reading(parse(text))}
     except NotEvaluated:
         return ()
     return tuple(_precedent(evaluator, interpreter, label, node, place) for label, node in nodes.items())
@@ -111,12 +107,10 @@ def _precedent(
 ) -> Precedent:
     try:
         operand = evaluator.settle(lambda: interpreter.evaluate(node, place, True))
-    except NotEvaluated as reason:
-        return Precedent(label, "", None, str(reason))
-    try:
-        return Precedent(label, _address(operand), evaluator.settle(lambda: _values(operand)))
-    except NotEvaluated as reason:
-        return Precedent(label, _address(operand), None, str(reason))
+    except NotEvaluated as refusal:
+        return Precedent(label, "", None, str(refusal))
+    value, reason = _outcome(lambda: evaluator.settle(lambda: _values(operand)))
+    return Precedent(label, _address(operand), value, reason)
 
 
 def _values(operand: Operand) -> Value:

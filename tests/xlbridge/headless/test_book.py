@@ -35,7 +35,7 @@ def saved(tmp_path: Path) -> Path:
     sheet["D2"] = ArrayFormula("D2:D4", "=E2:E4*2")
     sheet["F2"] = DataTableFormula("F2:F3", r1="A1")
     sheet["G2"].number_format = "yyyy-mm-dd"
-    sheet["G2"] = -5.5
+    sheet["G2"] = 1e8
     workbook.create_chartsheet("Figure")
     other = workbook.create_sheet("Other")
     other.append(["a", "b"])
@@ -67,7 +67,7 @@ def test_values_are_floats_texts_logicals_and_errors(saved: Path) -> None:
     assert book.sheets == ("Levels", "Other")
     assert book.constants["Levels"] == {
         (1, 1): "Level", (1, 2): "w_x", (1, 3): True, (1, 4): 3.0, (1, 5): 2.5,
-        (2, 1): CellError("#N/A"), (2, 2): 45352.5, (2, 7): -5.5,
+        (2, 1): CellError("#N/A"), (2, 2): 45352.5, (2, 7): 1e8,
     }  # fmt: skip
     assert {type(value) for value in book.constants["Levels"].values()} == {str, bool, float, CellError}
 

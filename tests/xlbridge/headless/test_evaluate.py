@@ -293,6 +293,13 @@ def test_a_cell_that_reads_itself_is_a_cycle(formula: str) -> None:
     assert reason(evaluator({"A1": formula}), "A1") == "circular reference: Main!A1 -> Main!A1"
 
 
+def test_a_cell_on_the_way_to_a_cycle_is_not_named_in_it() -> None:
+    run = evaluator({"A1": "=B1", "B1": "=C1", "C1": "=D1+1", "D1": "=C1"})
+    circle = "circular reference: Main!C1 -> Main!D1 -> Main!C1"
+    assert reason(run, "A1") == f"waits for Main!B1, which waits for Main!C1: {circle}"
+    assert reason(run, "C1") == circle
+
+
 def test_an_array_formula_in_a_cycle_is_named_by_its_first_cell() -> None:
     run = evaluator({"A1": ArrayFormula("A1:A2", "=B1:B2"), "B2": "=A2"})
     assert reason(run, "B2") == "circular reference: Main!B2 -> Main!A1 -> Main!B2"

@@ -9,7 +9,7 @@ from openpyxl.worksheet.formula import ArrayFormula
 
 from xlbridge.headless.book import Book
 from xlbridge.headless.evaluate import Evaluator
-from xlbridge.headless.trace import Precedent, TracedCall, trace
+from xlbridge.headless.trace import Precedent, TracedCall, trace, trace_text
 from xlbridge.values import OMITTED, Argument, Value
 
 
@@ -91,3 +91,27 @@ def test_a_constant_has_only_its_value(run: Evaluator) -> None:
     found = trace(run, "Story table", "A2")
     assert (found.formula, found.precedents, found.calls, found.value) == ("", (), (), 2.0)
     assert trace(run, "Nowhere", "A2").reason == "the workbook has no sheet Nowhere"
+
+
+def test_a_formula_in_no_cell_is_explained_too(run: Evaluator) -> None:
+    found = trace_text(run, "=ELF_SUM(A1,B1)*{1,2}", "Story table")
+    assert found.precedents == (
+        Precedent("A1", "'Story table'!A1", 1.0),
+        Precedent("B1", "'Story table'!B1", 16.5),
+    )
+    assert found.calls == (TracedCall("ELF_SUM", ("A1", "B1"), (1.0, 16.5), 17.5),)
+    assert (found.cell, found.value) == (None, ((17.5, 35.0),))
+    refused = trace_text(run, "=ELF_SUM(1)+NOSUCH()")
+    assert refused.calls == (TracedCall("ELF_SUM", ("1",), (1.0,), 1.0),)
+    assert refused.reason is not None
+    assert trace_text(Evaluator(None, {}), "=1+").reason is not None
+
+
+def test_each_call_is_noted_once_where_a_cell_was_not_computed_before() -> None:
+    workbook = Workbook()
+    sheet = workbook.active
+    sheet["A1"], sheet["A2"], sheet["A3"] = 1, "=A1+1", 4
+    run = Evaluator(Book.of(workbook), {"ELF_SUM": _sum})
+    found = trace_text(run, "=ELF_SUM(1)+SUM(A1:INDEX(A3,1))", "Sheet")
+    assert [call.result for call in found.calls] == [1.0]
+    assert found.value == 8.0
