@@ -7,6 +7,8 @@ from pathlib import Path
 import pytest
 from openpyxl import Workbook, load_workbook
 
+from tests.conftest import require_office
+from tests.support import office as offices
 from tests.support.office import Office, OfficeError
 from xlbridge.values import CellError
 
@@ -71,3 +73,13 @@ def test_ending_leaves_no_process(office: Office) -> None:
         assert process.exists() or not Path("/proc").exists()
         assert second.version == office.version
     assert not process.exists()
+
+
+def test_without_an_office_tests_are_skipped_or_fail(monkeypatch: pytest.MonkeyPatch) -> None:
+    monkeypatch.setattr(offices, "installation", lambda: None)
+    monkeypatch.delenv(offices.REQUIRED, raising=False)
+    with pytest.raises(pytest.skip.Exception, match="LibreOffice"):
+        require_office()
+    monkeypatch.setenv(offices.REQUIRED, "1")
+    with pytest.raises(pytest.fail.Exception, match="LibreOffice"):
+        require_office()
