@@ -8,10 +8,10 @@ nothing that is not finite reaches a cell. Every error carries its reason in wor
 
 from __future__ import annotations
 
-from collections.abc import Mapping, Sequence
-from itertools import chain, product
+from collections.abc import Callable, Iterable, Mapping, Sequence
+from itertools import chain
 from math import isfinite
-from typing import Any
+from typing import Any, TypeAlias
 
 import numpy as np
 
@@ -22,27 +22,28 @@ from xlbridge.values import OMITTED, Argument, CellError, Grid, Omitted, Scalar,
 
 _NUMBER = frozenset({float, int})
 
+_Given: TypeAlias = tuple[Declared, Argument]
+
 
 def call(entry: SheetFunction, arguments: Sequence[Argument]) -> Value:
-    """Return the function's value for the cells given, or a :class:`CellError` that says why not."""
+    """Return the function's value for the cells given, or a :class:`CellError` that says why not.
+
+    Ranges for arguments that are no level ranges give one cell each, whatever fails: a cell left blank
+    would count as 0 wherever another formula takes it up.
+    """
     if len(arguments) > len(entry.arguments):
         return CellError("#VALUE!", f"{entry.usage}: {len(arguments)} arguments are too many")
     padded = (*arguments, *(OMITTED,) * (len(entry.arguments) - len(arguments)))
     given = list(zip(entry.arguments, padded, strict=True))
     try:
         return _result(entry, given)
-    except _Through as passed:
-        return passed.error
     except EngineError as error:
-        return _cell_error(entry, error)
+        return _failed(entry, given, error)
 
 
-def _result(entry: SheetFunction, given: list[tuple[Declared, Argument]]) -> Value:
-    for _, value in given:
-        if type(value) is CellError:
-            raise _Through(value)
-    whole = _levels([(a, v) for a, v in given if a.kind is Kind.LEVELS])
+def _result(entry: SheetFunction, given: Sequence[_Given]) -> Value:
     single = {a.name: (a, v) for a, v in given if a.kind is not Kind.LEVELS and not _left_out(a, v)}
+    whole = _levels([(a, v) for a, v in given if a.kind is Kind.LEVELS])
     if any(isinstance(v, tuple) for _, v in single.values()):
         return _over_cells(entry, single, whole)
     return _one(entry, single, whole)
@@ -56,54 +57,96 @@ def _left_out(declared: Declared, value: Argument) -> bool:
     return True
 
 
-def _one(entry: SheetFunction, single: Mapping[str, Any], whole: Mapping[str, Any]) -> Scalar:
+def _one(entry: SheetFunction, single: Mapping[str, _Given], whole: Mapping[str, Any]) -> Scalar:
     """One call with one value for each argument that is not a level range."""
-    found = entry.function(**{n: _scalar(a, v) for n, (a, v) in single.items()}, **whole)
+    found = _compute(entry, {n: _scalar(a, v) for n, (a, v) in single.items()}, whole)
     return found if entry.is_text else _finite(entry, float(found))
 
 
-def _over_cells(entry: SheetFunction, single: Mapping[str, Any], whole: Mapping[str, Any]) -> Grid:
+def _compute(entry: SheetFunction, single: Mapping[str, Any], whole: Mapping[str, Any]) -> Any:
+    """Call the formula; numbers that float arithmetic cannot hold are refused, never carried on."""
+    try:
+        with np.errstate(over="raise", divide="raise", invalid="raise"):
+            return entry.function(**single, **whole)
+    except (FloatingPointError, OverflowError):
+        raise ImpossibleValue(
+            entry.result.symbol,
+            "out of reach",
+            "the numbers given are too large or too small",
+        ) from None
+
+
+def _over_cells(entry: SheetFunction, single: Mapping[str, _Given], whole: Mapping[str, Any]) -> Grid:
     """One result a cell: all at once where every cell is good, else cell by cell."""
-    rows, columns = _shape(entry, [v for _, v in single.values() if isinstance(v, tuple)])
+    rows, columns = _shape(entry, _grids(single.values()))
     if not entry.is_text:
         try:
             arrays = {n: _array(a, v, rows, columns) for n, (a, v) in single.items()}
-            found = np.broadcast_to(entry.function(**arrays, **whole), rows * columns)
+            found = np.broadcast_to(_compute(entry, arrays, whole), rows * columns)
             if np.isfinite(found).all():
                 return tuple(tuple(row) for row in found.reshape(rows, columns).tolist())
-        except (EngineError, _Through):
+        except EngineError:
             pass  # some cell is bad: the cells that are good shall keep their values
-    cells = [_cell(entry, single, whole, i, j) for i, j in product(range(rows), range(columns))]
-    return tuple(tuple(cells[i * columns : (i + 1) * columns]) for i in range(rows))
+    return _mapped(rows, columns, lambda i, j: _cell(entry, _at_cell(single, i, j), whole))
 
 
-def _cell(
-    entry: SheetFunction, single: Mapping[str, Any], whole: Mapping[str, Any], i: int, j: int
-) -> Scalar:
+def _cell(entry: SheetFunction, single: Mapping[str, _Given], whole: Mapping[str, Any]) -> Scalar:
     try:
-        return _one(entry, {n: (a, _at(v, i, j)) for n, (a, v) in single.items()}, whole)
-    except _Through as passed:
-        return passed.error
+        return _one(entry, single, whole)
     except EngineError as error:
-        return _cell_error(entry, error)
+        return _cell_error(entry, single.values(), error)
+
+
+def _failed(entry: SheetFunction, given: Sequence[_Given], error: EngineError) -> Value:
+    """The error of a call that fails as a whole, in every cell of the result."""
+    grids = _grids(given)
+    if not grids:
+        return _cell_error(entry, given, error)
+    named = {a.name: (a, v) for a, v in given}
+    rows, columns = max(len(g) for g in grids), max(len(g[0]) for g in grids)
+    return _mapped(rows, columns, lambda i, j: _cell_error(entry, _at_cell(named, i, j).values(), error))
+
+
+def _cell_error(entry: SheetFunction, given: Iterable[_Given], error: EngineError) -> CellError:
+    """The first error value among the arguments as it came, or else the refusal."""
+    for _, value in given:
+        for cell in chain.from_iterable(value) if isinstance(value, tuple) else (value,):
+            if isinstance(cell, CellError):
+                return cell
+    return CellError(error.cell_code, f"{entry.name}: {error}")
+
+
+def _grids(given: Iterable[_Given]) -> list[Grid]:
+    """The ranges that give one result a cell."""
+    return [v for a, v in given if a.kind is not Kind.LEVELS and isinstance(v, tuple)]
 
 
 def _shape(entry: SheetFunction, grids: list[Grid]) -> tuple[int, int]:
     try:
-        return np.broadcast_shapes(*((len(g), len(g[0])) for g in grids))
+        rows, columns = np.broadcast_shapes(*((len(g), len(g[0])) for g in grids))
     except ValueError:
         sizes = " and ".join(f"{len(g)} x {len(g[0])}" for g in grids)
         raise WrongType(entry.name, sizes, "the ranges do not have the same shape") from None
+    return rows, columns
 
 
-def _at(value: Value, i: int, j: int) -> Scalar:
+def _mapped(rows: int, columns: int, compute: Callable[[int, int], Scalar]) -> Grid:
+    return tuple(tuple(compute(i, j) for j in range(columns)) for i in range(rows))
+
+
+def _at_cell(given: Mapping[str, _Given], i: int, j: int) -> dict[str, _Given]:
+    """The arguments of one cell of the result: level ranges whole, a single row or column repeated."""
+    return {n: (a, v if a.kind is Kind.LEVELS else _at(v, i, j)) for n, (a, v) in given.items()}
+
+
+def _at(value: Argument, i: int, j: int) -> Argument:
     if not isinstance(value, tuple):
         return value
-    row = value[i if len(value) > 1 else 0]
-    return row[j if len(row) > 1 else 0]
+    row = value[min(i, len(value) - 1)]
+    return row[min(j, len(row) - 1)]
 
 
-def _array(declared: Declared, value: Value, rows: int, columns: int) -> Any:
+def _array(declared: Declared, value: Argument, rows: int, columns: int) -> Any:
     if not isinstance(value, tuple):
         return _scalar(declared, value)
     numbers = [[_scalar(declared, cell) for cell in row] for row in value]
@@ -114,14 +157,13 @@ def _array(declared: Declared, value: Value, rows: int, columns: int) -> Any:
 
 def _scalar(declared: Declared, cell: Any) -> Any:
     kind = type(cell)
-    if kind is CellError:
-        raise _Through(cell)
     if declared.kind is Kind.CHOICE:
         if kind is str and cell:
             return cell
-        words = f"one of {', '.join(declared.choices)}"
-        error = WrongType if cell is not None and cell != "" else MissingValue
-        raise error(declared.symbol, cell or None, f"must be text, {words}")
+        words = f"must be text, one of {', '.join(declared.choices)}"
+        if cell is None or cell == "":
+            raise MissingValue(declared.symbol, None, words)
+        raise WrongType(declared.symbol, cell, words)
     if kind in _NUMBER:
         return cell
     raise _not_a_number(declared.symbol, cell)
@@ -156,8 +198,6 @@ def _refuse_level(ranges: list[Declared], columns: list[Sequence[Scalar]]) -> No
     """Raise for the first cell that is no number in a row that is not all blank."""
     for n, row in enumerate(zip(*columns, strict=True), 1):
         for declared, cell in zip(ranges, row, strict=True):
-            if isinstance(cell, CellError):
-                raise _Through(cell)
             if type(cell) not in _NUMBER and row.count(None) < len(row):
                 raise _not_a_number(f"{declared.symbol} in row {n} of its range", cell)
 
@@ -180,14 +220,3 @@ def _finite(entry: SheetFunction, number: float) -> float:
     if not isfinite(number):
         raise ImpossibleValue(entry.result.symbol, number, "the result is not a finite number")
     return number
-
-
-def _cell_error(entry: SheetFunction, error: EngineError) -> CellError:
-    return CellError(error.cell_code, f"{entry.name}: {error}")
-
-
-class _Through(Exception):
-    """An error value found in an argument, on its way to the cell."""
-
-    def __init__(self, error: CellError) -> None:
-        self.error = error

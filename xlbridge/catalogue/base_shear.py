@@ -4,7 +4,7 @@ from __future__ import annotations
 
 from engine import base_shear
 from xlbridge.catalogue.common import S_1, S_D1, S_DS, T_L, I_e, R, T, edition
-from xlbridge.catalogue.entry import NOT_NEGATIVE, POSITIVE, Argument, Example, Result, SheetFunction, Term
+from xlbridge.catalogue.entry import POSITIVE, Argument, Example, Result, SheetFunction, Term
 
 _CAP = "{S_D1}*IF({T}<={T_L},1,{T_L}/{T})/({T}*({R}/{I_e}))"
 _PLATEAU = "{S_DS}/({R}/{I_e})"
@@ -110,7 +110,7 @@ FUNCTIONS = (
         rule="V",
         arguments=(
             Argument("C_s", "none", "Seismic response coefficient", POSITIVE),
-            Argument("W", "force", "Effective seismic weight of the building", NOT_NEGATIVE),
+            Argument("W", "force", "Effective seismic weight of the building", POSITIVE),
         ),
         result=Result("V", "force", "base shear"),
         function=base_shear.base_shear,

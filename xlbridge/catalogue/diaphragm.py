@@ -32,8 +32,8 @@ FUNCTIONS = (
         function=diaphragm.design_force,
         expression=_EXPRESSION,
         native=(
-            f"MIN(MAX(SUMPRODUCT({_ABOVE}*{{forces}})/SUMPRODUCT({_ABOVE}*{{weights}})*{{w_px}},"
-            "0.2*{S_DS}*{I_e}*{w_px}),0.4*{S_DS}*{I_e}*{w_px})"
+            f"IF({{w_px}}=0,0,MIN(MAX(SUMPRODUCT({_ABOVE}*{{forces}})/SUMPRODUCT({_ABOVE}*{{weights}})*{{w_px}},"
+            "0.2*{S_DS}*{I_e}*{w_px}),0.4*{S_DS}*{I_e}*{w_px}))"
         ),
         example=Example(_EXAMPLE, "78.0"),
         terms=(_RAW,),

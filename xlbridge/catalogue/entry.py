@@ -25,18 +25,20 @@ class Span:
     low: float | None = None
     high: float | None = None
     low_open: bool = False
+    high_open: bool = False
 
     def __str__(self) -> str:
         ends = []
         if self.low is not None:
             ends.append(f"{'above' if self.low_open else 'at least'} {self.low:g}")
         if self.high is not None:
-            ends.append(f"at most {self.high:g}")
+            ends.append(f"{'below' if self.high_open else 'at most'} {self.high:g}")
         return " and ".join(ends) or "any number"
 
     def __contains__(self, number: float) -> bool:
         above_low = self.low is None or number > self.low or (number == self.low and not self.low_open)
-        return above_low and (self.high is None or number <= self.high)
+        below_high = self.high is None or number < self.high or (number == self.high and not self.high_open)
+        return above_low and below_high
 
 
 ANY = Span()

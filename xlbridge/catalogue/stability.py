@@ -83,7 +83,7 @@ FUNCTIONS = (
         summary="Amplification of drifts and forces for P-delta: 1/(1 - theta) above 0.10, else 1.",
         category="Stability",
         rule="theta_amplifier",
-        arguments=(theta,),
+        arguments=(replace(theta, span=Span(0, 1, high_open=True)),),
         result=Result("a_theta", "none", "P-delta amplification"),
         function=stability.second_order_factor,
         expression="1 where {theta} ≤ 0.10, else 1/(1 - {theta})",

@@ -6,6 +6,7 @@ from engine import vertical
 from xlbridge.catalogue.common import T, forces, h_at, h_x, heights, k, weights
 from xlbridge.catalogue.entry import (
     NOT_NEGATIVE,
+    POSITIVE,
     Argument,
     Example,
     Kind,
@@ -14,7 +15,7 @@ from xlbridge.catalogue.entry import (
     Span,
 )
 
-V = Argument("V", "force", "Base shear", NOT_NEGATIVE)
+V = Argument("V", "force", "Base shear", POSITIVE)
 values = Argument("values", "displacement", "Values at all levels", kind=Kind.LEVELS, symbol="d_i")
 
 FUNCTIONS = (

@@ -171,7 +171,7 @@ def ELF_CS_GOVERNS(S_DS: Any, S_D1: Any, S_1: Any, T: Any, T_L: Any, R: Any, I_e
 
 @xw.func(category="Storyledger: Base shear")
 @xw.arg("C_s", "raw", doc="Seismic response coefficient [no unit], above 0.")
-@xw.arg("W", "raw", doc="Effective seismic weight of the building [a force unit], at least 0.")
+@xw.arg("W", "raw", doc="Effective seismic weight of the building [a force unit], above 0.")
 @xw.ret("raw")
 def ELF_V(C_s: Any, W: Any) -> Any:
     """Seismic base shear. ASCE/SEI 7-16: 12.8.1, Eq. 12.8-1; 7-22: 12.8.1, Eq. 12.8-1."""
@@ -206,7 +206,7 @@ def ELF_CVX(w_x: Any, h_x: Any, weights: Any, heights: Any, k: Any) -> Any:
 
 
 @xw.func(category="Storyledger: Vertical distribution")
-@xw.arg("V", "raw", doc="Base shear [a force unit], at least 0.")
+@xw.arg("V", "raw", doc="Base shear [a force unit], above 0.")
 @xw.arg("C_vx", "raw", doc="Vertical distribution factor [no unit], at least 0 and at most 1.")
 @xw.ret("raw")
 def ELF_FX(V: Any, C_vx: Any) -> Any:
@@ -306,13 +306,13 @@ def ELF_DRIFT(d_upper: Any, d_lower: Any, C_d: Any, I_e: Any) -> Any:
 @xw.arg(
     "structure",
     "raw",
-    doc="Row of the allowable drift table: low-rise, detailed finishes, masonry cantilever wall, masonry wall, all other.",
+    doc="Row of the allowable drift table: low-rise with detailed finishes, masonry cantilever wall, masonry wall, all other.",
 )
 @xw.arg("risk_category", "raw", doc="Risk category: I, II, III, IV.")
 @xw.arg(
     "rho",
     "raw",
-    doc="Redundancy factor, for moment-frame systems in SDC D to F; 1 if left out [no unit], at least 1 and at most 1.3.",
+    doc="Redundancy factor, for moment-frame systems in SDC D to F; 1 if left out [no unit], at least 1.",
 )
 @xw.ret("raw")
 def ELF_DRIFT_LIMIT(h_sx: Any, structure: Any, risk_category: Any, rho: Any = OMITTED) -> Any:
@@ -363,7 +363,7 @@ def ELF_THETA_MAX(C_d: Any, beta: Any = OMITTED) -> Any:
 
 
 @xw.func(category="Storyledger: Stability")
-@xw.arg("theta", "raw", doc="Stability coefficient [no unit], at least 0.")
+@xw.arg("theta", "raw", doc="Stability coefficient [no unit], at least 0 and below 1.")
 @xw.ret("raw")
 def ELF_PDELTA_FACTOR(theta: Any) -> Any:
     """Amplification of drifts and forces for P-delta: 1/(1 - theta) above 0.10, else 1. ASCE/SEI 7-16: 12.8.7; 7-22: 12.8.7. Partly from memory: confirm."""
