@@ -195,3 +195,8 @@ def test_a_missing_file_and_a_folder_are_refused(tmp_path: Path) -> None:
         Book.open(tmp_path / "none.xlsx")
     with pytest.raises(BookError, match="folder"):
         Book.open(tmp_path)
+
+
+def test_a_name_of_a_chart_sheet_is_nobodys(saved: Path) -> None:
+    book = Book.open(_rewritten(saved, "xl/workbook.xml", 'localSheetId="2"', 'localSheetId="1"'))
+    assert book.names == {(None, "s_ds"): "Levels!$E$1"}
