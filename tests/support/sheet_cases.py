@@ -1,0 +1,192 @@
+"""Arguments for every worksheet function, made from the catalogue: examples, edges of spans, random calls.
+
+A call is a mapping from argument name to a number, a word, or the list of a level range. What arguments
+say together (a level's height and weight, a diaphragm not heavier than its level) is settled here once.
+"""
+
+from __future__ import annotations
+
+from collections.abc import Iterator, Mapping, Sequence
+from random import Random
+from typing import Any
+
+from xlbridge.catalogue import CATALOGUE
+from xlbridge.catalogue.entry import Argument, Kind, SheetFunction
+from xlbridge.values import OMITTED, Grid
+
+ENTRIES = tuple(CATALOGUE.values())
+PLACES = tuple((entry, argument) for entry in ENTRIES for argument in entry.arguments)
+#: a step across the end of a span, far below any value and far above round-off
+STEP = 1e-6
+FAR = 1e6
+#: what a random number of a unit lies between, inside its span
+USUAL = {
+    "none": (0.0, 10.0),
+    "time": (0.02, 12.0),
+    "acceleration": (0.02, 3.0),
+    "length": (3.0, 900.0),
+    "displacement": (0.01, 200.0),
+    "force": (0.5, 50_000.0),
+}
+#: values at which a rule changes its branch, and printed rows of tables
+BRANCHES = {
+    "T": (0.5, 2.5, 8.0, 0.6),
+    "T_L": (8.0, 0.6),
+    "S_1": (0.0, 0.6, 0.59999),
+    "S_D1": (0.1, 0.15, 0.2, 0.3, 0.4, 0.6),
+    "S_DS": (1.0, 0.01 / 0.044),
+    "theta": (0.0, 0.1, 0.1 + 1e-9),
+    "Omega_0": (1.0, 1.25),
+}
+
+
+def ident(value: object) -> str:
+    """A test id for an entry or an argument."""
+    return str(getattr(value, "name", value))
+
+
+def column(cells: Sequence[Any]) -> Grid:
+    """A range of one column."""
+    return tuple((cell,) for cell in cells)
+
+
+def example(entry: SheetFunction) -> dict[str, Any]:
+    """The example's call, numbers as floats."""
+    return {name: _floats(value) for name, value in entry.example.arguments.items()}
+
+
+def as_cells(entry: SheetFunction, call: Mapping[str, Any]) -> list[Any]:
+    """A call as the adapter takes it: level ranges as columns, what is not in it left out."""
+    given = [call.get(argument.name, OMITTED) for argument in entry.arguments]
+    return [column(value) if isinstance(value, list) else value for value in given]
+
+
+def with_cell(entry: SheetFunction, argument: Argument, cell: Any) -> list[Any]:
+    """The example with another cell in one argument; of a level range, in its last row."""
+    call = full(entry)
+    value = call[argument.name]
+    call[argument.name] = [*value[:-1], cell] if isinstance(value, list) else cell
+    return as_cells(entry, call)
+
+
+def full(entry: SheetFunction) -> dict[str, Any]:
+    """The example with every optional argument given at its default."""
+    return {**entry.defaults, **example(entry)}
+
+
+def inside(argument: Argument) -> list[float]:
+    """Numbers at and just within the ends of a span, and far out where it has no end."""
+    span, step = argument.span, _step(argument)
+    low = [-FAR, 0.0] if span.low is None else [span.low, span.low + step]
+    high = [FAR] if span.high is None else [span.high - step, span.high]
+    return [float(number) for number in (*low, *high) if number in span]
+
+
+def outside(argument: Argument) -> list[float]:
+    """Numbers at an open end and just beyond each end of a span."""
+    span, step = argument.span, _step(argument)
+    low = [] if span.low is None else [span.low, span.low - step, -FAR]
+    high = [] if span.high is None else [span.high, span.high + step, FAR]
+    return [float(number) for number in (*low, *high) if number not in span]
+
+
+def placed(entry: SheetFunction, name: str, number: float) -> dict[str, Any]:
+    """The example with one number changed, and with it what has to follow for the call to make sense."""
+    call = full(entry)
+    at = call["heights"].index(call["h_x"]) if {"heights", "h_x"} <= call.keys() else 0
+    if isinstance(call[name], list):
+        call[name][at - 1] = number  # never the level that is asked for
+        return call
+    call[name] = number
+    if number > 0 and name == "h_x":
+        call["heights"][at] = number
+    if number >= 0 and name in ("w_x", "w_px"):
+        call["weights"][at] = number
+    if number > 0 and name in ("d_max", "d_avg"):
+        other = "d_avg" if name == "d_max" else "d_max"
+        call[other] = (min if name == "d_max" else max)(call[other], number)
+    return call
+
+
+def random_calls(entry: SheetFunction, count: int, seed: int) -> Iterator[dict[str, Any]]:
+    """Valid calls: the example, each number at the ends of its span, then random ones."""
+    calls = [full(entry)]
+    for argument in entry.arguments:
+        if argument.kind is Kind.NUMBER:
+            calls += [placed(entry, argument.name, number) for number in inside(argument)]
+    yield from calls
+    random = Random(seed)
+    for _ in range(count - len(calls)):
+        yield random_call(entry, random)
+
+
+def random_call(entry: SheetFunction, random: Random) -> dict[str, Any]:
+    """One valid call."""
+    levels = random_levels(random)
+    at = random.randrange(len(levels["heights"]))
+    call: dict[str, Any] = {}
+    for argument in entry.arguments:
+        if argument.kind is Kind.LEVELS:
+            call[argument.name] = levels[argument.name]
+        elif argument.kind is Kind.CHOICE:
+            call[argument.name] = random.choice(argument.choices)
+        else:
+            call[argument.name] = random_number(argument, random)
+    _settle(call, levels, at, random)
+    return call
+
+
+def random_levels(random: Random, most: int = 8) -> dict[str, list[float]]:
+    """Levels in any order, at times two at one height or one without weight; forces of the upper kind."""
+    count = random.randint(1, most)
+    heights = [random.uniform(2.0, 20.0)]
+    while len(heights) < count:
+        heights.append(heights[-1] + random.choice((0.0, *[random.uniform(2.0, 20.0)] * 9)))
+    weights = [random.choice((0.0, *[random.uniform(1.0, 5000.0)] * 9)) for _ in heights]
+    weights[random.randrange(count)] = random.uniform(1.0, 5000.0)
+    rows = list(zip(heights, weights, [random.uniform(-5.0, 500.0) for _ in heights], strict=True))
+    random.shuffle(rows)
+    values = {height: random.uniform(-9.0, 9.0) for height in heights}
+    return {
+        "heights": [height for height, _, _ in rows],
+        "weights": [weight for _, weight, _ in rows],
+        "forces": [force for _, _, force in rows],
+        "values": [values[height] for height, _, _ in rows],
+    }
+
+
+def random_number(argument: Argument, random: Random) -> float:
+    """A number of the argument's span: usual ones, and at times one at which a branch changes."""
+    span = argument.span
+    usual = USUAL[argument.unit]
+    low = usual[0] if span.low is None else max(span.low, usual[0])
+    high = usual[1] if span.high is None else span.high
+    if argument.name == "N":
+        return float(random.randint(int(low), int(high)))
+    edges = [number for number in BRANCHES.get(argument.name, ()) if number in span]
+    if edges and random.random() < 0.3:
+        return random.choice(edges)
+    number = random.uniform(low, high)
+    return number if number in span else low + STEP
+
+
+def _settle(call: dict[str, Any], levels: Mapping[str, list[float]], at: int, random: Random) -> None:
+    """Make the arguments that speak of one level speak of the same one."""
+    if "h_x" in call:
+        call["h_x"] = levels["heights"][at]
+    if "w_x" in call:
+        call["w_x"] = levels["weights"][at]
+    if "w_px" in call:
+        call["w_px"] = levels["weights"][at] * random.choice((1.0, 1.0, 0.5, 0.0))
+    if {"d_max", "d_avg"} <= call.keys():
+        call["d_max"] = call["d_avg"] * random.uniform(1.0, 2.5)
+
+
+def _step(argument: Argument) -> float:
+    return 1.0 if argument.name == "N" else STEP
+
+
+def _floats(value: Any) -> Any:
+    if isinstance(value, list):
+        return [float(number) for number in value]
+    return float(value) if isinstance(value, int) else value
