@@ -164,6 +164,8 @@ def test_a_reference_is_needed() -> None:
         ("INDEX", (NUMBERS, 1.0, 1.0, 2.0), "union"),
         ("ADDRESS", (1.0, 1.0, 1.0, False), "R1C1"),
         ("LARGE", (NUMBERS, 1.5), "rounds"),
+        ("COUNTIF", (NUMBERS, NA), "error value as criterion"),
+        ("SWITCH", (1.0, lambda: ((1.0, 2.0),), lambda: 1.0), "array as a case"),
         ("TEXT", (1.0, "0;-0"), "number format"),
         ("TEXT", (1.0, "[Red]0"), "number format"),
         ("TEXT", (1.0, "h:mm"), "number format"),
@@ -255,6 +257,14 @@ def test_sums_do_not_depend_on_order() -> None:
     values = [0.1 * n for n in range(60)] + [1e9, -1e9]
     grids = [(tuple(values),), (tuple(reversed(values)),)]
     assert call("SUM", grids[0]) == call("SUM", grids[1]) == math.fsum(values)
+
+
+@pytest.mark.parametrize(
+    ("name", "operands"),
+    [("ROUND", (-0.4, 0.0)), ("QUOTIENT", (-1.0, 2.0)), ("CEILING", (-0.5, 1.0)), ("SUM", (-0.0,))],
+)
+def test_there_is_no_negative_zero(name: str, operands: tuple[float, ...]) -> None:
+    assert math.copysign(1.0, call(name, *operands)) == 1.0  # type: ignore[arg-type]
 
 
 def test_overflow_is_an_error() -> None:

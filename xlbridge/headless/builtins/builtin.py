@@ -69,9 +69,11 @@ def _apply(builtin: Builtin, kinds: str, arguments: Sequence[Operand | Lazy]) ->
         raise Fault("#DIV/0!", f"{builtin.name}: division by zero") from None
     except OverflowError:
         raise Fault("#NUM!", f"{builtin.name}: the result is too large") from None
-    if type(result) is float and not math.isfinite(result):
+    if type(result) is not float:
+        return result
+    if not math.isfinite(result):
         raise Fault("#NUM!", f"{builtin.name}: the result is too large")
-    return result
+    return result + 0.0  # a spreadsheet has no negative zero
 
 
 def _spread(builtin: Builtin, kinds: str, arguments: Sequence[Operand | Lazy]) -> Grid:

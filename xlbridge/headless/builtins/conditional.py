@@ -70,12 +70,12 @@ def _countif(*conditions: Operand) -> float:
 
 
 FUNCTIONS: Final = (
-    Builtin("COUNTIF", "as", _countif),
-    Builtin("COUNTIFS", _PAIRS, _countif, 2),
-    Builtin("SUMIF", "asa", _one(math.fsum), 2),
-    Builtin("SUMIFS", "a" + _PAIRS, _many(math.fsum), 3),
-    Builtin("AVERAGEIF", "asa", _one(_mean), 2),
-    Builtin("AVERAGEIFS", "a" + _PAIRS, _many(_mean), 3),
-    Builtin("MINIFS", "a" + _PAIRS, _many(lambda values: min(values, default=0.0)), 3),
-    Builtin("MAXIFS", "a" + _PAIRS, _many(lambda values: max(values, default=0.0)), 3),
+    Builtin("COUNTIF", "as", _countif, catches=True),
+    Builtin("COUNTIFS", _PAIRS, _countif, 2, catches=True),
+    Builtin("SUMIF", "asa", _one(math.fsum), 2, catches=True),
+    Builtin("SUMIFS", "a" + _PAIRS, _many(math.fsum), 3, catches=True),
+    Builtin("AVERAGEIF", "asa", _one(_mean), 2, catches=True),
+    Builtin("AVERAGEIFS", "a" + _PAIRS, _many(_mean), 3, catches=True),
+    Builtin("MINIFS", "a" + _PAIRS, _many(lambda values: min(values, default=0.0)), 3, catches=True),
+    Builtin("MAXIFS", "a" + _PAIRS, _many(lambda values: max(values, default=0.0)), 3, catches=True),
 )

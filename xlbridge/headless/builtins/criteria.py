@@ -13,6 +13,7 @@ from functools import lru_cache
 from typing import Final, TypeAlias
 
 from xlbridge.headless.coercion import parse_number
+from xlbridge.headless.operands import NotEvaluated
 from xlbridge.values import ERROR_CODES, CellError, Scalar
 
 Test: TypeAlias = Callable[[Scalar], bool]
@@ -27,6 +28,8 @@ _HOLDS: Final[dict[str, Callable[[int], bool]]] = {
 
 def criterion(value: Scalar) -> Test:
     """Return the test a criterion stands for; a blank cell as criterion means 0."""
+    if isinstance(value, CellError):
+        raise NotEvaluated("an error value as criterion")
     if isinstance(value, str):
         return _written(value)
     wanted = 0.0 if value is None else value

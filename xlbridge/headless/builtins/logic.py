@@ -6,7 +6,7 @@ from typing import Final
 
 from xlbridge.headless.builtins.builtin import Builtin, Lazy, invoke
 from xlbridge.headless.coercion import Fault, logical, plain
-from xlbridge.headless.operands import Area, Operand
+from xlbridge.headless.operands import Area, NotEvaluated, Operand
 from xlbridge.headless.operators import compare
 from xlbridge.values import CellError, Omitted, Scalar
 
@@ -44,7 +44,9 @@ def _switch(value: Scalar, *cases: Lazy) -> Operand:
         wanted = plain(case())
         if isinstance(wanted, CellError):
             raise Fault(wanted)
-        if not isinstance(wanted, tuple) and compare(value, wanted) == 0:
+        if isinstance(wanted, tuple):
+            raise NotEvaluated("an array as a case of SWITCH")
+        if compare(value, wanted) == 0:
             return _chosen(then)
     if len(cases) % 2:
         return _chosen(cases[-1])

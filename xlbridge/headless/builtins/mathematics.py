@@ -43,6 +43,10 @@ def _mod(value: float, divisor: float) -> float:
     return 0.0 if nearly_equal(value, multiple) else value - multiple
 
 
+def _quotient(value: float, divisor: float) -> float:
+    return math.copysign(floor(abs(value / divisor)), value / divisor)
+
+
 def _factorial(value: float) -> float:
     if value < 0.0:
         raise Fault("#NUM!", "FACT of a negative number")
@@ -72,7 +76,7 @@ FUNCTIONS: Final = (
     Builtin("LOG", "nn", _log, 1),
     Builtin("POWER", "nn", power),
     Builtin("MOD", "nn", _mod),
-    Builtin("QUOTIENT", "nn", lambda value, divisor: float(math.trunc(value / divisor))),
+    Builtin("QUOTIENT", "nn", _quotient),
     Builtin("PI", "", lambda: math.pi),
     Builtin("RADIANS", "n", math.radians),
     Builtin("DEGREES", "n", math.degrees),
