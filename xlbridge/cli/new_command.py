@@ -42,7 +42,6 @@ def command(
         given = _given(building)
     else:
         given = {"edition": edition or DEFAULT_EDITION, "units": units or DEFAULT_UNITS}
-    refuse_existing(book, force)
     write_workbook(given, book, levels or DEFAULT_LEVELS, force)
     click.echo(f"{book}: made for ASCE/SEI {given['edition']}, units {given['units']}")
 
