@@ -1,12 +1,13 @@
 """From one kind of cell value to another, as a spreadsheet does it by context.
 
 A blank is 0, "" or FALSE; a text that is a number counts as that number in arithmetic; an error ends the
-evaluation of whatever it enters. Text whose number depends on the user's settings (dates, currencies,
-decimal commas) is refused rather than guessed.
+evaluation of whatever it enters. Text whose number depends on the user's settings (dates, currencies) is
+refused rather than guessed.
 """
 
 from __future__ import annotations
 
+import math
 import re
 from decimal import Decimal
 from typing import Final
@@ -18,13 +19,15 @@ from xlbridge.values import CellError, Grid, Omitted, Scalar
 #: two numbers that agree to fifteen digits are equal to a spreadsheet, and their difference is zero.
 FIFTEEN_DIGITS: Final = 2.0**-48
 
-_NUMBER: Final = re.compile(r"\s*[-+]?(\d{1,3}(,\d{3})+|\d+)?(\.\d*)?(E[-+]?\d+)?\s*%?\s*", re.IGNORECASE)
-_ISO_DATE: Final = re.compile(r"\s*(\d{4})-(\d{1,2})-(\d{1,2})\s*")
+_NUMBER: Final = re.compile(
+    r"\s*[-+]?(?:(?:\d{1,3}(?:,\d{3})+|\d+)(?:\.\d*)?|\.\d+)(?:E[-+]?\d+)?\s*%?\s*", re.IGNORECASE | re.ASCII
+)
+_ISO_DATE: Final = re.compile(r"\s*(\d{4})-(\d{1,2})-(\d{1,2})\s*", re.ASCII)
 _SIGNS: Final = r"[\s\d/:.,$€£¥()%+-]*"
 _MONTHS: Final = "jan|feb|mar|apr|may|jun|jul|aug|sep|oct|nov|dec|january|february|march|april|june|july"
 _BY_SETTINGS: Final = re.compile(
     rf"(?=.*\d){_SIGNS}(?:(?: am| pm| a| p|{_MONTHS}|august|september|october|november|december){_SIGNS})?",
-    re.IGNORECASE,
+    re.IGNORECASE | re.ASCII,
 )
 
 
@@ -82,10 +85,14 @@ def logical(value: Scalar) -> bool:
 
 
 def parse_number(words: str) -> float | None:
-    """Return the number a text spells in every setting, or None; refuse one that depends on settings."""
-    if _NUMBER.fullmatch(words) and any(sign.isdigit() for sign in words):
+    """Return the number a text spells (point for decimals, comma for thousands), or None.
+
+    Refuse a text that is a number, a date or neither depending on the user's settings.
+    """
+    if _NUMBER.fullmatch(words):
         digits = words.strip().replace(",", "")
-        return float(digits[:-1]) / 100.0 if digits.endswith("%") else float(digits)
+        found = float(digits[:-1]) / 100.0 if digits.endswith("%") else float(digits)
+        return found if math.isfinite(found) else None
     if iso := _ISO_DATE.fullmatch(words):
         return day_number(*map(int, iso.groups()))
     if _BY_SETTINGS.fullmatch(words):

@@ -73,10 +73,36 @@ def test_text_that_depends_on_settings_is_refused(words: str) -> None:
 
 
 @pytest.mark.parametrize(
-    "words", ["2nd", "Level 3", "B1", "", " ", "-", "10F", "nan", "inf", "1_000", "3rd floor"]
+    "words",
+    [
+        "2nd",
+        "Level 3",
+        "B1",
+        "",
+        " ",
+        "-",
+        "10F",
+        "nan",
+        "inf",
+        "1_000",
+        "3rd floor",
+        "E5",
+        ".E5",
+        "1E400",
+        "1\u00a0",
+    ],
 )
 def test_text_that_is_no_number_anywhere(words: str) -> None:
     assert parse_number(words) is None
+
+
+@given(st.text("0123456789.,+-Ee% /:$apm", max_size=8))
+def test_any_text_is_a_number_or_none_or_refused(words: str) -> None:
+    try:
+        found = parse_number(words)
+    except NotEvaluated:
+        return
+    assert found is None or math.isfinite(found)
 
 
 def test_iso_dates_are_day_numbers() -> None:
