@@ -157,10 +157,8 @@ def test_6_a_result_out_of_reach_of_arithmetic(name: str, cells: list[Any]) -> N
     """An intermediate overflow is refused too: divided by it, a demand of any size would be 0."""
     entry = CATALOGUE[name]
     refused(adapter.call(entry, cells), "#NUM!", name, entry.result.symbol, "too large or too small")
-    wide = [
-        column([cell, cell]) if a.kind is Kind.NUMBER else cell
-        for a, cell in zip(entry.arguments, cells, strict=True)
-    ]
+    pairs = zip(entry.arguments, cells, strict=True)
+    wide = [column([cell, cell]) if a.kind is Kind.NUMBER else cell for a, cell in pairs]
     for (cell,) in adapter.call(entry, wide):
         refused(cell, "#NUM!", "too large or too small")
 
