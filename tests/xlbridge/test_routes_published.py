@@ -30,9 +30,8 @@ TOP = 3
 BY_FORMULA = {f"{e.function.__module__}.{e.function.__name__}": e for e in CATALOGUE.values()}
 #: the factors of all levels at once are a column of single factors in a worksheet
 COLUMN = {"engine.vertical.distribution_factors": ("ELF_CVX", {"w_x": "weights", "h_x": "heights"})}
-#: no worksheet function of their own: the template and a user write them as products of cells
-PRODUCTS = {"engine.period.period_limit": "{C_u}*{T_a}"}
 NOT_IN_CELLS = {
+    "engine.period.period_limit": "the product of two cells, inside ELF_PERIOD",
     "engine.diaphragm.unlimited_force": "one of three values inside ELF_FPX, with no function of its own",
     "engine.diaphragm.minimum_force": "one of three values inside ELF_FPX, with no function of its own",
     "engine.diaphragm.maximum_force": "one of three values inside ELF_FPX, with no function of its own",
@@ -61,9 +60,6 @@ class Table:
     def lay(self, row: Mapping[str, Any]) -> list[str]:
         """Write the inputs of a call and its formulas; return the addresses of the results."""
         places = {name: self.input(name, value) for name, value in row["inputs"].items()}
-        if row["function"] in PRODUCTS:
-            single = {name: cells[0] for name, cells in places.items()}
-            return self.put("product", ["=" + PRODUCTS[row["function"]].format_map(single)])
         if row["function"] in COLUMN:
             name, copies = COLUMN[row["function"]]
             entry = CATALOGUE[name]
@@ -99,7 +95,7 @@ def call(entry: SheetFunction, places: Mapping[str, list[str]], ranged: set[str]
 
 
 @pytest.fixture(scope="module")
-def found(tmp_path_factory: pytest.TempPathFactory) -> dict[str, tuple[list[Scalar], list[Scalar]]]:
+def found(tmp_path_factory: pytest.TempPathFactory) -> dict[str, list[list[Scalar]]]:
     """The results of every row: of single formulas, and of the array formula beside them."""
     folder, results = tmp_path_factory.mktemp("published"), {}
     for stem in BOOKS:
@@ -113,13 +109,10 @@ def found(tmp_path_factory: pytest.TempPathFactory) -> dict[str, tuple[list[Scal
         computed = compute(path)
         assert computed.not_evaluated == []
         for name, (title, table) in tables.items():
-            results[name] = tuple(
-                [
-                    computed.values[title, f"{get_column_letter(column)}{TOP + n}"]
-                    for n in range(len(table.results))
-                ]
-                for column in (table.columns - 1, table.columns)
-            )
+            results[name] = [
+                [computed.values[title, f"{letter}{TOP + n}"] for n in range(len(table.results))]
+                for letter in map(get_column_letter, (table.columns - 1, table.columns))
+            ]
     return results
 
 
