@@ -57,8 +57,7 @@ def unlimited_force(
     levels.refuse_heavier(w_px, place, w, h)
     below = levels.is_below(place, h)
     force, weight = levels.total(np.where(below, 0.0, F)), levels.total(np.where(below, 0.0, w))
-    ratio = np.where(weight > 0, force, 0.0) / np.where(weight > 0, weight, 1.0)
-    return w_px * ratio
+    return w_px * force / np.where(weight > 0, weight, 1.0)
 
 
 @formula

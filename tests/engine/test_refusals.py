@@ -2,6 +2,7 @@
 
 from __future__ import annotations
 
+import numpy as np
 import pytest
 
 from engine.errors import ImpossibleValue, MissingValue, NotApplicable, WrongType
@@ -98,6 +99,42 @@ ZERO_REFUSED = {
 )
 def test_zero(name, key):
     refused(name, ImpossibleValue, f"{key} = 0: must be", **{key: 0.0})
+
+
+@pytest.mark.parametrize(
+    ("name", "key"), [(name, key) for name, keys in ZERO_REFUSED.items() for key in keys]
+)
+def test_the_limit_itself(name, key):
+    """Whatever is above 0 may be small; whatever is at least 1 may be 1."""
+    with pytest.raises(ImpossibleValue) as caught:
+        function(name)(**{**CALLS[name], key: 0.0})
+    allowed = {"must be above 0": 1e-3, "must be at least 1": 1.0}[caught.value.allowed]
+    result = function(name)(**{**CALLS[name], key: allowed})
+    assert isinstance(result, str) or np.isfinite(result).all()
+
+
+ZERO_ACCEPTED = {
+    "hazard.spectral_acceleration": ["T"],
+    "base_shear.coefficient_minimum_near_fault": ["S_1"],
+    "base_shear.response_coefficient": ["S_1"],
+    "vertical.story_force": ["C_vx"],
+    "vertical.story_shear": ["h_x"],
+    "vertical.overturning_moment": ["h_x"],
+    "stability.stability_coefficient": ["P_x", "Delta"],
+    "stability.second_order_factor": ["theta"],
+    "stability.stability_verdict": ["theta"],
+    "diaphragm.unlimited_force": ["w_px"],
+    "diaphragm.minimum_force": ["w_px"],
+    "diaphragm.design_force": ["w_px"],
+}
+
+
+@pytest.mark.parametrize(
+    ("name", "key"), [(name, key) for name, keys in ZERO_ACCEPTED.items() for key in keys]
+)
+def test_zero_that_is_a_value(name, key):
+    result = function(name)(**{**CALLS[name], key: 0.0})
+    assert isinstance(result, str) or np.isfinite(result).all()
 
 
 BEYOND = [
