@@ -8,6 +8,7 @@ from typing import Any
 
 import numpy as np
 
+from engine.errors import EngineError
 from xlbridge.catalogue.entry import Argument as Declared
 from xlbridge.catalogue.entry import SheetFunction, Term
 from xlbridge.values import OMITTED, Argument, Value
@@ -40,7 +41,7 @@ def numbers(entry: SheetFunction, arguments: Sequence[Argument]) -> str:
     """
     given = {a.name: v for a, v in zip(entry.arguments, arguments, strict=False) if v is not OMITTED}
     values = {**entry.defaults, **given}
-    terms = {term.name: term.compute(**_own(term.compute, values)) for term in entry.terms}
+    terms = {term.name: _term(term, values) for term in entry.terms}
     return entry.expression.format_map({name: shown(v) for name, v in (values | terms).items()})
 
 
@@ -65,13 +66,17 @@ def shown(value: Any) -> str:
     return f"{value:.{SHOWN}g}" if isinstance(value, float | int) else str(value)
 
 
-def _own(compute: Any, values: dict[str, Any]) -> dict[str, Any]:
-    """The arguments that a term asks for by name, ranges as plain lists."""
-    names = inspect.signature(compute).parameters
-    return {n: _plain(values[n]) for n in names}
+def _term(term: Term, values: dict[str, Any]) -> Any:
+    """Return the value of a term, or an ellipsis where a range holds cells that the formula refuses."""
+    names = inspect.signature(term.compute).parameters
+    try:
+        return term.compute(**{name: _plain(values[name]) for name in names})
+    except EngineError:
+        return "…"
 
 
 def _plain(value: Any) -> Any:
+    """A range as a plain list."""
     if isinstance(value, tuple):
         return [cell for row in value for cell in row if cell is not None]
     return value

@@ -124,7 +124,7 @@ FUNCTIONS = (
         arguments=(h_x, values, heights),
         result=Result("d_below", "displacement", "value at the level below, in the unit of the values"),
         function=vertical.value_below,
-        expression="the value of {values} at the next lower of {heights}; 0 at the base",
+        expression="the value of {values} at the level of {heights} next below {h_x}; 0 at the base",
         example=Example({"h_x": 48.0, "values": [0.4, 1.1, 1.5], "heights": [12.0, 48.0, 60.0]}, "0.4"),
     ),
 )

@@ -1,0 +1,152 @@
+"""The work shown: every argument stands in the equation, terms are the engine's, the arithmetic holds."""
+
+from __future__ import annotations
+
+import inspect
+import re
+from typing import Any
+
+import numpy as np
+import pytest
+
+from engine import base_shear, diaphragm, hazard
+from tests.support.sheet_cases import ENTRIES, as_cells, example, full, ident, random_calls
+from xlbridge import adapter, work
+from xlbridge.catalogue import CATALOGUE
+from xlbridge.catalogue.entry import Kind, SheetFunction
+from xlbridge.catalogue.validate import places
+from xlbridge.values import OMITTED, CellError
+
+#: decides nothing but the equation number
+WITHOUT_NUMBER = {("ELF_CS", "edition"), ("ELF_CS_GOVERNS", "edition")}
+#: written in words, since they choose between branches, look up a table or search a column
+IN_WORDS = {
+    *("ELF_IE", "ELF_SA", "ELF_CU", "ELF_EXPONENT", "ELF_CS_CAP", "ELF_CS_MIN_S1", "ELF_BETA"),
+    *("ELF_VX", "ELF_MX", "ELF_HSX", "ELF_BELOW", "ELF_PDELTA_FACTOR"),
+}
+ARITHMETIC = [entry for entry in ENTRIES if not entry.is_text and entry.name not in IN_WORDS]
+
+
+@pytest.mark.parametrize("entry", ENTRIES, ids=ident)
+def test_the_equation_names_every_argument(entry: SheetFunction) -> None:
+    equation = work.equation(entry)
+    assert equation.startswith(f"{entry.result.symbol} = ")
+    assert "{" not in equation
+    shown = places(entry.expression)
+    used = {n for t in entry.terms if t.name in shown for n in inspect.signature(t.compute).parameters}
+    assert {term.name for term in entry.terms} <= shown
+    for argument in entry.arguments:
+        assert argument.name in shown | used or (entry.name, argument.name) in WITHOUT_NUMBER
+        if argument.name in shown:
+            assert argument.symbol in equation
+
+
+@pytest.mark.parametrize("entry", ENTRIES, ids=ident)
+def test_the_numbers_of_the_example_stand_in_it(entry: SheetFunction) -> None:
+    cells = as_cells(entry, example(entry))
+    result = adapter.call(entry, cells)
+    line = work.numbers_line(entry, cells, result)
+    assert line.startswith(f"{entry.result.symbol} = ")
+    assert line.endswith(f" = {work.shown(result)}")
+    numbers = work.numbers(entry, cells)
+    assert "{" not in numbers
+    for argument in entry.arguments:
+        value = full(entry)[argument.name]
+        if argument.name in places(entry.expression):
+            shown = str(value) if argument.kind is Kind.CHOICE else f"{np.ravel(value)[0]:.6g}"
+            assert re.search(rf"(?<![\w.]){re.escape(shown)}(?![\w.])", numbers), (argument.name, numbers)
+
+
+@pytest.mark.parametrize("entry", ENTRIES, ids=ident)
+def test_a_changed_argument_changes_its_number(entry: SheetFunction) -> None:
+    call = full(entry)
+    before = work.numbers(entry, as_cells(entry, call))
+    for argument in entry.arguments:
+        if argument.kind is Kind.NUMBER and argument.name in places(entry.expression):
+            after = work.numbers(entry, as_cells(entry, {**call, argument.name: call[argument.name] * 1.01}))
+            assert after != before
+
+
+def value_of(numbers: str) -> float:
+    """What the line works out to, read as arithmetic."""
+    text = re.sub(r"\|(.*)\|", r"abs(\1)", numbers).replace(", at most 1", "")
+    text = re.sub(r"Σ\((.*)\)", r"np.sum(\1)", text)
+    text = re.sub(r"\[([^\]]*)\]", r"np.array([\1])", text)
+    for ours, theirs in (("·", "*"), ("^", "**"), ("²", "**2"), (";", ",")):
+        text = text.replace(ours, theirs)
+    return float(eval(text, {"np": np, "abs": abs, "max": max, "min": min}))
+
+
+@pytest.mark.parametrize("entry", ARITHMETIC, ids=ident)
+def test_the_arithmetic_with_the_numbers_put_in_gives_the_result(entry: SheetFunction) -> None:
+    """Numbers are shown to six digits, of which a difference loses some; ranges of at most four levels are shown whole."""
+    seen = 0
+    for call in random_calls(entry, 40, 7):
+        if any(isinstance(value, list) and len(value) > 4 for value in call.values()):
+            continue
+        cells = as_cells(entry, call)
+        expected = adapter.call(entry, cells)
+        assert value_of(work.numbers(entry, cells)) == pytest.approx(expected, rel=1e-3, abs=1e-9)
+        seen += 1
+    assert seen > 9
+
+
+def test_the_terms_of_the_response_coefficient() -> None:
+    entry = CATALOGUE["ELF_CS"]
+    call = {**example(entry), "T": 2.0}
+    plateau = base_shear.coefficient_plateau(S_DS=1.0, R=8.0, I_e=1.0)
+    cap = base_shear.coefficient_cap(S_D1=0.6, T=2.0, T_L=8.0, R=8.0, I_e=1.0)
+    assert [f"{v:g}" for v in (plateau, cap)] == ["0.125", "0.0375"]
+    assert work.numbers(entry, as_cells(entry, call)) == "max(min(0.125; 0.0375); 0.044; 0.0375)"
+
+
+def test_the_terms_of_the_others() -> None:
+    def line(name: str) -> str:
+        entry = CATALOGUE[name]
+        return work.numbers(entry, as_cells(entry, example(entry)))
+
+    entry = CATALOGUE["ELF_FPX"]
+    given = {k: v for k, v in example(entry).items() if k not in ("S_DS", "I_e")}
+    assert line("ELF_FPX").startswith(f"min(max({diaphragm.unlimited_force(**given):.6g}; 0.2·0.6·1·650)")
+    assert f"below T_0 = {hazard.corner_period_T0(1.0, 0.6):g}; 1 to T_S = 0.6;" in line("ELF_SA")
+    assert line("ELF_TA") == "0.02·60^0.75"
+    assert line("ELF_DRIFT_LIMIT") == "0.02·144/1"
+    assert line("ELF_BETA") == "max(0.3; 1.25/2.5), at most 1"
+
+
+def test_an_argument_left_out_shows_its_default() -> None:
+    entry = CATALOGUE["ELF_THETA_MAX"]
+    assert work.numbers(entry, [5.5]) == work.numbers(entry, [5.5, OMITTED]) == "min(0.5/(1·5.5); 0.25)"
+
+
+def test_ranges_of_which_a_cell_is_bad() -> None:
+    """The work of the others is shown; a term that cannot be worked out is left open."""
+    entry = CATALOGUE["ELF_CS"]
+    cells = [((1.0,), (-1.0,)), 0.6, 0.6, 1.5, 8.0, 8.0, 1.0, "7-22"]
+    assert work.numbers(entry, cells) == "max(min(…; 0.05); …; 0.0375)"
+    entry = CATALOGUE["ELF_TA"]
+    words = (("all other", "steel moment frame"),)
+    assert work.numbers(entry, [60.0, words, "us"]) == "…·60^…"
+    entry = CATALOGUE["ELF_DRIFT"]
+    assert work.numbers(entry, [1.0, ((CellError("#N/A"),), ("x",)), 5.5, 1.0]) == "5.5·|1 - [#N/A, x]|/1"
+
+
+@pytest.mark.parametrize(
+    ("value", "text"),
+    [
+        (286.0, "286"),
+        (0.123456789, "0.123457"),
+        (1e-9, "1e-09"),
+        (7, "7"),
+        ("7-22", "7-22"),
+        (CellError("#NUM!"), "#NUM!"),
+        (((1.0,), (2.0,), (None,), (3.0,)), "[1, 2, 3]"),
+        (((1.0, 2.0), (3.0, 4.0)), "[1, 2, 3, 4]"),
+        (((1.0, 2.0, 3.0, 4.0, 5.0),), "[1, 2, …, 5]"),
+        (np.array([1.0, 2.0]), "[1, 2]"),
+        (np.float64(0.5), "0.5"),
+        (np.array(0.5), "0.5"),
+    ],
+)
+def test_shown(value: Any, text: str) -> None:
+    assert work.shown(value) == text
