@@ -79,7 +79,7 @@ def value_of(numbers: str) -> float:
 
 @pytest.mark.parametrize("entry", ARITHMETIC, ids=ident)
 def test_the_arithmetic_with_the_numbers_put_in_gives_the_result(entry: SheetFunction) -> None:
-    """Numbers are shown to six digits, of which a difference loses some; ranges of at most four levels are shown whole."""
+    """Numbers are shown to six digits, of which a difference loses some; short ranges are shown whole."""
     seen = 0
     for call in random_calls(entry, 40, 7):
         if any(isinstance(value, list) and len(value) > 4 for value in call.values()):
