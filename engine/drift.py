@@ -90,7 +90,7 @@ def allowable_drift(h_sx: ArrayLike, structure: str, risk_category: str, rho: Ar
     Raises
         NotApplicable: another structure or category. ImpossibleValue: a value outside its range
     Notes
-        The table is from memory except its last row. The row "low-rise, detailed finishes" is for
+        The table is from memory except its last row. The row "low-rise with detailed finishes" is for
         structures of four stories or fewer, without masonry shear walls, whose finishes are detailed for
         the drift.
     Example

@@ -182,6 +182,10 @@ class Book:
         """Copy the first row of a range into the rows below it."""
         self._job("fill_down", sheet, cells)
 
+    def fill_up(self, sheet: str, cells: str) -> None:
+        """Copy the last row of a range into the rows above it."""
+        self._job("fill_up", sheet, cells)
+
     def store(self, path: Path) -> Path:
         """Store as .xlsx."""
         self._job("store", path)

@@ -18,7 +18,7 @@ import uno
 from com.sun.star.beans import PropertyValue
 from com.sun.star.connection import NoConnectException
 from com.sun.star.sheet.FillDateMode import FILL_DATE_DAY
-from com.sun.star.sheet.FillDirection import TO_BOTTOM
+from com.sun.star.sheet.FillDirection import TO_BOTTOM, TO_TOP
 from com.sun.star.sheet.FillMode import SIMPLE
 
 START_AGAIN = 81  # how the first start on a fresh profile ends
@@ -175,6 +175,10 @@ class Jobs:
     def fill_down(self, book, sheet, cells):
         """Copy the first row of a range into the rows below it."""
         self._range(book, sheet, cells).fillSeries(TO_BOTTOM, SIMPLE, FILL_DATE_DAY, 1.0, 1e300)
+
+    def fill_up(self, book, sheet, cells):
+        """Copy the last row of a range into the rows above it."""
+        self._range(book, sheet, cells).fillSeries(TO_TOP, SIMPLE, FILL_DATE_DAY, 1.0, 1e300)
 
     def store(self, book, path, filter="Calc MS Excel 2007 XML"):
         self.books[book].storeToURL(url(path), properties(FilterName=filter, Overwrite=True))

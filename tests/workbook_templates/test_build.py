@@ -1,0 +1,164 @@
+"""The generated workbook: every size, edition, unit system and part computes, and both routes agree."""
+
+from __future__ import annotations
+
+import re
+import tempfile
+from itertools import product
+from pathlib import Path
+from typing import Any
+
+import openpyxl
+import pytest
+from hypothesis import Phase, given, settings
+from openpyxl.worksheet.worksheet import Worksheet
+
+from engine.editions import EDITIONS
+from engine.units import SYSTEMS
+from tests.support.story_books import assert_routes_agree, buildings, story_book
+from workbook_templates import generate
+from workbook_templates.build import build, write_workbook
+from workbook_templates.declare import DIRECTIONS, Part
+from workbook_templates.inputs import STARTER
+from workbook_templates.layout import LEVELS, SHEETS, Layout
+from xlbridge.catalogue import CATALOGUE
+from xlbridge.headless.builtins import BUILTINS
+
+BLANK = {"edition": "7-22", "units": "us"}
+VOLATILE = re.compile(r"\b(NOW|TODAY|RAND|RANDBETWEEN|OFFSET|INDIRECT)\(")
+CALLED = re.compile(r"\b([A-Z][A-Z0-9_.]*)\(")
+
+
+@pytest.fixture(scope="module")
+def blank(tmp_path_factory: pytest.TempPathFactory) -> openpyxl.Workbook:
+    return openpyxl.load_workbook(story_book(tmp_path_factory.mktemp("blank"), BLANK))
+
+
+def formulas(sheet: Worksheet) -> list[str]:
+    return [
+        c.value for row in sheet.iter_rows() for c in row if isinstance(c.value, str) and c.value[:1] == "="
+    ]
+
+
+@pytest.mark.parametrize(("edition", "units"), list(product(EDITIONS, SYSTEMS)))
+def test_starter_workbook_computes_and_agrees_with_the_model_route(
+    tmp_path: Path, edition: str, units: str
+) -> None:
+    computed = assert_routes_agree(story_book(tmp_path, {"edition": edition, "units": units}), 100)
+    status = computed.evaluator.evaluate_text("=workbook_status")
+    assert isinstance(status, str)
+    assert status.startswith("✗ STARTER VALUES, NOT A DESIGN: ")
+
+
+@pytest.mark.parametrize("count", [1, 2, 60, 100])
+def test_level_counts(tmp_path: Path, count: int) -> None:
+    assert_routes_agree(story_book(tmp_path, BLANK, count), 25 * count)
+
+
+@settings(max_examples=12, deadline=None, phases=(Phase.explicit, Phase.reuse, Phase.generate))
+@given(buildings())
+def test_random_buildings_agree_with_the_model_route(tables: dict[str, Any]) -> None:
+    with tempfile.TemporaryDirectory() as folder:
+        assert_routes_agree(story_book(Path(folder), tables), 40)
+
+
+def test_a_part_without_inputs_is_left_out(tmp_path: Path) -> None:
+    tables = {**BLANK, "level": [{"name": "Roof", "elevation": 12.0, "weight": 100.0}]}
+    path = story_book(tmp_path, tables)
+    assert_routes_agree(path, 20)
+    headings = [cell.value for cell in openpyxl.load_workbook(path)[LEVELS][6]]
+    assert "F_x X" in headings
+    assert not any("delta" in str(heading) for heading in headings)
+
+
+def test_two_builds_give_the_same_bytes() -> None:
+    assert build(BLANK) == build(BLANK)
+
+
+def test_blank_workbooks_are_those_that_are_kept(tmp_path: Path) -> None:
+    for made in generate.generate(tmp_path):
+        assert made.read_bytes() == (generate.FOLDER / made.name).read_bytes(), (
+            f"{made.name} differs: run python -m workbook_templates.generate"
+        )
+
+
+def test_written_workbook_carries_its_values(tmp_path: Path) -> None:
+    computed = write_workbook(BLANK, tmp_path / "story.xlsx")
+    stored = openpyxl.load_workbook(tmp_path / "story.xlsx", data_only=True)
+    for (sheet, address), value in computed.values.items():
+        assert stored[sheet][address].value == value
+
+
+def test_nothing_is_hidden_merged_external_or_volatile(blank: openpyxl.Workbook) -> None:
+    assert blank.sheetnames == list(SHEETS)
+    for sheet in blank.worksheets:
+        assert sheet.sheet_state == "visible"
+        assert not sheet.merged_cells.ranges
+        assert not any(d.hidden for d in (*sheet.row_dimensions.values(), *sheet.column_dimensions.values()))
+        for formula in formulas(sheet):
+            assert "[" not in formula
+            assert not VOLATILE.search(formula)
+            assert "IFERROR" not in formula
+            assert set(CALLED.findall(formula)) <= {*CATALOGUE, *BUILTINS}
+
+
+def test_every_defined_name_is_one_sound_reference(blank: openpyxl.Workbook) -> None:
+    assert len(blank.defined_names) > 60
+    for name in blank.defined_names.values():
+        sheet, _, address = name.attr_text.rpartition("!")
+        assert sheet in SHEETS
+        assert blank[sheet][address.replace("$", "")] is not None
+
+
+def test_column_headings_are_unique() -> None:
+    headings = [column.heading for column in Layout(3, frozenset(Part)).table]
+    assert len(set(headings)) == len(headings)
+
+
+def test_every_number_or_choice_input_has_an_entry_rule(blank: openpyxl.Workbook) -> None:
+    layout = Layout(6, frozenset(Part))
+    ruled = {
+        (s.title, str(a))
+        for s in blank.worksheets
+        for v in s.data_validations.dataValidation
+        for a in v.sqref
+    }
+    for block in layout.criteria:
+        for q in block.quantities:
+            for direction in DIRECTIONS if block.per_direction else (None,):
+                if q.is_input and (q.span or q.choices):
+                    assert ("Criteria", layout.criteria_cell(q.key, direction).replace("$", "")) in ruled
+    for column in layout.table:
+        if column.quantity.is_input and column.quantity.span:
+            area = layout.level_range(column.quantity.key, column.direction).replace("$", "")
+            assert (LEVELS, area) in ruled
+
+
+def test_inline_lists_fit_the_limit_and_hold_no_comma_in_a_word(blank: openpyxl.Workbook) -> None:
+    lists = [v for s in blank.worksheets for v in s.data_validations.dataValidation if v.type == "list"]
+    assert len(lists) >= 6
+    for rule in lists:
+        words = rule.formula1.strip('"').split(",")
+        assert len(rule.formula1) <= 257
+        assert all(word == word.strip() and word for word in words)
+
+
+def test_pages_repeat_their_headers_and_carry_the_caution(blank: openpyxl.Workbook) -> None:
+    for sheet in blank.worksheets:
+        assert sheet.print_title_rows
+        assert "licensed engineer" in sheet.oddHeader.left.text
+        assert "authority having jurisdiction" in sheet.oddHeader.left.text.replace("\n", " ")
+        assert sheet.oddFooter.right.text == "&D   page &P of &N"
+
+
+def test_starter_values_are_marked_and_counted(blank: openpyxl.Workbook) -> None:
+    marks = [c.value for s in blank.worksheets for row in s.iter_rows() for c in row if c.value == STARTER]
+    assert len(marks) == 11 + 6
+
+
+def test_doubtful_clauses_are_marked_where_the_user_meets_them(blank: openpyxl.Workbook) -> None:
+    marks = {cell.value for cell in blank[LEVELS][9]}
+    assert {"from memory", "uncertain"} <= marks
+    notes = [row[8].value for row in blank["Criteria"].iter_rows(min_row=5) if row[8].value]
+    assert any("from memory" in note for note in notes)
+    assert any("uncertain" in note for note in notes)
