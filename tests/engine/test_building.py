@@ -400,8 +400,32 @@ def test_a_record_made_by_hand_is_checked_too(data):
         )
 
 
-def test_instability_names_the_level(data):
-    data["level"][3]["P_x"] = 4e6
+def test_one_level_is_a_building(data):
+    data["level"] = data["level"][:1]
+    found = solve(from_mapping(data)).direction["X"]
+    assert found.V_x == pytest.approx([found.V])
+    assert found.theta.shape == (1,)
+
+
+def test_levels_a_hair_apart_are_told(data):
+    for level in data["level"]:
+        for key in ("delta_xe_X", "delta_xe_Y"):
+            del level[key]
+    near, apart = ({**data["level"][0], "name": "B", "elevation": 152.5 + gap} for gap in (4e-8, 7e-8))
+    assert solve(from_mapping({**data, "level": [*data["level"], near]})).warnings
+    assert not solve(from_mapping({**data, "level": [*data["level"], apart]})).warnings
+
+
+def test_a_light_roof_has_a_stability_coefficient(data):
+    data["level"][0] |= {"weight": 0.5, "P_x": 0.5}
+    found = solve(from_mapping(data)).direction["X"]
+    assert 0 < found.V_x[0] < 1
+    assert 0 < found.theta[0] < 0.10
+
+
+@pytest.mark.parametrize("P_x", [1e5, 4e6])
+def test_instability_names_the_level(data, P_x):
+    data["level"][3]["P_x"] = P_x
     with pytest.raises(ImpossibleValue, match=r'level 4 \("2F"\): theta = .*unstable'):
         solve(from_mapping(data))
 

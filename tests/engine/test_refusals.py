@@ -138,6 +138,10 @@ def test_zero_that_is_a_value(name, key):
 
 
 BEYOND = [
+    ("period.approximate_period_stories", ImpossibleValue, "N = 2.5: must be a whole", {"N": [2.0, 2.5]}),
+    ("period.approximate_period_stories", NotApplicable, "N = 13: must be at most", {"N": [2.0, 13.0]}),
+    ("stability.second_order_factor", ImpossibleValue, "theta = 1.5: must be below", {"theta": [0.2, 1.5]}),
+    ("torsion.amplification", ImpossibleValue, "d_max = 0.9: in parts of d_avg", {"d_max": [1.5, 0.9]}),
     ("vertical.story_shear", WrongType, "forces = .*rows of one length", {"forces": [[1.0], [2.0, 3.0]]}),
     (
         *("vertical.distribution_factors", ImpossibleValue, "at least one level must have"),
