@@ -6,6 +6,7 @@ Their values are compared with LibreOffice Calc in test_differential_calc.py.
 from __future__ import annotations
 
 import math
+import random
 from collections.abc import Callable
 from typing import NoReturn
 
@@ -273,6 +274,53 @@ def test_overflow_is_an_error() -> None:
     assert call("EXP", 1000.0) == NUM
     assert call("POWER", 10.0, 400.0) == NUM
     assert call("REPT", "ab", 20000.0) == VALUE
+
+
+SCALARS: list[Scalar] = [
+    *(None, True, False, NA, DIV, "", "abc", "3", "TRUE", "a*", ">1", "E5", "2020-01-15"),
+    *(0.0, 1.0, -1.0, 2.5, 3.0, -0.5, 1e-300, 1e300, -1e300, 44000.0, 2.0**53, 700.0),
+]
+GRIDS: list[Grid] = [
+    ((1.0, 2.0, 3.0),),
+    ((1.0,), ("a",)),
+    ((1.0, 2.0), (3.0, 4.0)),
+    ((NA, True), (None, "x")),
+]
+AREAS = [NUMBERS, WORDS, MIXED, area(1, 1, 4, 3), area(2, 1, 2, 1), area(7, 7, 8, 8)]
+
+
+def drawn(kind: str, source: random.Random) -> Operand | Callable[[], Operand]:
+    scalar = source.choice(SCALARS)
+    if kind == "l":
+        return lambda: scalar
+    return source.choice(AREAS if kind == "a" else [*SCALARS, *SCALARS, OMITTED, *GRIDS, *AREAS])
+
+
+def is_value(result: object) -> bool:
+    if isinstance(result, Area):
+        return True
+    cells = [cell for row in result for cell in row] if isinstance(result, tuple) else [result]
+    return all(
+        cell is None
+        or isinstance(cell, str | bool | CellError)
+        or (type(cell) is float and math.isfinite(cell))
+        for cell in cells
+    )
+
+
+@pytest.mark.parametrize("name", sorted(BUILTINS.keys() - VOLATILE.keys()))
+def test_any_arguments_give_a_value_or_a_refusal(name: str) -> None:
+    builtin, source = BUILTINS[name], random.Random(name)
+    letters = builtin.params.removesuffix("*")
+    least = len(letters) if builtin.required is None else builtin.required
+    for _ in range(300):
+        count = source.randint(least, min(len(letters), 5) + 2 * builtin.params.endswith("*"))
+        operands = [drawn(kind, source) for kind in builtin.kinds(count)]
+        try:
+            result = call(name, *operands)
+        except NotEvaluated:
+            continue
+        assert is_value(result), (operands, result)
 
 
 samples = st.lists(st.floats(0.01, 1e4), min_size=3, max_size=12, unique=True)

@@ -54,9 +54,12 @@ def _factorial(value: float) -> float:
 
 
 def _combinations(total: float, chosen: float) -> float:
-    if chosen < 0.0 or int(total) < int(chosen):
+    n, k = int(total), int(chosen)
+    if k < 0 or n < k:
         raise Fault("#NUM!", f"COMBIN: cannot choose {chosen:g} of {total:g}")
-    return float(math.comb(int(total), int(chosen)))
+    if min(k, n - k) > 1024:  # then there are more than 2^1024 combinations
+        raise OverflowError
+    return float(math.comb(n, k))
 
 
 def _whole(operands: tuple[Operand, ...]) -> list[int]:

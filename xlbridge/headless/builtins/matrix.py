@@ -33,6 +33,8 @@ def _square(operand: Operand) -> NDArray[np.float64]:
 
 
 def _grid(matrix: NDArray[Any]) -> Grid:
+    if not np.isfinite(matrix).all():
+        raise Fault("#NUM!", "the result is too large")
     return tuple(tuple(row) for row in matrix.tolist())
 
 
@@ -40,7 +42,8 @@ def _product(left: Operand, right: Operand) -> Grid:
     first, second = _matrix(left), _matrix(right)
     if first.shape[1] != second.shape[0]:
         raise Fault("#VALUE!", f"MMULT: {first.shape[1]} columns meet {second.shape[0]} rows")
-    return _grid(first @ second)
+    with np.errstate(all="ignore"):
+        return _grid(first @ second)
 
 
 def _inverse(operand: Operand) -> Grid:

@@ -20,7 +20,7 @@ def decimal(value: float) -> Decimal:
 
 def rounded(value: float, digits: float, mode: str = ROUND_HALF_UP) -> float:
     """Return a number rounded to decimal places, left of the point where ``digits`` is negative."""
-    shown, places = decimal(value), int(digits)
+    shown, places = decimal(value), int(max(-400.0, min(400.0, digits)))
     if value == 0.0 or shown.adjusted() + places >= 14:
         return value
     return float(shown.quantize(Decimal(1).scaleb(-places), rounding=mode))
