@@ -31,32 +31,35 @@ R = TypeVar("R")
 def finite(name: str, value: ArrayLike) -> Array:
     """Return ``value`` as floats; refuse blanks, text, booleans, NaN and infinities."""
     array = _numbers(name, value)
-    if not np.isfinite(array.sum()) and not np.isfinite(array).all():
+    if array.size and not (array.min() > -np.inf and array.max() < np.inf):
         raise ImpossibleValue(name, float(array[~np.isfinite(array)].flat[0]), "must be a finite number")
     return array
 
 
 def above(bound: float, name: str, value: ArrayLike, clause: str = "") -> Array:
     """Return ``value``; refuse anything at or below ``bound``."""
-    array = finite(name, value)
-    if array.size and array.min() <= bound:
-        raise ImpossibleValue(name, float(array.min()), f"must be above {bound:g}", clause)
+    array = _numbers(name, value)
+    if array.size and not (array.min() > bound and array.max() < np.inf):
+        least = float(finite(name, array).min())
+        raise ImpossibleValue(name, least, f"must be above {bound:g}", clause)
     return array
 
 
 def at_least(bound: float, name: str, value: ArrayLike, clause: str = "") -> Array:
     """Return ``value``; refuse anything below ``bound``."""
-    array = finite(name, value)
-    if array.size and array.min() < bound:
-        raise ImpossibleValue(name, float(array.min()), f"must be at least {bound:g}", clause)
+    array = _numbers(name, value)
+    if array.size and not (array.min() >= bound and array.max() < np.inf):
+        least = float(finite(name, array).min())
+        raise ImpossibleValue(name, least, f"must be at least {bound:g}", clause)
     return array
 
 
 def at_most(bound: float, name: str, value: ArrayLike, clause: str = "") -> Array:
     """Return ``value``; refuse anything above ``bound``."""
-    array = finite(name, value)
-    if array.size and array.max() > bound:
-        raise ImpossibleValue(name, float(array.max()), f"must be at most {bound:g}", clause)
+    array = _numbers(name, value)
+    if array.size and not (array.max() <= bound and array.min() > -np.inf):
+        most = float(finite(name, array).max())
+        raise ImpossibleValue(name, most, f"must be at most {bound:g}", clause)
     return array
 
 
