@@ -2,8 +2,10 @@
 
 from __future__ import annotations
 
+from dataclasses import replace
 from typing import Any
 
+import numpy as np
 import pytest
 
 from tests.support.sheet_cases import ENTRIES, PLACES, as_cells, column, example, full, ident, with_cell
@@ -138,6 +140,16 @@ def test_5_a_word_that_is_not_in_the_list(entry: SheetFunction, argument: Argume
 def test_6_a_number_that_is_not_finite(entry: SheetFunction, argument: Argument, cell: float) -> None:
     found = adapter.call(entry, with_cell(entry, argument, cell))
     refused(found, "#NUM!", argument.name, f"{cell:g}", "finite")
+
+
+@pytest.mark.parametrize("number", [NAN, INF, -INF], ids=repr)
+def test_6_a_result_that_is_not_finite(number: float) -> None:
+    """Planted: no formula of the catalogue gives one."""
+    planted = replace(CATALOGUE["ELF_FX"], function=lambda V, C_vx: np.where(np.asarray(V) > 5, number, V))
+    refused(adapter.call(planted, [6.0, 0.5]), "#NUM!", "F_x", f"{number:g}", "finite")
+    found = adapter.call(planted, [column([4.0, 6.0]), 0.5])
+    assert found[0] == (4.0,)
+    refused(found[1][0], "#NUM!", "F_x", "finite")
 
 
 TOO_LARGE = [
