@@ -23,6 +23,8 @@ Words: TypeAlias = str | NDArray[np.str_]
 
 #: two results closer than this part of themselves count as one
 ROUND_OFF: Final = 1e-12
+#: the words of a condition that the engineer judges
+YES_NO: Final = ("yes", "no")
 
 P = ParamSpec("P")
 R = TypeVar("R")
@@ -81,6 +83,11 @@ def choice(name: str, value: object, allowed: Iterable[str], clause: str = "") -
     if value not in words:
         raise NotApplicable(name, value, f"must be one of {', '.join(words)}", clause)
     return value
+
+
+def yes(name: str, value: object, clause: str = "") -> bool:
+    """Tell whether a condition is answered "yes"; refuse anything but "yes" and "no"."""
+    return choice(name, value, YES_NO, clause) == "yes"
 
 
 def formula(function: Callable[P, R]) -> Callable[P, R]:

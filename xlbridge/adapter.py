@@ -187,7 +187,7 @@ def _levels(ranges: list[tuple[Declared, Argument]]) -> dict[str, Any]:
     blank = (None,) * len(columns)
     rows = [row for row in zip(*columns, strict=True) if row != blank]
     if not rows:
-        raise MissingValue(ranges[0][0].symbol, None, "the range holds no level")
+        raise MissingValue(ranges[0][0].symbol, None, f"the range holds no {ranges[0][0].each}")
     if not set(map(type, chain.from_iterable(rows))) <= _NUMBER:
         _refuse_level([a for a, _ in ranges], columns)
     vectors = np.array(rows, dtype=float).T

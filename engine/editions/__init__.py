@@ -76,10 +76,21 @@ def value(edition: str, key: str) -> float:
     return float(values[key])
 
 
+def clauses(key: str) -> Mapping[str, Clause]:
+    """Return the clause of a rule in each edition that has it; refuse a rule that none has.
+
+    >>> list(clauses("C_s_method1"))
+    ['7-22']
+    """
+    found = {edition: rules(edition)[key] for edition in EDITIONS if key in rules(edition)}
+    if not found:
+        raise NotApplicable("rule", key, "not a rule of any edition")
+    return MappingProxyType(found)
+
+
 def differences(key: str) -> tuple[str, ...]:
     """Return the notes of a rule in each edition that has it, without repeats."""
-    notes = [rules(edition)[key].note for edition in EDITIONS if key in rules(edition)]
-    return tuple(dict.fromkeys(note for note in notes if note))
+    return tuple(dict.fromkeys(clause.note for clause in clauses(key).values() if clause.note))
 
 
 @cache

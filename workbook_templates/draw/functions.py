@@ -4,7 +4,6 @@ from __future__ import annotations
 
 from openpyxl.worksheet.worksheet import Worksheet
 
-from engine.editions import clause
 from workbook_templates.draw import sheets, style
 from workbook_templates.inputs import Inputs
 from xlbridge.catalogue import CATALOGUE, SheetFunction
@@ -28,7 +27,8 @@ def draw(sheet: Worksheet, inputs: Inputs) -> None:
 
 
 def _texts(entry: SheetFunction, edition: str) -> tuple[str, ...]:
-    rule = clause(edition, entry.rule)
+    rule = entry.clauses.get(edition)
     arguments = "\n".join(f"{a.name}: {describe(a)}" for a in entry.arguments)
-    notes = "\n".join(text for text in (rule.note, entry.note) if text)
-    return entry.usage, entry.summary, str(rule), equation(entry), arguments, notes
+    notes = "\n".join(text for text in (rule.note if rule else "", entry.note) if text)
+    where = str(rule) if rule else f"not in {edition}"
+    return entry.usage, entry.summary, where, equation(entry), arguments, notes

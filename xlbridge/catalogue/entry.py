@@ -9,13 +9,15 @@ from enum import StrEnum
 from types import MappingProxyType
 from typing import Any
 
+from engine.editions import Clause, clauses
+
 
 class Kind(StrEnum):
     """How the adapter reads an argument."""
 
     NUMBER = "number"  # one number a call; a range gives one result a cell
     CHOICE = "choice"  # one word out of a closed list
-    LEVELS = "levels"  # a range with one number a level, taken as a whole
+    LEVELS = "levels"  # a range with one number a level (or a period, an item), taken as a whole
 
 
 @dataclass(frozen=True, slots=True)
@@ -48,7 +50,10 @@ NOT_NEGATIVE = Span(0)
 
 @dataclass(frozen=True, slots=True)
 class Argument:
-    """One argument: ``name`` in the call, ``symbol`` in the equation, ``unit`` a key of engine.units."""
+    """One argument: ``name`` in the call, ``symbol`` in the equation, ``unit`` a key of engine.units.
+
+    ``each`` says what one cell of a range stands for.
+    """
 
     name: str
     unit: str
@@ -58,6 +63,7 @@ class Argument:
     choices: tuple[str, ...] = ()
     optional: bool = False
     symbol: str = ""
+    each: str = "level"
 
     def __post_init__(self) -> None:
         object.__setattr__(self, "symbol", self.symbol or self.name)
@@ -96,8 +102,9 @@ class Example:
 class SheetFunction:
     """One worksheet function.
 
-    ``rule`` is the key of its clause in the edition data. ``expression`` and ``native`` are templates
-    with ``{argument}`` places: the equation in symbols, and the same in built-in functions.
+    ``rule`` is the key of its clause in the edition data; an edition may lack it. ``expression`` and
+    ``native`` are templates with ``{argument}`` places: the equation in symbols, and the same in built-in
+    functions.
     """
 
     name: str
@@ -119,6 +126,11 @@ class SheetFunction:
         """The call as documented: ``ELF_THETA_MAX(C_d, [beta])``."""
         words = (f"[{a.name}]" if a.optional else a.name for a in self.arguments)
         return f"{self.name}({', '.join(words)})"
+
+    @property
+    def clauses(self) -> Mapping[str, Clause]:
+        """The clause in each edition that has the rule."""
+        return clauses(self.rule)
 
     @property
     def defaults(self) -> Mapping[str, Any]:

@@ -7,7 +7,7 @@ import re
 from string import Formatter
 from typing import Any
 
-from engine.editions import EDITIONS, clause
+from engine.editions import clauses
 from engine.units import UNITS
 from xlbridge.catalogue.entry import Argument, Kind, SheetFunction
 
@@ -94,13 +94,11 @@ def _template_faults(entry: SheetFunction) -> list[str]:
 
 
 def _clause_faults(entry: SheetFunction) -> list[str]:
-    faults = []
-    for edition in EDITIONS:
-        try:
-            clause(edition, entry.rule)
-        except ValueError as error:
-            faults.append(f"rule {entry.rule!r}: {error}")
-    return faults
+    try:
+        clauses(entry.rule)
+    except ValueError as error:
+        return [f"rule {entry.rule!r}: {error}"]
+    return []
 
 
 def _example_faults(entry: SheetFunction) -> list[str]:
@@ -130,5 +128,5 @@ def describe(a: Argument) -> str:
     if a.kind is Kind.CHOICE:
         return f"{a.text}: {', '.join(a.choices)}."
     unit = {"none": "no unit", "time": "s", "acceleration": "g"}.get(a.unit, f"a {a.unit} unit")
-    each = "one cell a level, " if a.kind is Kind.LEVELS else ""
+    each = f"one cell a {a.each}, " if a.kind is Kind.LEVELS else ""
     return f"{a.text} [{unit}], {each}{a.span}."

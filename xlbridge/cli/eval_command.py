@@ -7,7 +7,6 @@ from dataclasses import dataclass
 
 import click
 
-from engine.editions import EDITIONS, clause
 from xlbridge import work
 from xlbridge.catalogue import CATALOGUE
 from xlbridge.cli.failure import CLEAN, FINDINGS, INCOMPLETE
@@ -71,7 +70,6 @@ def _work(call: Call) -> str:
     lines = [f"{entry.name}: {entry.summary}", f"  {work.equation(entry)}"]
     if not isinstance(call.result, CellError):
         lines.append(f"  {work.numbers_line(entry, call.arguments, call.result)}")
-    for edition in EDITIONS:
-        found = clause(edition, entry.rule)
+    for found in entry.clauses.values():
         lines.append(f"  {found.standard} {found}{f' ({found.note})' if found.note else ''}")
     return "\n".join(lines)

@@ -7,7 +7,6 @@ from typing import Any
 
 import click
 
-from engine.editions import EDITIONS, clause
 from xlbridge import work
 from xlbridge.catalogue import CATALOGUE, SheetFunction
 from xlbridge.catalogue.validate import describe
@@ -48,7 +47,6 @@ def _named(name: str) -> SheetFunction:
 
 def record(entry: SheetFunction) -> dict[str, Any]:
     """Return everything declared of a function, in plain data."""
-    clauses = {edition: clause(edition, entry.rule) for edition in EDITIONS}
     return {
         "name": entry.name,
         "usage": entry.usage,
@@ -71,7 +69,8 @@ def record(entry: SheetFunction) -> dict[str, Any]:
         ],
         "result": {"symbol": entry.result.symbol, "unit": entry.result.unit, "text": entry.result.text},
         "clauses": {
-            e: {"clause": str(c), "confidence": c.confidence, "note": c.note} for e, c in clauses.items()
+            edition: {"clause": str(c), "confidence": c.confidence, "note": c.note}
+            for edition, c in entry.clauses.items()
         },
         "example": {"arguments": dict(entry.example.arguments), "result": entry.example.result},
         "since": entry.since,
@@ -82,8 +81,7 @@ def _page(entry: SheetFunction) -> str:
     lines = [entry.usage, entry.summary, "", work.equation(entry), ""]
     lines += [f"  {a.name}: {describe(a)}" for a in entry.arguments]
     lines += ["", f"returns {entry.result.text} [{entry.result.unit}]"]
-    for edition in EDITIONS:
-        found = clause(edition, entry.rule)
+    for found in entry.clauses.values():
         lines.append(f"{found.standard} {found}{f' ({found.note})' if found.note else ''}")
     given = ", ".join(f"{key} = {value}" for key, value in entry.example.arguments.items())
     return "\n".join([*lines, "", f"example: {given}: {entry.example.result}"])

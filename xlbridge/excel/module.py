@@ -6,7 +6,6 @@ import json
 from collections.abc import Iterable
 from typing import Final
 
-from engine.editions import EDITIONS, clause
 from xlbridge.catalogue.entry import Argument, SheetFunction
 from xlbridge.catalogue.validate import describe
 
@@ -34,11 +33,10 @@ def python_module(entries: Iterable[SheetFunction]) -> str:
 
 def description(entry: SheetFunction) -> str:
     """Return the help text of a function: its summary and its clause in each edition."""
-    found = {edition: clause(edition, entry.rule) for edition in EDITIONS}
+    found = entry.clauses
     places = "; ".join(f"{edition}: {where}" for edition, where in found.items())
-    doubt = (
-        "" if all(where.confidence == "H" for where in found.values()) else " Partly from memory: confirm."
-    )
+    sure = all(where.confidence == "H" for where in found.values())
+    doubt = "" if sure else " Partly from memory: confirm."
     return f"{entry.summary} ASCE/SEI {places}.{doubt}"
 
 

@@ -85,7 +85,7 @@ WRONG = {
         replace(GOOD, native="{C_vx}*{W}", terms=(Term("W", "W", story_force),)),
         r"native: unknown place \{W\}",
     ),
-    "unknown rule": (replace(GOOD, rule="F_y"), "rule 'F_y': .*7-16"),
+    "unknown rule": (replace(GOOD, rule="F_y"), "rule 'F_y': .*not a rule of any edition"),
     "example out of range": (
         replace(GOOD, example=Example({"V": -1.0, "C_vx": 0.5}, "1")),
         "the example fails: V = -1",

@@ -293,7 +293,7 @@ class TestFunctions:
             shape = keys(record)
             assert set(shape["example"]) == {"arguments", "result"}
             assert all(argument.keys() == shape["arguments"][0].keys() for argument in record["arguments"])
-            assert shape["clauses"] == {"7-16": clause, "7-22": clause}
+            assert shape["clauses"] in ({"7-16": clause, "7-22": clause}, {"7-16": clause}, {"7-22": clause})
             assert shape["result"] == {"symbol": TEXT, "unit": TEXT, "text": TEXT}
             assert tuple(shape) == (*RECORD, "example", "since")
             assert tuple(shape["arguments"][0]) == ARGUMENT
