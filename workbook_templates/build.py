@@ -16,7 +16,7 @@ from openpyxl import Workbook
 from engine.version import __version__
 from workbook_templates import layout as places
 from workbook_templates.draw import checks, cover, criteria, figures, functions, levels
-from workbook_templates.inputs import Inputs, starter
+from workbook_templates.inputs import Inputs
 from workbook_templates.layout import Layout
 from xlbridge.headless.compute import Computed, compute_into
 
@@ -31,7 +31,7 @@ def build(given: Mapping[str, Any], level_count: int = DEFAULT_LEVELS) -> bytes:
     ``given`` needs ``edition`` and ``units``; what else is missing starts from marked starter values,
     ``level_count`` levels of them if no level is given.
     """
-    inputs = Inputs(given, starter(level_count, str(given["units"])))
+    inputs = Inputs(given, level_count)
     layout = Layout(len(inputs.levels), inputs.parts)
     workbook = Workbook()
     workbook.remove(workbook.worksheets[0])

@@ -1,23 +1,22 @@
-"""The words in which a workbook is declared: quantities, blocks of them, check lines.
+"""The words in which a workbook is declared: quantities, blocks of them, check lines, parts.
 
 A formula is a template. ``{key}`` is the cell of a quantity in the same row (levels) or the same column
-(criteria); ``{key:all}`` is its whole level column, guard rows included; ``{key:wide}`` the
-same with one row more at either end; ``{key:total}`` and ``{key:base}`` are its cells in the totals row
-and in the base row. A criteria quantity met on another
-sheet is written by its defined name.
+(criteria); ``{key:all}`` is its whole level column, guard rows included; ``{key:wide}`` the same with one
+row more at either end; ``{key:total}`` and ``{key:base}`` are its cells in the totals row and in the base
+row. A criteria quantity met on another sheet is written by its defined name.
 """
 
 from __future__ import annotations
 
 import re
-from collections.abc import Iterable
+from collections.abc import Callable
 from dataclasses import dataclass
 from enum import StrEnum
 from functools import cached_property
-from typing import Final
+from typing import Any, Final
 
 from xlbridge.catalogue import CATALOGUE, SheetFunction
-from xlbridge.catalogue.entry import Span
+from xlbridge.catalogue.entry import Argument, Span
 
 DIRECTIONS: Final = ("X", "Y")
 _CALL = re.compile(r"\b(ELF_[A-Z0-9_]+)\(")
@@ -34,11 +33,17 @@ class Role(StrEnum):
     VERDICT = "verdict"
 
 
-class Part(StrEnum):
-    """A part of the workbook; a job that does not need it leaves it out."""
+@dataclass(frozen=True, slots=True)
+class Start:
+    """Where a starter value stands: the level counted from the base, the number of levels, the units."""
 
-    FORCES = "forces"
-    DRIFT = "drift"
+    units: str
+    level: int = 0
+    count: int = 0
+
+
+#: an invented value, or how to invent it
+Starter = Callable[[Start], Any]
 
 
 @dataclass(frozen=True)
@@ -46,7 +51,9 @@ class Quantity:
     """One criteria row or one level column.
 
     ``unit`` is a key of engine.units; ``rule`` a key of the edition data, taken from the worksheet
-    function in the formula where there is one. ``span`` and ``choices`` say what an input allows.
+    function in the formula where there is one. An input says what it allows (``span``, ``choices``), what
+    holds if it is left out (``default``), and what a blank workbook starts with (``starter``); ``stored``
+    is its key in BUILDING.toml.
     """
 
     key: str
@@ -58,8 +65,9 @@ class Quantity:
     symbol: str = ""
     span: Span | None = None
     choices: tuple[str, ...] = ()
-    optional: bool = False
-    part: Part = Part.FORCES
+    default: Any = None
+    starter: Starter | None = None
+    stored: str = ""
     decimals: int | None = None
     total: str = ""
     base: str = ""
@@ -77,6 +85,11 @@ class Quantity:
         return self.role is Role.INPUT
 
     @property
+    def is_flag(self) -> bool:
+        """Whether the entry says yes or no; BUILDING.toml keeps true or false."""
+        return self.choices == YES_NO
+
+    @property
     def shown_symbol(self) -> str:
         """The symbol as printed."""
         return self.symbol or self.key
@@ -86,6 +99,13 @@ class Quantity:
         """The key of the rule in the edition data, or an empty text."""
         return self.rule or (self.function.rule if self.function else "")
 
+    def stored_key(self, direction: str | None) -> str:
+        """The key of a level input in BUILDING.toml."""
+        return f"{self.key}_{direction}" if direction else (self.stored or self.key)
+
+
+YES_NO: Final = ("yes", "no")
+
 
 @dataclass(frozen=True, slots=True)
 class Block:
@@ -94,11 +114,6 @@ class Block:
     title: str
     quantities: tuple[Quantity, ...]
     per_direction: bool = False
-
-    def only(self, parts: Iterable[Part]) -> Block:
-        """Return the block without the quantities of parts that are left out."""
-        kept = set(parts)
-        return Block(self.title, tuple(q for q in self.quantities if q.part in kept), self.per_direction)
 
 
 @dataclass(frozen=True, slots=True)
@@ -113,5 +128,58 @@ class Check:
     unit: str = "none"
     per_direction: bool = False
     warning: bool = False
-    part: Part = Part.FORCES
     decimals: int | None = None
+
+
+@dataclass(frozen=True, slots=True)
+class Headline:
+    """One line of results on the cover, in both directions."""
+
+    text: str
+    unit: str
+    formula: str
+
+
+@dataclass(frozen=True, slots=True)
+class Figure:
+    """A chart of a level column over the height; ``bars`` draws it level by level, ``limit`` a line at 1."""
+
+    key: str
+    title: str
+    bars: bool = False
+    limit: bool = False
+
+
+@dataclass(frozen=True, slots=True)
+class Part:
+    """A part of the workbook; a job that does not need it leaves it out.
+
+    ``needs`` are the level entries of BUILDING.toml without which the part cannot be filled in.
+    """
+
+    key: str
+    title: str
+    criteria: tuple[Block, ...] = ()
+    bands: tuple[Block, ...] = ()
+    checks: tuple[Check, ...] = ()
+    headlines: tuple[Headline, ...] = ()
+    figures: tuple[Figure, ...] = ()
+    needs: tuple[str, ...] = ()
+
+
+def entry(key: str, feeds: str, text: str = "", **more: Any) -> Quantity:
+    """Declare an input that allows what the argument it feeds allows (``FUNCTION.argument``)."""
+    function, name = feeds.split(".")
+    a: Argument = next(a for a in CATALOGUE[function].arguments if a.name == name)
+    span = None if a.choices else a.span
+    return Quantity(key, text or a.text, a.unit, Role.INPUT, span=span, choices=a.choices, **more)
+
+
+def always(value: Any) -> Starter:
+    """Return the starter that is the same everywhere."""
+    return lambda start: value
+
+
+def by_units(us: float, si: float, per_level: bool = False) -> Starter:
+    """Return the starter of a unit system; ``per_level`` multiplies it by the level's number."""
+    return lambda start: (us if start.units == "us" else si) * (start.level if per_level else 1)

@@ -11,32 +11,24 @@ from dataclasses import dataclass
 from typing import Any, Final
 
 from engine.errors import MissingValue
-from engine.units import US
-from workbook_templates.declare import DIRECTIONS, Part
+from workbook_templates.declare import DIRECTIONS, Quantity, Start
+from workbook_templates.parts import CORE, PARTS
 
 STARTER: Final = "starter value"
-LEVEL_KEYS: Final = {"w_x": "weight"}
-DEFAULTS: Final = {
-    "base_elevation": 0.0,
-    "k_rule": "interpolate",
-    "rho": 1.0,
-    "beta": 1.0,
-    "moment_frames_only": False,
-    "T_computed": None,
-}
-JOB_KEYS: Final = ("number", "engineer", "checker", "revision", "date")
-DRIFT_KEYS: Final = ("P_x", *(f"delta_xe_{d}" for d in DIRECTIONS))
+DEFAULT: Final = "default"
 UNTITLED: Final = "Untitled building"
+JOB_KEYS: Final = ("number", "engineer", "checker", "revision", "date")
+BLANK_PARTS: Final = frozenset({CORE, "drift"})
 
 Table = Mapping[str, Any]
 
 
 @dataclass(frozen=True)
 class Inputs:
-    """The inputs of one workbook, from the tables of a BUILDING.toml (``starter`` fills the gaps)."""
+    """The inputs of one workbook: the tables of a BUILDING.toml, gaps filled by starter values."""
 
     given: Table
-    starter: Table
+    level_count: int
 
     @property
     def edition(self) -> str:
@@ -50,40 +42,50 @@ class Inputs:
 
     @property
     def levels(self) -> Sequence[Table]:
-        """The levels, in the order given."""
-        levels: Sequence[Table] = self.given.get("level") or self.starter["level"]
+        """The levels, in the order given; empty tables where none is given."""
+        levels: Sequence[Table] = self.given.get("level") or [{}] * self.level_count
         return levels
 
     @property
-    def parts(self) -> frozenset[Part]:
-        """The parts that the inputs call for: drift needs displacements and vertical loads."""
-        given = [key for key in DRIFT_KEYS if any(level.get(key) is not None for level in self.levels)]
-        if given and len(given) < len(DRIFT_KEYS):
-            missing = ", ".join(key for key in DRIFT_KEYS if key not in given)
+    def parts(self) -> frozenset[str]:
+        """The parts that the inputs call for: those whose level entries are given."""
+        if "level" not in self.given:
+            return BLANK_PARTS
+        return frozenset(key for key, part in PARTS.items() if self._has(part.needs))
+
+    def _has(self, needs: tuple[str, ...]) -> bool:
+        given = [key for key in needs if any(level.get(key) is not None for level in self.levels)]
+        if given and len(given) < len(needs):
+            missing = ", ".join(key for key in needs if key not in given)
             raise MissingValue(missing, None, f"is needed at every level beside {', '.join(given)}")
-        return frozenset(Part) if given else frozenset({Part.FORCES})
+        return len(given) == len(needs)
 
-    def criterion(self, key: str, direction: str | None) -> Any:
-        """Return the value of a criteria row."""
-        value = self._table(self.given, direction).get(key, DEFAULTS.get(key, self))
-        if value is self:
-            value = self._table(self.starter, direction)[key]
-        return {True: "yes", False: "no"}[value] if isinstance(value, bool) else value
+    def criterion(self, q: Quantity, direction: str | None) -> Any:
+        """Return the value of a criteria entry."""
+        value = self._table(direction).get(q.key)
+        if value is None:
+            value = q.starter(Start(self.units)) if q.starter else q.default
+        return {True: "yes", False: "no"}[value] if q.is_flag else value
 
-    def source(self, key: str, per_direction: bool) -> str:
-        """Return the source of a criteria row: as given, or the mark of a starter value."""
-        tables = [self._table(self.given, d) for d in (DIRECTIONS if per_direction else (None,))]
-        text = str(self.given.get("sources", {}).get(key, ""))
-        if not all(key in table or key in DEFAULTS for table in tables):
+    def source(self, q: Quantity, per_direction: bool) -> str:
+        """Return the source of a criteria entry: as given, or the mark of a starter value."""
+        tables = [self._table(d) for d in (DIRECTIONS if per_direction else (None,))]
+        given = all(q.key in table for table in tables)
+        if q.starter and not given:
             return STARTER
-        return text or ("" if all(key in table for table in tables) else "default")
+        return str(self.given.get("sources", {}).get(q.key, "" if given else DEFAULT))
 
-    def level(self, number: int, key: str, direction: str | None) -> Any:
-        """Return an input of a level, counted from the first one given."""
-        level = self.levels[number]
-        if key == "source" and "level" not in self.given:
+    def level(self, number: int, q: Quantity, direction: str | None) -> Any:
+        """Return an entry of a level, counted from the first row."""
+        if "level" in self.given:
+            return self.levels[number].get(q.stored_key(direction))
+        if q.key == "source":
             return STARTER
-        return level.get(f"{key}_{direction}" if direction else LEVEL_KEYS.get(key, key))
+        return (
+            q.starter(Start(self.units, self.level_count - number, self.level_count))
+            if q.starter
+            else q.default
+        )
 
     def job(self, key: str) -> str:
         """Return a text of the cover."""
@@ -91,37 +93,7 @@ class Inputs:
             return str(self.given.get("title") or UNTITLED)
         return str(self.given.get("job", {}).get(key, ""))
 
-    @staticmethod
-    def _table(tables: Table, direction: str | None) -> Table:
-        found: Table = (
-            tables.get("site", {}) if direction is None else tables.get("direction", {}).get(direction, {})
-        )
+    def _table(self, direction: str | None) -> Table:
+        site, directions = self.given.get("site", {}), self.given.get("direction", {})
+        found: Table = site if direction is None else directions.get(direction, {})
         return found
-
-
-def starter(level_count: int, units: str) -> Table:
-    """Return invented values that make a workbook compute before the engineer has filled it in."""
-    us = units == US
-    story, weight, sway = (13.0, 1000.0, 0.25) if us else (4.0, 4500.0, 6.0)
-    direction = {
-        "system": "to be chosen",
-        "R": 3.0,
-        "Omega_0": 3.0,
-        "C_d": 3.0,
-        "period_system": "all other",
-        "drift_structure": "all other",
-    }
-    return {
-        "site": {"S_DS": 1.0, "S_D1": 0.5, "S_1": 0.4, "T_L": 8.0, "risk_category": "II"},
-        "direction": dict.fromkeys(DIRECTIONS, direction),
-        "level": [
-            {
-                "name": "Roof" if n == level_count else f"Level {n + 1}",
-                "elevation": story * n,
-                "weight": weight,
-                "P_x": weight * (level_count - n + 1),
-                **{f"delta_xe_{d}": sway * n for d in DIRECTIONS},
-            }
-            for n in range(level_count, 0, -1)
-        ],
-    }

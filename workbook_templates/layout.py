@@ -9,8 +9,8 @@ from typing import Final
 
 from openpyxl.utils import get_column_letter
 
-from workbook_templates import criteria, levels
 from workbook_templates.declare import DIRECTIONS, Block, Part, Quantity
+from workbook_templates.parts import chosen
 
 COVER: Final = "Cover"
 CRITERIA: Final = "Criteria"
@@ -52,7 +52,7 @@ class Layout:
     """The addresses of one workbook: how many levels, which parts."""
 
     level_count: int
-    parts: frozenset[Part]
+    part_keys: frozenset[str]
     rows: dict[str, int] = field(init=False, default_factory=dict)
     table: list[Column] = field(init=False, default_factory=list)
 
@@ -68,13 +68,18 @@ class Layout:
     @property
     def criteria(self) -> list[Block]:
         """The criteria blocks of the parts that are in."""
-        return [b for b in (block.only(self.parts) for block in criteria.BLOCKS) if b.quantities]
+        return [block for part in self.parts for block in part.criteria]
+
+    @cached_property
+    def parts(self) -> tuple[Part, ...]:
+        """The parts that are in, in the order of the workbook."""
+        return chosen(self.part_keys)
 
     @property
     def bands(self) -> list[tuple[Block, str | None]]:
         """The bands of the story table with their direction, those of one direction together."""
-        kept = [b for b in (band.only(self.parts) for band in levels.BANDS) if b.quantities]
-        return [(b, d) for b in kept for d in (DIRECTIONS if b.per_direction else (None,))]
+        bands = (band for part in self.parts for band in part.bands)
+        return [(b, d) for b in bands for d in (DIRECTIONS if b.per_direction else (None,))]
 
     @cached_property
     def letters(self) -> dict[Key, str]:

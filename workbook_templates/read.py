@@ -12,8 +12,9 @@ from functools import cached_property
 from typing import Any, Final
 
 from workbook_templates.declare import DIRECTIONS, Part, Quantity
-from workbook_templates.inputs import JOB_KEYS, LEVEL_KEYS
+from workbook_templates.inputs import JOB_KEYS
 from workbook_templates.layout import ROLE_ROW, SYMBOL_ROW, Column, Layout
+from workbook_templates.parts import CORE, PARTS
 from xlbridge.headless.operands import NotEvaluated
 from xlbridge.values import CellError, Scalar, Value
 
@@ -62,14 +63,18 @@ class Reader:
 
     @cached_property
     def _layout(self) -> Layout:
-        drift = any(self._heads(c) for c in Layout(1, frozenset(Part)).table if c.quantity.part is Part.DRIFT)
-        return Layout(len(self._rows), frozenset(Part) if drift else frozenset({Part.FORCES}))
+        present = frozenset(key for key, part in PARTS.items() if self._has(part))
+        return Layout(len(self._rows), present)
 
     @cached_property
     def _rows(self) -> list[Row]:
         """The rows below the headings in which any input is filled in."""
-        inputs = [self._place(c) for c in Layout(1, frozenset({Part.FORCES})).table if c.quantity.is_input]
+        inputs = [self._place(c) for c in Layout(1, frozenset({CORE})).table if c.quantity.is_input]
         return [row for row in self._table[HEADER_ROWS:] if any(row[i] is not None for i in inputs)]
+
+    def _has(self, part: Part) -> bool:
+        """Whether the story table has a column of the part."""
+        return any(self._heads(c) for c in Layout(1, frozenset({part.key})).table)
 
     def _heads(self, column: Column) -> bool:
         return column.heading in self._table[0]
@@ -79,10 +84,10 @@ class Reader:
             raise ReadError(f"the story table has no column headed {column.heading}")
         return self._table[0].index(column.heading)
 
-    def _columns(self, direction: str | None, wanted: bool) -> Iterator[tuple[str, int]]:
+    def _columns(self, direction: str | None, wanted: bool) -> Iterator[tuple[Quantity, int]]:
         for column in self._layout.table:
             if column.direction == direction and column.quantity.is_input is wanted:
-                yield column.quantity.key, self._place(column)
+                yield column.quantity, self._place(column)
 
     def _quantities(self, direction: str | None, wanted: bool) -> Iterator[Quantity]:
         for block in self._layout.criteria:
@@ -91,16 +96,17 @@ class Reader:
 
     def _entries(self, direction: str | None) -> dict[str, Any]:
         """Return the filled criteria entries of the site or of a direction."""
-        names = {q.key: self._layout.name(q.key, direction) for q in self._quantities(direction, True)}
-        values: dict[str, Any] = _filled({key: self._cell(name) for key, name in names.items()})
-        flag = values.get("moment_frames_only")
-        return values if flag not in FLAGS else {**values, "moment_frames_only": FLAGS[flag]}
+        values = {}
+        for q in self._quantities(direction, True):
+            value = self._cell(self._layout.name(q.key, direction))
+            values[q.key] = FLAGS.get(str(value), value) if q.is_flag else value
+        return _filled(values)
 
     def _level(self, row: Row) -> dict[str, Any]:
         level: dict[str, Any] = {}
         for direction in (None, *DIRECTIONS):
-            for key, place in self._columns(direction, True):
-                name = f"{key}_{direction}" if direction else LEVEL_KEYS.get(key, key)
+            for q, place in self._columns(direction, True):
+                name = q.stored_key(direction)
                 level[name] = _sound(f"level {row[0]}: {name}", row[place])
         return _filled(level)
 
@@ -113,7 +119,7 @@ class Reader:
             q.key: self._value(self._layout.name(q.key, direction))
             for q in self._quantities(direction, False)
         }
-        found.update({key: [row[i] for row in self._rows] for key, i in self._columns(direction, False)})
+        found.update({q.key: [row[i] for row in self._rows] for q, i in self._columns(direction, False)})
         return found
 
     def _value(self, name: str) -> Value:

@@ -5,7 +5,6 @@ from __future__ import annotations
 from openpyxl.worksheet.worksheet import Worksheet
 
 from engine.units import symbol
-from workbook_templates.checks import CHECKS
 from workbook_templates.declare import DIRECTIONS, Check, Quantity, Role
 from workbook_templates.draw import sheets, style
 from workbook_templates.inputs import STARTER, Inputs
@@ -26,7 +25,7 @@ def draw(sheet: Worksheet, layout: Layout, inputs: Inputs) -> None:
         sheet.cell(HEADER, column).alignment = style.RIGHT
     sheet.cell(HEADER, 8).alignment = style.CENTRE
     row = HEADER
-    for check in (c for c in CHECKS if c.part in layout.parts):
+    for check in (check for part in layout.parts for check in part.checks):
         for direction in DIRECTIONS if check.per_direction else (None,):
             row += 1
             _draw_line(sheet, layout, inputs, check, direction, row)

@@ -11,7 +11,7 @@ from engine.editions import rules
 from engine.units import symbol
 from engine.version import __version__
 from workbook_templates import layout as places
-from workbook_templates.declare import DIRECTIONS, Part, Quantity, Role
+from workbook_templates.declare import DIRECTIONS, Quantity, Role
 from workbook_templates.draw import sheets, style
 from workbook_templates.inputs import Inputs
 from workbook_templates.layout import COVER, Layout
@@ -83,31 +83,17 @@ def _draw_job(sheet: Worksheet, inputs: Inputs, row: int) -> int:
     return row + 1
 
 
-def _headlines(layout: Layout) -> list[tuple[str, str, str]]:
-    lines = [
-        ("Base shear V", "force", "={V}"),
-        ("Overturning at the base", "moment", "={M_x:base}"),
-        ("Period T", "time", "={T}"),
-    ]
-    if Part.DRIFT in layout.parts:
-        lines += [
-            ("Largest drift over limit", "none", "={drift_over_limit:total}"),
-            ("Largest theta", "none", "={theta:total}"),
-        ]
-    return lines
-
-
 def _draw_headlines(sheet: Worksheet, layout: Layout, inputs: Inputs, row: int) -> int:
     style.write(sheet.cell(row, 1), "Results", style.HEADING)
     for column, text in ((3, "Direction X"), (4, "Direction Y")):
         style.write(sheet.cell(row, column), text, style.BOLD, style.RIGHT)
-    for text, unit, formula in _headlines(layout):
+    for line in (line for part in layout.parts for line in part.headlines):
         row += 1
-        style.write(sheet.cell(row, 1), text)
-        style.write(sheet.cell(row, 2), symbol(unit, inputs.units))
-        number_format = style.number_format(Quantity("", "", unit, Role.LINK), inputs.units)
+        style.write(sheet.cell(row, 1), line.text)
+        style.write(sheet.cell(row, 2), symbol(line.unit, inputs.units))
+        number_format = style.number_format(Quantity("", "", line.unit, Role.LINK), inputs.units)
         for column, direction in zip((3, 4), DIRECTIONS, strict=True):
-            sheet.cell(row, column, layout.write(formula, COVER, direction))
+            sheet.cell(row, column, layout.write(line.formula, COVER, direction))
             style.dress(sheet.cell(row, column), Role.LINK, number_format)
     return row + 1
 

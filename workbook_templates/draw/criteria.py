@@ -55,7 +55,7 @@ def _draw_row(sheet: Worksheet, layout: Layout, inputs: Inputs, block: Block, q:
             rule.add(cell)
             sheet.add_data_validation(rule)
     if q.role is Role.INPUT:
-        source = sheet.cell(row, 8, inputs.source(q.key, block.per_direction))
+        source = sheet.cell(row, 8, inputs.source(q, block.per_direction))
         style.dress(source, Role.INPUT, "@")
         sheets.name(sheet, layout.source_name(q.key), f"$H${row}")
     sheets.fit_row(sheet, row, WIDTHS, least=2 if q.unit == "text" and q.function else 1)
@@ -63,7 +63,7 @@ def _draw_row(sheet: Worksheet, layout: Layout, inputs: Inputs, block: Block, q:
 
 def _content(layout: Layout, inputs: Inputs, q: Quantity, direction: str | None) -> Any:
     if q.role is Role.INPUT:
-        return inputs.criterion(q.key, direction)
+        return inputs.criterion(q, direction)
     if q.role is Role.FIXED:
         fixed: Mapping[str, Any] = {
             "edition": inputs.edition,

@@ -8,7 +8,7 @@ from openpyxl.drawing.line import LineProperties
 from openpyxl.worksheet.worksheet import Worksheet
 
 from engine.units import symbol
-from workbook_templates.declare import DIRECTIONS, Part, Role
+from workbook_templates.declare import DIRECTIONS, Figure, Role
 from workbook_templates.draw import sheets, style
 from workbook_templates.inputs import Inputs
 from workbook_templates.layout import TOP_GUARD, Layout
@@ -23,20 +23,21 @@ def draw(sheet: Worksheet, levels: Worksheet, layout: Layout, inputs: Inputs) ->
     """Place the charts one below the other."""
     sheets.head(sheet, "Figures")
     sheet.column_dimensions["A"].width = 30
-    forces = f"[{symbol('force', inputs.units)}]"
-    charts = [
-        _bars(levels, layout, "F_x", f"Story forces F_x {forces}"),
-        _profile(levels, layout, inputs, "V_x", f"Story shears V_x {forces}"),
-    ]
-    if Part.DRIFT in layout.parts:
-        drift = _profile(levels, layout, inputs, "drift_over_limit", "Drift over its limit, Delta/Delta_a")
-        drift.series.append(_limit_line(sheet))
-        charts.append(drift)
-    for number, chart in enumerate(charts):
+    figures = [figure for part in layout.parts for figure in part.figures]
+    for number, figure in enumerate(figures):
+        draw_one = _bars if figure.bars else _profile
+        chart = draw_one(levels, layout, inputs, figure)
+        if figure.limit:
+            chart.series.append(_limit_line(sheet))
         chart.width, chart.height = WIDTH, HEIGHT
         sheet.add_chart(chart, f"A{LIMIT_ROW + 3 + ROWS * number}")
     sheets.page(sheet, inputs.units, "1:2", landscape=False)
     sheet.page_setup.fitToHeight = 1
+
+
+def _title(layout: Layout, inputs: Inputs, figure: Figure) -> str:
+    q = next(c.quantity for c in layout.table if c.quantity.key == figure.key)
+    return figure.title if q.unit == "none" else f"{figure.title} [{symbol(q.unit, inputs.units)}]"
 
 
 def _range(levels: Worksheet, layout: Layout, key: str, direction: str | None) -> Reference:
@@ -44,31 +45,34 @@ def _range(levels: Worksheet, layout: Layout, key: str, direction: str | None) -
     return Reference(levels, min_col=column, min_row=TOP_GUARD, max_row=layout.bottom_guard)
 
 
-def _bars(levels: Worksheet, layout: Layout, key: str, title: str) -> BarChart:
+def _bars(levels: Worksheet, layout: Layout, inputs: Inputs, figure: Figure) -> BarChart:
+    """A quantity level by level."""
     chart = BarChart()
     chart.type, chart.gapWidth = "bar", 60
     for direction in DIRECTIONS:
-        series = Series(_range(levels, layout, key, direction), title=f"Direction {direction}")
+        series = Series(_range(levels, layout, figure.key, direction), title=f"Direction {direction}")
         series.graphicalProperties = GraphicalProperties(solidFill=LINES[direction][0])
         chart.series.append(series)
     chart.set_categories(_range(levels, layout, "name", None))
     chart.x_axis.scaling.orientation = "maxMin"  # the first row of the table is the highest level
     chart.y_axis.crosses = "max"
+    title = _title(layout, inputs, figure)
     _finish(chart, title, "Level", title)
     return chart
 
 
-def _profile(levels: Worksheet, layout: Layout, inputs: Inputs, key: str, title: str) -> ScatterChart:
+def _profile(levels: Worksheet, layout: Layout, inputs: Inputs, figure: Figure) -> ScatterChart:
     """A quantity over the height above the base."""
     chart = ScatterChart()
     chart.style, chart.scatterStyle = 13, "lineMarker"
     for direction in DIRECTIONS:
-        x, y = _range(levels, layout, key, direction), _range(levels, layout, "h_x", None)
+        x, y = _range(levels, layout, figure.key, direction), _range(levels, layout, "h_x", None)
         series = Series(y, x, title=f"Direction {direction}")
         _stroke(series, *LINES[direction])
         series.marker.symbol, series.marker.size = ("circle" if direction == "X" else "diamond"), 6
         chart.series.append(series)
     chart.x_axis.scaling.min = chart.y_axis.scaling.min = 0
+    title = _title(layout, inputs, figure)
     _finish(chart, title, title, f"Height above base h_x [{symbol('length', inputs.units)}]")
     return chart
 

@@ -73,7 +73,7 @@ def _draw_cells(sheet: Worksheet, layout: Layout, inputs: Inputs, column: Column
     for row in range(FIRST_LEVEL, layout.bottom_guard):
         cell = sheet[f"{column.letter}{row}"]
         if q.role is Role.INPUT:
-            cell.value = inputs.level(row - FIRST_LEVEL, q.key, direction)
+            cell.value = inputs.level(row - FIRST_LEVEL, q, direction)
         else:
             cell.value = layout.write(q.formula, LEVELS, direction, row)
         style.dress(cell, q.role, number_format)

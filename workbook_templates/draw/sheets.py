@@ -98,7 +98,7 @@ def flag_verdicts(sheet: Worksheet, area: str, verdict: str = "") -> None:
 def validation(q: Quantity) -> DataValidation | None:
     """Return the entry rule of an input: a list of words, a range of numbers, or none for free text."""
     if q.choices:
-        rule = DataValidation(type="list", formula1=f'"{",".join(q.choices)}"', allow_blank=q.optional)
+        rule = DataValidation(type="list", formula1=f'"{",".join(q.choices)}"', allow_blank=q.starter is None)
         allowed = "one of: " + ", ".join(q.choices)
     elif q.span is not None:
         rule = _number_rule(q)
@@ -122,7 +122,9 @@ def _number_rule(q: Quantity) -> DataValidation:
             type="decimal", operator="between", formula1=f"{low:g}", formula2=f"{span.high:g}"
         )
     operator = "greaterThan" if span.low_open else "greaterThanOrEqual"
-    return DataValidation(type="decimal", operator=operator, formula1=f"{low:g}", allow_blank=q.optional)
+    return DataValidation(
+        type="decimal", operator=operator, formula1=f"{low:g}", allow_blank=q.starter is None
+    )
 
 
 def clause_text(q: Quantity, edition: str) -> str:

@@ -13,10 +13,12 @@ from hypothesis import HealthCheck, given, settings
 from engine.building import from_mapping, to_mapping
 from tests.support.buildings import buildings
 from tests.support.command import run, unchanged
-from workbook_templates.inputs import DEFAULTS
+from workbook_templates.parts import PARTS
 from workbook_templates.read import Reader
 from xlbridge.audit.routes import compare
 from xlbridge.headless.compute import open_workbook
+
+DEFAULTS = {q.key: q.default for part in PARTS.values() for block in part.criteria for q in block.quantities}
 
 FEW = settings(
     max_examples=14,
