@@ -5,7 +5,11 @@ A message always says which argument, which value, what is allowed, and by which
 
 from __future__ import annotations
 
-from typing import ClassVar
+from collections.abc import Sequence
+from typing import ClassVar, Final
+
+#: characters of a list of words that a message or a help line prints in full
+LIST_LIMIT: Final = 200
 
 
 class EngineError(ValueError):
@@ -39,6 +43,16 @@ class NotApplicable(EngineError):
     """The clause does not apply, or the table has no such row."""
 
     cell_code = "#N/A"
+
+
+def listed(words: Sequence[str]) -> str:
+    """Return the allowed words in one text; of a long list how many there are, and its ends.
+
+    >>> listed(("us", "si"))
+    'us, si'
+    """
+    text = ", ".join(words)
+    return text if len(text) <= LIST_LIMIT else f"{len(words)} texts from {words[0]!r} to {words[-1]!r}"
 
 
 def _shown(value: object) -> str:

@@ -13,7 +13,7 @@ from typing import Final, ParamSpec, TypeAlias, TypeVar, cast
 import numpy as np
 from numpy.typing import ArrayLike, NDArray
 
-from engine.errors import ImpossibleValue, MissingValue, NotApplicable, WrongType
+from engine.errors import ImpossibleValue, MissingValue, NotApplicable, WrongType, listed
 
 Array: TypeAlias = NDArray[np.float64]
 #: what a formula returns: a float64 for scalar arguments, an array of the broadcast shape otherwise
@@ -76,12 +76,13 @@ def within(low: float, high: float, name: str, value: ArrayLike, clause: str = "
 def choice(name: str, value: object, allowed: Iterable[str], clause: str = "") -> str:
     """Return ``value`` if it is one of the allowed words (exact spelling)."""
     words = tuple(allowed)
+    among = listed(words)
     if value is None or value == "":
-        raise MissingValue(name, None, f"must be one of {', '.join(words)}", clause)
+        raise MissingValue(name, None, f"must be one of {among}", clause)
     if not isinstance(value, str):
-        raise WrongType(name, value, f"must be text, one of {', '.join(words)}", clause)
+        raise WrongType(name, value, f"must be text, one of {among}", clause)
     if value not in words:
-        raise NotApplicable(name, value, f"must be one of {', '.join(words)}", clause)
+        raise NotApplicable(name, value, f"must be one of {among}", clause)
     return value
 
 
@@ -115,6 +116,16 @@ def worded(texts: Sequence[str], index: ArrayLike) -> Words:
     """Return the text at each index: a plain text for one index."""
     place = np.asarray(index, dtype=np.intp)
     return texts[int(place)] if place.ndim == 0 else np.array(texts)[place]
+
+
+def reasons(texts: Sequence[str], holds: Sequence[ArrayLike], otherwise: str) -> Words:
+    """Return the texts whose conditions hold, joined; ``otherwise`` where none does."""
+    flags = np.broadcast_arrays(*(np.asarray(flag, dtype=np.bool_) for flag in holds))
+    found = [
+        "; ".join(text for text, flag in zip(texts, case, strict=True) if flag) or otherwise
+        for case in zip(*(flag.flat for flag in flags), strict=True)
+    ]
+    return np.array(found).reshape(flags[0].shape) if flags[0].ndim else found[0]
 
 
 def _numbers(name: str, value: ArrayLike) -> Array:

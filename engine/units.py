@@ -17,14 +17,28 @@ UNITS: Final = MappingProxyType(
         "time": {US: "s", SI: "s"},
         "acceleration": {US: "g", SI: "g"},
         "length": {US: "ft", SI: "m"},
+        "area": {US: "ft2", SI: "m2"},
+        "velocity": {US: "ft/s", SI: "m/s"},
         "displacement": {US: "in", SI: "mm"},
         "force": {US: "kip", SI: "kN"},
+        "unit load": {US: "psf", SI: "kN/m2"},
         "moment": {US: "kip-ft", SI: "kN-m"},
+        "area": {US: "ft2", SI: "m2"},
+        "stiffness": {US: "kip/in", SI: "kN/mm"},
     }
 )
 
 #: displacement units in one length unit (in/ft, mm/m): exact by definition.
 DISPLACEMENT_PER_LENGTH: Final = MappingProxyType({US: 12.0, SI: 1000.0})
+
+#: standard gravity in displacement units per second squared: exact by definition.
+GRAVITY: Final = MappingProxyType({US: 9806.65 / 25.4, SI: 9806.65})
+
+#: metres in a foot: exact by definition.
+FOOT: Final = 0.3048
+
+#: unit loads times areas in one force unit (lb/kip, kN/kN): exact by definition.
+UNIT_LOAD_AREA_PER_FORCE: Final = MappingProxyType({US: 1000.0, SI: 1.0})
 
 
 def symbol(quantity: str, system: str) -> str:

@@ -15,7 +15,7 @@ from typing import Any, TypeAlias
 
 import numpy as np
 
-from engine.errors import EngineError, ImpossibleValue, MissingValue, WrongType
+from engine.errors import EngineError, ImpossibleValue, MissingValue, WrongType, listed
 from xlbridge.catalogue.entry import Argument as Declared
 from xlbridge.catalogue.entry import Kind, SheetFunction
 from xlbridge.values import OMITTED, Argument, CellError, Grid, Omitted, Scalar, Value
@@ -160,7 +160,7 @@ def _scalar(declared: Declared, cell: Any) -> Any:
     if declared.kind is Kind.CHOICE:
         if kind is str and cell:
             return cell
-        words = f"must be text, one of {', '.join(declared.choices)}"
+        words = f"must be text, one of {listed(declared.choices)}"
         if cell is None or cell == "":
             raise MissingValue(declared.symbol, None, words)
         raise WrongType(declared.symbol, cell, words)

@@ -7,8 +7,8 @@ from functools import partial
 import numpy as np
 import pytest
 
-from engine.errors import ImpossibleValue
-from engine.require import above, agree, at_least, at_most, finite, within
+from engine.errors import ImpossibleValue, NotApplicable, listed
+from engine.require import above, agree, at_least, at_most, choice, finite, reasons, within
 
 NAN, INF = float("nan"), float("inf")
 CHECKS = {
@@ -61,3 +61,18 @@ def test_agreement_but_for_round_off():
     assert agree(1.0, 1.0 + 5e-13)
     assert not agree(1.0, 1.0 + 5e-12)
     assert not agree(0.0, 1e-300)
+
+
+def test_reasons_are_joined_in_their_order():
+    assert reasons(("a", "b"), (True, True), "none") == "a; b"
+    assert reasons(("a", "b"), (False, True), "none") == "b"
+    assert reasons(("a", "b"), (False, False), "none") == "none"
+    found = reasons(("a", "b"), ([[True, False]], [[False], [True]]), "none")
+    assert found.tolist() == [["a", "none"], ["a; b", "b"]]
+
+
+def test_a_long_list_of_words_is_named_by_its_ends():
+    words = [f"word {n}" for n in range(60)]
+    assert listed(words[:3]) == "word 0, word 1, word 2"
+    with pytest.raises(NotApplicable, match="one of 60 texts from 'word 0' to 'word 59'"):
+        choice("x", "word 60", words)

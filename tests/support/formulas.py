@@ -68,7 +68,9 @@ def public_functions() -> Iterator[tuple[str, Callable[..., Any]]]:
     """Yield every public function that a concept module defines, by its dotted name below ``engine``."""
     for module in CONCEPTS:
         for name, member in vars(module).items():
-            if callable(member) and not name.startswith("_") and member.__module__ == module.__name__:
+            home = getattr(member, "__module__", "")
+            own = home == module.__name__ or home.startswith(f"{module.__name__}.")
+            if callable(member) and not name.startswith("_") and own:
                 yield f"{module.__name__.removeprefix('engine.')}.{name}", member
 
 

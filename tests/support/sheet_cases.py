@@ -10,6 +10,7 @@ from collections.abc import Iterator, Mapping, Sequence
 from random import Random
 from typing import Any
 
+from engine.errors import listed
 from xlbridge.catalogue import CATALOGUE
 from xlbridge.catalogue.entry import Argument, Kind, SheetFunction
 from xlbridge.values import OMITTED, Grid
@@ -43,6 +44,12 @@ BRANCHES = {
 def ident(value: object) -> str:
     """A test id for an entry or an argument."""
     return str(getattr(value, "name", value))
+
+
+def named(argument: Argument) -> tuple[str, ...]:
+    """The words that a refusal names: all of a short list, the ends of a long one."""
+    short = listed(argument.choices) == ", ".join(argument.choices)
+    return argument.choices if short else (argument.choices[0], argument.choices[-1])
 
 
 def column(cells: Sequence[Any]) -> Grid:

@@ -8,7 +8,17 @@ from typing import Any
 import numpy as np
 import pytest
 
-from tests.support.sheet_cases import ENTRIES, PLACES, as_cells, column, example, full, ident, with_cell
+from tests.support.sheet_cases import (
+    ENTRIES,
+    PLACES,
+    as_cells,
+    column,
+    example,
+    full,
+    ident,
+    named,
+    with_cell,
+)
 from xlbridge import adapter
 from xlbridge.catalogue import CATALOGUE
 from xlbridge.catalogue.entry import Argument, Kind, SheetFunction
@@ -126,13 +136,13 @@ def test_3_text_and_booleans_are_no_numbers(entry: SheetFunction, argument: Argu
 def test_3_numbers_and_booleans_are_no_words(entry: SheetFunction, argument: Argument, cell: Any) -> None:
     shown = f"{cell:g}" if type(cell) is float else repr(cell)
     found = adapter.call(entry, with_cell(entry, argument, cell))
-    refused(found, "#VALUE!", f"{argument.symbol} = {shown}: must be text", *argument.choices)
+    refused(found, "#VALUE!", f"{argument.symbol} = {shown}: must be text", *named(argument))
 
 
 @pytest.mark.parametrize(("entry", "argument"), WORDS, ids=ident)
 def test_5_a_word_that_is_not_in_the_list(entry: SheetFunction, argument: Argument) -> None:
     found = adapter.call(entry, with_cell(entry, argument, "nowhere"))
-    refused(found, "#N/A", "'nowhere'", *argument.choices)
+    refused(found, "#N/A", "'nowhere'", *named(argument))
 
 
 @pytest.mark.parametrize(("entry", "argument"), NUMBERS, ids=ident)

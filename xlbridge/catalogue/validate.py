@@ -8,6 +8,7 @@ from string import Formatter
 from typing import Any
 
 from engine.editions import clauses
+from engine.errors import listed
 from engine.units import UNITS
 from xlbridge.catalogue.entry import Argument, Kind, SheetFunction
 
@@ -126,7 +127,7 @@ def places(template: str) -> set[str]:
 def describe(a: Argument) -> str:
     """Return the help line of an argument: text, unit, allowed values."""
     if a.kind is Kind.CHOICE:
-        return f"{a.text}: {', '.join(a.choices)}."
+        return f"{a.text}: {listed(a.choices)}."
     unit = {"none": "no unit", "time": "s", "acceleration": "g"}.get(a.unit, f"a {a.unit} unit")
     each = f"one cell a {a.each}, " if a.kind is Kind.LEVELS else ""
     return f"{a.text} [{unit}], {each}{a.span}."

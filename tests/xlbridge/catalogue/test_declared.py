@@ -17,6 +17,7 @@ from tests.support.sheet_cases import (
     full,
     ident,
     inside,
+    named,
     outside,
     placed,
     with_cell,
@@ -113,7 +114,7 @@ def test_each_word_is_accepted_and_no_other(entry: SheetFunction, argument: Argu
         found = adapter.call(entry, with_cell(entry, argument, word))
         assert found == CellError("#N/A")
         assert repr(word) in found.reason
-        assert all(allowed in found.reason for allowed in argument.choices)
+        assert all(allowed in found.reason for allowed in named(argument))
 
 
 @pytest.mark.parametrize("entry", [e for e in ENTRIES if e.defaults], ids=ident)
