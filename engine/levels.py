@@ -36,6 +36,16 @@ def checked_weights(weights: ArrayLike, heights: Array) -> Array:
     return array
 
 
+def counted(name: str, values: Array, what: str) -> Array:
+    """Return one list of 1 to 1,000 values that are no levels (``what`` they are, in the plural)."""
+    array = np.atleast_1d(values)
+    if array.ndim > 1:
+        raise WrongType(name, f"{array.ndim} axes", "must be one list")
+    if not 1 <= array.size <= MAX_LEVELS:
+        raise ImpossibleValue(name, f"{array.size} {what}", f"must be 1 to {MAX_LEVELS} {what}")
+    return array
+
+
 def per_level(name: str, values: Array, heights: Array) -> Array:
     """Return one value for each level; refuse another number of values than levels."""
     array = np.atleast_1d(values)
@@ -94,6 +104,29 @@ def refuse_stranger(w_x: ArrayLike, place: Array, weights: Array, heights: Array
     known = (same & (np.abs(place - heights) <= slack(heights))).any(axis=-1)
     if not known.all():
         raise NotApplicable("w_x", first(weight, ~known), "must be the weight of the level at h_x")
+
+
+def next_lower(place: Array, heights: Array) -> Array:
+    """Return the next height below the place, or 0 (the base)."""
+    return highest(np.where(is_below(place, heights), heights, 0.0))
+
+
+def next_higher(place: Array, heights: Array) -> Array:
+    """Return the next height above the place; infinite at the top."""
+    above_it = heights > place + slack(heights)
+    result: Array = np.where(above_it, heights, np.inf).min(axis=-1, keepdims=True)
+    return result
+
+
+def held(name: str, values: Array, place: Array, heights: Array) -> Array:
+    """Return the value that the levels at a place hold, infinite where none is; refuse values that differ."""
+    there = np.abs(place - heights) <= slack(heights)
+    least = np.where(there, values, np.inf).min(axis=-1)
+    most = np.where(there, values, -np.inf).max(axis=-1)
+    torn = most - least > TOLERANCE * np.maximum(np.abs(most), np.abs(least))
+    if torn.any():
+        raise NotApplicable(name, first(most, torn), "levels at one height hold different values")
+    return np.asarray(least)
 
 
 def first(values: Array, where: Mask | np.bool_) -> float:

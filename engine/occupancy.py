@@ -9,6 +9,8 @@ import numpy as np
 from engine.tables import table
 
 RISK_CATEGORIES: Final = table("importance_factor").keys
+#: the Seismic Design Categories, mildest first
+DESIGN_CATEGORIES: Final = ("A", "B", "C", "D", "E", "F")
 
 
 def importance_factor(risk_category: str) -> np.float64:

@@ -112,6 +112,16 @@ def agree(value: ArrayLike, other: ArrayLike) -> NDArray[np.bool_]:
     return np.isclose(value, other, rtol=ROUND_OFF, atol=0.0)
 
 
+def exceeds(value: ArrayLike, limit: ArrayLike) -> NDArray[np.bool_]:
+    """Tell where a value is above a limit by more than round-off."""
+    return (np.asarray(value) > limit) & ~agree(value, limit)
+
+
+def short_of(value: ArrayLike, limit: ArrayLike) -> NDArray[np.bool_]:
+    """Tell where a value is below a limit by more than round-off."""
+    return (np.asarray(value) < limit) & ~agree(value, limit)
+
+
 def worded(texts: Sequence[str], index: ArrayLike) -> Words:
     """Return the text at each index: a plain text for one index."""
     place = np.asarray(index, dtype=np.intp)

@@ -12,7 +12,6 @@ import numpy as np
 from numpy.typing import ArrayLike
 
 from engine import levels
-from engine.errors import NotApplicable
 from engine.require import Array, Result, above, choice, finite, formula, within
 
 EXPONENT_RULES: Final = ("interpolate", "two")
@@ -210,7 +209,7 @@ def story_height(h_x: ArrayLike, heights: ArrayLike) -> Result:
     """
     h = levels.checked_heights(heights)
     place = levels.position(h_x, h, base=False)
-    return finite("h_x", h_x) - _next_lower(place, h)[..., 0]
+    return finite("h_x", h_x) - levels.next_lower(place, h)[..., 0]
 
 
 @formula
@@ -236,17 +235,8 @@ def value_below(h_x: ArrayLike, values: ArrayLike, heights: ArrayLike) -> Result
     """
     h = levels.checked_heights(heights)
     held = levels.per_level("values", finite("values", values), h)
-    lower = _next_lower(levels.position(h_x, h, base=False), h)
-    there = np.abs(h - lower) <= levels.slack(h)
-    least = np.where(there, held, np.inf).min(axis=-1)
-    most = np.where(there, held, -np.inf).max(axis=-1)
-    at_base = lower[..., 0] == 0
-    torn = ~at_base & (most - least > levels.TOLERANCE * np.maximum(np.abs(most), np.abs(least)))
-    if torn.any():
-        raise NotApplicable(
-            "values", levels.first(most, torn), "levels at the next lower height hold different values"
-        )
-    return np.where(at_base, 0.0, least)
+    lower = levels.next_lower(levels.position(h_x, h, base=False), h)
+    return np.where(lower[..., 0] == 0, 0.0, levels.held("values", held, lower, h))
 
 
 def _exponent(k: ArrayLike) -> Array:
@@ -256,7 +246,3 @@ def _exponent(k: ArrayLike) -> Array:
 def _on_levels(value: Array) -> Array | float:
     # a plain number keeps numpy's quick paths for whole exponents
     return value[..., None] if value.ndim else float(value)
-
-
-def _next_lower(place: Array, heights: Array) -> Array:
-    return levels.highest(np.where(levels.is_below(place, heights), heights, 0.0))

@@ -3,7 +3,7 @@
 from __future__ import annotations
 
 from engine.editions import EDITIONS
-from engine.occupancy import RISK_CATEGORIES
+from engine.occupancy import DESIGN_CATEGORIES, RISK_CATEGORIES
 from engine.units import SYSTEMS
 from xlbridge.catalogue.entry import NOT_NEGATIVE, POSITIVE, Argument, Kind, Span
 
@@ -37,3 +37,4 @@ units = Argument(
     "units", "text", "Unit system: us (kip, ft, in) or si (kN, m, mm)", kind=Kind.CHOICE, choices=SYSTEMS
 )
 risk_category = Argument("risk_category", "text", "Risk category", kind=Kind.CHOICE, choices=RISK_CATEGORIES)
+SDC = Argument("SDC", "text", "Seismic Design Category", kind=Kind.CHOICE, choices=DESIGN_CATEGORIES)
