@@ -10,7 +10,7 @@ from pathlib import Path
 from typing import Any, Final, TypeAlias
 
 from openpyxl import Workbook
-from openpyxl.utils.datetime import to_excel
+from openpyxl.utils.datetime import CALENDAR_MAC_1904, to_excel
 from openpyxl.worksheet.formula import ArrayFormula, DataTableFormula
 from openpyxl.worksheet.worksheet import Worksheet
 
@@ -99,6 +99,18 @@ class Book:
     def formula(self, cell: Cell) -> Formula | None:
         """The formula that fills a cell, if one does."""
         return self.formulas.get(cell.sheet, {}).get((cell.row, cell.column))
+
+    @property
+    def counts_from_1904(self) -> bool:
+        """Whether the workbook's dates are days from 1904 on."""
+        return self.workbook is not None and self.workbook.epoch == CALENDAR_MAC_1904
+
+    def hides_rows(self, sheet: str, top: int, bottom: int) -> bool:
+        """Whether any of the rows is hidden."""
+        if self.workbook is None:
+            return False
+        rows = self.workbook[sheet].row_dimensions
+        return any(rows[row].hidden for row in rows if top <= row <= bottom)
 
     def formula_cells(self) -> Iterator[Cell]:
         """Every cell that a formula fills, by sheet, row and column."""

@@ -7,11 +7,11 @@ Outside it that would be an implicit intersection, which is refused.
 from __future__ import annotations
 
 from collections.abc import Callable, Mapping, Sequence
-from dataclasses import dataclass
 from typing import Any, Final, NamedTuple, TypeAlias
 
 from xlbridge.headless.book import Book
 from xlbridge.headless.builtins import BUILTINS, Builtin, invoke
+from xlbridge.headless.context import WholeLines, require_context
 from xlbridge.headless.names import definition
 from xlbridge.headless.nodes import (
     ArrayConstant,
@@ -38,8 +38,6 @@ Observer: TypeAlias = Callable[[Call, tuple[Argument, ...], Value], None]
 
 _OWN_CELL: Final = frozenset({"ROW", "COLUMN"})
 """Functions that without an argument mean the cell they stand in."""
-_COUNT_BLANKS: Final = frozenset({"ROWS", "COLUMNS", "COUNTBLANK"})
-_BLANK_CRITERIA: Final = frozenset({"COUNTIF", "COUNTIFS"})
 
 
 class Place(NamedTuple):
@@ -48,11 +46,6 @@ class Place(NamedTuple):
     cell: Cell | None
     sheet: str | None
     names: tuple[str, ...] = ()
-
-
-@dataclass(frozen=True, slots=True)
-class WholeLines(Area):
-    """Whole columns or rows, cut to the part of the sheets that is used."""
 
 
 class Interpreter:
@@ -223,7 +216,7 @@ class Interpreter:
         ]
         if not operands and node.name in _OWN_CELL:
             operands = [self._own_cell(node, place)]
-        _require_no_blank_counted(node.name, operands)
+        require_context(node.name, operands, self._book)
         result = invoke(builtin, operands)
         return None if isinstance(result, Omitted) else result
 
@@ -248,22 +241,3 @@ def _argument(operand: Operand) -> Argument:
 
 def _names_a_sheet(node: Node) -> bool:
     return not isinstance(node, Reference) or node.sheet is not None
-
-
-def _require_no_blank_counted(name: str, operands: Sequence[object]) -> None:
-    """Refuse to count the blanks of whole columns or rows, which have been cut to the used part."""
-    counts_blanks = name in _COUNT_BLANKS or (name in _BLANK_CRITERIA and any(map(_matches_blanks, operands)))
-    if counts_blanks and any(isinstance(operand, WholeLines) for operand in operands):
-        raise NotEvaluated(f"{name} would count the blanks of whole columns or rows; name the cells")
-
-
-def _matches_blanks(criterion: object) -> bool:
-    if isinstance(criterion, Area):
-        return (
-            not isinstance(criterion, WholeLines)
-            and criterion.is_cell
-            and _matches_blanks(criterion.grid[0][0])
-        )
-    return criterion is None or (
-        isinstance(criterion, str) and (criterion in ("", "=") or criterion[:2] == "<>")
-    )
