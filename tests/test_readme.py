@@ -177,6 +177,15 @@ class TestWords:
         assert len(links) >= 2
         assert [link for link in links if not (ROOT / link).is_file()] == []
 
+    @pytest.mark.parametrize("page", ["README.md", "DEVELOPERS.md"])
+    def test_every_path_and_module_named_exists(self, page: str) -> None:
+        text = (ROOT / page).read_text(encoding="utf-8")
+        paths = re.findall(r"`((?:engine|xlbridge|workbook_templates|tests|\.ci)/[\w./*]*)`", text)
+        modules = set(re.findall(r"python -m ((?:tests|xlbridge|workbook_templates)[\w.]+)", text))
+        assert paths
+        assert [path for path in paths if not list(ROOT.glob(path.rstrip("/")))] == []
+        assert [m for m in modules if not (ROOT / f"{m.replace('.', '/')}.py").is_file()] == []
+
     def test_json_keys_named_are_real(self) -> None:
         paragraph = next(line for line in readme.text().splitlines() if line.startswith("`solve --json`"))
         (sample,) = readme.blocks("toml")
