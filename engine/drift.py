@@ -13,7 +13,7 @@ import numpy as np
 from numpy.typing import ArrayLike
 
 from engine.occupancy import RISK_CATEGORIES
-from engine.require import Result, above, at_least, choice, finite, formula
+from engine.require import Result, above, at_least, choice, finite, formula, within
 from engine.tables import table
 
 DRIFT_STRUCTURES: Final = table("allowable_drift").keys
@@ -83,7 +83,7 @@ def allowable_drift(h_sx: ArrayLike, structure: str, risk_category: str, rho: Ar
         h_sx: height of the story below level x [ft or m], above 0; any shape
         structure: one of DRIFT_STRUCTURES, the row of Table 12.12-1
         risk_category: "I", "II", "III" or "IV"
-        rho: redundancy factor [-], at least 1; 1 unless the system is moment frames alone in Seismic
+        rho: redundancy factor [-], 1 to 1.3; 1 unless the system is moment frames alone in Seismic
             Design Category D, E or F
     Returns
         Delta_a [the unit of h_sx], the broadcast shape
@@ -103,4 +103,4 @@ def allowable_drift(h_sx: ArrayLike, structure: str, risk_category: str, rho: Ar
     """
     category = choice("risk_category", risk_category, RISK_CATEGORIES)
     part = table("allowable_drift").entry("structure", structure, category)
-    return part * above(0, "h_sx", h_sx) / at_least(1, "rho", rho)
+    return part * above(0, "h_sx", h_sx) / within(1, 1.3, "rho", rho)

@@ -8,6 +8,7 @@ from __future__ import annotations
 
 from collections.abc import Callable, Iterable, Sequence
 from functools import wraps
+from math import inf
 from typing import Final, ParamSpec, TypeAlias, TypeVar, cast
 
 import numpy as np
@@ -32,37 +33,47 @@ R = TypeVar("R")
 
 def finite(name: str, value: ArrayLike) -> Array:
     """Return ``value`` as floats; refuse blanks, text, booleans, NaN and infinities."""
+    if type(value) is float and -inf < value < inf:
+        return _scalar(value)
     array = _numbers(name, value)
-    if array.size and not (array.min() > -np.inf and array.max() < np.inf):
+    if array.size and not (array.min() > -inf and array.max() < inf):
         raise ImpossibleValue(name, float(array[~np.isfinite(array)].flat[0]), "must be a finite number")
     return array
 
 
 def above(bound: float, name: str, value: ArrayLike, clause: str = "") -> Array:
     """Return ``value``; refuse anything at or below ``bound``."""
-    array = _numbers(name, value)
-    if array.size and not (array.min() > bound and array.max() < np.inf):
-        least = float(finite(name, array).min())
-        raise ImpossibleValue(name, least, f"must be above {bound:g}", clause)
+    if type(value) is float and bound < value < inf:
+        return _scalar(value)
+    array = finite(name, value)
+    if array.size and not array.min() > bound:
+        raise ImpossibleValue(name, float(array.min()), f"must be above {bound:g}", clause)
     return array
 
 
 def at_least(bound: float, name: str, value: ArrayLike, clause: str = "") -> Array:
     """Return ``value``; refuse anything below ``bound``."""
-    array = _numbers(name, value)
-    if array.size and not (array.min() >= bound and array.max() < np.inf):
-        least = float(finite(name, array).min())
-        raise ImpossibleValue(name, least, f"must be at least {bound:g}", clause)
+    if type(value) is float and bound <= value < inf:
+        return _scalar(value)
+    array = finite(name, value)
+    if array.size and not array.min() >= bound:
+        raise ImpossibleValue(name, float(array.min()), f"must be at least {bound:g}", clause)
     return array
 
 
 def at_most(bound: float, name: str, value: ArrayLike, clause: str = "") -> Array:
     """Return ``value``; refuse anything above ``bound``."""
-    array = _numbers(name, value)
-    if array.size and not (array.max() <= bound and array.min() > -np.inf):
-        most = float(finite(name, array).max())
-        raise ImpossibleValue(name, most, f"must be at most {bound:g}", clause)
+    if type(value) is float and -inf < value <= bound:
+        return _scalar(value)
+    array = finite(name, value)
+    if array.size and not array.max() <= bound:
+        raise ImpossibleValue(name, float(array.max()), f"must be at most {bound:g}", clause)
     return array
+
+
+def _scalar(value: float) -> Array:
+    """One number that is already known to be good: it needs no reduction, so a cell costs little."""
+    return cast(Array, np.float64(value))
 
 
 def within(low: float, high: float, name: str, value: ArrayLike, clause: str = "") -> Array:

@@ -186,6 +186,29 @@ def overturning_moment(h_x: ArrayLike, forces: ArrayLike, heights: ArrayLike) ->
 
 
 @formula
+def height_above_base(z_x: ArrayLike, z_0: ArrayLike) -> Result:
+    """Height of a level above the base, from elevations.
+
+    h_x = z_x - z_0
+
+    Parameters
+        z_x: elevation of the level [ft or m], above the base; any shape
+        z_0: elevation of the base [ft or m], broadcast with z_x
+    Returns
+        h_x [ft or m], above 0, the broadcast shape
+    Raises
+        ImpossibleValue: a level at or below the base
+    Example
+        >>> print(height_above_base(z_x=129.0, z_0=100.0))
+        29.0
+
+    Reference
+        rule h_x: 7-16 12.8.3; 7-22 12.8.3
+    """
+    return above(0, "h_x", finite("z_x", z_x) - finite("z_0", z_0))
+
+
+@formula
 def story_height(h_x: ArrayLike, heights: ArrayLike) -> Result:
     """Height of the story below a level.
 

@@ -94,7 +94,7 @@ class Direction:
     drift_structure: str = word(DRIFT_STRUCTURES)
     T_computed: float | None = number(partial(above, 0), None)
     k_rule: str = word(EXPONENT_RULES, "interpolate")
-    rho: float = number(partial(at_least, 1), 1.0)
+    rho: float = number(partial(within, 1, 1.3), 1.0)
     moment_frames_only: bool = checked(is_flag, False)
     beta: float = number(lambda name, value: above(0, name, within(0, 1, name, value)), 1.0)
 

@@ -60,7 +60,7 @@ def clause(edition: str, key: str) -> Clause:
 
 def rules(edition: str) -> Mapping[str, Clause]:
     """Return every rule of an edition by its key, in the order of the data file."""
-    standard, entries, _ = _edition(choice("edition", edition, EDITIONS))
+    standard, entries, *_ = _edition(choice("edition", edition, EDITIONS))
     return MappingProxyType({key: Clause(standard, **entry) for key, entry in entries.items()})
 
 
@@ -70,10 +70,22 @@ def value(edition: str, key: str) -> float:
     >>> value("7-16", "beta_floor_factor"), value("7-22", "beta_floor_factor")
     (0.0, 1.25)
     """
-    _, _, values = _edition(choice("edition", edition, EDITIONS))
+    _, _, values, _ = _edition(choice("edition", edition, EDITIONS))
     if key not in values:
         raise NotApplicable("value", key, f"not a value of edition {edition}")
     return float(values[key])
+
+
+def text(edition: str, key: str) -> str:
+    """Return a text that differs between the editions.
+
+    >>> text("7-16", "rho_extreme_categories")
+    'D'
+    """
+    *_, texts = _edition(choice("edition", edition, EDITIONS))
+    if key not in texts:
+        raise NotApplicable("text", key, f"not a text of edition {edition}")
+    return texts[key]
 
 
 def clauses(key: str) -> Mapping[str, Clause]:
@@ -94,7 +106,7 @@ def differences(key: str) -> tuple[str, ...]:
 
 
 @cache
-def _edition(edition: str) -> tuple[str, dict[str, dict[str, str]], dict[str, Any]]:
+def _edition(edition: str) -> tuple[str, dict[str, dict[str, str]], dict[str, Any], dict[str, str]]:
     name = f"edition_{edition.replace('-', '_')}.toml"
     data = tomllib.loads((files(__name__) / name).read_text(encoding="utf-8"))
-    return data["standard"], data["rules"], data["values"]
+    return data["standard"], data["rules"], data["values"], data["texts"]

@@ -15,6 +15,7 @@ THREE = {
     "w_x": [300.0, 250.0, 120.0],
     "w_px": [290.0, 240.0, 100.0],
     "k": [1.0, 1.15, 2.0],
+    "rho": [1.0, 1.15, 1.3],
 }
 PLAIN = [name for name, call in CALLS.items() if any(isinstance(value, float) for value in call.values())]
 LEVELED = [name for name, call in CALLS.items() if "heights" in call]

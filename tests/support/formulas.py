@@ -6,10 +6,21 @@ from collections.abc import Callable, Iterator
 from types import ModuleType
 from typing import Any
 
-from engine import base_shear, diaphragm, drift, hazard, occupancy, period, stability, torsion, vertical
+from engine import (
+    base_shear,
+    diaphragm,
+    drift,
+    hazard,
+    occupancy,
+    period,
+    stability,
+    torsion,
+    vertical,
+    weight,
+)
 
 CONCEPTS: tuple[ModuleType, ...] = (
-    *(occupancy, hazard, period, base_shear, vertical),
+    *(weight, occupancy, hazard, period, base_shear, vertical),
     *(torsion, drift, stability, diaphragm),
 )
 
@@ -21,6 +32,14 @@ LIMITS = {"S_DS": 0.9, "I_e": 1.25}
 
 #: dotted name below ``engine`` -> a valid call, no two arguments alike so that a swap shows
 CALLS: dict[str, dict[str, Any]] = {
+    "weight.area_weight": {"area": 9600.0, "unit_load": 80.0, "units": "us"},
+    "weight.storage_unit_load": {"live_load": 125.0, "storage": "counted"},
+    "weight.storage_ratio": {"w_storage": 30.0, "w_other": 640.0},
+    "weight.partition_unit_load": {"partitions": 12.0, "units": "us"},
+    "weight.snow_unit_load": {"p_f": 50.0, "edition": "7-22", "units": "us"},
+    "weight.level_weight": {
+        **{"areas": [9600.0, 3300.0], "unit_loads": [80.0, 15.0], "units": "us", "equipment": 22.5}
+    },
     "occupancy.importance_factor": {"risk_category": "III"},
     "hazard.corner_period_T0": {"S_DS": 0.9, "S_D1": 0.45},
     "hazard.corner_period_TS": {"S_DS": 0.9, "S_D1": 0.45},
@@ -48,6 +67,7 @@ CALLS: dict[str, dict[str, Any]] = {
     "torsion.amplification": {"d_max": 1.5, "d_avg": 1.0},
     "drift.amplified_deflection": {"delta_xe": 0.8, "C_d": 5.0, "I_e": 1.25},
     "drift.design_story_drift": {"d_upper": 0.8, "d_lower": 0.3, "C_d": 5.0, "I_e": 1.25},
+    "vertical.height_above_base": {"z_x": 129.0, "z_0": 100.0},
     "drift.allowable_drift": {**{"h_sx": 14.0, "structure": "all other", "risk_category": "III", "rho": 1.3}},
     "stability.stability_coefficient": {
         **{"P_x": 900.0, "Delta": 2.0, "I_e": 1.25, "V_x": 80.0, "h_sx": 168.0, "C_d": 5.0}

@@ -19,6 +19,7 @@ from workbook_templates.declare import Role
 from workbook_templates.draw import sheets, style
 from workbook_templates.inputs import Inputs
 from workbook_templates.layout import FIRST_LEVEL, LEVELS, TOP_GUARD, Column, Layout
+from xlbridge.catalogue.entry import NOT_NEGATIVE
 
 TOTALS = {"sum": "SUM", "max": "MAX"}
 BASE: Mapping[str, str | int] = {"name": "Base", "elevation": "=base_elevation", "h_x": 0}
@@ -97,13 +98,17 @@ def _base(layout: Layout, column: Column) -> str | int | None:
 
 
 def _total(layout: Layout, column: Column) -> str | None:
-    """A total counts first, so that no cell that failed can drop out of it in silence."""
+    """A total counts first: no cell that failed can drop out of it in silence, no negative entry enter."""
     q = column.quantity
     if q.key == "name":
         return "Total or largest"
     if not q.total:
         return None
-    template = f"=IF(COUNT({{{q.key}:all}})=COUNTA({{name:all}}),{TOTALS[q.total]}({{{q.key}:all}}),NA())"
+    cells = f"{{{q.key}:all}}"
+    sound = f"COUNT({cells})=COUNTA({{name:all}})"
+    if q.span == NOT_NEGATIVE:
+        sound = f'AND({sound},COUNTIF({cells},"<0")=0)'
+    template = f"=IF({sound},{TOTALS[q.total]}({cells}),NA())"
     return layout.write(template, LEVELS, column.direction)
 
 

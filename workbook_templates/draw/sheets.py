@@ -22,6 +22,7 @@ CAUTION: Final = (
     "authority having jurisdiction, its supplements and local amendments."
 )
 LINE: Final = 14.0  # points
+EDGE: Final = 1e-9  # no operator says "above … and at most …"
 PAPER: Final = {"us": 1, "si": 9}  # Letter, A4
 
 
@@ -116,7 +117,7 @@ def validation(q: Quantity) -> DataValidation | None:
 def _number_rule(q: Quantity) -> DataValidation:
     span = q.span
     assert span is not None
-    low = -1e12 if span.low is None else span.low
+    low = -1e12 if span.low is None else span.low + (EDGE if span.high is not None and span.low_open else 0)
     if span.high is not None:
         return DataValidation(
             type="decimal", operator="between", formula1=f"{low:g}", formula2=f"{span.high:g}"

@@ -26,7 +26,7 @@ LIMITS = Block(
             "Divisor of the allowable drift",
             "none",
             CALC,
-            '=IF({moment_frames_only}="yes",{rho},1)',
+            '=IF({moment_frames_only}="yes",{rho},IF({moment_frames_only}="no",1,NA()))',
             rule="rho_drift",
             symbol="rho",
             decimals=2,

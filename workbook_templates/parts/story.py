@@ -175,7 +175,9 @@ LEVEL = Block(
             starter=by_units(1000.0, 4500.0),
         ),
         Quantity("source", "Source of the inputs in this row", "text", INPUT, symbol="source", width=24),
-        Quantity("h_x", "Height above base", "length", CALC, "={elevation}-{base_elevation}", total="max"),
+        Quantity(
+            "h_x", "Height above base", "length", CALC, "=ELF_HX({elevation},{base_elevation})", total="max"
+        ),
         Quantity("h_sx", "Story height", "length", CALC, "=ELF_HSX({h_x},{h_x:all})"),
     ),
 )
@@ -228,7 +230,7 @@ CHECKS = (
     Check("Every level lies above the base", '=COUNTIF({h_x:all},">0")', _NAMES),
     Check("Levels with a name that another level has", repeated("name"), "=0"),
     Check(
-        "Levels at the elevation of another level (two roofs are legal)", repeated("h_x"), "=0", warning=True
+        "Levels at the elevation of another level (two roofs are legal)", repeated("elevation"), "=0", warning=True
     ),
     Check(
         "Rows outside the guard rows of the story table", "=COUNTA({name:wide})-COUNTA({name:all})-2", "=0"

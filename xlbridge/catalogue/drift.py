@@ -75,7 +75,7 @@ FUNCTIONS = (
                 "rho",
                 "none",
                 "Redundancy factor, for moment-frame systems in SDC D to F; 1 if left out",
-                Span(1),
+                Span(1, 1.3),
                 optional=True,
             ),
         ),

@@ -105,6 +105,21 @@ FUNCTIONS = (
         example=Example({"h_x": 12.0, "forces": [26.0, 72.1, 80.1], "heights": [12.0, 48.0, 60.0]}, "6440.4"),
     ),
     SheetFunction(
+        name="ELF_HX",
+        summary="Height of a level above the base, from elevations; a level must lie above the base.",
+        category="Vertical distribution",
+        rule="h_x",
+        arguments=(
+            Argument("z_x", "length", "Elevation of level x"),
+            Argument("z_0", "length", "Elevation of the base"),
+        ),
+        result=Result("h_x", "length", "height above the base"),
+        function=vertical.height_above_base,
+        expression="{z_x} - {z_0}",
+        native="{z_x}-{z_0}",
+        example=Example({"z_x": 129.0, "z_0": 100.0}, "29.0"),
+    ),
+    SheetFunction(
         name="ELF_HSX",
         summary="Story height below a level: down to the next lower level, or to the base.",
         category="Vertical distribution",

@@ -3,6 +3,7 @@
 from __future__ import annotations
 
 import json
+from collections.abc import Callable
 from pathlib import Path
 from typing import Any
 
@@ -59,12 +60,22 @@ def _plain(value: Scalar) -> Any:
 def _report(summary: dict[str, Any], target: Path) -> str:
     lines = [
         f"{summary['computed']} of {summary['formula_cells']} formula cells computed, "
-        f"{len(summary['errors'])} with an error value, {len(summary['not_evaluated'])} not evaluated"
+        f"{len(summary['errors'])} with an error value, {len(summary['not_evaluated'])} not evaluated",
+        *_by_reason(summary["errors"], lambda e: f"{e['error']}  {e['reason']}"),
+        *_by_reason(summary["not_evaluated"], lambda n: f"not evaluated, because {n['reason']}"),
     ]
-    lines += [f"  {e['cell']}  {e['error']}  {e['reason']}" for e in summary["errors"][:SHOWN]]
-    lines += [
-        f"  {n['cell']}  not evaluated, because {n['reason']}" for n in summary["not_evaluated"][:SHOWN]
-    ]
-    hidden = sum(max(0, len(summary[key]) - SHOWN) for key in ("errors", "not_evaluated"))
-    lines += [f"  and {hidden} more: see --json"] if hidden else []
     return "\n".join([*lines, f"stored in {target}"])
+
+
+def _by_reason(records: list[dict[str, str]], words: Callable[[dict[str, str]], str]) -> list[str]:
+    """One line a reason with its cells: those of our own functions first, they are nearest to the cause."""
+    cells: dict[str, list[str]] = {}
+    for record in sorted(records, key=lambda record: not record["reason"].startswith("ELF_")):
+        cells.setdefault(words(record), []).append(record["cell"])
+    lines = [f"  {_listed(places)}  {reason}" for reason, places in list(cells.items())[:SHOWN]]
+    return [*lines, f"  and {len(cells) - SHOWN} more reasons: see --json"] if len(cells) > SHOWN else lines
+
+
+def _listed(cells: list[str]) -> str:
+    more = f" and {len(cells) - 3} more" if len(cells) > 3 else ""
+    return f"{', '.join(cells[:3])}{more}"

@@ -13,6 +13,84 @@ import xlwings as xw
 from xlbridge.excel.cells import OMITTED, call
 
 
+@xw.func(category="Storyledger: Seismic weight")
+@xw.arg("area", "raw", doc="Area on plan, or of a wall [a area unit], at least 0.")
+@xw.arg("unit_load", "raw", doc="Load that counts, on each unit of area [a unit load unit], at least 0.")
+@xw.arg("units", "raw", doc="Unit system: us (kip, ft, in) or si (kN, m, mm): us, si.")
+@xw.ret("raw")
+def ELF_AREA_WEIGHT(area: Any, unit_load: Any, units: Any) -> Any:
+    """Weight of a surface under a uniform load. ASCE/SEI 7-16: 12.7.2; 7-22: 12.7.2."""
+    return call("ELF_AREA_WEIGHT", area, unit_load, units)
+
+
+@xw.func(category="Storyledger: Seismic weight")
+@xw.arg("live_load", "raw", doc="Floor live load of the storage area [a unit load unit], at least 0.")
+@xw.arg(
+    "storage",
+    "raw",
+    doc="Counted, or the exception used: counted, at most 5 % of the level, public garage or open parking.",
+)
+@xw.ret("raw")
+def ELF_STORAGE_SHARE(live_load: Any, storage: Any) -> Any:
+    """Part of a storage floor's live load that counts as seismic weight. ASCE/SEI 7-16: 12.7.2, item 1; 7-22: 12.7.2, item 1. Partly from memory: confirm."""
+    return call("ELF_STORAGE_SHARE", live_load, storage)
+
+
+@xw.func(category="Storyledger: Seismic weight")
+@xw.arg(
+    "w_storage",
+    "raw",
+    doc="Weight of storage at the level, 25 % of its live load [a force unit], at least 0.",
+)
+@xw.arg(
+    "w_other", "raw", doc="Effective seismic weight of the level without storage [a force unit], above 0."
+)
+@xw.ret("raw")
+def ELF_STORAGE_RATIO(w_storage: Any, w_other: Any) -> Any:
+    """What a level's storage adds, in parts of its other weight: at most 0.05 need not count. ASCE/SEI 7-16: 12.7.2, item 1; 7-22: 12.7.2, item 1. Partly from memory: confirm."""
+    return call("ELF_STORAGE_RATIO", w_storage, w_other)
+
+
+@xw.func(category="Storyledger: Seismic weight")
+@xw.arg(
+    "partitions", "raw", doc="Actual weight of partitions over the floor area [a unit load unit], at least 0."
+)
+@xw.arg("units", "raw", doc="Unit system: us (kip, ft, in) or si (kN, m, mm): us, si.")
+@xw.ret("raw")
+def ELF_PARTITION_SHARE(partitions: Any, units: Any) -> Any:
+    """Partition load that counts as seismic weight: the actual one, at least 10 psf (0.48 kN/m2). ASCE/SEI 7-16: 12.7.2, item 2; 7-22: 12.7.2, item 2."""
+    return call("ELF_PARTITION_SHARE", partitions, units)
+
+
+@xw.func(category="Storyledger: Seismic weight")
+@xw.arg("p_f", "raw", doc="Flat roof snow load [a unit load unit], at least 0.")
+@xw.arg(
+    "edition",
+    "raw",
+    doc="Edition of ASCE/SEI 7, as text (in a cell: format the cell as Text, or it turns into a date): 7-16, 7-22.",
+)
+@xw.arg("units", "raw", doc="Unit system: us (kip, ft, in) or si (kN, m, mm): us, si.")
+@xw.ret("raw")
+def ELF_SNOW_SHARE(p_f: Any, edition: Any, units: Any) -> Any:
+    """Part of the flat roof snow load that counts as seismic weight. ASCE/SEI 7-16: 12.7.2, item 4; 7-22: 12.7.2, item 4."""
+    return call("ELF_SNOW_SHARE", p_f, edition, units)
+
+
+@xw.func(category="Storyledger: Seismic weight")
+@xw.arg("areas", "raw", doc="Areas of the items [a area unit], one cell a item, at least 0.")
+@xw.arg("unit_loads", "raw", doc="Loads that count, by item [a unit load unit], one cell a item, at least 0.")
+@xw.arg("units", "raw", doc="Unit system: us (kip, ft, in) or si (kN, m, mm): us, si.")
+@xw.arg(
+    "equipment",
+    "raw",
+    doc="Permanent equipment, landscaping and whatever else counts in full; 0 if left out [a force unit], at least 0.",
+)
+@xw.ret("raw")
+def ELF_LEVEL_WEIGHT(areas: Any, unit_loads: Any, units: Any, equipment: Any = OMITTED) -> Any:
+    """Effective seismic weight of one level from its list of areas and unit loads. ASCE/SEI 7-16: 12.7.2; 7-22: 12.7.2."""
+    return call("ELF_LEVEL_WEIGHT", areas, unit_loads, units, equipment)
+
+
 @xw.func(category="Storyledger: Ground motion")
 @xw.arg("risk_category", "raw", doc="Risk category: I, II, III, IV.")
 @xw.ret("raw")
@@ -239,6 +317,15 @@ def ELF_MX(h_x: Any, forces: Any, heights: Any) -> Any:
 
 
 @xw.func(category="Storyledger: Vertical distribution")
+@xw.arg("z_x", "raw", doc="Elevation of level x [a length unit], any number.")
+@xw.arg("z_0", "raw", doc="Elevation of the base [a length unit], any number.")
+@xw.ret("raw")
+def ELF_HX(z_x: Any, z_0: Any) -> Any:
+    """Height of a level above the base, from elevations; a level must lie above the base. ASCE/SEI 7-16: 12.8.3; 7-22: 12.8.3. Partly from memory: confirm."""
+    return call("ELF_HX", z_x, z_0)
+
+
+@xw.func(category="Storyledger: Vertical distribution")
 @xw.arg("h_x", "raw", doc="Height of level x above the base [a length unit], above 0.")
 @xw.arg(
     "heights", "raw", doc="Heights of all levels above the base [a length unit], one cell a level, above 0."
@@ -312,7 +399,7 @@ def ELF_DRIFT(d_upper: Any, d_lower: Any, C_d: Any, I_e: Any) -> Any:
 @xw.arg(
     "rho",
     "raw",
-    doc="Redundancy factor, for moment-frame systems in SDC D to F; 1 if left out [no unit], at least 1.",
+    doc="Redundancy factor, for moment-frame systems in SDC D to F; 1 if left out [no unit], at least 1 and at most 1.3.",
 )
 @xw.ret("raw")
 def ELF_DRIFT_LIMIT(h_sx: Any, structure: Any, risk_category: Any, rho: Any = OMITTED) -> Any:

@@ -93,10 +93,18 @@ class TestCalc:
         assert [stored[a].value for a in ("A1", "A2", "A3")] == ["#N/A", "#DIV/0!", "#N/A"]
 
     def test_a_long_list_is_cut_and_says_so(self, tmp_path: Path) -> None:
-        cells = {f"A{n}": "=1/0" for n in range(1, 31)}
+        cells = {f"A{n}": f"=NOSUCH_{n}(1)" for n in range(1, 31)}
         outcome = run("calc", workbook(tmp_path / "a.xlsx", **cells))
-        assert outcome.out.count("#DIV/0!") == 20
-        assert "and 10 more: see --json" in outcome.out
+        assert outcome.out.count("not evaluated, because") == 20
+        assert "and 10 more reasons: see --json" in outcome.out
+
+    def test_one_reason_is_one_line_and_our_own_functions_come_first(self, tmp_path: Path) -> None:
+        cells = {f"A{n}": "=1/0" for n in range(1, 6)}
+        outcome = run("calc", workbook(tmp_path / "a.xlsx", **cells, B1="=ELF_EXPONENT(0)"))
+        assert outcome.out.splitlines()[1:3] == [
+            "  Sheet!B1  #NUM!  ELF_EXPONENT: T = 0: must be above 0",
+            "  Sheet!A1, Sheet!A2, Sheet!A3 and 2 more  #DIV/0!  division by zero",
+        ]
 
     def test_json(self, tmp_path: Path) -> None:
         cells = {"A1": "=1/0", "A2": "=NOSUCH(1)", "A3": "=2*2", "A4": "=TRUE", "A5": '="σ"'}
