@@ -23,7 +23,7 @@ from openpyxl.worksheet.worksheet import Worksheet
 from tests.support.check_values import evaluate, rows, tolerance
 from xlbridge.catalogue import CATALOGUE
 from xlbridge.catalogue.entry import Kind, SheetFunction
-from xlbridge.cli.workbook import compute
+from xlbridge.headless.compute import compute
 from xlbridge.values import Scalar
 
 TOP = 3
