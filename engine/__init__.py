@@ -16,6 +16,7 @@ from engine import (
     stability,
     torsion,
     vertical,
+    weight,
 )
 from engine.building import Building, Package, from_mapping, solve, to_mapping
 from engine.editions import EDITIONS, clause
@@ -45,4 +46,5 @@ __all__ = [
     "to_mapping",
     "torsion",
     "vertical",
+    "weight",
 ]

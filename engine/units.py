@@ -23,7 +23,6 @@ UNITS: Final = MappingProxyType(
         "force": {US: "kip", SI: "kN"},
         "unit load": {US: "psf", SI: "kN/m2"},
         "moment": {US: "kip-ft", SI: "kN-m"},
-        "area": {US: "ft2", SI: "m2"},
         "stiffness": {US: "kip/in", SI: "kN/mm"},
     }
 )

@@ -26,6 +26,9 @@ USUAL = {
     "time": (0.02, 12.0),
     "acceleration": (0.02, 3.0),
     "length": (3.0, 900.0),
+    "area": (10.0, 90_000.0),
+    "velocity": (200.0, 5000.0),
+    "unit load": (0.0, 250.0),
     "displacement": (0.01, 200.0),
     "force": (0.5, 50_000.0),
 }
@@ -36,6 +39,8 @@ BRANCHES = {
     "S_1": (0.0, 0.6, 0.59999),
     "S_D1": (0.1, 0.10005, 0.15, 0.15007, 0.2, 0.2001, 0.3, 0.29985, 0.4, 0.6),
     "S_DS": (1.0, 0.05, 0.01 / 0.044),
+    "p_f": (1.44, 2.16, 30.0, 45.0, 30.0001, 45.0001, 2.16001),
+    "partitions": (0.48, 10.0, 0.0),
     "theta": (0.0, 0.1, 0.1 + 1e-9),
     "Omega_0": (1.0, 1.25),
 }
@@ -159,6 +164,8 @@ def random_levels(random: Random, most: int = 8) -> dict[str, list[float]]:
         "weights": [weight for _, weight, _ in rows],
         "forces": [force for _, _, force in rows],
         "values": [values[height] for height, _, _ in rows],
+        "areas": [random.uniform(0.0, 9000.0) for _ in rows],
+        "unit_loads": [random.uniform(0.0, 250.0) for _ in rows],
     }
 
 

@@ -107,9 +107,10 @@ def test_2_a_row_that_is_blank_in_every_level_range_is_ignored(entry: SheetFunct
 
 @pytest.mark.parametrize("entry", WITH_LEVELS, ids=ident)
 def test_2_ranges_with_no_level_at_all(entry: SheetFunction) -> None:
-    refused(adapter.call(entry, with_rows(entry, lambda cells: [None] * 5)), "#VALUE!", "holds no level")
+    words = f"holds no {next(a.each for a in entry.arguments if a.kind is Kind.LEVELS)}"
+    refused(adapter.call(entry, with_rows(entry, lambda cells: [None] * 5)), "#VALUE!", words)
     single = [None if isinstance(cell, tuple) else cell for cell in as_cells(entry, full(entry))]
-    refused(adapter.call(entry, single), "#VALUE!", "holds no level")
+    refused(adapter.call(entry, single), "#VALUE!", words)
 
 
 @pytest.mark.parametrize(("entry", "argument"), [p for p in LEVELS if p[0] in SEVERAL], ids=ident)
@@ -192,7 +193,8 @@ def test_9_more_than_a_thousand_levels(entry: SheetFunction) -> None:
             entry, lambda cells: cells + [cells[-1] + 1.0 + n for n in range(count - len(cells))]
         )
 
-    refused(adapter.call(entry, rows(1001)), "#NUM!", "1001 levels", "1 to 1000 levels")
+    each = next(a.each for a in entry.arguments if a.kind is Kind.LEVELS)
+    refused(adapter.call(entry, rows(1001)), "#NUM!", f"1001 {each}s", f"1 to 1000 {each}s")
     assert not isinstance(adapter.call(entry, rows(1000)), CellError)
 
 

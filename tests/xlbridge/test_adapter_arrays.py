@@ -130,11 +130,14 @@ def test_a_call_that_fails_fails_in_every_cell(entry: SheetFunction) -> None:
 @pytest.mark.parametrize("entry", WITH_LEVELS, ids=ident)
 def test_levels_that_fail_leave_no_cell_blank(entry: SheetFunction) -> None:
     call = full(entry)
-    call["h_x"] = column([call["h_x"], CellError("#N/A", "its own"), call["h_x"]])
-    heights = [*call["heights"][:-1], "text"]
-    found = adapter.call(entry, as_cells(entry, {**call, "heights": heights}))
+    single = [a.name for a in entry.arguments if a.kind is not Kind.LEVELS]
+    last = [a for a in entry.arguments if a.kind is Kind.LEVELS][-1]
+    if not single:
+        return
+    call[single[0]] = column([call[single[0]], CellError("#N/A", "its own"), call[single[0]]])
+    found = adapter.call(entry, as_cells(entry, {**call, last.name: [*call[last.name][:-1], "text"]}))
     assert [cell.code for (cell,) in found] == ["#VALUE!", "#N/A", "#VALUE!"]
-    assert "h_i in row" in found[0][0].reason
+    assert f"{last.symbol} in row" in found[0][0].reason
 
 
 def test_ranges_of_different_shapes() -> None:

@@ -19,11 +19,12 @@ from xlbridge.catalogue import (
     stability,
     torsion,
     vertical,
+    weight,
 )
 from xlbridge.catalogue.entry import SheetFunction
 from xlbridge.catalogue.validate import DeclarationError, validate
 
-_CONCEPTS = (ground_motion, period, base_shear, vertical, torsion, drift, stability, diaphragm)
+_CONCEPTS = (weight, ground_motion, period, base_shear, vertical, torsion, drift, stability, diaphragm)
 
 
 def gather(entries: Iterable[SheetFunction]) -> Mapping[str, SheetFunction]:

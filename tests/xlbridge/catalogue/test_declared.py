@@ -56,6 +56,9 @@ UNIT_WORDS = {
     "time": "s",
     "acceleration": "g",
     "length": "ft or m",
+    "area": "ft2 or m2",
+    "velocity": "ft/s or m/s",
+    "unit load": "psf or kN/m2",
     "displacement": "in or mm",
     "force": "kip or kN",
 }
