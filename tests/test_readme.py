@@ -16,7 +16,7 @@ from openpyxl import Workbook
 
 from engine.building import from_mapping, solve
 from engine.building.records import Direction, Level, Site
-from engine.building.solve import RULES
+from engine.building.results import RULES
 from tests.support import readme
 from tests.support.command import ROOT
 from xlbridge.catalogue import CATALOGUE
@@ -193,4 +193,4 @@ class TestWords:
         named = re.findall(r"`(\w+)`", paragraph)
         assert len(named) >= 10
         assert [n for n in named if n not in package and n not in package["direction"]["X"]] == []
-        assert set(package["clauses"]) == set(RULES)
+        assert set(RULES) < set(package["clauses"])

@@ -52,8 +52,8 @@ class Quantity:
 
     ``unit`` is a key of engine.units; ``rule`` a key of the edition data, taken from the worksheet
     function in the formula where there is one. An input says what it allows (``span``, ``choices``), what
-    holds if it is left out (``default``), and what a blank workbook starts with (``starter``); ``stored``
-    is its key in BUILDING.toml.
+    holds if it is left out (``default``, or ``linked``: the formula of a level entry), and what a blank
+    workbook starts with (``starter``); ``stored`` is its key in BUILDING.toml.
     """
 
     key: str
@@ -67,6 +67,7 @@ class Quantity:
     choices: tuple[str, ...] = ()
     default: Any = None
     starter: Starter | None = None
+    linked: str = ""
     stored: str = ""
     decimals: int | None = None
     total: str = ""

@@ -10,7 +10,7 @@ from collections.abc import Mapping, Sequence
 from dataclasses import dataclass
 from typing import Any, Final
 
-from engine.errors import MissingValue
+from engine.errors import MissingValue, NotApplicable
 from workbook_templates.declare import DIRECTIONS, Quantity, Start
 from workbook_templates.parts import CORE, PARTS
 
@@ -18,7 +18,7 @@ STARTER: Final = "starter value"
 DEFAULT: Final = "default"
 UNTITLED: Final = "Untitled building"
 JOB_KEYS: Final = ("number", "engineer", "checker", "revision", "date")
-BLANK_PARTS: Final = frozenset({CORE, "drift"})
+BLANK_PARTS: Final = ("drift",)
 
 Table = Mapping[str, Any]
 
@@ -48,10 +48,13 @@ class Inputs:
 
     @property
     def parts(self) -> frozenset[str]:
-        """The parts that the inputs call for: those whose level entries are given."""
-        if "level" not in self.given:
-            return BLANK_PARTS
-        return frozenset(key for key, part in PARTS.items() if self._has(part.needs))
+        """The parts that are asked for, and those whose level entries are given."""
+        asked = self.given.get("parts", () if "level" in self.given else BLANK_PARTS)
+        for key in asked:
+            if key not in PARTS:
+                raise NotApplicable("parts", key, f"must be one of {', '.join(PARTS)}")
+        found = {key for key, part in PARTS.items() if part.needs and self._has(part.needs)}
+        return frozenset({CORE, *asked, *found})
 
     def _has(self, needs: tuple[str, ...]) -> bool:
         given = [key for key in needs if any(level.get(key) is not None for level in self.levels)]

@@ -40,6 +40,7 @@ class Reader:
         """Return the tables of a BUILDING.toml."""
         tables = {
             "title": self._cell("job_title"),
+            "parts": [part.key for part in self._layout.parts if part.key != CORE and not part.needs],
             "edition": self._cell("edition"),
             "units": self._cell("units"),
             "job": _filled({key: self._cell(f"job_{key}") for key in JOB_KEYS}),
@@ -48,7 +49,7 @@ class Reader:
             "level": [self._level(row) for row in self._rows],
             "sources": self._sources(),
         }
-        return {key: table for key, table in tables.items() if table not in (None, {})}
+        return {key: table for key, table in tables.items() if table not in (None, {}, [])}
 
     def results(self) -> dict[str, Any]:
         """Return the results by the model route's keys; lists run over the levels as they stand."""

@@ -4,7 +4,8 @@ from __future__ import annotations
 
 from engine.building.reading import from_mapping, to_mapping
 from engine.building.records import DIRECTIONS, Building, Direction, Level, Site
-from engine.building.solve import DirectionResult, Package, solve
+from engine.building.results import DirectionResult, Package
+from engine.building.solve import solve
 
 __all__ = [
     "DIRECTIONS",

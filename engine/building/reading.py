@@ -30,6 +30,8 @@ def from_mapping(data: Mapping[str, Any]) -> Building:
         }
     if "level" in parts:
         parts["level"] = tuple(_levels(parts["level"]))
+    if isinstance(parts.get("parts"), list):
+        parts["parts"] = tuple(parts["parts"])
     for free in ("job", "sources"):
         parts[free] = dict(_table(free, parts.get(free, {})))
     return _record(Building, "", parts)

@@ -38,6 +38,13 @@ def is_text(name: str, value: object) -> object:
     return value
 
 
+def is_list_of_texts(name: str, value: object) -> object:
+    """Refuse anything but a list of texts."""
+    if not isinstance(value, list | tuple):
+        raise WrongType(name, value, "must be a list of texts")
+    return [is_text(name, word) for word in value]
+
+
 def is_flag(name: str, value: object) -> object:
     """Refuse anything but true or false."""
     if not isinstance(value, bool):
@@ -112,12 +119,22 @@ class Level:
     P_x: float | None = number(partial(at_least, 0), None)
     delta_xe_X: float | None = number(finite, None)
     delta_xe_Y: float | None = number(finite, None)
+    w_px: float | None = number(partial(at_least, 0), None)
     source: str | None = checked(is_text, None)
+
+
+#: entries that stand at every level or at none
+LEVEL_OPTIONS: Final = tuple(
+    entry.name for entry in fields(Level) if entry.default is None and entry.name != "source"
+)
 
 
 @dataclass(frozen=True, slots=True, kw_only=True)
 class Building:
-    """Everything the equivalent lateral force procedure needs to know of one building."""
+    """Everything the equivalent lateral force procedure needs to know of one building.
+
+    ``parts`` names parts of the workbook that are wanted although no entry of a level asks for them.
+    """
 
     title: str = checked(is_text)
     edition: str = word(EDITIONS)
@@ -127,6 +144,7 @@ class Building:
     level: tuple[Level, ...]
     job: Mapping[str, object] = field(default_factory=dict)
     sources: Mapping[str, str] = field(default_factory=dict)
+    parts: tuple[str, ...] = checked(is_list_of_texts, ())
 
     def __post_init__(self) -> None:
         """Check every field of every record, then what fields say together."""
@@ -168,7 +186,7 @@ def _check_levels(levels: tuple[Level, ...], base: float) -> None:
             raise ImpossibleValue(
                 f"{label}: elevation", level.elevation, f"must be above the base at {base:g}"
             )
-        for optional in ("P_x", "delta_xe_X", "delta_xe_Y"):
+        for optional in LEVEL_OPTIONS:
             if (getattr(level, optional) is None) != (getattr(levels[0], optional) is None):
                 raise _half_filled(levels, optional)
     if not any(level.weight > 0 for level in levels):

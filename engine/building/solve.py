@@ -2,102 +2,19 @@
 
 from __future__ import annotations
 
-from dataclasses import dataclass, fields, replace
-from typing import Any, Final
+from dataclasses import replace
+from typing import Any
 
 import numpy as np
 
-from engine import base_shear, diaphragm, drift, hazard, occupancy, period, stability, vertical
+from engine import base_shear, drift, hazard, occupancy, period, stability, vertical
+from engine.building.parts import with_parts
 from engine.building.records import Building, Direction, level_label
-from engine.editions import clause
+from engine.building.results import DirectionResult, Package, texts
 from engine.errors import ImpossibleValue
 from engine.levels import TOLERANCE
 from engine.require import Array
 from engine.units import DISPLACEMENT_PER_LENGTH
-
-#: the rules that the package applies, in the order of the work
-RULES: Final = (
-    *("I_e", "T_0", "T_S", "T_a", "C_u", "T_max", "T"),
-    *("C_s_plateau", "C_s_cap", "C_s_cap_long", "C_s_min", "C_s_min_S1", "C_s", "V"),
-    *("exponent", "exponent_two", "C_vx", "F_x", "V_x", "M_x", "story_height"),
-    *("F_px", "F_px_min", "F_px_max"),
-    *("delta_x", "Delta", "Delta_a", "rho_drift"),
-    *("theta", "theta_max", "beta", "theta_amplifier"),
-)
-
-
-@dataclass(frozen=True, slots=True, kw_only=True, eq=False)
-class DirectionResult:
-    """Every step of one plan direction; arrays hold the levels as listed, ``None`` what had no inputs.
-
-    Drifts and their limits are in the displacement unit. Diaphragm forces take the whole weight of each
-    level. ``Delta_amplified`` carries the factor for P-delta, where vertical loads are given.
-    """
-
-    T_a: float
-    C_u: float
-    T_max: float
-    T: float
-    C_s_plateau: float
-    C_s_cap: float
-    C_s_min: float
-    C_s_min_S1: float
-    C_s: float
-    governing_bound: str
-    V: float
-    k: float
-    C_vx: Array
-    F_x: Array
-    V_x: Array
-    V_base: float
-    M_x: Array
-    M_base: float
-    F_px_unlimited: Array
-    F_px_min: Array
-    F_px_max: Array
-    F_px: Array
-    F_px_bound: tuple[str, ...]
-    Delta_a: Array
-    beta_used: float
-    theta_max: float
-    delta_x: Array | None = None
-    Delta: Array | None = None
-    drift_ratio: Array | None = None
-    theta: Array | None = None
-    theta_factor: Array | None = None
-    theta_verdict: tuple[str, ...] | None = None
-    Delta_amplified: Array | None = None
-    drift_over_limit: Array | None = None
-
-
-@dataclass(frozen=True, slots=True, kw_only=True, eq=False)
-class Package:
-    """The results of one building: its levels as listed, and each plan direction."""
-
-    title: str
-    edition: str
-    units: str
-    I_e: float
-    T_0: float
-    T_S: float
-    W: float
-    h_n: float
-    levels: tuple[str, ...]
-    w_x: Array
-    h_x: Array
-    h_sx: Array
-    direction: dict[str, DirectionResult]
-    warnings: tuple[str, ...]
-
-    def to_json(self) -> dict[str, Any]:
-        """Return plain numbers, texts and lists, with the clause and any doubt of every rule applied."""
-        clauses = {key: clause(self.edition, key) for key in RULES}
-        return {
-            **_plain(self),
-            "direction": {name: _plain(result) for name, result in self.direction.items()},
-            "clauses": {key: str(found) for key, found in clauses.items()},
-            "notes": {key: found.note for key, found in clauses.items() if found.note},
-        }
 
 
 def solve(building: Building) -> Package:
@@ -132,15 +49,16 @@ def solve(building: Building) -> Package:
         direction={},
         warnings=(*_shared_heights(building, h), *_raised_ratios(building)),
     )
-    return replace(
+    package = replace(
         package, direction={name: _direction(building, package, name) for name in building.direction}
     )
+    return with_parts(building, package)
 
 
 def _direction(building: Building, package: Package, name: str) -> DirectionResult:
     given = building.direction[name]
     strength = _strength(building, package, given)
-    levels = _levels(building, package, strength)
+    levels = _levels(package, strength)
     limits = _limits(building, package, given)
     drifts = _drifts(building, package, name)
     second = _second_order(building, package, given, {**levels, **limits, **drifts})
@@ -170,8 +88,8 @@ def _strength(building: Building, package: Package, given: Direction) -> dict[st
     }
 
 
-def _levels(building: Building, package: Package, strength: dict[str, Any]) -> dict[str, Any]:
-    w, h, S_DS, I_e = package.w_x, package.h_x, building.site.S_DS, package.I_e
+def _levels(package: Package, strength: dict[str, Any]) -> dict[str, Any]:
+    w, h = package.w_x, package.h_x
     C_vx = vertical.distribution_factors(w, h, strength["k"])
     F = vertical.story_force(strength["V"], C_vx)
     return {
@@ -181,11 +99,6 @@ def _levels(building: Building, package: Package, strength: dict[str, Any]) -> d
         "V_base": float(vertical.story_shear(0.0, F, h)),
         "M_x": vertical.overturning_moment(h, F, h),
         "M_base": float(vertical.overturning_moment(0.0, F, h)),
-        "F_px_unlimited": diaphragm.unlimited_force(w, h, F, w, h),
-        "F_px_min": diaphragm.minimum_force(w, S_DS, I_e),
-        "F_px_max": diaphragm.maximum_force(w, S_DS, I_e),
-        "F_px": diaphragm.design_force(w, h, F, w, h, S_DS, I_e),
-        "F_px_bound": _texts(diaphragm.design_force_bound(w, h, F, w, h, S_DS, I_e)),
     }
 
 
@@ -234,7 +147,7 @@ def _second_order(
     return {
         "theta": theta,
         "theta_factor": factor,
-        "theta_verdict": _texts(stability.stability_verdict(theta, known["theta_max"])),
+        "theta_verdict": texts(stability.stability_verdict(theta, known["theta_max"])),
         "Delta_amplified": known["Delta"] * factor,
         "drift_over_limit": known["Delta"] * factor / known["Delta_a"],
     }
@@ -262,18 +175,3 @@ def _raised_ratios(building: Building) -> list[str]:
         for name, given in building.direction.items()
         if (floor := float(stability.demand_ratio(given.beta, given.Omega_0, building.edition))) > given.beta
     ]
-
-
-def _texts(words: Any) -> tuple[str, ...]:
-    return tuple(str(text) for text in words)
-
-
-def _plain(record: Any) -> dict[str, Any]:
-    values = {entry.name: getattr(record, entry.name) for entry in fields(record)}
-    return {key: _plain_value(value) for key, value in values.items() if value is not None}
-
-
-def _plain_value(value: Any) -> Any:
-    if isinstance(value, np.ndarray):
-        return value.tolist()
-    return list(value) if isinstance(value, tuple) else value

@@ -14,6 +14,7 @@ from hypothesis import Phase, given, settings
 from openpyxl.worksheet.worksheet import Worksheet
 
 from engine.editions import EDITIONS
+from engine.errors import NotApplicable
 from engine.units import SYSTEMS
 from tests.support.buildings import buildings
 from tests.support.story_books import assert_routes_agree, story_book
@@ -22,18 +23,21 @@ from workbook_templates.build import build, write_workbook
 from workbook_templates.declare import DIRECTIONS
 from workbook_templates.inputs import STARTER
 from workbook_templates.layout import LEVELS, SHEETS, Layout
-from workbook_templates.parts import PARTS
+from workbook_templates.parts import CORE, PARTS
+from workbook_templates.read import Reader
 from xlbridge.catalogue import CATALOGUE
 from xlbridge.headless.builtins import BUILTINS
+from xlbridge.headless.compute import compute
 
 BLANK = {"edition": "7-22", "units": "us"}
+FULL = {**BLANK, "parts": list(PARTS)}
 VOLATILE = re.compile(r"\b(NOW|TODAY|RAND|RANDBETWEEN|OFFSET|INDIRECT)\(")
 CALLED = re.compile(r"\b([A-Z][A-Z0-9_.]*)\(")
 
 
 @pytest.fixture(scope="module")
 def blank(tmp_path_factory: pytest.TempPathFactory) -> openpyxl.Workbook:
-    return openpyxl.load_workbook(story_book(tmp_path_factory.mktemp("blank"), BLANK))
+    return openpyxl.load_workbook(story_book(tmp_path_factory.mktemp("blank"), FULL))
 
 
 def formulas(sheet: Worksheet) -> list[str]:
@@ -62,6 +66,29 @@ def test_level_counts(tmp_path: Path, count: int) -> None:
 def test_random_buildings_agree_with_the_model_route(tables: dict[str, Any]) -> None:
     with tempfile.TemporaryDirectory() as folder:
         assert_routes_agree(story_book(Path(folder), tables), 20)
+
+
+@pytest.mark.parametrize("part", PARTS)
+def test_each_part_alone_agrees_with_the_model_route(tmp_path: Path, part: str) -> None:
+    assert_routes_agree(story_book(tmp_path, {**BLANK, "parts": [part]}), 80)
+
+
+def test_all_parts_together_agree_with_the_model_route(tmp_path: Path) -> None:
+    assert_routes_agree(story_book(tmp_path, FULL), 190)
+
+
+def test_parts_come_back_out_of_the_workbook(tmp_path: Path) -> None:
+    computed = compute(story_book(tmp_path, FULL))
+    tables = Reader(computed.evaluator.evaluate_text).inputs()
+    assert set(tables["parts"]) == {key for key, part in PARTS.items() if not part.needs} - {CORE}
+    again = assert_routes_agree(story_book(tmp_path, tables, name="again.xlsx"), 190)
+    linked = sum(bool(column.quantity.linked) for column in Layout(6, frozenset(PARTS)).table)
+    assert len(again.results.cells) == len(computed.results.cells) - 6 * linked  # links come back as numbers
+
+
+def test_an_unknown_part_is_refused(tmp_path: Path) -> None:
+    with pytest.raises(NotApplicable, match="parts = 'roofs': must be one of story, drift"):
+        story_book(tmp_path, {**BLANK, "parts": ["roofs"]})
 
 
 def test_a_part_without_inputs_is_left_out(tmp_path: Path) -> None:

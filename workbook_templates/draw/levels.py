@@ -73,10 +73,10 @@ def _draw_cells(sheet: Worksheet, layout: Layout, inputs: Inputs, column: Column
     number_format = style.number_format(q, inputs.units)
     for row in range(FIRST_LEVEL, layout.bottom_guard):
         cell = sheet[f"{column.letter}{row}"]
-        if q.role is Role.INPUT:
-            cell.value = inputs.level(row - FIRST_LEVEL, q, direction)
-        else:
-            cell.value = layout.write(q.formula, LEVELS, direction, row)
+        entered = inputs.level(row - FIRST_LEVEL, q, direction) if q.is_input else None
+        cell.value = (
+            layout.write(q.formula or q.linked, LEVELS, direction, row) if entered is None else entered
+        )
         style.dress(cell, q.role, number_format)
     for row in (TOP_GUARD, layout.bottom_guard):
         sheet[f"{column.letter}{row}"].fill = style.GUARD_FILL

@@ -6,11 +6,11 @@ from types import MappingProxyType
 from typing import Final
 
 from workbook_templates.declare import Part
-from workbook_templates.parts import drift, story
+from workbook_templates.parts import diaphragm, drift, story
 
 #: the part that every workbook has
 CORE: Final = story.PART.key
-PARTS: Final = MappingProxyType({part.key: part for part in (story.PART, drift.PART)})
+PARTS: Final = MappingProxyType({part.key: part for part in (story.PART, drift.PART, diaphragm.PART)})
 
 
 def chosen(keys: frozenset[str]) -> tuple[Part, ...]:

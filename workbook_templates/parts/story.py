@@ -230,7 +230,10 @@ CHECKS = (
     Check("Every level lies above the base", '=COUNTIF({h_x:all},">0")', _NAMES),
     Check("Levels with a name that another level has", repeated("name"), "=0"),
     Check(
-        "Levels at the elevation of another level (two roofs are legal)", repeated("elevation"), "=0", warning=True
+        "Levels at the elevation of another level (two roofs are legal)",
+        repeated("elevation"),
+        "=0",
+        warning=True,
     ),
     Check(
         "Rows outside the guard rows of the story table", "=COUNTA({name:wide})-COUNTA({name:all})-2", "=0"

@@ -12,9 +12,11 @@ from engine.editions import EDITIONS
 from engine.levels import MAX_LEVELS
 from engine.units import SYSTEMS
 from workbook_templates.build import DEFAULT_LEVELS, write_workbook
+from workbook_templates.parts import CORE, PARTS
 from xlbridge.cli.failure import Refusal
 from xlbridge.cli.files import read_building, refuse_existing, refuse_input
 
+EXTRA = tuple(key for key in PARTS if key != CORE)
 DEFAULT_EDITION, DEFAULT_UNITS = EDITIONS[-1], SYSTEMS[0]
 
 
@@ -23,14 +25,22 @@ DEFAULT_EDITION, DEFAULT_UNITS = EDITIONS[-1], SYSTEMS[0]
 @click.option("--levels", type=click.IntRange(1, MAX_LEVELS), help=f"Levels at the start [{DEFAULT_LEVELS}].")
 @click.option("--edition", type=click.Choice(EDITIONS), help=f"Edition of ASCE/SEI 7 [{DEFAULT_EDITION}].")
 @click.option("--units", type=click.Choice(SYSTEMS), help=f"kip, ft, in or kN, m, mm [{DEFAULT_UNITS}].")
+@click.option("--parts", help=f"Parts beside the story forces, by comma: {', '.join(EXTRA)} [drift].")
 @click.option("--from", "building", type=click.Path(path_type=Path), help="A BUILDING.toml to fill it from.")
 @click.option("--force", is_flag=True, help="Replace an existing BOOK.")
 def command(
-    book: Path, levels: int | None, edition: str | None, units: str | None, building: Path | None, force: bool
+    book: Path,
+    levels: int | None,
+    edition: str | None,
+    units: str | None,
+    parts: str | None,
+    building: Path | None,
+    force: bool,
 ) -> None:
-    """Make the story workbook BOOK: criteria, story table, drift and stability, checks, figures.
+    """Make the story workbook BOOK: criteria, story table, checks, figures, and the parts asked for.
 
-    Without --from it holds starter values, marked as such until each is replaced.
+    Without --from it holds starter values, marked as such until each is replaced. With --from the entries
+    of the levels bring their parts along.
     """
     if book.suffix.lower() != ".xlsx":
         raise Refusal(f"{book}: the name of a workbook ends in .xlsx")
@@ -42,6 +52,8 @@ def command(
         given = _given(building)
     else:
         given = {"edition": edition or DEFAULT_EDITION, "units": units or DEFAULT_UNITS}
+    if parts is not None:
+        given["parts"] = [word.strip() for word in parts.split(",") if word.strip()]
     write_workbook(given, book, levels or DEFAULT_LEVELS, force)
     click.echo(f"{book}: made for ASCE/SEI {given['edition']}, units {given['units']}")
 
