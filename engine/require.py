@@ -139,13 +139,14 @@ def worded(texts: Sequence[str], index: ArrayLike) -> Words:
     return texts[int(place)] if place.ndim == 0 else np.array(texts)[place]
 
 
-def reasons(texts: Sequence[str], holds: Sequence[ArrayLike], otherwise: str) -> Words:
-    """Return the texts whose conditions hold, joined; ``otherwise`` where none does."""
+def reasons(texts: Sequence[str], holds: Sequence[ArrayLike], otherwise: str, lead: str = "") -> Words:
+    """Return ``lead`` and the texts whose conditions hold, joined; ``otherwise`` where none does."""
     flags = np.broadcast_arrays(*(np.asarray(flag, dtype=np.bool_) for flag in holds))
-    found = [
-        "; ".join(text for text, flag in zip(texts, case, strict=True) if flag) or otherwise
+    joined = [
+        "; ".join(text for text, flag in zip(texts, case, strict=True) if flag)
         for case in zip(*(flag.flat for flag in flags), strict=True)
     ]
+    found = [f"{lead}{text}" if text else otherwise for text in joined]
     return np.array(found).reshape(flags[0].shape) if flags[0].ndim else found[0]
 
 
