@@ -22,9 +22,14 @@ Mask = NDArray[np.bool_]
 
 def checked_heights(heights: ArrayLike) -> Array:
     """Return the heights above the base of 1 to 1,000 levels; refuse any at or below the base."""
-    array = np.atleast_1d(above(0, "heights", heights))
+    return checked_count("heights", above(0, "heights", heights))
+
+
+def checked_count(name: str, values: Array) -> Array:
+    """Return one value for each of 1 to 1,000 levels."""
+    array = np.atleast_1d(values)
     if not 1 <= array.shape[-1] <= MAX_LEVELS:
-        raise ImpossibleValue("heights", f"{array.shape[-1]} levels", f"must be 1 to {MAX_LEVELS} levels")
+        raise ImpossibleValue(name, f"{array.shape[-1]} levels", f"must be 1 to {MAX_LEVELS} levels")
     return array
 
 

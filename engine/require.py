@@ -84,6 +84,14 @@ def within(low: float, high: float, name: str, value: ArrayLike, clause: str = "
     return array
 
 
+def whole(name: str, value: ArrayLike) -> Array:
+    """Return a number of things; refuse one below 1 or not whole."""
+    array = at_least(1, name, value)
+    if (np.mod(array, 1) != 0).any():
+        raise ImpossibleValue(name, float(array[np.mod(array, 1) != 0].flat[0]), "must be a whole number")
+    return array
+
+
 def choice(name: str, value: object, allowed: Iterable[str], clause: str = "") -> str:
     """Return ``value`` if it is one of the allowed words (exact spelling)."""
     words = tuple(allowed)
