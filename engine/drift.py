@@ -13,8 +13,9 @@ import numpy as np
 from numpy.typing import ArrayLike
 
 from engine.occupancy import RISK_CATEGORIES
-from engine.require import Result, above, at_least, choice, finite, formula, within
+from engine.require import Result, Words, above, at_least, choice, finite, formula, within, worded, yes
 from engine.tables import table
+from engine.torsion.ratios import is_torsional
 
 DRIFT_STRUCTURES: Final = table("allowable_drift").keys
 
@@ -104,3 +105,54 @@ def allowable_drift(h_sx: ArrayLike, structure: str, risk_category: str, rho: Ar
     category = choice("risk_category", risk_category, RISK_CATEGORIES)
     part = table("allowable_drift").entry("structure", structure, category)
     return part * above(0, "h_sx", h_sx) / within(1, 1.3, "rho", rho)
+
+
+@formula
+def edges_due(TIR: ArrayLike, SDC: str) -> Words:
+    """Whether the design story drift is taken along the edges: "yes" or "no".
+
+    TIR > 1.2 in Seismic Design Category C to F
+
+    Parameters
+        TIR: largest torsional irregularity ratio of the structure [-], at least 1; any shape
+        SDC: Seismic Design Category, "A" to "F"
+    Returns
+        "yes" or "no", or texts of the shape of TIR
+    Raises
+        ImpossibleValue: TIR below 1. NotApplicable: another category
+    Example
+        >>> edges_due(TIR=1.3, SDC="D")
+        'yes'
+
+    Reference
+        rule edge_drift: 7-16 12.8.6; 7-22 12.8.6
+    """
+    return worded(("no", "yes"), is_torsional(TIR, SDC))
+
+
+@formula
+def drift_to_check(Delta: ArrayLike, Delta_1: ArrayLike, Delta_2: ArrayLike, edges: str) -> Result:
+    """Design story drift that is compared with the allowable one.
+
+    max(|Delta_1|, |Delta_2|) along the edges where they are due; else |Delta| at the centres of mass
+
+    Parameters
+        Delta: design story drift between the centres of mass [in or mm], signed; any shape
+        Delta_1: design story drift along one edge, points above each other [in or mm], signed
+        Delta_2: design story drift along the opposite edge [in or mm], signed
+        edges: "yes" where a torsional irregularity exists in Seismic Design Category C to F, or "no"
+    Returns
+        the drift [in or mm], a magnitude, the broadcast shape
+    Raises
+        ImpossibleValue: a number that is not finite. NotApplicable: another word
+    Example
+        >>> given = {"Delta": 1.0, "Delta_1": 1.4, "Delta_2": 0.6}
+        >>> print(drift_to_check(**given, edges="yes"), drift_to_check(**given, edges="no"))
+        1.4 1.0
+
+    Reference
+        rule edge_drift: 7-16 12.8.6; 7-22 12.8.6
+    """
+    center = np.abs(finite("Delta", Delta))
+    one, other = np.abs(finite("Delta_1", Delta_1)), np.abs(finite("Delta_2", Delta_2))
+    return np.where(yes("edges", edges), np.maximum(one, other), center)

@@ -8,7 +8,7 @@ import numpy as np
 from numpy.typing import ArrayLike
 
 from engine.editions import EDITIONS
-from engine.require import Result, above, at_least, choice, finite, formula
+from engine.require import Result, above, at_least, choice, finite, formula, within
 from engine.tables import table
 
 COMBINATIONS: Final = table("load_combinations").keys
@@ -28,12 +28,12 @@ def horizontal_effect(rho: ArrayLike, Q_E: ArrayLike) -> Result:
     E_h = rho Q_E
 
     Parameters
-        rho: redundancy factor [-], at least 1; any shape
+        rho: redundancy factor [-], 1 to 1.3; any shape
         Q_E: effect of the horizontal seismic forces [kip or kN, or any unit of an effect], signed
     Returns
         E_h [the unit of Q_E], signed, the broadcast shape
     Raises
-        ImpossibleValue: rho below 1
+        ImpossibleValue: rho outside its range
     Example
         >>> print(horizontal_effect(rho=1.3, Q_E=50))
         65.0
@@ -41,7 +41,7 @@ def horizontal_effect(rho: ArrayLike, Q_E: ArrayLike) -> Result:
     Reference
         rule E_h: 7-16 12.4.2.1, Eq. 12.4-3; 7-22 12.4.2.1, Eq. 12.4-3
     """
-    return at_least(1, "rho", rho) * finite("Q_E", Q_E)
+    return within(1, 1.3, "rho", rho) * finite("Q_E", Q_E)
 
 
 @formula

@@ -9,7 +9,7 @@ from numpy.typing import ArrayLike, NDArray
 
 from engine.editions import text, value
 from engine.occupancy import DESIGN_CATEGORIES
-from engine.require import Result, Words, above, at_least, choice, exceeds, formula, worded, yes
+from engine.require import Result, Words, above, at_least, choice, exceeds, formula, within, worded, yes
 from engine.torsion.ratios import EXTREME_RATIO
 
 #: what frees a direction from 1.3 in Seismic Design Category D to F
@@ -114,11 +114,11 @@ def redundancy_in_use(use: str, rho: ArrayLike) -> Result:
 
     Parameters
         use: one of USES
-        rho: redundancy factor of the direction [-], at least 1; any shape
+        rho: redundancy factor of the direction [-], 1 to 1.3; any shape
     Returns
         rho or 1.0 [-], the shape of rho
     Raises
-        ImpossibleValue: rho below 1. NotApplicable: another use
+        ImpossibleValue: rho outside its range. NotApplicable: another use
     Notes
         That transfer forces take rho is from memory.
     Example
@@ -128,7 +128,7 @@ def redundancy_in_use(use: str, rho: ArrayLike) -> Result:
     Reference
         rule rho_one: 7-16 12.3.4.1; 7-22 12.3.4.1
     """
-    rho = at_least(1, "rho", rho)
+    rho = within(1, 1.3, "rho", rho)
     return rho if choice("use", use, USES) in RHO_COUNTS else np.ones_like(rho)
 
 

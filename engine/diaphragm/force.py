@@ -1,6 +1,6 @@
 """Diaphragm design forces (12.10.1.1): the equation and both limits, each on its own.
 
-Transfer forces, collectors, the alternative procedure and the one-story method are left out here.
+Transfer forces and collectors, the alternative procedure and the one-story method stand beside this module.
 """
 
 from __future__ import annotations
