@@ -1,0 +1,61 @@
+"""Which bound gives a seismic response coefficient, in words with its equation number."""
+
+from __future__ import annotations
+
+from collections.abc import Sequence
+
+import numpy as np
+from numpy.typing import ArrayLike, NDArray
+
+from engine.base_shear import bounds
+from engine.editions import clause
+from engine.require import Words, agree, finite, worded
+
+#: a bound in words, the rule that prints it, and where it gives the coefficient
+Bound = tuple[str, str, NDArray[np.bool_]]
+
+
+def plateau_and_cap(
+    C_s: ArrayLike,
+    S_DS: ArrayLike,
+    S_D1: ArrayLike,
+    T: ArrayLike,
+    T_L: ArrayLike,
+    R: ArrayLike,
+    I_e: ArrayLike,
+) -> tuple[Bound, ...]:
+    """Return the upper bounds of the two-period spectrum."""
+    long = finite("T", T) > finite("T_L", T_L)
+    capped = agree(bounds.coefficient_cap(S_D1, T, T_L, R, I_e), C_s)
+    return (
+        ("plateau S_DS/(R/I_e)", "C_s_plateau", agree(bounds.coefficient_plateau(S_DS, R, I_e), C_s)),
+        ("cap S_D1/(T R/I_e)", "C_s_cap", capped & ~long),
+        ("cap S_D1 T_L/(T^2 R/I_e)", "C_s_cap_long", capped & long),
+    )
+
+
+def spectrum(C_s: ArrayLike, S_a: ArrayLike, R: ArrayLike, I_e: ArrayLike) -> Bound:
+    """Return the ordinate of the multi-period spectrum."""
+    return "spectrum S_a/(R/I_e)", "C_s_method1", agree(bounds.coefficient_multi(S_a, R, I_e), C_s)
+
+
+def minimum(C_s: ArrayLike, S_DS: ArrayLike, I_e: ArrayLike) -> tuple[Bound, ...]:
+    """Return the minimum at every site, and its own floor."""
+    least = bounds.coefficient_minimum(S_DS, I_e)
+    governs = agree(least, C_s)
+    return (
+        ("minimum 0.044 S_DS I_e", "C_s_min", governs & (least > bounds.C_S_FLOOR)),
+        ("minimum 0.01", "C_s_min", governs),
+    )
+
+
+def near_fault(C_s: ArrayLike, S_1: ArrayLike, R: ArrayLike, I_e: ArrayLike) -> Bound:
+    """Return the minimum where S_1 is at least 0.6 g."""
+    least = bounds.coefficient_minimum_near_fault(S_1, R, I_e)
+    return "minimum 0.5 S_1/(R/I_e)", "C_s_min_S1", agree(least, C_s)
+
+
+def named(edition: str, found: Sequence[Bound]) -> Words:
+    """Return the first bound that governs, with its equation number in the edition."""
+    texts = [f"{text}, Eq. {clause(edition, key).equation}" for text, key, _ in found]
+    return worded(texts, np.select([governs for *_, governs in found], range(len(found)), -1))
