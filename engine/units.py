@@ -13,6 +13,7 @@ SYSTEMS: Final = (US, SI)
 UNITS: Final = MappingProxyType(
     {
         "none": {US: "-", SI: "-"},
+        "any": {US: "any", SI: "any"},
         "text": {US: "text", SI: "text"},
         "time": {US: "s", SI: "s"},
         "acceleration": {US: "g", SI: "g"},

@@ -9,6 +9,53 @@ analysis until there is one, and serves as a comparison afterwards.
 response in one mode, ``combination`` the sums over modes and the scaling; ``eigen`` solves for the modes.
 """
 
-from engine.dynamics import combination, modes, response, stories
+from engine.dynamics.combination import (
+    absolute_sum,
+    complete_combination,
+    correlation,
+    drift_scale,
+    force_scale,
+    square_root_of_squares,
+)
+from engine.dynamics.modes import (
+    VERDICTS,
+    mode_participation,
+    mode_period,
+    mode_shape,
+    mode_weight_share,
+    modes_needed,
+    modes_verdict,
+    modes_weight_share,
+)
+from engine.dynamics.response import (
+    modal_coefficient,
+    modal_displacement,
+    modal_drift,
+    modal_force,
+    modal_shear,
+)
+from engine.dynamics.stories import elastic_displacement, story_stiffness
 
-__all__ = ["combination", "modes", "response", "stories"]
+__all__ = [
+    "VERDICTS",
+    "absolute_sum",
+    "complete_combination",
+    "correlation",
+    "drift_scale",
+    "elastic_displacement",
+    "force_scale",
+    "modal_coefficient",
+    "modal_displacement",
+    "modal_drift",
+    "modal_force",
+    "modal_shear",
+    "mode_participation",
+    "mode_period",
+    "mode_shape",
+    "mode_weight_share",
+    "modes_needed",
+    "modes_verdict",
+    "modes_weight_share",
+    "square_root_of_squares",
+    "story_stiffness",
+]

@@ -24,7 +24,7 @@ def refused(name, error, match, **changes):
     assert type(caught.value) is error
 
 
-EITHER_WAY = {"delta_xe", "d_upper", "d_lower", "forces", "values"}
+EITHER_WAY = {"delta_xe", "d_upper", "d_lower", "forces", "values", "displacements"}
 NEVER = [
     (name, key, bad)
     for name, key in NUMBERS
@@ -91,6 +91,22 @@ ZERO_REFUSED = {
     "diaphragm.maximum_force": ["S_DS", "I_e"],
     "diaphragm.design_force": ["S_DS", "I_e"],
     "diaphragm.design_force_bound": ["S_DS", "I_e"],
+    "dynamics.mode_period": ["mode"],
+    "dynamics.mode_shape": ["mode"],
+    "dynamics.mode_participation": ["mode"],
+    "dynamics.mode_weight_share": ["mode"],
+    "dynamics.modes_weight_share": ["modes"],
+    "dynamics.modes_needed": ["share"],
+    "dynamics.modes_verdict": ["modes"],
+    "dynamics.modal_coefficient": ["S_a", "R", "I_e"],
+    "dynamics.modal_force": ["mode", "C_sm"],
+    "dynamics.modal_shear": ["mode", "C_sm"],
+    "dynamics.modal_displacement": ["mode", "C_sm"],
+    "dynamics.modal_drift": ["mode", "C_sm"],
+    "dynamics.correlation": ["T_i", "T_j", "damping"],
+    "dynamics.complete_combination": ["damping"],
+    "dynamics.force_scale": ["V", "V_t"],
+    "dynamics.drift_scale": ["V_t", "W", "R", "I_e"],
 }
 
 
@@ -126,6 +142,9 @@ ZERO_ACCEPTED = {
     "diaphragm.unlimited_force": ["w_px"],
     "diaphragm.minimum_force": ["w_px"],
     "diaphragm.design_force": ["w_px"],
+    "dynamics.elastic_displacement": ["h_x"],
+    "dynamics.modal_shear": ["h_x"],
+    "dynamics.drift_scale": ["S_1"],
 }
 
 
@@ -138,6 +157,48 @@ def test_zero_that_is_a_value(name, key):
 
 
 BEYOND = [
+    ("dynamics.mode_period", ImpossibleValue, "mode = 1.5: must be a whole number", {"mode": [1.0, 1.5]}),
+    ("dynamics.mode_period", NotApplicable, "mode = 4: must be at most 3, the number", {"mode": [3.0, 4.0]}),
+    (
+        *("dynamics.mode_shape", NotApplicable, "mode = 3: must be at most 2, the number"),
+        {"mode": 3.0, "weights": [300.0, 0.0, 120.0]},
+    ),
+    (
+        *("dynamics.modes_weight_share", NotApplicable, "modes = 3: must be at most 2"),
+        {"modes": 3.0, "heights": [11.0, 25.0, 25.0], "stiffnesses": [90.0, 60.0, 60.0]},
+    ),
+    (
+        *("dynamics.elastic_displacement", NotApplicable, "stiffnesses = 40: levels at one height"),
+        {"heights": [11.0, 25.0, 25.0]},
+    ),
+    (
+        *("dynamics.story_stiffness", NotApplicable, "displacements = 1.2: levels at one height"),
+        {"heights": [11.0, 25.0, 25.0]},
+    ),
+    (
+        *("dynamics.story_stiffness", ImpossibleValue, "displacements = 0: the drift of a story must go"),
+        {"displacements": [0.8, 0.8, 1.2]},
+    ),
+    (
+        *("dynamics.story_stiffness", ImpossibleValue, "displacements = -0.1: the drift of a story must go"),
+        {"displacements": [0.9, 0.8, 1.2]},
+    ),
+    ("dynamics.story_stiffness", NotApplicable, "h_x = 0: must be the height of a level$", {"h_x": 0.0}),
+    ("dynamics.story_stiffness", WrongType, "displacements = '2 values'", {"displacements": [1.0, 2.0]}),
+    ("dynamics.elastic_displacement", NotApplicable, "h_x = 24: .* a level or 0", {"h_x": 24.0}),
+    ("dynamics.elastic_displacement", WrongType, "stiffnesses = '2 values'", {"stiffnesses": [1.0, 2.0]}),
+    ("dynamics.elastic_displacement", ImpossibleValue, "above 0", {"stiffnesses": [9.0, 0.0, 4.0]}),
+    ("dynamics.modal_force", NotApplicable, "w_x = 300: must be the weight", {"w_x": 300.0}),
+    ("dynamics.modal_drift", NotApplicable, "h_x = 0: must be the height of a level$", {"h_x": 0.0}),
+    (
+        *("dynamics.mode_period", ImpossibleValue, "stories differ too much: weight is lost"),
+        {"stiffnesses": [1e17, 60.0, 40.0]},
+    ),
+    ("dynamics.modes_needed", ImpossibleValue, "share = 1.1: must be at most 1", {"share": 1.1}),
+    ("dynamics.correlation", ImpossibleValue, "damping = 1.1: must be at most 1", {"damping": 1.1}),
+    ("dynamics.complete_combination", WrongType, "one for each of 3 modes", {"periods": [1.0, 0.9]}),
+    ("dynamics.absolute_sum", ImpossibleValue, "0 modes': must be 1 to 1000", {"values": []}),
+    ("dynamics.absolute_sum", ImpossibleValue, "1001 modes': must be 1 to 1000", {"values": [1.0] * 1001}),
     ("period.approximate_period_stories", ImpossibleValue, "N = 2.5: must be a whole", {"N": [2.0, 2.5]}),
     ("period.approximate_period_stories", NotApplicable, "N = 13: must be at most", {"N": [2.0, 13.0]}),
     ("stability.second_order_factor", ImpossibleValue, "theta = 1.5: must be below", {"theta": [0.2, 1.5]}),

@@ -11,6 +11,8 @@ from tests.support.formulas import CALLS, function, public_functions
 THREE = {
     "N": [1.0, 7.0, 12.0],
     "I_e": [1.0, 1.25, 1.5],
+    "mode": [1.0, 2.0, 3.0],
+    "modes": [1.0, 2.0, 3.0],
     "h_x": [11.0, 25.0, 38.0],
     "w_x": [300.0, 250.0, 120.0],
     "w_px": [290.0, 240.0, 100.0],

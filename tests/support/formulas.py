@@ -10,6 +10,7 @@ from engine import (
     base_shear,
     diaphragm,
     drift,
+    dynamics,
     hazard,
     occupancy,
     period,
@@ -21,13 +22,14 @@ from engine import (
 
 CONCEPTS: tuple[ModuleType, ...] = (
     *(weight, occupancy, hazard, period, base_shear, vertical),
-    *(torsion, drift, stability, diaphragm),
+    *(torsion, drift, stability, diaphragm, dynamics),
 )
 
 SITE = {"S_DS": 0.9, "S_D1": 0.45, "S_1": 0.65, "T": 0.8, "T_L": 6.0, "R": 6.0, "I_e": 1.25}
 LEVELS = {"heights": [11.0, 25.0, 38.0], "weights": [300.0, 250.0, 120.0]}
 FORCES = {"heights": LEVELS["heights"], "forces": [20.0, 45.0, 35.0]}
 DIAPHRAGM = {"w_px": 240.0, "h_x": 25.0, **LEVELS, "forces": FORCES["forces"]}
+MODEL = {**LEVELS, "stiffnesses": [90.0, 60.0, 40.0]}
 LIMITS = {"S_DS": 0.9, "I_e": 1.25}
 
 #: dotted name below ``engine`` -> a valid call, no two arguments alike so that a swap shows
@@ -81,6 +83,28 @@ CALLS: dict[str, dict[str, Any]] = {
     "diaphragm.maximum_force": {"w_px": 240.0, **LIMITS},
     "diaphragm.design_force": {**DIAPHRAGM, **LIMITS},
     "diaphragm.design_force_bound": {**DIAPHRAGM, **LIMITS},
+    "dynamics.elastic_displacement": {"h_x": 25.0, **FORCES, "stiffnesses": MODEL["stiffnesses"]},
+    "dynamics.story_stiffness": {"h_x": 25.0, **FORCES, "displacements": [0.3, 0.8, 1.2]},
+    "dynamics.mode_period": {"mode": 1.0, **MODEL, "units": "us"},
+    "dynamics.mode_shape": {"mode": 1.0, "h_x": 25.0, **MODEL},
+    "dynamics.mode_participation": {"mode": 1.0, **MODEL},
+    "dynamics.mode_weight_share": {"mode": 1.0, **MODEL},
+    "dynamics.modes_weight_share": {"modes": 1.0, **MODEL},
+    "dynamics.modes_needed": {"share": 0.7, **MODEL},
+    "dynamics.modes_verdict": {"modes": 1.0, **MODEL, "units": "us"},
+    "dynamics.modal_coefficient": {"S_a": 0.9, "R": 6.0, "I_e": 1.25},
+    "dynamics.modal_force": {"mode": 1.0, "w_x": 250.0, "h_x": 25.0, "C_sm": 0.1, **MODEL},
+    "dynamics.modal_shear": {"mode": 1.0, "h_x": 25.0, "C_sm": 0.1, **MODEL},
+    "dynamics.modal_displacement": {"mode": 1.0, "h_x": 25.0, "C_sm": 0.1, **MODEL},
+    "dynamics.modal_drift": {"mode": 1.0, "h_x": 25.0, "C_sm": 0.1, **MODEL},
+    "dynamics.square_root_of_squares": {"values": [3.0, -4.0, 1.0]},
+    "dynamics.absolute_sum": {"values": [3.0, -4.0, 1.0]},
+    "dynamics.correlation": {"T_i": 0.9, "T_j": 1.2, "damping": 0.05},
+    "dynamics.complete_combination": {
+        **{"values": [3.0, -4.0, 1.0], "periods": [1.0, 0.9, 0.3], "damping": 0.05}
+    },
+    "dynamics.force_scale": {"V": 100.0, "V_t": 80.0},
+    "dynamics.drift_scale": {"V_t": 40.0, "W": 2000.0, "S_1": 0.75, "R": 6.0, "I_e": 1.25},
 }
 
 

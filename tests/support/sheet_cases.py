@@ -20,9 +20,12 @@ PLACES = tuple((entry, argument) for entry in ENTRIES for argument in entry.argu
 #: a step across the end of a span, far below any value and far above round-off
 STEP = 1e-6
 FAR = 1e6
+#: numbers of modes: whole, and at most as many as there are levels with weight
+ORDINALS = ("mode", "modes")
 #: what a random number of a unit lies between, inside its span
 USUAL = {
     "none": (0.0, 10.0),
+    "any": (-100.0, 100.0),
     "time": (0.02, 12.0),
     "acceleration": (0.02, 3.0),
     "length": (3.0, 900.0),
@@ -31,6 +34,7 @@ USUAL = {
     "unit load": (0.0, 250.0),
     "displacement": (0.01, 200.0),
     "force": (0.5, 50_000.0),
+    "stiffness": (5.0, 5000.0),
 }
 #: values at which a rule changes its branch, and printed rows of tables
 BRANCHES = {
@@ -89,6 +93,8 @@ def full(entry: SheetFunction) -> dict[str, Any]:
 def inside(argument: Argument) -> list[float]:
     """Numbers at and just within the ends of a span, and far out where it has no end."""
     span, step = argument.span, _step(argument)
+    if argument.name in ORDINALS:
+        return [1.0, 2.0]
     low = [-FAR, 0.0] if span.low is None else [span.low, span.low + step]
     high = [FAR] if span.high is None else [span.high - step, span.high]
     return [float(number) for number in (*low, *high) if number in span]
@@ -159,11 +165,16 @@ def random_levels(random: Random, most: int = 8) -> dict[str, list[float]]:
     rows = list(zip(heights, weights, [random.uniform(-5.0, 500.0) for _ in heights], strict=True))
     random.shuffle(rows)
     values = {height: random.uniform(-9.0, 9.0) for height in heights}
+    stiffnesses = {height: random.uniform(5.0, 5000.0) for height in heights}
+    power = random.uniform(0.5, 2.0)
     return {
         "heights": [height for height, _, _ in rows],
         "weights": [weight for _, weight, _ in rows],
         "forces": [force for _, _, force in rows],
         "values": [values[height] for height, _, _ in rows],
+        "stiffnesses": [stiffnesses[height] for height, _, _ in rows],
+        "displacements": [height**power / 100 for height, _, _ in rows],
+        "periods": [random.uniform(0.02, 12.0) for _ in rows],
         "areas": [random.uniform(0.0, 9000.0) for _ in rows],
         "unit_loads": [random.uniform(0.0, 250.0) for _ in rows],
     }
@@ -192,12 +203,18 @@ def _settle(call: dict[str, Any], levels: Mapping[str, list[float]], at: int, ra
         call["w_x"] = levels["weights"][at]
     if "w_px" in call:
         call["w_px"] = levels["weights"][at] * random.choice((1.0, 1.0, 0.5, 0.0))
+    if "displacements" in call:  # the drift of each story goes with its shear
+        call["forces"] = [abs(force) + 1.0 for force in call["forces"]]
+    for name in ORDINALS:
+        if name in call:
+            count = len({h for h, w in zip(call["heights"], call["weights"], strict=True) if w > 0})
+            call[name] = float(random.randint(1, count))
     if {"d_max", "d_avg"} <= call.keys():
         call["d_max"] = call["d_avg"] * random.uniform(1.0, 2.5)
 
 
 def _step(argument: Argument) -> float:
-    return 1.0 if argument.name == "N" else STEP
+    return 1.0 if argument.name in ("N", *ORDINALS) else STEP
 
 
 def _floats(value: Any) -> Any:

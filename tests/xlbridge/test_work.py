@@ -23,6 +23,10 @@ WITHOUT_NUMBER = {("ELF_CS", "edition"), ("ELF_CS_GOVERNS", "edition")}
 IN_WORDS = {
     *("ELF_IE", "ELF_SA", "ELF_CU", "ELF_EXPONENT", "ELF_CS_CAP", "ELF_CS_MIN_S1", "ELF_BETA"),
     *("ELF_VX", "ELF_MX", "ELF_HSX", "ELF_BELOW", "ELF_PDELTA_FACTOR"),
+    # sums along the chain of stories, or over all pairs of modes
+    *("ELF_DELTA_XE", "ELF_STORY_STIFFNESS", "ELF_MODE_PERIOD", "ELF_MODE_SHAPE", "ELF_MODE_PARTICIPATION"),
+    *("ELF_MODE_MASS", "ELF_MODE_MASS_SUM", "ELF_MODES_NEEDED", "ELF_MODE_SHEAR"),
+    *("ELF_MODE_DISPLACEMENT", "ELF_MODE_DRIFT", "ELF_CQC"),
 }
 ARITHMETIC = [entry for entry in ENTRIES if not entry.is_text and entry.name not in IN_WORDS]
 

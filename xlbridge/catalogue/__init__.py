@@ -14,7 +14,9 @@ from xlbridge.catalogue import (
     base_shear,
     diaphragm,
     drift,
+    dynamics,
     ground_motion,
+    modal_response,
     period,
     stability,
     torsion,
@@ -24,7 +26,19 @@ from xlbridge.catalogue import (
 from xlbridge.catalogue.entry import SheetFunction
 from xlbridge.catalogue.validate import DeclarationError, validate
 
-_CONCEPTS = (weight, ground_motion, period, base_shear, vertical, torsion, drift, stability, diaphragm)
+_CONCEPTS = (
+    weight,
+    ground_motion,
+    period,
+    base_shear,
+    vertical,
+    torsion,
+    drift,
+    stability,
+    diaphragm,
+    dynamics,
+    modal_response,
+)
 
 
 def gather(entries: Iterable[SheetFunction]) -> Mapping[str, SheetFunction]:

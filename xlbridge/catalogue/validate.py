@@ -128,6 +128,8 @@ def describe(a: Argument) -> str:
     """Return the help line of an argument: text, unit, allowed values."""
     if a.kind is Kind.CHOICE:
         return f"{a.text}: {listed(a.choices)}."
-    unit = {"none": "no unit", "time": "s", "acceleration": "g"}.get(a.unit, f"a {a.unit} unit")
+    unit = {"none": "no unit", "any": "any one unit", "time": "s", "acceleration": "g"}.get(
+        a.unit, f"a {a.unit} unit"
+    )
     each = f"one cell a {a.each}, " if a.kind is Kind.LEVELS else ""
     return f"{a.text} [{unit}], {each}{a.span}."

@@ -13,6 +13,84 @@ import xlwings as xw
 from xlbridge.excel.cells import OMITTED, call
 
 
+@xw.func(category="Storyledger: Seismic weight")
+@xw.arg("area", "raw", doc="Area on plan, or of a wall [a area unit], at least 0.")
+@xw.arg("unit_load", "raw", doc="Load that counts, on each unit of area [a unit load unit], at least 0.")
+@xw.arg("units", "raw", doc="Unit system: us (kip, ft, in) or si (kN, m, mm): us, si.")
+@xw.ret("raw")
+def ELF_AREA_WEIGHT(area: Any, unit_load: Any, units: Any) -> Any:
+    """Weight of a surface under a uniform load. ASCE/SEI 7-16: 12.7.2; 7-22: 12.7.2."""
+    return call("ELF_AREA_WEIGHT", area, unit_load, units)
+
+
+@xw.func(category="Storyledger: Seismic weight")
+@xw.arg("live_load", "raw", doc="Floor live load of the storage area [a unit load unit], at least 0.")
+@xw.arg(
+    "storage",
+    "raw",
+    doc="Counted, or the exception used: counted, at most 5 % of the level, public garage or open parking.",
+)
+@xw.ret("raw")
+def ELF_STORAGE_SHARE(live_load: Any, storage: Any) -> Any:
+    """Part of a storage floor's live load that counts as seismic weight. ASCE/SEI 7-16: 12.7.2, item 1; 7-22: 12.7.2, item 1. Partly from memory: confirm."""
+    return call("ELF_STORAGE_SHARE", live_load, storage)
+
+
+@xw.func(category="Storyledger: Seismic weight")
+@xw.arg(
+    "w_storage",
+    "raw",
+    doc="Weight of storage at the level, 25 % of its live load [a force unit], at least 0.",
+)
+@xw.arg(
+    "w_other", "raw", doc="Effective seismic weight of the level without storage [a force unit], above 0."
+)
+@xw.ret("raw")
+def ELF_STORAGE_RATIO(w_storage: Any, w_other: Any) -> Any:
+    """What a level's storage adds, in parts of its other weight: at most 0.05 need not count. ASCE/SEI 7-16: 12.7.2, item 1; 7-22: 12.7.2, item 1. Partly from memory: confirm."""
+    return call("ELF_STORAGE_RATIO", w_storage, w_other)
+
+
+@xw.func(category="Storyledger: Seismic weight")
+@xw.arg(
+    "partitions", "raw", doc="Actual weight of partitions over the floor area [a unit load unit], at least 0."
+)
+@xw.arg("units", "raw", doc="Unit system: us (kip, ft, in) or si (kN, m, mm): us, si.")
+@xw.ret("raw")
+def ELF_PARTITION_SHARE(partitions: Any, units: Any) -> Any:
+    """Partition load that counts as seismic weight: the actual one, at least 10 psf (0.48 kN/m2). ASCE/SEI 7-16: 12.7.2, item 2; 7-22: 12.7.2, item 2."""
+    return call("ELF_PARTITION_SHARE", partitions, units)
+
+
+@xw.func(category="Storyledger: Seismic weight")
+@xw.arg("p_f", "raw", doc="Flat roof snow load [a unit load unit], at least 0.")
+@xw.arg(
+    "edition",
+    "raw",
+    doc="Edition of ASCE/SEI 7, as text (in a cell: format the cell as Text, or it turns into a date): 7-16, 7-22.",
+)
+@xw.arg("units", "raw", doc="Unit system: us (kip, ft, in) or si (kN, m, mm): us, si.")
+@xw.ret("raw")
+def ELF_SNOW_SHARE(p_f: Any, edition: Any, units: Any) -> Any:
+    """Part of the flat roof snow load that counts as seismic weight. ASCE/SEI 7-16: 12.7.2, item 4; 7-22: 12.7.2, item 4."""
+    return call("ELF_SNOW_SHARE", p_f, edition, units)
+
+
+@xw.func(category="Storyledger: Seismic weight")
+@xw.arg("areas", "raw", doc="Areas of the items [a area unit], one cell a item, at least 0.")
+@xw.arg("unit_loads", "raw", doc="Loads that count, by item [a unit load unit], one cell a item, at least 0.")
+@xw.arg("units", "raw", doc="Unit system: us (kip, ft, in) or si (kN, m, mm): us, si.")
+@xw.arg(
+    "equipment",
+    "raw",
+    doc="Permanent equipment, landscaping and whatever else counts in full; 0 if left out [a force unit], at least 0.",
+)
+@xw.ret("raw")
+def ELF_LEVEL_WEIGHT(areas: Any, unit_loads: Any, units: Any, equipment: Any = OMITTED) -> Any:
+    """Effective seismic weight of one level from its list of areas and unit loads. ASCE/SEI 7-16: 12.7.2; 7-22: 12.7.2."""
+    return call("ELF_LEVEL_WEIGHT", areas, unit_loads, units, equipment)
+
+
 @xw.func(category="Storyledger: Ground motion")
 @xw.arg("risk_category", "raw", doc="Risk category: I, II, III, IV.")
 @xw.ret("raw")
@@ -426,3 +504,357 @@ def ELF_FPX(w_px: Any, h_x: Any, forces: Any, weights: Any, heights: Any, S_DS: 
 def ELF_FPX_GOVERNS(w_px: Any, h_x: Any, forces: Any, weights: Any, heights: Any, S_DS: Any, I_e: Any) -> Any:
     """Which of the three diaphragm force equations governs at a level. ASCE/SEI 7-16: 12.10.1.1, Eq. 12.10-1; 7-22: 12.10.1.1, Eq. 12.10-1."""
     return call("ELF_FPX_GOVERNS", w_px, h_x, forces, weights, heights, S_DS, I_e)
+
+
+@xw.func(category="Storyledger: Story stiffness")
+@xw.arg("h_x", "raw", doc="Height of level x above the base, or 0 for the base [a length unit], at least 0.")
+@xw.arg("forces", "raw", doc="Story forces of all levels [a force unit], one cell a level, any number.")
+@xw.arg(
+    "stiffnesses",
+    "raw",
+    doc="Stiffness of the story below each level [a stiffness unit], one cell a level, above 0.",
+)
+@xw.arg(
+    "heights", "raw", doc="Heights of all levels above the base [a length unit], one cell a level, above 0."
+)
+@xw.ret("raw")
+def ELF_DELTA_XE(h_x: Any, forces: Any, stiffnesses: Any, heights: Any) -> Any:
+    """Elastic displacement of a level of a shear building, from its story forces and stiffnesses. ASCE/SEI 7-16: 12.8.6; 7-22: 12.8.6. Partly from memory: confirm."""
+    return call("ELF_DELTA_XE", h_x, forces, stiffnesses, heights)
+
+
+@xw.func(category="Storyledger: Story stiffness")
+@xw.arg("h_x", "raw", doc="Height of level x above the base [a length unit], above 0.")
+@xw.arg("forces", "raw", doc="Story forces of all levels [a force unit], one cell a level, any number.")
+@xw.arg(
+    "displacements",
+    "raw",
+    doc="Elastic displacements of all levels under the forces [a displacement unit], one cell a level, any number.",
+)
+@xw.arg(
+    "heights", "raw", doc="Heights of all levels above the base [a length unit], one cell a level, above 0."
+)
+@xw.ret("raw")
+def ELF_STORY_STIFFNESS(h_x: Any, forces: Any, displacements: Any, heights: Any) -> Any:
+    """Stiffness of the story below a level, from story forces and the displacements they cause. ASCE/SEI 7-16: 12.8.6; 7-22: 12.8.6. Partly from memory: confirm."""
+    return call("ELF_STORY_STIFFNESS", h_x, forces, displacements, heights)
+
+
+@xw.func(category="Storyledger: Modal response")
+@xw.arg("mode", "raw", doc="Number of the mode, whole, 1 for the longest period [no unit], at least 1.")
+@xw.arg(
+    "weights",
+    "raw",
+    doc="Effective seismic weights of all levels [a force unit], one cell a level, at least 0.",
+)
+@xw.arg(
+    "stiffnesses",
+    "raw",
+    doc="Stiffness of the story below each level [a stiffness unit], one cell a level, above 0.",
+)
+@xw.arg(
+    "heights", "raw", doc="Heights of all levels above the base [a length unit], one cell a level, above 0."
+)
+@xw.arg("units", "raw", doc="Unit system: us (kip, ft, in) or si (kN, m, mm): us, si.")
+@xw.ret("raw")
+def ELF_MODE_PERIOD(mode: Any, weights: Any, stiffnesses: Any, heights: Any, units: Any) -> Any:
+    """Period of a mode of the shear building. ASCE/SEI 7-16: 12.9.1.1; 7-22: 12.9.1.1. Partly from memory: confirm."""
+    return call("ELF_MODE_PERIOD", mode, weights, stiffnesses, heights, units)
+
+
+@xw.func(category="Storyledger: Modal response")
+@xw.arg("mode", "raw", doc="Number of the mode, whole, 1 for the longest period [no unit], at least 1.")
+@xw.arg("h_x", "raw", doc="Height of level x above the base [a length unit], above 0.")
+@xw.arg(
+    "weights",
+    "raw",
+    doc="Effective seismic weights of all levels [a force unit], one cell a level, at least 0.",
+)
+@xw.arg(
+    "stiffnesses",
+    "raw",
+    doc="Stiffness of the story below each level [a stiffness unit], one cell a level, above 0.",
+)
+@xw.arg(
+    "heights", "raw", doc="Heights of all levels above the base [a length unit], one cell a level, above 0."
+)
+@xw.ret("raw")
+def ELF_MODE_SHAPE(mode: Any, h_x: Any, weights: Any, stiffnesses: Any, heights: Any) -> Any:
+    """Ordinate of a mode's shape at a level; the largest ordinate of the mode is 1. ASCE/SEI 7-16: 12.9.1.1; 7-22: 12.9.1.1. Partly from memory: confirm."""
+    return call("ELF_MODE_SHAPE", mode, h_x, weights, stiffnesses, heights)
+
+
+@xw.func(category="Storyledger: Modal response")
+@xw.arg("mode", "raw", doc="Number of the mode, whole, 1 for the longest period [no unit], at least 1.")
+@xw.arg(
+    "weights",
+    "raw",
+    doc="Effective seismic weights of all levels [a force unit], one cell a level, at least 0.",
+)
+@xw.arg(
+    "stiffnesses",
+    "raw",
+    doc="Stiffness of the story below each level [a stiffness unit], one cell a level, above 0.",
+)
+@xw.arg(
+    "heights", "raw", doc="Heights of all levels above the base [a length unit], one cell a level, above 0."
+)
+@xw.ret("raw")
+def ELF_MODE_PARTICIPATION(mode: Any, weights: Any, stiffnesses: Any, heights: Any) -> Any:
+    """Participation factor of a mode, for its shape with 1 as the largest ordinate. ASCE/SEI 7-16: 12.9.1.1; 7-22: 12.9.1.1. Partly from memory: confirm."""
+    return call("ELF_MODE_PARTICIPATION", mode, weights, stiffnesses, heights)
+
+
+@xw.func(category="Storyledger: Modal response")
+@xw.arg("mode", "raw", doc="Number of the mode, whole, 1 for the longest period [no unit], at least 1.")
+@xw.arg(
+    "weights",
+    "raw",
+    doc="Effective seismic weights of all levels [a force unit], one cell a level, at least 0.",
+)
+@xw.arg(
+    "stiffnesses",
+    "raw",
+    doc="Stiffness of the story below each level [a stiffness unit], one cell a level, above 0.",
+)
+@xw.arg(
+    "heights", "raw", doc="Heights of all levels above the base [a length unit], one cell a level, above 0."
+)
+@xw.ret("raw")
+def ELF_MODE_MASS(mode: Any, weights: Any, stiffnesses: Any, heights: Any) -> Any:
+    """Part of the total mass that moves in a mode (effective modal mass). ASCE/SEI 7-16: 12.9.1.1; 7-22: 12.9.1.1. Partly from memory: confirm."""
+    return call("ELF_MODE_MASS", mode, weights, stiffnesses, heights)
+
+
+@xw.func(category="Storyledger: Modal response")
+@xw.arg("modes", "raw", doc="How many modes, from the first on, whole [no unit], at least 1.")
+@xw.arg(
+    "weights",
+    "raw",
+    doc="Effective seismic weights of all levels [a force unit], one cell a level, at least 0.",
+)
+@xw.arg(
+    "stiffnesses",
+    "raw",
+    doc="Stiffness of the story below each level [a stiffness unit], one cell a level, above 0.",
+)
+@xw.arg(
+    "heights", "raw", doc="Heights of all levels above the base [a length unit], one cell a level, above 0."
+)
+@xw.ret("raw")
+def ELF_MODE_MASS_SUM(modes: Any, weights: Any, stiffnesses: Any, heights: Any) -> Any:
+    """Part of the total mass that moves in the first modes together. ASCE/SEI 7-16: 12.9.1.1; 7-22: 12.9.1.1. Partly from memory: confirm."""
+    return call("ELF_MODE_MASS_SUM", modes, weights, stiffnesses, heights)
+
+
+@xw.func(category="Storyledger: Modal response")
+@xw.arg("share", "raw", doc="Part of the mass, 0.9 for 90 % [no unit], above 0 and at most 1.")
+@xw.arg(
+    "weights",
+    "raw",
+    doc="Effective seismic weights of all levels [a force unit], one cell a level, at least 0.",
+)
+@xw.arg(
+    "stiffnesses",
+    "raw",
+    doc="Stiffness of the story below each level [a stiffness unit], one cell a level, above 0.",
+)
+@xw.arg(
+    "heights", "raw", doc="Heights of all levels above the base [a length unit], one cell a level, above 0."
+)
+@xw.ret("raw")
+def ELF_MODES_NEEDED(share: Any, weights: Any, stiffnesses: Any, heights: Any) -> Any:
+    """How many modes, from the first on, hold a given part of the mass. ASCE/SEI 7-16: 12.9.1.1; 7-22: 12.9.1.1. Partly from memory: confirm."""
+    return call("ELF_MODES_NEEDED", share, weights, stiffnesses, heights)
+
+
+@xw.func(category="Storyledger: Modal response")
+@xw.arg("modes", "raw", doc="How many modes, from the first on, whole [no unit], at least 1.")
+@xw.arg(
+    "weights",
+    "raw",
+    doc="Effective seismic weights of all levels [a force unit], one cell a level, at least 0.",
+)
+@xw.arg(
+    "stiffnesses",
+    "raw",
+    doc="Stiffness of the story below each level [a stiffness unit], one cell a level, above 0.",
+)
+@xw.arg(
+    "heights", "raw", doc="Heights of all levels above the base [a length unit], one cell a level, above 0."
+)
+@xw.arg("units", "raw", doc="Unit system: us (kip, ft, in) or si (kN, m, mm): us, si.")
+@xw.ret("raw")
+def ELF_MODES_STATUS(modes: Any, weights: Any, stiffnesses: Any, heights: Any, units: Any) -> Any:
+    """Whether the first modes hold enough of the mass, in words. ASCE/SEI 7-16: 12.9.1.1; 7-22: 12.9.1.1. Partly from memory: confirm."""
+    return call("ELF_MODES_STATUS", modes, weights, stiffnesses, heights, units)
+
+
+@xw.func(category="Storyledger: Modal response")
+@xw.arg("S_a", "raw", doc="Design spectral acceleration at the mode's period [g], above 0.")
+@xw.arg("R", "raw", doc="Response modification coefficient [no unit], at least 1.")
+@xw.arg("I_e", "raw", doc="Importance factor [no unit], at least 1.")
+@xw.ret("raw")
+def ELF_MODE_CS(S_a: Any, R: Any, I_e: Any) -> Any:
+    """Seismic response coefficient of a mode: the spectrum at its period over R/I_e. ASCE/SEI 7-16: 12.9.1.2; 7-22: 12.9.1.2. Partly from memory: confirm."""
+    return call("ELF_MODE_CS", S_a, R, I_e)
+
+
+@xw.func(category="Storyledger: Modal response")
+@xw.arg("mode", "raw", doc="Number of the mode, whole, 1 for the longest period [no unit], at least 1.")
+@xw.arg("w_x", "raw", doc="Effective seismic weight of level x [a force unit], at least 0.")
+@xw.arg("h_x", "raw", doc="Height of level x above the base [a length unit], above 0.")
+@xw.arg("C_sm", "raw", doc="Seismic response coefficient of the mode [no unit], above 0.")
+@xw.arg(
+    "weights",
+    "raw",
+    doc="Effective seismic weights of all levels [a force unit], one cell a level, at least 0.",
+)
+@xw.arg(
+    "stiffnesses",
+    "raw",
+    doc="Stiffness of the story below each level [a stiffness unit], one cell a level, above 0.",
+)
+@xw.arg(
+    "heights", "raw", doc="Heights of all levels above the base [a length unit], one cell a level, above 0."
+)
+@xw.ret("raw")
+def ELF_MODE_FORCE(
+    mode: Any, w_x: Any, h_x: Any, C_sm: Any, weights: Any, stiffnesses: Any, heights: Any
+) -> Any:
+    """Force at a level in a mode, with its sign. ASCE/SEI 7-16: 12.9.1.2; 7-22: 12.9.1.2. Partly from memory: confirm."""
+    return call("ELF_MODE_FORCE", mode, w_x, h_x, C_sm, weights, stiffnesses, heights)
+
+
+@xw.func(category="Storyledger: Modal response")
+@xw.arg("mode", "raw", doc="Number of the mode, whole, 1 for the longest period [no unit], at least 1.")
+@xw.arg("h_x", "raw", doc="Height of level x above the base, or 0 for the base [a length unit], at least 0.")
+@xw.arg("C_sm", "raw", doc="Seismic response coefficient of the mode [no unit], above 0.")
+@xw.arg(
+    "weights",
+    "raw",
+    doc="Effective seismic weights of all levels [a force unit], one cell a level, at least 0.",
+)
+@xw.arg(
+    "stiffnesses",
+    "raw",
+    doc="Stiffness of the story below each level [a stiffness unit], one cell a level, above 0.",
+)
+@xw.arg(
+    "heights", "raw", doc="Heights of all levels above the base [a length unit], one cell a level, above 0."
+)
+@xw.ret("raw")
+def ELF_MODE_SHEAR(mode: Any, h_x: Any, C_sm: Any, weights: Any, stiffnesses: Any, heights: Any) -> Any:
+    """Story shear below a level in a mode, with its sign; at height 0 the base shear of the mode. ASCE/SEI 7-16: 12.9.1.2; 7-22: 12.9.1.2. Partly from memory: confirm."""
+    return call("ELF_MODE_SHEAR", mode, h_x, C_sm, weights, stiffnesses, heights)
+
+
+@xw.func(category="Storyledger: Modal response")
+@xw.arg("mode", "raw", doc="Number of the mode, whole, 1 for the longest period [no unit], at least 1.")
+@xw.arg("h_x", "raw", doc="Height of level x above the base [a length unit], above 0.")
+@xw.arg("C_sm", "raw", doc="Seismic response coefficient of the mode [no unit], above 0.")
+@xw.arg(
+    "weights",
+    "raw",
+    doc="Effective seismic weights of all levels [a force unit], one cell a level, at least 0.",
+)
+@xw.arg(
+    "stiffnesses",
+    "raw",
+    doc="Stiffness of the story below each level [a stiffness unit], one cell a level, above 0.",
+)
+@xw.arg(
+    "heights", "raw", doc="Heights of all levels above the base [a length unit], one cell a level, above 0."
+)
+@xw.ret("raw")
+def ELF_MODE_DISPLACEMENT(
+    mode: Any, h_x: Any, C_sm: Any, weights: Any, stiffnesses: Any, heights: Any
+) -> Any:
+    """Elastic displacement of a level in a mode, with its sign. ASCE/SEI 7-16: 12.9.1.2; 7-22: 12.9.1.2. Partly from memory: confirm."""
+    return call("ELF_MODE_DISPLACEMENT", mode, h_x, C_sm, weights, stiffnesses, heights)
+
+
+@xw.func(category="Storyledger: Modal response")
+@xw.arg("mode", "raw", doc="Number of the mode, whole, 1 for the longest period [no unit], at least 1.")
+@xw.arg("h_x", "raw", doc="Height of level x above the base [a length unit], above 0.")
+@xw.arg("C_sm", "raw", doc="Seismic response coefficient of the mode [no unit], above 0.")
+@xw.arg(
+    "weights",
+    "raw",
+    doc="Effective seismic weights of all levels [a force unit], one cell a level, at least 0.",
+)
+@xw.arg(
+    "stiffnesses",
+    "raw",
+    doc="Stiffness of the story below each level [a stiffness unit], one cell a level, above 0.",
+)
+@xw.arg(
+    "heights", "raw", doc="Heights of all levels above the base [a length unit], one cell a level, above 0."
+)
+@xw.ret("raw")
+def ELF_MODE_DRIFT(mode: Any, h_x: Any, C_sm: Any, weights: Any, stiffnesses: Any, heights: Any) -> Any:
+    """Elastic drift of the story below a level in a mode, with its sign. ASCE/SEI 7-16: 12.9.1.2; 7-22: 12.9.1.2. Partly from memory: confirm."""
+    return call("ELF_MODE_DRIFT", mode, h_x, C_sm, weights, stiffnesses, heights)
+
+
+@xw.func(category="Storyledger: Modal response")
+@xw.arg(
+    "values", "raw", doc="Response in each mode, with its sign [any one unit], one cell a mode, any number."
+)
+@xw.ret("raw")
+def ELF_SRSS(values: Any) -> Any:
+    """Response combined over the modes: square root of the sum of the squares. ASCE/SEI 7-16: 12.9.1.3; 7-22: 12.9.1.3. Partly from memory: confirm."""
+    return call("ELF_SRSS", values)
+
+
+@xw.func(category="Storyledger: Modal response")
+@xw.arg(
+    "values", "raw", doc="Response in each mode, with its sign [any one unit], one cell a mode, any number."
+)
+@xw.ret("raw")
+def ELF_ABSSUM(values: Any) -> Any:
+    """Absolute sum of the responses in the modes, a bound on every combination. ASCE/SEI 7-16: 12.9.1.3; 7-22: 12.9.1.3. Partly from memory: confirm."""
+    return call("ELF_ABSSUM", values)
+
+
+@xw.func(category="Storyledger: Modal response")
+@xw.arg(
+    "values", "raw", doc="Response in each mode, with its sign [any one unit], one cell a mode, any number."
+)
+@xw.arg("periods", "raw", doc="Periods of the modes [s], one cell a mode, above 0.")
+@xw.arg("damping", "raw", doc="Damping ratio of the modes, 0.05 for 5 % [no unit], above 0 and at most 1.")
+@xw.ret("raw")
+def ELF_CQC(values: Any, periods: Any, damping: Any) -> Any:
+    """Response combined over the modes: complete quadratic combination, with signs and periods. ASCE/SEI 7-16: 12.9.1.3; 7-22: 12.9.1.3. Partly from memory: confirm."""
+    return call("ELF_CQC", values, periods, damping)
+
+
+@xw.func(category="Storyledger: Modal response")
+@xw.arg("T_i", "raw", doc="Period of one mode [s], above 0.")
+@xw.arg("T_j", "raw", doc="Period of the other mode [s], above 0.")
+@xw.arg("damping", "raw", doc="Damping ratio of the modes, 0.05 for 5 % [no unit], above 0 and at most 1.")
+@xw.ret("raw")
+def ELF_MODE_CORRELATION(T_i: Any, T_j: Any, damping: Any) -> Any:
+    """Correlation coefficient of two modes of equal damping, as the complete combination uses it. ASCE/SEI 7-16: 12.9.1.3; 7-22: 12.9.1.3. Partly from memory: confirm."""
+    return call("ELF_MODE_CORRELATION", T_i, T_j, damping)
+
+
+@xw.func(category="Storyledger: Modal response")
+@xw.arg("V", "raw", doc="Base shear of 12.8, its period at most C_u T_a [a force unit], above 0.")
+@xw.arg("V_t", "raw", doc="Combined base shear of the modes [a force unit], above 0.")
+@xw.ret("raw")
+def ELF_MODAL_SCALE(V: Any, V_t: Any) -> Any:
+    """Factor on combined forces: up to the equivalent lateral force base shear, at least 1. ASCE/SEI 7-16: 12.9.1.4.1; 7-22: 12.9.1.4.1. Partly from memory: confirm."""
+    return call("ELF_MODAL_SCALE", V, V_t)
+
+
+@xw.func(category="Storyledger: Modal response")
+@xw.arg("V_t", "raw", doc="Combined base shear of the modes [a force unit], above 0.")
+@xw.arg("W", "raw", doc="Effective seismic weight [a force unit], above 0.")
+@xw.arg("S_1", "raw", doc="Mapped MCE_R spectral acceleration at 1 s [g], at least 0.")
+@xw.arg("R", "raw", doc="Response modification coefficient [no unit], at least 1.")
+@xw.arg("I_e", "raw", doc="Importance factor [no unit], at least 1.")
+@xw.ret("raw")
+def ELF_MODAL_DRIFT_SCALE(V_t: Any, W: Any, S_1: Any, R: Any, I_e: Any) -> Any:
+    """Factor on combined drifts: up to the base shear by the minimum for S_1 ≥ 0.6, at least 1. ASCE/SEI 7-16: 12.9.1.4.2; 7-22: 12.9.1.4.2. Partly from memory: confirm."""
+    return call("ELF_MODAL_DRIFT_SCALE", V_t, W, S_1, R, I_e)

@@ -53,6 +53,7 @@ INSIDE = [(entry, a, number) for entry, a in NUMBERS for number in inside(a)]
 
 UNIT_WORDS = {
     "none": "-",
+    "any": "any unit",
     "time": "s",
     "acceleration": "g",
     "length": "ft or m",
@@ -61,6 +62,7 @@ UNIT_WORDS = {
     "unit load": "psf or kN/m2",
     "displacement": "in or mm",
     "force": "kip or kN",
+    "stiffness": "kip/in or kN/mm",
 }
 #: the formula is a ratio of lengths there: any unit serves, and the worksheet asks for the drift's
 OTHER_UNIT = {("ELF_DRIFT_LIMIT", "h_sx"): "ft or m"}
@@ -86,7 +88,7 @@ def test_example_reproduces_at_its_printed_digits(entry: SheetFunction) -> None:
 
 def test_numbers_outside_are_known_for_most_arguments() -> None:
     unbounded = {argument.name for _, argument in NUMBERS if not outside(argument)}
-    assert unbounded == {"forces", "values", "delta_xe", "d_upper", "d_lower"}
+    assert unbounded == {"forces", "displacements", "values", "delta_xe", "d_upper", "d_lower"}
 
 
 @pytest.mark.parametrize(("entry", "argument", "number"), OUTSIDE, ids=ident)

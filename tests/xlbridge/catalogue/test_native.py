@@ -20,7 +20,12 @@ from xlbridge.values import CellError, Scalar
 
 NATIVE = tuple(entry for entry in ENTRIES if entry.native)
 #: takes the value beside a height that has to be searched for: no one-cell formula is declared
-WITHOUT = {"ELF_BELOW"}
+WITHOUT = {"ELF_BELOW"} | {
+    # needs the levels in order, an eigenproblem, or a range beside itself turned
+    *("ELF_STORY_STIFFNESS", "ELF_CQC", "ELF_MODE_PERIOD", "ELF_MODE_SHAPE", "ELF_MODE_PARTICIPATION"),
+    *("ELF_MODE_MASS", "ELF_MODE_MASS_SUM", "ELF_MODES_NEEDED"),
+    *("ELF_MODE_FORCE", "ELF_MODE_SHEAR", "ELF_MODE_DISPLACEMENT", "ELF_MODE_DRIFT"),
+}
 COUNT, SEED = 320, 20260115
 Values = Mapping[tuple[str, str], Scalar]
 
