@@ -187,4 +187,4 @@ def level_weight(areas: ArrayLike, unit_loads: ArrayLike, units: str, equipment:
     loads = levels.counted("unit_loads", at_least(0, "unit_loads", unit_loads), "items")
     if items.shape != loads.shape:
         raise WrongType("unit_loads", f"{loads.size} items", f"must be one for each of {items.size} areas")
-    return area_weight(items, loads, units).sum() + at_least(0, "equipment", equipment)
+    return np.asarray(area_weight(items, loads, units).sum() + at_least(0, "equipment", equipment))

@@ -9,7 +9,14 @@ from tests.support.formulas import public_functions
 
 ROWS = rows()
 MISPRINTS = [(name, row) for name, row in ROWS if "misprint" in row]
-IN_WORDS = {"base_shear.governing_bound", "stability.stability_verdict", "diaphragm.design_force_bound"}
+IN_WORDS = {
+    "hazard.analysis_triggers",
+    *(f"occupancy.{name}" for name in ("category_short", "category_one_second", "short_table_alone")),
+    *(f"occupancy.{name}" for name in ("design_category", "design_category_reason", "category_A_permitted")),
+    "base_shear.governing_bound",
+    "stability.stability_verdict",
+    "diaphragm.design_force_bound",
+}
 
 
 @pytest.mark.parametrize("row", [row for _, row in ROWS], ids=[name for name, _ in ROWS])

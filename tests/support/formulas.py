@@ -32,6 +32,8 @@ DIAPHRAGM = {"w_px": 240.0, "h_x": 25.0, **LEVELS, "forces": FORCES["forces"]}
 MODEL = {**LEVELS, "stiffnesses": [90.0, 60.0, 40.0]}
 LIMITS = {"S_DS": 0.9, "I_e": 1.25}
 
+SPECTRUM = {"T_i": [0.0, 0.1, 0.3, 1.0, 2.0, 5.0, 10.0], "S_ai": [0.4, 1.1, 0.9, 0.5, 0.28, 0.1, 0.03]}
+
 #: dotted name below ``engine`` -> a valid call, no two arguments alike so that a swap shows
 CALLS: dict[str, dict[str, Any]] = {
     "weight.area_weight": {"area": 9600.0, "unit_load": 80.0, "units": "us"},
@@ -42,7 +44,44 @@ CALLS: dict[str, dict[str, Any]] = {
     "weight.level_weight": {
         **{"areas": [9600.0, 3300.0], "unit_loads": [80.0, 15.0], "units": "us", "equipment": 22.5}
     },
+    "hazard.site_coefficient_short": {"S_S": 0.6, "site_class": "D", "exception": "none"},
+    "hazard.site_coefficient_long": {"S_1": 0.35, "site_class": "D"},
+    "hazard.analysis_triggers": {
+        **{"S_S": 1.2, "S_1": 0.5, "site_class": "E", "isolated": "yes", "short_exception": "none"},
+        **{"long_exception": "exception 3: T at most T_S", "T": 0.4, "T_S": 0.9},
+    },
+    "hazard.coefficient_increase": {
+        **{"T": 0.7, "S_DS": 0.9, "S_D1": 0.45, "T_L": 6.0, "exception": "exception 2: C_s increased"}
+    },
+    "hazard.mce_parameter_short": {"S_S": 1.1, "F_a": 1.06},
+    "hazard.mce_parameter_one_second": {
+        **{"S_1": 0.4, "F_v": 1.9, "exception": "exception 2 of Supplement 3: S_M1 up 50 %"}
+    },
+    "hazard.design_parameter_short": {"S_MS": 1.2},
+    "hazard.design_parameter_one_second": {"S_M1": 0.8},
+    "hazard.mce_ordinate": {"S_a": 0.7},
+    "hazard.design_ordinate": {"S_aM": 0.7},
+    "hazard.multi_period_acceleration": {**{"T": 0.6, **SPECTRUM, "T_L": 6.0, "tail": "as printed"}},
+    "hazard.method_1_acceleration": {**{"T": 0.6, **SPECTRUM, "T_L": 6.0, "tail": "as printed"}},
+    "hazard.short_period_from_spectrum": SPECTRUM,
+    "hazard.one_second_from_spectrum": {
+        **{**SPECTRUM, "v_s": 1300.0, "units": "us", "edition": "7-22", "reading": "listed periods"}
+    },
+    "hazard.site_specific_minimum": {"S": 0.7, "S_mapped": 0.9},
     "occupancy.importance_factor": {"risk_category": "III"},
+    "occupancy.category_short": {"S_DS": 0.3, "risk_category": "III"},
+    "occupancy.category_one_second": {"S_D1": 0.15, "risk_category": "III"},
+    "occupancy.short_table_alone": {
+        **{"S_1": 0.3, "T_a_below": "yes", "T_drift_below": "yes", "plateau_used": "yes"},
+        "rigid_diaphragms": "yes",
+    },
+    "occupancy.design_category": {
+        **{"S_DS": 0.3, "S_D1": 0.15, "S_1": 0.1, "risk_category": "III", "alone": "no"}
+    },
+    "occupancy.design_category_reason": {
+        **{"S_DS": 0.3, "S_D1": 0.15, "S_1": 0.1, "risk_category": "III", "alone": "no"}
+    },
+    "occupancy.category_A_permitted": {"S_S": 0.12, "S_1": 0.03},
     "hazard.corner_period_T0": {"S_DS": 0.9, "S_D1": 0.45},
     "hazard.corner_period_TS": {"S_DS": 0.9, "S_D1": 0.45},
     "hazard.spectral_acceleration": {"T": 0.8, "S_DS": 0.9, "S_D1": 0.45, "T_L": 6.0},

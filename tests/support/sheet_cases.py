@@ -19,6 +19,8 @@ ENTRIES = tuple(CATALOGUE.values())
 PLACES = tuple((entry, argument) for entry in ENTRIES for argument in entry.arguments)
 #: a step across the end of a span, far below any value and far above round-off
 STEP = 1e-6
+#: the last columns in which the site coefficient tables print a value for class E
+E_PRINTED = {"S_S": 0.75, "S_1": 0.1}
 FAR = 1e6
 #: numbers of modes: whole, and at most as many as there are levels with weight
 ORDINALS = ("mode", "modes")
@@ -40,9 +42,10 @@ USUAL = {
 BRANCHES = {
     "T": (0.5, 0.5001, 2.5, 2.501, 8.0, 0.6),
     "T_L": (8.0, 0.6),
-    "S_1": (0.0, 0.6, 0.59999),
-    "S_D1": (0.1, 0.10005, 0.15, 0.15007, 0.2, 0.2001, 0.3, 0.29985, 0.4, 0.6),
-    "S_DS": (1.0, 0.05, 0.01 / 0.044),
+    "S_1": (0.0, 0.6, 0.59999, 0.04, 0.1, 0.2, 0.25, 0.75, 0.74999),
+    "S_S": (0.0, 0.15, 0.25, 0.3, 0.5, 0.6, 0.75, 0.8, 1.0, 1.1, 1.25, 1.4, 1.5),
+    "S_D1": (0.067, 0.133, 0.06699, 0.1, 0.10005, 0.15, 0.15007, 0.2, 0.2001, 0.3, 0.29985, 0.4, 0.6),
+    "S_DS": (0.167, 0.33, 0.5, 0.32999, 1.0, 0.05, 0.01 / 0.044),
     "p_f": (1.44, 2.16, 30.0, 45.0, 30.0001, 45.0001, 2.16001),
     "partitions": (0.48, 10.0, 0.0),
     "theta": (0.0, 0.1, 0.1 + 1e-9),
@@ -112,6 +115,9 @@ def placed(entry: SheetFunction, name: str, number: float) -> dict[str, Any]:
     """The example with one number changed, and with it what has to follow for the call to make sense."""
     call = full(entry)
     at = call["heights"].index(call["h_x"]) if {"heights", "h_x"} <= call.keys() else 0
+    if name == "T_i":
+        call[name][0 if number < 0.1 else -1] = number  # the spectrum keeps its reach
+        return call
     if isinstance(call[name], list):
         call[name][at - 1] = number  # never the level that is asked for
         return call
@@ -177,7 +183,15 @@ def random_levels(random: Random, most: int = 8) -> dict[str, list[float]]:
         "periods": [random.uniform(0.02, 12.0) for _ in rows],
         "areas": [random.uniform(0.0, 9000.0) for _ in rows],
         "unit_loads": [random.uniform(0.0, 250.0) for _ in rows],
+        **random_spectrum(random),
     }
+
+
+def random_spectrum(random: Random) -> dict[str, list[float]]:
+    """Pairs of a spectrum in any order, from 0 s to 10 s."""
+    periods = [0.0, 10.0, *random.sample((0.05, 0.1, 0.2, 0.3, 0.5, 1.0, 1.5, 2.0, 3.0, 5.0, 7.5), 6)]
+    random.shuffle(periods)
+    return {"T_i": periods, "S_ai": [random.uniform(0.02, 3.0) for _ in periods]}
 
 
 def random_number(argument: Argument, random: Random) -> float:
@@ -209,6 +223,9 @@ def _settle(call: dict[str, Any], levels: Mapping[str, list[float]], at: int, ra
         if name in call:
             count = len({h for h, w in zip(call["heights"], call["weights"], strict=True) if w > 0})
             call[name] = float(random.randint(1, count))
+    if call.get("site_class") == "E" and "isolated" not in call:
+        printed = call.get("exception", "none") != "none" and call.get("S_S", 0.0) >= 1.0
+        call |= {} if printed else {s: min(call[s], most) for s, most in E_PRINTED.items() if s in call}
     if {"d_max", "d_avg"} <= call.keys():
         call["d_max"] = call["d_avg"] * random.uniform(1.0, 2.5)
 

@@ -21,6 +21,8 @@ from xlbridge.values import OMITTED, CellError
 WITHOUT_NUMBER = {("ELF_CS", "edition"), ("ELF_CS_GOVERNS", "edition")}
 #: written in words, since they choose between branches, look up a table or search a column
 IN_WORDS = {
+    *("ELF_FA", "ELF_FV", "ELF_CS_INCREASE", "ELF_SA_MULTI", "ELF_SA_METHOD1"),
+    *("ELF_SDS_MULTI", "ELF_SD1_MULTI"),
     *("ELF_IE", "ELF_SA", "ELF_CU", "ELF_EXPONENT", "ELF_CS_CAP", "ELF_CS_MIN_S1", "ELF_BETA"),
     *("ELF_VX", "ELF_MX", "ELF_HSX", "ELF_BELOW", "ELF_PDELTA_FACTOR"),
     # sums along the chain of stories, or over all pairs of modes

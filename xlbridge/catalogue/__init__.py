@@ -17,7 +17,10 @@ from xlbridge.catalogue import (
     dynamics,
     ground_motion,
     modal_response,
+    multi_period,
+    occupancy,
     period,
+    site,
     stability,
     torsion,
     vertical,
@@ -28,7 +31,10 @@ from xlbridge.catalogue.validate import DeclarationError, validate
 
 _CONCEPTS = (
     weight,
+    site,
     ground_motion,
+    multi_period,
+    occupancy,
     period,
     base_shear,
     vertical,

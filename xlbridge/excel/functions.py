@@ -92,6 +92,108 @@ def ELF_LEVEL_WEIGHT(areas: Any, unit_loads: Any, units: Any, equipment: Any = O
 
 
 @xw.func(category="Storyledger: Ground motion")
+@xw.arg("S_S", "raw", doc="Mapped MCE_R spectral acceleration at short periods [g], at least 0.")
+@xw.arg("site_class", "raw", doc="Site class; F has no row: A, B, B not measured, C, D, D default, E.")
+@xw.arg("exception", "raw", doc="Exception of 11.4.8 used: none, exception 1: F_a of class C.")
+@xw.ret("raw")
+def ELF_FA(S_S: Any, site_class: Any, exception: Any) -> Any:
+    """Site coefficient at short periods, by class and mapped acceleration. ASCE/SEI 7-16: 11.4.4, Table 11.4-1. Partly from memory: confirm."""
+    return call("ELF_FA", S_S, site_class, exception)
+
+
+@xw.func(category="Storyledger: Ground motion")
+@xw.arg("S_1", "raw", doc="Mapped MCE_R spectral acceleration at 1 s [g], at least 0.")
+@xw.arg("site_class", "raw", doc="Site class; F has no row: A, B, B not measured, C, D, D default, E.")
+@xw.ret("raw")
+def ELF_FV(S_1: Any, site_class: Any) -> Any:
+    """Site coefficient at long periods, by class and mapped acceleration. ASCE/SEI 7-16: 11.4.4, Table 11.4-2."""
+    return call("ELF_FV", S_1, site_class)
+
+
+@xw.func(category="Storyledger: Ground motion")
+@xw.arg("S_S", "raw", doc="Mapped MCE_R spectral acceleration at short periods [g], at least 0.")
+@xw.arg("S_1", "raw", doc="Mapped MCE_R spectral acceleration at 1 s [g], at least 0.")
+@xw.arg("site_class", "raw", doc="Site class: A, B, B not measured, C, D, D default, E, F.")
+@xw.arg("isolated", "raw", doc="Isolated or with damping systems: yes, no.")
+@xw.arg("short_exception", "raw", doc="Exception of 11.4.8 used: none, exception 1: F_a of class C.")
+@xw.arg(
+    "long_exception",
+    "raw",
+    doc="Exception of 11.4.8 used: none, exception 2: C_s increased, exception 2 of Supplement 3: S_M1 up 50 %, exception 3: T at most T_S.",
+)
+@xw.arg("T", "raw", doc="Longest period used in design, either direction [s], above 0.")
+@xw.arg("T_S", "raw", doc="Period at which the plateau ends [s], above 0.")
+@xw.ret("raw")
+def ELF_SITE_TRIGGER(
+    S_S: Any,
+    S_1: Any,
+    site_class: Any,
+    isolated: Any,
+    short_exception: Any,
+    long_exception: Any,
+    T: Any,
+    T_S: Any,
+) -> Any:
+    """What still demands a site-specific analysis after the exceptions used, or none. ASCE/SEI 7-16: 11.4.8. Partly from memory: confirm."""
+    return call("ELF_SITE_TRIGGER", S_S, S_1, site_class, isolated, short_exception, long_exception, T, T_S)
+
+
+@xw.func(category="Storyledger: Ground motion")
+@xw.arg("S_S", "raw", doc="Mapped MCE_R spectral acceleration at short periods [g], at least 0.")
+@xw.arg("F_a", "raw", doc="Site coefficient at short periods [no unit], above 0.")
+@xw.ret("raw")
+def ELF_SMS(S_S: Any, F_a: Any) -> Any:
+    """MCE_R spectral acceleration at short periods for the site class. ASCE/SEI 7-16: 11.4.4, Eq. 11.4-1."""
+    return call("ELF_SMS", S_S, F_a)
+
+
+@xw.func(category="Storyledger: Ground motion")
+@xw.arg("S_1", "raw", doc="Mapped MCE_R spectral acceleration at 1 s [g], at least 0.")
+@xw.arg("F_v", "raw", doc="Site coefficient at long periods [no unit], above 0.")
+@xw.arg(
+    "exception",
+    "raw",
+    doc="Exception of 11.4.8 used: none, exception 2: C_s increased, exception 2 of Supplement 3: S_M1 up 50 %, exception 3: T at most T_S.",
+)
+@xw.ret("raw")
+def ELF_SM1(S_1: Any, F_v: Any, exception: Any) -> Any:
+    """MCE_R spectral acceleration at 1 s for the site class. ASCE/SEI 7-16: 11.4.4, Eq. 11.4-2."""
+    return call("ELF_SM1", S_1, F_v, exception)
+
+
+@xw.func(category="Storyledger: Ground motion")
+@xw.arg("S_MS", "raw", doc="MCE_R spectral acceleration at short periods [g], above 0.")
+@xw.ret("raw")
+def ELF_SDS(S_MS: Any) -> Any:
+    """Design spectral acceleration at short periods. ASCE/SEI 7-16: 11.4.5, Eq. 11.4-3; 7-22: 11.4.4, Eq. 11.4-1. Partly from memory: confirm."""
+    return call("ELF_SDS", S_MS)
+
+
+@xw.func(category="Storyledger: Ground motion")
+@xw.arg("S_M1", "raw", doc="MCE_R spectral acceleration at 1 s [g], above 0.")
+@xw.ret("raw")
+def ELF_SD1(S_M1: Any) -> Any:
+    """Design spectral acceleration at 1 s. ASCE/SEI 7-16: 11.4.5, Eq. 11.4-4; 7-22: 11.4.4, Eq. 11.4-2. Partly from memory: confirm."""
+    return call("ELF_SD1", S_M1)
+
+
+@xw.func(category="Storyledger: Ground motion")
+@xw.arg("T", "raw", doc="Fundamental period [s], above 0.")
+@xw.arg("S_DS", "raw", doc="Design spectral acceleration at short periods [g], above 0.")
+@xw.arg("S_D1", "raw", doc="Design spectral acceleration at 1 s [g], above 0.")
+@xw.arg("T_L", "raw", doc="Long-period transition period [s], above 0.")
+@xw.arg(
+    "exception",
+    "raw",
+    doc="Exception of 11.4.8 used: none, exception 2: C_s increased, exception 2 of Supplement 3: S_M1 up 50 %, exception 3: T at most T_S.",
+)
+@xw.ret("raw")
+def ELF_CS_INCREASE(T: Any, S_DS: Any, S_D1: Any, T_L: Any, exception: Any) -> Any:
+    """Factor on the upper bound of C_s where exception 2 is used as first printed; 1 otherwise. ASCE/SEI 7-16: 11.4.8, exception 2. Partly from memory: confirm."""
+    return call("ELF_CS_INCREASE", T, S_DS, S_D1, T_L, exception)
+
+
+@xw.func(category="Storyledger: Ground motion")
 @xw.arg("risk_category", "raw", doc="Risk category: I, II, III, IV.")
 @xw.ret("raw")
 def ELF_IE(risk_category: Any) -> Any:
@@ -126,6 +228,150 @@ def ELF_TS(S_DS: Any, S_D1: Any) -> Any:
 def ELF_SA(T: Any, S_DS: Any, S_D1: Any, T_L: Any) -> Any:
     """Design spectral acceleration of the two-period spectrum at a period. ASCE/SEI 7-16: 11.4.6, Eq. 11.4-5 to 11.4-7; 7-22: 11.4.5.2, Eq. 11.4-3 to 11.4-5. Partly from memory: confirm."""
     return call("ELF_SA", T, S_DS, S_D1, T_L)
+
+
+@xw.func(category="Storyledger: Ground motion")
+@xw.arg("T", "raw", doc="Period, 0 allowed [s], at least 0.")
+@xw.arg("T_i", "raw", doc="Periods of the spectrum [s], one cell a period, at least 0.")
+@xw.arg("S_ai", "raw", doc="Ordinates of the design spectrum [g], one cell a period, above 0.")
+@xw.arg("T_L", "raw", doc="Long-period transition period [s], above 0.")
+@xw.arg("tail", "raw", doc="Beyond 10 s where T_L is below 10 s: as printed, continuous at 10 s.")
+@xw.ret("raw")
+def ELF_SA_MULTI(T: Any, T_i: Any, S_ai: Any, T_L: Any, tail: Any) -> Any:
+    """Design spectral acceleration of the multi-period spectrum at a period. ASCE/SEI 7-22: 11.4.5.1. Partly from memory: confirm."""
+    return call("ELF_SA_MULTI", T, T_i, S_ai, T_L, tail)
+
+
+@xw.func(category="Storyledger: Ground motion")
+@xw.arg("T", "raw", doc="Period, 0 allowed [s], at least 0.")
+@xw.arg("T_i", "raw", doc="Periods of the spectrum [s], one cell a period, at least 0.")
+@xw.arg("S_ai", "raw", doc="Ordinates of the design spectrum [g], one cell a period, above 0.")
+@xw.arg("T_L", "raw", doc="Long-period transition period [s], above 0.")
+@xw.arg("tail", "raw", doc="Beyond 10 s where T_L is below 10 s: as printed, continuous at 10 s.")
+@xw.ret("raw")
+def ELF_SA_METHOD1(T: Any, T_i: Any, S_ai: Any, T_L: Any, tail: Any) -> Any:
+    """Ordinate of the multi-period spectrum for Method 1: left of the peak, the peak. ASCE/SEI 7-22: 12.8.1.1, Eq. 12.8-2. Partly from memory: confirm."""
+    return call("ELF_SA_METHOD1", T, T_i, S_ai, T_L, tail)
+
+
+@xw.func(category="Storyledger: Ground motion")
+@xw.arg("S_a", "raw", doc="Design spectral acceleration [g], at least 0.")
+@xw.ret("raw")
+def ELF_SAM(S_a: Any) -> Any:
+    """Ordinate or parameter of the MCE_R spectrum from that of the design spectrum. ASCE/SEI 7-16: 11.4.7; 7-22: 11.4.6. Partly from memory: confirm."""
+    return call("ELF_SAM", S_a)
+
+
+@xw.func(category="Storyledger: Ground motion")
+@xw.arg("S_aM", "raw", doc="MCE_R spectral acceleration [g], at least 0.")
+@xw.ret("raw")
+def ELF_SA_DESIGN(S_aM: Any) -> Any:
+    """Ordinate of the design spectrum from that of the MCE_R spectrum. ASCE/SEI 7-16: 21.3; 7-22: 11.4.5.1. Partly from memory: confirm."""
+    return call("ELF_SA_DESIGN", S_aM)
+
+
+@xw.func(category="Storyledger: Ground motion")
+@xw.arg("T_i", "raw", doc="Periods of the spectrum [s], one cell a period, at least 0.")
+@xw.arg("S_ai", "raw", doc="Ordinates of the design spectrum [g], one cell a period, above 0.")
+@xw.ret("raw")
+def ELF_SDS_MULTI(T_i: Any, S_ai: Any) -> Any:
+    """Design spectral acceleration at short periods, taken from a spectrum. ASCE/SEI 7-16: 21.4; 7-22: 21.4. Partly from memory: confirm."""
+    return call("ELF_SDS_MULTI", T_i, S_ai)
+
+
+@xw.func(category="Storyledger: Ground motion")
+@xw.arg("T_i", "raw", doc="Periods of the spectrum [s], one cell a period, at least 0.")
+@xw.arg("S_ai", "raw", doc="Ordinates of the design spectrum [g], one cell a period, above 0.")
+@xw.arg("v_s", "raw", doc="Average shear wave velocity of the site [a velocity unit], above 0.")
+@xw.arg("units", "raw", doc="Unit system: us (kip, ft, in) or si (kN, m, mm): us, si.")
+@xw.arg(
+    "edition",
+    "raw",
+    doc="Edition of ASCE/SEI 7, as text (in a cell: format the cell as Text, or it turns into a date): 7-16, 7-22.",
+)
+@xw.arg("reading", "raw", doc="Where T S_a is read: listed periods, every period.")
+@xw.ret("raw")
+def ELF_SD1_MULTI(T_i: Any, S_ai: Any, v_s: Any, units: Any, edition: Any, reading: Any) -> Any:
+    """Design spectral acceleration at 1 s, taken from a spectrum. ASCE/SEI 7-16: 21.4; 7-22: 21.4. Partly from memory: confirm."""
+    return call("ELF_SD1_MULTI", T_i, S_ai, v_s, units, edition, reading)
+
+
+@xw.func(category="Storyledger: Ground motion")
+@xw.arg("S", "raw", doc="Parameter from the site-specific spectrum [g], above 0.")
+@xw.arg("S_mapped", "raw", doc="The same parameter by the mapped procedure [g], above 0.")
+@xw.ret("raw")
+def ELF_SITE_FLOOR(S: Any, S_mapped: Any) -> Any:
+    """A parameter from a site-specific spectrum, at least 80 % of the mapped procedure's. ASCE/SEI 7-16: 21.4. Partly from memory: confirm."""
+    return call("ELF_SITE_FLOOR", S, S_mapped)
+
+
+@xw.func(category="Storyledger: Seismic design category")
+@xw.arg("S_DS", "raw", doc="Design spectral acceleration at short periods [g], above 0.")
+@xw.arg("risk_category", "raw", doc="Risk category: I, II, III, IV.")
+@xw.ret("raw")
+def ELF_SDC_SDS(S_DS: Any, risk_category: Any) -> Any:
+    """Seismic Design Category by the acceleration at short periods alone. ASCE/SEI 7-16: 11.6, Table 11.6-1; 7-22: 11.6, Table 11.6-1."""
+    return call("ELF_SDC_SDS", S_DS, risk_category)
+
+
+@xw.func(category="Storyledger: Seismic design category")
+@xw.arg("S_D1", "raw", doc="Design spectral acceleration at 1 s [g], above 0.")
+@xw.arg("risk_category", "raw", doc="Risk category: I, II, III, IV.")
+@xw.ret("raw")
+def ELF_SDC_SD1(S_D1: Any, risk_category: Any) -> Any:
+    """Seismic Design Category by the acceleration at 1 s alone. ASCE/SEI 7-16: 11.6, Table 11.6-2; 7-22: 11.6, Table 11.6-2."""
+    return call("ELF_SDC_SD1", S_D1, risk_category)
+
+
+@xw.func(category="Storyledger: Seismic design category")
+@xw.arg("S_1", "raw", doc="Mapped MCE_R spectral acceleration at 1 s [g], at least 0.")
+@xw.arg("T_a_below", "raw", doc="T_a below 0.8 T_S in both directions: yes, no.")
+@xw.arg("T_drift_below", "raw", doc="Period used for drift below T_S in both directions: yes, no.")
+@xw.arg("plateau_used", "raw", doc="C_s taken as S_DS/(R/I_e): yes, no.")
+@xw.arg(
+    "rigid_diaphragms",
+    "raw",
+    doc="Diaphragms rigid, or vertical elements at most 40 ft (12.2 m) apart: yes, no.",
+)
+@xw.ret("raw")
+def ELF_SDC_ALONE(
+    S_1: Any, T_a_below: Any, T_drift_below: Any, plateau_used: Any, rigid_diaphragms: Any
+) -> Any:
+    """Whether the table at short periods may decide alone on the Seismic Design Category. ASCE/SEI 7-16: 11.6; 7-22: 11.6. Partly from memory: confirm."""
+    return call("ELF_SDC_ALONE", S_1, T_a_below, T_drift_below, plateau_used, rigid_diaphragms)
+
+
+@xw.func(category="Storyledger: Seismic design category")
+@xw.arg("S_DS", "raw", doc="Design spectral acceleration at short periods [g], above 0.")
+@xw.arg("S_D1", "raw", doc="Design spectral acceleration at 1 s [g], above 0.")
+@xw.arg("S_1", "raw", doc="Mapped MCE_R spectral acceleration at 1 s [g], at least 0.")
+@xw.arg("risk_category", "raw", doc="Risk category: I, II, III, IV.")
+@xw.arg("alone", "raw", doc="Whether Table 11.6-1 decides alone; no if left out: yes, no.")
+@xw.ret("raw")
+def ELF_SDC(S_DS: Any, S_D1: Any, S_1: Any, risk_category: Any, alone: Any = OMITTED) -> Any:
+    """Seismic Design Category. ASCE/SEI 7-16: 11.6; 7-22: 11.6."""
+    return call("ELF_SDC", S_DS, S_D1, S_1, risk_category, alone)
+
+
+@xw.func(category="Storyledger: Seismic design category")
+@xw.arg("S_DS", "raw", doc="Design spectral acceleration at short periods [g], above 0.")
+@xw.arg("S_D1", "raw", doc="Design spectral acceleration at 1 s [g], above 0.")
+@xw.arg("S_1", "raw", doc="Mapped MCE_R spectral acceleration at 1 s [g], at least 0.")
+@xw.arg("risk_category", "raw", doc="Risk category: I, II, III, IV.")
+@xw.arg("alone", "raw", doc="Whether Table 11.6-1 decides alone; no if left out: yes, no.")
+@xw.ret("raw")
+def ELF_SDC_REASON(S_DS: Any, S_D1: Any, S_1: Any, risk_category: Any, alone: Any = OMITTED) -> Any:
+    """The rule or table that gives the Seismic Design Category. ASCE/SEI 7-16: 11.6; 7-22: 11.6."""
+    return call("ELF_SDC_REASON", S_DS, S_D1, S_1, risk_category, alone)
+
+
+@xw.func(category="Storyledger: Seismic design category")
+@xw.arg("S_S", "raw", doc="Mapped MCE_R spectral acceleration at short periods [g], at least 0.")
+@xw.arg("S_1", "raw", doc="Mapped MCE_R spectral acceleration at 1 s [g], at least 0.")
+@xw.ret("raw")
+def ELF_SDC_A_PERMITTED(S_S: Any, S_1: Any) -> Any:
+    """Whether Seismic Design Category A is permitted by the mapped accelerations alone. ASCE/SEI 7-16: 11.4.2. Partly from memory: confirm."""
+    return call("ELF_SDC_A_PERMITTED", S_S, S_1)
 
 
 @xw.func(category="Storyledger: Period")

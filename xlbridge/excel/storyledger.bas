@@ -51,6 +51,70 @@ failed:
     ELF_LEVEL_WEIGHT = CVErr(2015)
 End Function
 
+Public Function ELF_FA(S_S, site_class, exception)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_FA = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_FA", Array(Contents(S_S), Contents(site_class), Contents(exception)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_FA = CVErr(2015)
+End Function
+
+Public Function ELF_FV(S_1, site_class)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_FV = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_FV", Array(Contents(S_1), Contents(site_class)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_FV = CVErr(2015)
+End Function
+
+Public Function ELF_SITE_TRIGGER(S_S, S_1, site_class, isolated, short_exception, long_exception, T, T_S)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_SITE_TRIGGER = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_SITE_TRIGGER", Array(Contents(S_S), Contents(S_1), Contents(site_class), Contents(isolated), Contents(short_exception), Contents(long_exception), Contents(T), Contents(T_S)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_SITE_TRIGGER = CVErr(2015)
+End Function
+
+Public Function ELF_SMS(S_S, F_a)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_SMS = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_SMS", Array(Contents(S_S), Contents(F_a)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_SMS = CVErr(2015)
+End Function
+
+Public Function ELF_SM1(S_1, F_v, exception)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_SM1 = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_SM1", Array(Contents(S_1), Contents(F_v), Contents(exception)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_SM1 = CVErr(2015)
+End Function
+
+Public Function ELF_SDS(S_MS)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_SDS = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_SDS", Array(Contents(S_MS)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_SDS = CVErr(2015)
+End Function
+
+Public Function ELF_SD1(S_M1)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_SD1 = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_SD1", Array(Contents(S_M1)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_SD1 = CVErr(2015)
+End Function
+
+Public Function ELF_CS_INCREASE(T, S_DS, S_D1, T_L, exception)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_CS_INCREASE = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_CS_INCREASE", Array(Contents(T), Contents(S_DS), Contents(S_D1), Contents(T_L), Contents(exception)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_CS_INCREASE = CVErr(2015)
+End Function
+
 Public Function ELF_IE(risk_category)
     If TypeOf Application.Caller Is Range Then On Error GoTo failed
     ELF_IE = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_IE", Array(Contents(risk_category)), ThisWorkbook, Application.Caller))
@@ -81,6 +145,110 @@ Public Function ELF_SA(T, S_DS, S_D1, T_L)
     Exit Function
 failed:
     ELF_SA = CVErr(2015)
+End Function
+
+Public Function ELF_SA_MULTI(T, T_i, S_ai, T_L, tail)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_SA_MULTI = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_SA_MULTI", Array(Contents(T), Contents(T_i), Contents(S_ai), Contents(T_L), Contents(tail)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_SA_MULTI = CVErr(2015)
+End Function
+
+Public Function ELF_SA_METHOD1(T, T_i, S_ai, T_L, tail)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_SA_METHOD1 = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_SA_METHOD1", Array(Contents(T), Contents(T_i), Contents(S_ai), Contents(T_L), Contents(tail)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_SA_METHOD1 = CVErr(2015)
+End Function
+
+Public Function ELF_SAM(S_a)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_SAM = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_SAM", Array(Contents(S_a)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_SAM = CVErr(2015)
+End Function
+
+Public Function ELF_SA_DESIGN(S_aM)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_SA_DESIGN = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_SA_DESIGN", Array(Contents(S_aM)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_SA_DESIGN = CVErr(2015)
+End Function
+
+Public Function ELF_SDS_MULTI(T_i, S_ai)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_SDS_MULTI = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_SDS_MULTI", Array(Contents(T_i), Contents(S_ai)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_SDS_MULTI = CVErr(2015)
+End Function
+
+Public Function ELF_SD1_MULTI(T_i, S_ai, v_s, units, edition, reading)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_SD1_MULTI = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_SD1_MULTI", Array(Contents(T_i), Contents(S_ai), Contents(v_s), Contents(units), Contents(edition), Contents(reading)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_SD1_MULTI = CVErr(2015)
+End Function
+
+Public Function ELF_SITE_FLOOR(S, S_mapped)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_SITE_FLOOR = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_SITE_FLOOR", Array(Contents(S), Contents(S_mapped)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_SITE_FLOOR = CVErr(2015)
+End Function
+
+Public Function ELF_SDC_SDS(S_DS, risk_category)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_SDC_SDS = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_SDC_SDS", Array(Contents(S_DS), Contents(risk_category)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_SDC_SDS = CVErr(2015)
+End Function
+
+Public Function ELF_SDC_SD1(S_D1, risk_category)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_SDC_SD1 = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_SDC_SD1", Array(Contents(S_D1), Contents(risk_category)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_SDC_SD1 = CVErr(2015)
+End Function
+
+Public Function ELF_SDC_ALONE(S_1, T_a_below, T_drift_below, plateau_used, rigid_diaphragms)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_SDC_ALONE = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_SDC_ALONE", Array(Contents(S_1), Contents(T_a_below), Contents(T_drift_below), Contents(plateau_used), Contents(rigid_diaphragms)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_SDC_ALONE = CVErr(2015)
+End Function
+
+Public Function ELF_SDC(S_DS, S_D1, S_1, risk_category, Optional alone)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_SDC = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_SDC", Array(Contents(S_DS), Contents(S_D1), Contents(S_1), Contents(risk_category), Contents(alone)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_SDC = CVErr(2015)
+End Function
+
+Public Function ELF_SDC_REASON(S_DS, S_D1, S_1, risk_category, Optional alone)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_SDC_REASON = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_SDC_REASON", Array(Contents(S_DS), Contents(S_D1), Contents(S_1), Contents(risk_category), Contents(alone)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_SDC_REASON = CVErr(2015)
+End Function
+
+Public Function ELF_SDC_A_PERMITTED(S_S, S_1)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_SDC_A_PERMITTED = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_SDC_A_PERMITTED", Array(Contents(S_S), Contents(S_1)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_SDC_A_PERMITTED = CVErr(2015)
 End Function
 
 Public Function ELF_TA(h_n, system, units)

@@ -19,8 +19,8 @@ from xlbridge.headless.evaluate import Evaluator
 from xlbridge.values import CellError, Scalar
 
 NATIVE = tuple(entry for entry in ENTRIES if entry.native)
-#: takes the value beside a height that has to be searched for: no one-cell formula is declared
-WITHOUT = {"ELF_BELOW"} | {
+#: a search beside a height, or along the lines between periods: no one-cell formula is declared
+WITHOUT = {"ELF_BELOW", "ELF_SD1_MULTI"} | {
     # needs the levels in order, an eigenproblem, or a range beside itself turned
     *("ELF_STORY_STIFFNESS", "ELF_CQC", "ELF_MODE_PERIOD", "ELF_MODE_SHAPE", "ELF_MODE_PARTICIPATION"),
     *("ELF_MODE_MASS", "ELF_MODE_MASS_SUM", "ELF_MODES_NEEDED"),

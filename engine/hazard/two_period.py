@@ -1,4 +1,4 @@
-"""Two-period design response spectrum (11.4), without site coefficients and the multi-period spectrum."""
+"""Two-period design response spectrum (11.4): corner periods and ordinates."""
 
 from __future__ import annotations
 
