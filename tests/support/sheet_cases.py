@@ -115,7 +115,7 @@ def placed(entry: SheetFunction, name: str, number: float) -> dict[str, Any]:
     """The example with one number changed, and with it what has to follow for the call to make sense."""
     call = full(entry)
     at = call["heights"].index(call["h_x"]) if {"heights", "h_x"} <= call.keys() else 0
-    if name == "T_i":
+    if name == "T_i" and isinstance(call[name], list):
         call[name][0 if number < 0.1 else -1] = number  # the spectrum keeps its reach
         return call
     if isinstance(call[name], list):
