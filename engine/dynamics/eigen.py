@@ -12,7 +12,7 @@ of their sorted levels, so that a building is solved once and not once a cell.
 
 from __future__ import annotations
 
-from dataclasses import dataclass
+from dataclasses import dataclass, fields
 from functools import lru_cache
 from typing import Final
 
@@ -20,7 +20,7 @@ import numpy as np
 from numpy.typing import ArrayLike, NDArray
 
 from engine import levels
-from engine.dynamics.chain import chained, checked_stiffnesses, flexibilities, from_the_top, pick, place_of
+from engine.dynamics.chain import chained, checked_stiffnesses, flexibilities, pick, place_of
 from engine.errors import ImpossibleValue, NotApplicable
 from engine.require import Array, at_least
 
@@ -49,6 +49,11 @@ class Modes:
     participation: Array
     share: Array
     count: NDArray[np.intp]
+
+    def __post_init__(self) -> None:
+        """Close the arrays to writing: they are handed out again."""
+        for field in fields(self):
+            getattr(self, field.name).setflags(write=False)
 
     def number(self, name: str, mode: ArrayLike) -> NDArray[np.intp]:
         """Return the index of a mode; refuse what is no number of a mode of the building."""
@@ -94,8 +99,9 @@ def _solved(shape: tuple[int, ...], heights: bytes, weights: bytes, flexibility:
     participation = np.divide(excitation, inertia, out=np.zeros_like(inertia), where=exists)
     share = participation * excitation / levels.total(w)[..., None]
     _refuse_lost(share)
-    shear = from_the_top(np.swapaxes(w[..., None] * phi * participation[..., None, :], -1, -2))
-    return Modes(h, f, period**2, phi, np.swapaxes(shear, -1, -2), participation, share, exists.sum(axis=-1))
+    force = w[..., None] * phi * participation[..., None, :]
+    shear = np.cumsum(force[..., ::-1, :], axis=-2)[..., ::-1, :]
+    return Modes(h, f, period**2, phi, shear, participation, share, np.asarray(exists.sum(axis=-1)))
 
 
 def _decomposed(w: Array, f: Array) -> tuple[Array, Array]:
