@@ -45,7 +45,7 @@ def horizontal_effect(rho: ArrayLike, Q_E: ArrayLike) -> Result:
 
 
 @formula
-def vertical_effect(S_DS: ArrayLike, D: ArrayLike, case: str) -> Result:
+def vertical_effect(S_DS: ArrayLike, D: ArrayLike, taken: str) -> Result:
     """Vertical seismic load effect.
 
     E_v = 0.2 S_DS D; 0 in the two cases of the clause
@@ -53,22 +53,22 @@ def vertical_effect(S_DS: ArrayLike, D: ArrayLike, case: str) -> Result:
     Parameters
         S_DS: design spectral acceleration at short periods, or its value capped by 12.8.1.3 [g], above 0
         D: effect of dead load [kip or kN, or any unit of an effect], signed
-        case: one of VERTICAL_CASES
+        taken: one of VERTICAL_CASES
     Returns
         E_v [the unit of D], signed, the broadcast shape
     Raises
-        ImpossibleValue: S_DS at or below 0. NotApplicable: another case
+        ImpossibleValue: S_DS at or below 0. NotApplicable: another word
     Notes
         The case of the foundation-soil interface is for the combination with 0.9 D or 0.6 D alone.
     Example
-        >>> print(vertical_effect(S_DS=1.0, D=120, case="counted"))
+        >>> print(vertical_effect(S_DS=1.0, D=120, taken="counted"))
         24.0
 
     Reference
         rule E_v: 7-16 12.4.2.2, Eq. 12.4-4a; 7-22 12.4.2.2, Eq. 12.4-4a
     """
     effect = 0.2 * above(0, "S_DS", S_DS) * finite("D", D)
-    return effect if choice("case", case, VERTICAL_CASES) == VERTICAL_CASES[0] else np.zeros_like(effect)
+    return effect if choice("taken", taken, VERTICAL_CASES) == VERTICAL_CASES[0] else np.zeros_like(effect)
 
 
 @formula

@@ -20,15 +20,15 @@ CONFIGURATIONS: Final = (
 )
 #: the uses in which rho is 1.0, after the one in which it counts
 USES: Final = (
-    "strength of the force-resisting system",
-    "transfer forces in diaphragms",
+    "strength",
+    "transfer forces",
     "drift and P-delta",
     "inertial diaphragm forces",
-    "collectors and others under overstrength",
+    "overstrength",
     "nonstructural components",
-    "nonbuilding structures unlike buildings",
-    "walls out of plane and their anchorage",
-    "structures with damping systems",
+    "nonbuilding structures",
+    "walls out of plane",
+    "damped structures",
 )
 RHO_COUNTS: Final = USES[:2]
 #: part of the base shear above which a story counts for the two conditions
@@ -120,7 +120,7 @@ def redundancy_in_use(use: str, rho: ArrayLike) -> Result:
     Raises
         ImpossibleValue: rho outside its range. NotApplicable: another use
     Notes
-        That transfer forces take rho is from memory.
+        Nonbuilding structures are those unlike buildings. That transfer forces take rho is from memory.
     Example
         >>> print(redundancy_in_use(use="drift and P-delta", rho=1.3))
         1.0

@@ -125,13 +125,13 @@ def geometric_irregularity(h_x: ArrayLike, dimensions: ArrayLike, heights: Array
         NotApplicable: h_x is not a level, or unknown edition
     Example
         >>> geometric_irregularity(h_x=12, dimensions=[80, 60], heights=[12, 24], edition="7-22")
-        'Type 2, vertical geometric'
+        'Type 2, geometric'
 
     Reference
         rule geometric: 7-16 12.3.2.2, Table 12.3-2; 7-22 12.3.2.2, Table 12.3-2
     """
     ratio = dimension_ratio(h_x, dimensions, heights)
-    return worded((NONE, named("vertical geometric", edition)), exceeds(ratio, DIMENSION_LIMIT))
+    return worded((NONE, named("geometric", edition)), exceeds(ratio, DIMENSION_LIMIT))
 
 
 @formula

@@ -11,6 +11,7 @@ from engine.torsion.moments import (
 from engine.torsion.ratios import (
     EXTREME_RATIO,
     IRREGULAR_RATIO,
+    TORSIONAL_CATEGORIES,
     amplification,
     applied_amplification,
     irregularity_ratio,
@@ -21,6 +22,7 @@ __all__ = [
     "EXTREME_RATIO",
     "IRREGULAR_RATIO",
     "SCOPES",
+    "TORSIONAL_CATEGORIES",
     "accidental_eccentricity",
     "accidental_moment",
     "accidental_scope",

@@ -4,6 +4,7 @@ from __future__ import annotations
 
 from engine.editions import EDITIONS
 from engine.occupancy import DESIGN_CATEGORIES, RISK_CATEGORIES
+from engine.require import YES_NO
 from engine.units import SYSTEMS
 from xlbridge.catalogue.entry import NOT_NEGATIVE, POSITIVE, Argument, Kind, Span
 
@@ -14,6 +15,9 @@ S_D1 = Argument("S_D1", "acceleration", "Design spectral acceleration at 1 s", P
 S_1 = Argument("S_1", "acceleration", "Mapped MCE_R spectral acceleration at 1 s", NOT_NEGATIVE)
 R = Argument("R", "none", "Response modification coefficient", Span(1))
 C_d = Argument("C_d", "none", "Deflection amplification factor", Span(1))
+Omega_0 = Argument("Omega_0", "none", "Overstrength factor", Span(1))
+rho = Argument("rho", "none", "Redundancy factor", Span(1, 1.3))
+TIR = Argument("TIR", "none", "Torsional irregularity ratio", Span(1))
 I_e = Argument("I_e", "none", "Importance factor", Span(1))
 k = Argument("k", "none", "Distribution exponent", Span(1, 2))
 h_x = Argument("h_x", "length", "Height of level x above the base", POSITIVE)
@@ -38,3 +42,8 @@ units = Argument(
 )
 risk_category = Argument("risk_category", "text", "Risk category", kind=Kind.CHOICE, choices=RISK_CATEGORIES)
 SDC = Argument("SDC", "text", "Seismic Design Category", kind=Kind.CHOICE, choices=DESIGN_CATEGORIES)
+
+
+def question(name: str, text: str) -> Argument:
+    """Return an argument that the engineer answers with yes or no."""
+    return Argument(name, "text", text, kind=Kind.CHOICE, choices=YES_NO)

@@ -4,8 +4,9 @@ from __future__ import annotations
 
 from engine import drift
 from engine.occupancy import RISK_CATEGORIES
+from engine.require import YES_NO
 from engine.tables import table
-from xlbridge.catalogue.common import C_d, I_e, h_sx, risk_category
+from xlbridge.catalogue.common import SDC, TIR, C_d, I_e, h_sx, risk_category
 from xlbridge.catalogue.entry import Argument, Example, Kind, Result, SheetFunction, Span, Term
 
 
@@ -85,5 +86,33 @@ FUNCTIONS = (
         native=_limit_native(),
         example=Example({"h_sx": 144.0, "structure": "all other", "risk_category": "II"}, "2.88"),
         terms=(Term("ratio", "ratio", _ratio),),
+    ),
+    SheetFunction(
+        name="ELF_DRIFT_EDGES",
+        summary="Whether the design story drift is taken along the edges: yes or no.",
+        category="Drift",
+        rule="edge_drift",
+        arguments=(TIR, SDC),
+        result=Result("edges", "text", "yes or no"),
+        function=drift.edges_due,
+        expression="{TIR} > 1.2 and Seismic Design Category {SDC} is C to F",
+        example=Example({"TIR": 1.3, "SDC": "D"}, "yes"),
+    ),
+    SheetFunction(
+        name="ELF_DRIFT_CHECKED",
+        summary="Design story drift that is compared with the allowable one: along the edges where due.",
+        category="Drift",
+        rule="edge_drift",
+        arguments=(
+            Argument("Delta", "displacement", "Design story drift between the centres of mass"),
+            Argument("Delta_1", "displacement", "Design story drift along one edge"),
+            Argument("Delta_2", "displacement", "Design story drift along the opposite edge"),
+            Argument("edges", "text", "Along the edges", kind=Kind.CHOICE, choices=YES_NO),
+        ),
+        result=Result("Delta", "displacement", "drift to check, a magnitude"),
+        function=drift.drift_to_check,
+        expression="max(|{Delta_1}|; |{Delta_2}|) along the edges ({edges}), else |{Delta}|",
+        native='IF({edges}="yes",MAX(ABS({Delta_1}),ABS({Delta_2})),ABS({Delta}))',
+        example=Example({"Delta": 1.0, "Delta_1": 1.4, "Delta_2": 0.6, "edges": "yes"}, "1.4"),
     ),
 )

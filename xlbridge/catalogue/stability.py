@@ -6,7 +6,7 @@ from dataclasses import replace
 
 from engine import stability
 from engine.editions import value
-from xlbridge.catalogue.common import C_d, I_e, edition, h_sx
+from xlbridge.catalogue.common import C_d, I_e, Omega_0, edition, h_sx
 from xlbridge.catalogue.entry import (
     NOT_NEGATIVE,
     POSITIVE,
@@ -19,7 +19,6 @@ from xlbridge.catalogue.entry import (
 )
 
 beta = Argument("beta", "none", "Shear demand over shear capacity of the story", Span(0, 1, low_open=True))
-Omega_0 = Argument("Omega_0", "none", "Overstrength factor", Span(1))
 
 
 def _floor(edition: str) -> float:
