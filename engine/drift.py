@@ -131,13 +131,13 @@ def edges_due(TIR: ArrayLike, SDC: str) -> Words:
 
 
 @formula
-def drift_to_check(Delta: ArrayLike, Delta_1: ArrayLike, Delta_2: ArrayLike, edges: str) -> Result:
+def drift_to_check(Delta_cm: ArrayLike, Delta_1: ArrayLike, Delta_2: ArrayLike, edges: str) -> Result:
     """Design story drift that is compared with the allowable one.
 
-    max(|Delta_1|, |Delta_2|) along the edges where they are due; else |Delta| at the centres of mass
+    max(|Delta_1|, |Delta_2|) along the edges where they are due; else |Delta_cm| at the centres of mass
 
     Parameters
-        Delta: design story drift between the centres of mass [in or mm], signed; any shape
+        Delta_cm: design story drift between the centres of mass [in or mm], signed; any shape
         Delta_1: design story drift along one edge, points above each other [in or mm], signed
         Delta_2: design story drift along the opposite edge [in or mm], signed
         edges: "yes" where a torsional irregularity exists in Seismic Design Category C to F, or "no"
@@ -146,13 +146,13 @@ def drift_to_check(Delta: ArrayLike, Delta_1: ArrayLike, Delta_2: ArrayLike, edg
     Raises
         ImpossibleValue: a number that is not finite. NotApplicable: another word
     Example
-        >>> given = {"Delta": 1.0, "Delta_1": 1.4, "Delta_2": 0.6}
+        >>> given = {"Delta_cm": 1.0, "Delta_1": 1.4, "Delta_2": 0.6}
         >>> print(drift_to_check(**given, edges="yes"), drift_to_check(**given, edges="no"))
         1.4 1.0
 
     Reference
         rule edge_drift: 7-16 12.8.6; 7-22 12.8.6
     """
-    center = np.abs(finite("Delta", Delta))
+    center = np.abs(finite("Delta_cm", Delta_cm))
     one, other = np.abs(finite("Delta_1", Delta_1)), np.abs(finite("Delta_2", Delta_2))
     return np.where(yes("edges", edges), np.maximum(one, other), center)

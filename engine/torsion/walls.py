@@ -10,7 +10,7 @@ from numpy.typing import ArrayLike
 
 from engine import levels
 from engine.errors import WrongType
-from engine.require import Array, Result, above, finite, formula
+from engine.require import Array, Result, above, at_least, finite, formula
 
 
 @formula
@@ -68,13 +68,13 @@ def direct_shear(V: ArrayLike, R_i: ArrayLike, rigidities: ArrayLike) -> Result:
     V_i = V R_i/sum(R_i)
 
     Parameters
-        V: story shear of the direction [kip or kN], signed; any shape
+        V: story shear of the direction [kip or kN], at least 0; any shape
         R_i: relative rigidity of the wall [-], above 0; broadcast with V
         rigidities: relative rigidities of all walls of the direction [-], above 0; 1 to 1,000
     Returns
         V_i [kip or kN], the broadcast shape
     Raises
-        ImpossibleValue: a rigidity at or below 0
+        ImpossibleValue: a rigidity at or below 0, or V below 0
     Example
         >>> print(direct_shear(V=100, R_i=4.5, rigidities=[4.5, 5.5]))
         45.0
@@ -83,7 +83,7 @@ def direct_shear(V: ArrayLike, R_i: ArrayLike, rigidities: ArrayLike) -> Result:
         rule wall_shares: 7-16 12.8.4; 7-22 12.8.4
     """
     total = levels.total(_rigidities(rigidities))
-    return finite("V", V) * above(0, "R_i", R_i) / total
+    return at_least(0, "V", V) * above(0, "R_i", R_i) / total
 
 
 @formula

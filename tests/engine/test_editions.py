@@ -13,8 +13,18 @@ from tests.support.formulas import function, public_functions
 
 REFERENCE = re.compile(r"rule (\w+): 7-16 (.+?); 7-22 (.+)")
 ONLY_IN = {
-    "7-16": {"F_a", "F_v", "S_MS", "S_M1", "hazard_analysis", "C_s_increase", "S_floor", "SDC_A"},
-    "7-22": {"C_s_method1", "S_a_multi"},
+    "7-16": {
+        "weight_irregularity",
+        "F_a",
+        "F_v",
+        "S_MS",
+        "S_M1",
+        "hazard_analysis",
+        "C_s_increase",
+        "S_floor",
+        "SDC_A",
+    },
+    "7-22": {"C_s_diaph", "C_s_method1", "S_a_multi"},
 }
 
 

@@ -37,6 +37,7 @@ USUAL = {
     "displacement": (0.01, 200.0),
     "force": (0.5, 50_000.0),
     "stiffness": (5.0, 5000.0),
+    "moment": (1.0, 90_000.0),
 }
 #: values at which a rule changes its branch, and printed rows of tables
 BRANCHES = {
@@ -49,7 +50,11 @@ BRANCHES = {
     "p_f": (1.44, 2.16, 30.0, 45.0, 30.0001, 45.0001, 2.16001),
     "partitions": (0.48, 10.0, 0.0),
     "theta": (0.0, 0.1, 0.1 + 1e-9),
-    "Omega_0": (1.0, 1.25),
+    "Omega_0": (1.0, 1.25, 2.5, 2.4999),
+    "N": (5.0, 6.0),
+    "TIR": (1.2, 1.4, 1.2 + 1e-9, 1.4 + 1e-9),
+    "TIR_X": (1.4, 1.4 + 1e-9),
+    "TIR_Y": (1.4, 1.4 + 1e-9),
 }
 
 
@@ -122,8 +127,10 @@ def placed(entry: SheetFunction, name: str, number: float) -> dict[str, Any]:
         call[name][at - 1] = number  # never the level that is asked for
         return call
     call[name] = number
-    if number > 0 and name == "h_x":
+    if number > 0 and name == "h_x" and "heights" in call:
         call["heights"][at] = number
+    if number > 0 and {"h_x", "h_n"} <= call.keys():
+        call["h_n"], call["h_x"] = max(call["h_x"], call["h_n"]), min(call["h_x"], call["h_n"])
     if number >= 0 and name in ("w_x", "w_px"):
         call["weights"][at] = number
     if number > 0 and name in ("d_max", "d_avg"):
@@ -173,6 +180,7 @@ def random_levels(random: Random, most: int = 8) -> dict[str, list[float]]:
     values = {height: random.uniform(-9.0, 9.0) for height in heights}
     stiffnesses = {height: random.uniform(5.0, 5000.0) for height in heights}
     power = random.uniform(0.5, 2.0)
+    by_story = {height: random.uniform(0.2, 1.0) for height in heights}
     return {
         "heights": [height for height, _, _ in rows],
         "weights": [weight for _, weight, _ in rows],
@@ -181,6 +189,18 @@ def random_levels(random: Random, most: int = 8) -> dict[str, list[float]]:
         "stiffnesses": [stiffnesses[height] for height, _, _ in rows],
         "displacements": [height**power / 100 for height, _, _ in rows],
         "periods": [random.uniform(0.02, 12.0) for _ in rows],
+        "wall_areas": [random.uniform(2.0, 90.0) for _ in rows],
+        "wall_lengths": [random.uniform(3.0, 90.0) for _ in rows],
+        "coefficients": [random.uniform(1.0, 6.0) for _ in rows],
+        "R_systems": [random.choice((3.0, 5.0, 6.5, random.uniform(1.0, 8.0))) for _ in rows],
+        "strengths": [500 * by_story[height] for height, _, _ in rows],
+        "dimensions": [90 * by_story[height] for height, _, _ in rows],
+        "drift_ratios": [0.02 * by_story[height] for height, _, _ in rows],
+        "amplifications": [random.choice((1.0, 3.0, random.uniform(1.0, 3.0))) for _ in rows],
+        "centers": [random.uniform(1000.0, 2000.0) for _ in rows],
+        "rigidities": [random.uniform(0.5, 9.0) for _ in rows],
+        "positions": [random.uniform(0.0, 200.0) for _ in rows],
+        "distances": [random.uniform(-90.0, 90.0) for _ in rows],
         "areas": [random.uniform(0.0, 9000.0) for _ in rows],
         "unit_loads": [random.uniform(0.0, 250.0) for _ in rows],
         **random_spectrum(random),
@@ -201,7 +221,7 @@ def random_number(argument: Argument, random: Random) -> float:
     low = usual[0] if span.low is None else max(span.low, usual[0])
     high = usual[1] if span.high is None else span.high
     if argument.name == "N":
-        return float(random.randint(int(low), int(high)))
+        return float(random.randint(int(low), 14 if span.high is None else int(span.high)))
     edges = [number for number in BRANCHES.get(argument.name, ()) if number in span]
     if edges and random.random() < 0.3:
         return random.choice(edges)
@@ -226,6 +246,10 @@ def _settle(call: dict[str, Any], levels: Mapping[str, list[float]], at: int, ra
     if call.get("site_class") == "E" and "isolated" not in call:
         printed = call.get("exception", "none") != "none" and call.get("S_S", 0.0) >= 1.0
         call |= {} if printed else {s: min(call[s], most) for s, most in E_PRINTED.items() if s in call}
+    if {"h_x", "h_n"} <= call.keys():
+        call["h_x"] = call["h_n"] * random.choice((0.0, 0.8, 1.0, random.random()))
+    if {"h_n", "C_w", "units"} <= call.keys() and call["units"] == "si":
+        call["h_n"] *= 0.3048
     if {"d_max", "d_avg"} <= call.keys():
         call["d_max"] = call["d_avg"] * random.uniform(1.0, 2.5)
 

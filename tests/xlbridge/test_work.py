@@ -18,13 +18,26 @@ from xlbridge.catalogue.validate import places
 from xlbridge.values import OMITTED, CellError
 
 #: decides nothing but the equation number
-WITHOUT_NUMBER = {("ELF_CS", "edition"), ("ELF_CS_GOVERNS", "edition")}
+WITHOUT_NUMBER = {
+    (name, "edition")
+    for name in (
+        *("ELF_CS", "ELF_CS_GOVERNS", "ELF_CS_DRIFT", "ELF_CS_DRIFT_GOVERNS", "ELF_CS_MULTI"),
+        *("ELF_CS_MULTI_GOVERNS", "ELF_CS_DRIFT_MULTI", "ELF_CS_DRIFT_MULTI_GOVERNS"),
+    )
+}
 #: written in words, since they choose between branches, look up a table or search a column
 IN_WORDS = {
     *("ELF_FA", "ELF_FV", "ELF_CS_INCREASE", "ELF_SA_MULTI", "ELF_SA_METHOD1"),
     *("ELF_SDS_MULTI", "ELF_SD1_MULTI"),
     *("ELF_IE", "ELF_SA", "ELF_CU", "ELF_EXPONENT", "ELF_CS_CAP", "ELF_CS_MIN_S1", "ELF_BETA"),
     *("ELF_VX", "ELF_MX", "ELF_HSX", "ELF_BELOW", "ELF_PDELTA_FACTOR"),
+    *("ELF_SYSTEM_R", "ELF_SYSTEM_OMEGA", "ELF_SYSTEM_CD", "ELF_OMEGA", "ELF_LOWER_PART"),
+    *("ELF_LEAST_R_VALUE", "ELF_PERIOD_DRIFT", "ELF_SDS_CAP"),
+    *("ELF_MT", "ELF_MTA", "ELF_TIR", "ELF_AX_APPLIED", "ELF_SOFT_RATIO", "ELF_SOFT_RATIO_THREE"),
+    *("ELF_WEAK_RATIO", "ELF_WEIGHT_RATIO", "ELF_GEOMETRY_RATIO", "ELF_DRIFT_RATIO_ABOVE", "ELF_RHO"),
+    *("ELF_RHO_USE", "ELF_WALL_BAYS", "ELF_EV", "ELF_COMBINATION_FACTOR", "ELF_DRIFT_CHECKED"),
+    *("ELF_FPX_TRANSFER", "ELF_COLLECTOR", "ELF_KA", "ELF_ZS", "ELF_RS", "ELF_CS_HIGHER", "ELF_CPN"),
+    *("ELF_CPX", "ELF_DELTA_MT", "ELF_RIGIDITY_CENTER", "ELF_WALL_DIRECT"),
     # sums along the chain of stories, or over all pairs of modes
     *("ELF_DELTA_XE", "ELF_STORY_STIFFNESS", "ELF_MODE_PERIOD", "ELF_MODE_SHAPE", "ELF_MODE_PARTICIPATION"),
     *("ELF_MODE_MASS", "ELF_MODE_MASS_SUM", "ELF_MODES_NEEDED", "ELF_MODE_SHEAR"),
@@ -76,7 +89,7 @@ def test_a_changed_argument_changes_its_number(entry: SheetFunction) -> None:
 def value_of(numbers: str) -> float:
     """What the line works out to, read as arithmetic."""
     text = re.sub(r"\|(.*)\|", r"abs(\1)", numbers).replace(", at most 1", "")
-    text = re.sub(r"Σ\((.*)\)", r"np.sum(\1)", text)
+    text = text.replace("Σ(", "np.sum(")
     text = re.sub(r"\[([^\]]*)\]", r"np.array([\1])", text)
     for ours, theirs in (("·", "*"), ("^", "**"), ("²", "**2"), (";", ",")):
         text = text.replace(ours, theirs)

@@ -4,7 +4,7 @@ from __future__ import annotations
 
 from engine import torsion
 from xlbridge.catalogue.common import SDC, TIR, edition, forces, h_x, heights
-from xlbridge.catalogue.entry import POSITIVE, Argument, Example, Kind, Result, SheetFunction, Span
+from xlbridge.catalogue.entry import NOT_NEGATIVE, POSITIVE, Argument, Example, Kind, Result, SheetFunction, Span
 
 d_max = Argument("d_max", "displacement", "Largest displacement at level x, found with A_x = 1", POSITIVE)
 d_avg = Argument("d_avg", "displacement", "Average of the extreme points at level x", POSITIVE)
@@ -214,7 +214,7 @@ FUNCTIONS = (
         summary="Share of a wall in the story shear, without torsion.",
         category="Torsion",
         rule="wall_shares",
-        arguments=(Argument("V", "force", "Story shear of the direction"), R_i, rigidities),
+        arguments=(Argument("V", "force", "Story shear of the direction", NOT_NEGATIVE), R_i, rigidities),
         result=Result("V_i", "force", "direct shear of the wall"),
         function=torsion.direct_shear,
         expression="{V}·{R_i}/Σ {rigidities}",

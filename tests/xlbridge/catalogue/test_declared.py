@@ -62,6 +62,7 @@ UNIT_WORDS = {
     "unit load": "psf or kN/m2",
     "displacement": "in or mm",
     "force": "kip or kN",
+    "moment": "kip-ft or kN-m",
     "stiffness": "kip/in or kN/mm",
 }
 #: the formula is a ratio of lengths there: any unit serves, and the worksheet asks for the drift's
@@ -88,7 +89,11 @@ def test_example_reproduces_at_its_printed_digits(entry: SheetFunction) -> None:
 
 def test_numbers_outside_are_known_for_most_arguments() -> None:
     unbounded = {argument.name for _, argument in NUMBERS if not outside(argument)}
-    assert unbounded == {"forces", "displacements", "values", "delta_xe", "d_upper", "d_lower"}
+    assert unbounded == {
+        *("forces", "displacements", "values", "delta_xe", "d_upper", "d_lower"),
+        *("x_M", "x_R", "centers", "positions", "distances", "d_i", "M_t", "Delta_1", "Delta_2", "Delta_cm"),
+        *("Q_E", "D", "E_v", "E_h", "L", "S", "delta_e"),
+    }
 
 
 @pytest.mark.parametrize(("entry", "argument", "number"), OUTSIDE, ids=ident)

@@ -21,6 +21,11 @@ from xlbridge.values import CellError, Scalar
 NATIVE = tuple(entry for entry in ENTRIES if entry.native)
 #: a search beside a height, or along the lines between periods: no one-cell formula is declared
 WITHOUT = {"ELF_BELOW", "ELF_SD1_MULTI"} | {
+    # compares with the story above or below, which has to be searched for
+    *("ELF_SOFT_RATIO", "ELF_SOFT_RATIO_THREE", "ELF_WEAK_RATIO", "ELF_WEIGHT_RATIO", "ELF_GEOMETRY_RATIO"),
+    "ELF_DRIFT_RATIO_ABOVE",
+    # a table of 85 rows
+    *("ELF_SYSTEM_R", "ELF_SYSTEM_OMEGA", "ELF_SYSTEM_CD"),
     # needs the levels in order, an eigenproblem, or a range beside itself turned
     *("ELF_STORY_STIFFNESS", "ELF_CQC", "ELF_MODE_PERIOD", "ELF_MODE_SHAPE", "ELF_MODE_PARTICIPATION"),
     *("ELF_MODE_MASS", "ELF_MODE_MASS_SUM", "ELF_MODES_NEEDED"),
