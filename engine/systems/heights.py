@@ -20,14 +20,14 @@ WITHOUT: Final = "A"
 NOT_DUE: Final = "Table 12.2-1 does not apply in Seismic Design Category A"
 
 
-def height_limit(system: str, category: str, increase: str, edition: str, units: str) -> str:
+def height_limit(system: str, SDC: str, increase: str, edition: str, units: str) -> str:
     """Limit on the structural height of a system, in words.
 
     the cell of Table 12.2-1, or with the increase 240 ft (D, E) and 160 ft (F)
 
     Parameters
         system: one of SYSTEMS of the edition, or its code in 7-16 ("B.4")
-        category: Seismic Design Category, "A" to "F"
+        SDC: Seismic Design Category, "A" to "F"
         increase: "yes" where 12.2.5.4 is used and its conditions hold: no extreme torsional irregularity,
             and the walls or frames in any one plane resist at most 60 % of the force in their direction
         edition: "7-16" or "7-22"
@@ -44,21 +44,20 @@ def height_limit(system: str, category: str, increase: str, edition: str, units:
         rule height_limit: 7-16 12.2.1, Table 12.2-1; 7-22 12.2.1, Table 12.2-1
         rule height_increase: 7-16 12.2.5.4; 7-22 12.2.5.4
     """
-    limit, mark = _limit(system, category, increase, edition)
-    return f"{_shown(limit, units)}{mark}" if category != WITHOUT else NOT_DUE
+    limit, mark = _limit(system, SDC, increase, edition)
+    shown = f"{_shown(limit, units)}{mark}"
+    return shown if SDC != WITHOUT else NOT_DUE
 
 
 @formula
-def height_status(
-    h_n: ArrayLike, system: str, category: str, increase: str, edition: str, units: str
-) -> Words:
+def height_status(h_n: ArrayLike, system: str, SDC: str, increase: str, edition: str, units: str) -> Words:
     """Whether the structural height keeps the limit of the system, in words.
 
     compares h_n with the height limit
 
     Parameters
         h_n: structural height above the base [ft or m], above 0; any shape
-        system, category, increase, edition, units: as for the height limit
+        system, SDC, increase, edition, units: as for the height limit
     Returns
         a text, or texts of the shape of h_n
     Raises
@@ -67,7 +66,7 @@ def height_status(
         The upper part of a two-stage analysis counts from its own base.
     Example
         >>> walls = "A. Special reinforced concrete shear walls"
-        >>> height_status(h_n=170.0, system=walls, category="D", increase="no", edition="7-16", units="us")
+        >>> height_status(h_n=170.0, system=walls, SDC="D", increase="no", edition="7-16", units="us")
         'above the limit: 160 ft'
 
     Reference
@@ -75,33 +74,33 @@ def height_status(
         rule height_increase: 7-16 12.2.5.4; 7-22 12.2.5.4
     """
     h_n = above(0, "h_n", h_n)
-    limit, mark = _limit(system, category, increase, edition)
+    limit, mark = _limit(system, SDC, increase, edition)
     shown = f"{_shown(limit, units)}{mark}"
     texts = (f"within the limit: {shown}", f"above the limit: {shown}")
-    if category == WITHOUT:
+    if SDC == WITHOUT:
         texts = (NOT_DUE, NOT_DUE)
     elif limit in (0.0, inf):
         texts = (shown, shown)
     return worded(texts, exceeds(h_n, limit * (FOOT if units == SI else 1.0)))
 
 
-def _limit(system: str, category: str, increase: str, edition: str) -> tuple[float, str]:
+def _limit(system: str, SDC: str, increase: str, edition: str) -> tuple[float, str]:
     """Return the limit in ft (0 not permitted, infinite without limit), and the mark of a doubt."""
     found = row(system, edition)
     raised = yes("increase", increase)
     if raised and found["increase"] != "yes":
         allowed = "12.2.5.4 is not known to list this system: its height limit cannot be increased"
         raise NotApplicable("increase", increase, allowed)
-    if choice("category", category, DESIGN_CATEGORIES) == WITHOUT:
+    if choice("SDC", SDC, DESIGN_CATEGORIES) == WITHOUT:
         return inf, ""
-    if raised and category in INCREASED:
-        return INCREASED[category], MARKS["M"]
-    return _printed(found, category), MARKS[sureness(found, edition, "confidence_limits")]
+    if raised and SDC in INCREASED:
+        return INCREASED[SDC], MARKS["M"]
+    return _printed(found, SDC), MARKS[sureness(found, edition, "confidence_limits")]
 
 
-def _printed(found: Row, category: str) -> float:
+def _printed(found: Row, SDC: str) -> float:
     words = {"NL": inf, "NP": 0.0}
-    cell = found[category]
+    cell = found[SDC]
     return words[cell] if cell in words else float(cell)
 
 

@@ -33,6 +33,7 @@ def rows(edition: str) -> Mapping[str, Row]:
 
 def row(system: str, edition: str) -> Row:
     """Return the row of a system: by its name, or by its code in the edition that it was read in."""
+    choice("edition", edition, EDITIONS)
     by_code = {found["code"]: name for name, found in rows(edition).items() if found["edition"] == edition}
     name = by_code.get(system, system) if isinstance(system, str) else system
     return rows(edition)[choice("system", name, rows(edition), TITLE)]

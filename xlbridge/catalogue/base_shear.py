@@ -6,13 +6,13 @@ from engine import base_shear
 from xlbridge.catalogue.common import S_1, S_D1, S_DS, T_L, I_e, R, T, edition
 from xlbridge.catalogue.entry import POSITIVE, Argument, Example, Result, SheetFunction, Term
 
-_CAP = "{S_D1}*IF({T}<={T_L},1,{T_L}/{T})/({T}*({R}/{I_e}))"
-_PLATEAU = "{S_DS}/({R}/{I_e})"
-_MINIMUM = "MAX(0.044*{S_DS}*{I_e},0.01)"
-_MINIMUM_S1 = "IF({S_1}>=0.6,0.5*{S_1}/({R}/{I_e}),0)"
+CAP = "{S_D1}*IF({T}<={T_L},1,{T_L}/{T})/({T}*({R}/{I_e}))"
+PLATEAU = "{S_DS}/({R}/{I_e})"
+MINIMUM = "MAX(0.044*{S_DS}*{I_e},0.01)"
+MINIMUM_S1 = "IF({S_1}>=0.6,0.5*{S_1}/({R}/{I_e}),0)"
 
-_INPUTS = (S_DS, S_D1, S_1, T, T_L, R, I_e, edition)
-_BOUNDS = (
+INPUTS = (S_DS, S_D1, S_1, T, T_L, R, I_e, edition)
+BOUNDS = (
     Term("plateau", "C_s,plateau", base_shear.coefficient_plateau),
     Term("cap", "C_s,cap", base_shear.coefficient_cap),
     Term("minimum", "C_s,min", base_shear.coefficient_minimum),
@@ -39,7 +39,7 @@ FUNCTIONS = (
         result=Result("C_s", "none", "bound of C_s"),
         function=base_shear.coefficient_plateau,
         expression="{S_DS}/({R}/{I_e})",
-        native=_PLATEAU,
+        native=PLATEAU,
         example=Example({"S_DS": 1.0, "R": 8.0, "I_e": 1.0}, "0.125"),
     ),
     SheetFunction(
@@ -51,7 +51,7 @@ FUNCTIONS = (
         result=Result("C_s", "none", "bound of C_s"),
         function=base_shear.coefficient_cap,
         expression="{S_D1}/({T}·{R}/{I_e}) to T_L = {T_L}; {S_D1}·{T_L}/({T}²·{R}/{I_e}) beyond",
-        native=_CAP,
+        native=CAP,
         example=Example({"S_D1": 0.6, "T": 1.5, "T_L": 8.0, "R": 8.0, "I_e": 1.0}, "0.05"),
     ),
     SheetFunction(
@@ -63,7 +63,7 @@ FUNCTIONS = (
         result=Result("C_s", "none", "bound of C_s"),
         function=base_shear.coefficient_minimum,
         expression="max(0.044·{S_DS}·{I_e}; 0.01)",
-        native=_MINIMUM,
+        native=MINIMUM,
         example=Example({"S_DS": 1.0, "I_e": 1.0}, "0.044"),
     ),
     SheetFunction(
@@ -75,7 +75,7 @@ FUNCTIONS = (
         result=Result("C_s", "none", "bound of C_s"),
         function=base_shear.coefficient_minimum_near_fault,
         expression="0.5·{S_1}/({R}/{I_e}) where S_1 ≥ 0.6; 0 elsewhere",
-        native=_MINIMUM_S1,
+        native=MINIMUM_S1,
         example=Example({"S_1": 0.6, "R": 8.0, "I_e": 1.0}, "0.0375"),
     ),
     SheetFunction(
@@ -83,25 +83,25 @@ FUNCTIONS = (
         summary="Governing seismic response coefficient of the two-period spectrum.",
         category="Base shear",
         rule="C_s",
-        arguments=_INPUTS,
+        arguments=INPUTS,
         result=Result("C_s", "none", "seismic response coefficient"),
         function=base_shear.response_coefficient,
         expression="max(min({plateau}; {cap}); {minimum}; {minimum_S1})",
-        native=f"MAX(MIN({_PLATEAU},{_CAP}),{_MINIMUM},{_MINIMUM_S1})",
+        native=f"MAX(MIN({PLATEAU},{CAP}),{MINIMUM},{MINIMUM_S1})",
         example=Example(_EXAMPLE, "0.050"),
-        terms=_BOUNDS,
+        terms=BOUNDS,
     ),
     SheetFunction(
         name="ELF_CS_GOVERNS",
         summary="The bound that governs the seismic response coefficient, with its equation number.",
         category="Base shear",
         rule="C_s",
-        arguments=_INPUTS,
+        arguments=INPUTS,
         result=Result("governs", "text", "governing bound"),
         function=base_shear.governing_bound,
         expression="the bound that sets max(min({plateau}; {cap}); {minimum}; {minimum_S1})",
         example=Example(_EXAMPLE, "cap S_D1/(T R/I_e), Eq. 12.8-4"),
-        terms=_BOUNDS,
+        terms=BOUNDS,
     ),
     SheetFunction(
         name="ELF_V",

@@ -6,7 +6,7 @@ from itertools import pairwise
 
 from engine import period
 from engine.tables import table
-from xlbridge.catalogue.common import S_D1, units
+from xlbridge.catalogue.common import S_D1, question, units
 from xlbridge.catalogue.entry import POSITIVE, Argument, Example, Kind, Result, SheetFunction, Span, Term
 
 system = Argument(
@@ -41,6 +41,8 @@ def _cu_native() -> str:
 
 
 T_a = Argument("T_a", "time", "Approximate fundamental period", POSITIVE)
+T_computed = Argument("T_computed", "time", "Period from a structural analysis", POSITIVE)
+h_n = Argument("h_n", "length", "Structural height, in ft (us) or m (si)", POSITIVE)
 C_u = Argument("C_u", "none", "Coefficient for the upper limit on the period", Span(1))
 
 FUNCTIONS = (
@@ -50,7 +52,7 @@ FUNCTIONS = (
         category="Period",
         rule="T_a",
         arguments=(
-            Argument("h_n", "length", "Structural height, in ft (us) or m (si)", POSITIVE),
+            h_n,
             system,
             units,
         ),
@@ -93,11 +95,62 @@ FUNCTIONS = (
         summary="Period used for strength: the computed period, at most C_u T_a.",
         category="Period",
         rule="T_max",
-        arguments=(T_a, C_u, Argument("T_computed", "time", "Period from a structural analysis", POSITIVE)),
+        arguments=(T_a, C_u, T_computed),
         result=Result("T", "time", "fundamental period"),
         function=period.design_period,
         expression="min({T_computed}; {C_u}·{T_a})",
         native="MIN({T_computed},{C_u}*{T_a})",
         example=Example({"T_a": 1.052, "C_u": 1.4, "T_computed": 2.462}, "1.473"),
+    ),
+    SheetFunction(
+        name="ELF_TA_STORIES_STATUS",
+        summary="Whether the approximate period may be taken as 0.1 N.",
+        category="Period",
+        rule="T_a_stories",
+        arguments=(
+            Argument("N", "none", "Number of stories above the base", Span(1)),
+            h_n,
+            question("frames", "Whether moment frames of concrete or steel alone resist the force"),
+            units,
+        ),
+        result=Result("status", "text", "conditions of the formula"),
+        function=period.stories_formula_status,
+        expression="{N} stories on {h_n} ({units}), moment frames alone: {frames}",
+        example=Example(
+            {"N": 14.0, "h_n": 126.0, "frames": "yes", "units": "us"},
+            "not permitted: more than 12 stories; average story height below 10 ft",
+        ),
+    ),
+    SheetFunction(
+        name="ELF_PERIOD_GOVERNS",
+        summary="Whether the computed period or its upper limit C_u T_a is used for strength.",
+        category="Period",
+        rule="T_max",
+        arguments=(T_a, C_u, T_computed),
+        result=Result("governs", "text", "what gives the period"),
+        function=period.period_bound,
+        expression="what sets min({T_computed}; {C_u}·{T_a})",
+        example=Example({"T_a": 1.052, "C_u": 1.4, "T_computed": 2.462}, "upper limit C_u T_a"),
+    ),
+    SheetFunction(
+        name="ELF_PERIOD_DRIFT",
+        summary="Period for drift alone: the computed one, with or without its upper limit C_u T_a.",
+        category="Period",
+        rule="drift_period",
+        arguments=(
+            *(T_a, C_u, T_computed),
+            Argument(
+                "cap",
+                "text",
+                "Whether the relief for drift is used",
+                kind=Kind.CHOICE,
+                choices=period.DRIFT_PERIODS,
+            ),
+        ),
+        result=Result("T", "time", "period for drift"),
+        function=period.drift_period,
+        expression="{T_computed} {cap} {C_u}·{T_a}",
+        native='IF({cap}="without the cap",{T_computed},MIN({T_computed},{C_u}*{T_a}))',
+        example=Example({"T_a": 1.052, "C_u": 1.4, "T_computed": 2.462, "cap": "without the cap"}, "2.462"),
     ),
 )
