@@ -230,6 +230,191 @@ def ELF_SA(T: Any, S_DS: Any, S_D1: Any, T_L: Any) -> Any:
     return call("ELF_SA", T, S_DS, S_D1, T_L)
 
 
+@xw.func(category="Storyledger: Systems")
+@xw.arg(
+    "system",
+    "raw",
+    doc="Row of Table 12.2-1, after the letter of its group: 85 texts from 'A. Special reinforced concrete shear walls' to 'H. Steel systems not specifically detailed for seismic resistance, excluding cantilever column systems'.",
+)
+@xw.arg(
+    "edition",
+    "raw",
+    doc="Edition of ASCE/SEI 7, as text (in a cell: format the cell as Text, or it turns into a date): 7-16, 7-22.",
+)
+@xw.ret("raw")
+def ELF_SYSTEM_R(system: Any, edition: Any) -> Any:
+    """Response modification coefficient of a system. ASCE/SEI 7-16: 12.2.1, Table 12.2-1; 7-22: 12.2.1, Table 12.2-1. Partly from memory: confirm."""
+    return call("ELF_SYSTEM_R", system, edition)
+
+
+@xw.func(category="Storyledger: Systems")
+@xw.arg(
+    "system",
+    "raw",
+    doc="Row of Table 12.2-1, after the letter of its group: 85 texts from 'A. Special reinforced concrete shear walls' to 'H. Steel systems not specifically detailed for seismic resistance, excluding cantilever column systems'.",
+)
+@xw.arg(
+    "edition",
+    "raw",
+    doc="Edition of ASCE/SEI 7, as text (in a cell: format the cell as Text, or it turns into a date): 7-16, 7-22.",
+)
+@xw.ret("raw")
+def ELF_SYSTEM_OMEGA(system: Any, edition: Any) -> Any:
+    """Overstrength factor of a system. ASCE/SEI 7-16: 12.2.1, Table 12.2-1; 7-22: 12.2.1, Table 12.2-1. Partly from memory: confirm."""
+    return call("ELF_SYSTEM_OMEGA", system, edition)
+
+
+@xw.func(category="Storyledger: Systems")
+@xw.arg(
+    "system",
+    "raw",
+    doc="Row of Table 12.2-1, after the letter of its group: 85 texts from 'A. Special reinforced concrete shear walls' to 'H. Steel systems not specifically detailed for seismic resistance, excluding cantilever column systems'.",
+)
+@xw.arg(
+    "edition",
+    "raw",
+    doc="Edition of ASCE/SEI 7, as text (in a cell: format the cell as Text, or it turns into a date): 7-16, 7-22.",
+)
+@xw.ret("raw")
+def ELF_SYSTEM_CD(system: Any, edition: Any) -> Any:
+    """Deflection amplification factor of a system. ASCE/SEI 7-16: 12.2.1, Table 12.2-1; 7-22: 12.2.1, Table 12.2-1. Partly from memory: confirm."""
+    return call("ELF_SYSTEM_CD", system, edition)
+
+
+@xw.func(category="Storyledger: Systems")
+@xw.arg(
+    "system",
+    "raw",
+    doc="Row of Table 12.2-1, after the letter of its group: 92 texts from 'A. Special reinforced concrete shear walls' to 'H. Steel systems not specifically detailed for seismic resistance, excluding cantilever column systems'.",
+)
+@xw.arg(
+    "edition",
+    "raw",
+    doc="Edition of ASCE/SEI 7, as text (in a cell: format the cell as Text, or it turns into a date): 7-16, 7-22.",
+)
+@xw.ret("raw")
+def ELF_SYSTEM_SOURCE(system: Any, edition: Any) -> Any:
+    """What the row of a system in Table 12.2-1 rests on: seen, from memory or uncertain. ASCE/SEI 7-16: 12.2.1, Table 12.2-1; 7-22: 12.2.1, Table 12.2-1. Partly from memory: confirm."""
+    return call("ELF_SYSTEM_SOURCE", system, edition)
+
+
+@xw.func(category="Storyledger: Systems")
+@xw.arg(
+    "system",
+    "raw",
+    doc="Row of Table 12.2-1, after the letter of its group: 92 texts from 'A. Special reinforced concrete shear walls' to 'H. Steel systems not specifically detailed for seismic resistance, excluding cantilever column systems'.",
+)
+@xw.arg("R", "raw", doc="Response modification coefficient [no unit], at least 1.")
+@xw.arg("Omega_0", "raw", doc="Overstrength factor as tabulated [no unit], at least 1.")
+@xw.arg("C_d", "raw", doc="Deflection amplification factor [no unit], at least 1.")
+@xw.arg(
+    "edition",
+    "raw",
+    doc="Edition of ASCE/SEI 7, as text (in a cell: format the cell as Text, or it turns into a date): 7-16, 7-22.",
+)
+@xw.ret("raw")
+def ELF_SYSTEM_STATUS(system: Any, R: Any, Omega_0: Any, C_d: Any, edition: Any) -> Any:
+    """Whether R, Omega_0 and C_d as entered are those of Table 12.2-1, and what differs. ASCE/SEI 7-16: 12.2.1, Table 12.2-1; 7-22: 12.2.1, Table 12.2-1. Partly from memory: confirm."""
+    return call("ELF_SYSTEM_STATUS", system, R, Omega_0, C_d, edition)
+
+
+@xw.func(category="Storyledger: Systems")
+@xw.arg(
+    "system",
+    "raw",
+    doc="Row of Table 12.2-1, after the letter of its group: 92 texts from 'A. Special reinforced concrete shear walls' to 'H. Steel systems not specifically detailed for seismic resistance, excluding cantilever column systems'.",
+)
+@xw.arg("SDC", "raw", doc="Seismic Design Category: A, B, C, D, E, F.")
+@xw.arg("increase", "raw", doc="Whether 12.2.5.4 is used and its conditions hold (see its note): yes, no.")
+@xw.arg(
+    "edition",
+    "raw",
+    doc="Edition of ASCE/SEI 7, as text (in a cell: format the cell as Text, or it turns into a date): 7-16, 7-22.",
+)
+@xw.arg("units", "raw", doc="Unit system: us (kip, ft, in) or si (kN, m, mm): us, si.")
+@xw.ret("raw")
+def ELF_HEIGHT_LIMIT(system: Any, SDC: Any, increase: Any, edition: Any, units: Any) -> Any:
+    """Limit on the structural height of a system, in words: a height, NL or NP. ASCE/SEI 7-16: 12.2.1, Table 12.2-1; 7-22: 12.2.1, Table 12.2-1. Partly from memory: confirm."""
+    return call("ELF_HEIGHT_LIMIT", system, SDC, increase, edition, units)
+
+
+@xw.func(category="Storyledger: Systems")
+@xw.arg("h_n", "raw", doc="Structural height, in ft (us) or m (si) [a length unit], above 0.")
+@xw.arg(
+    "system",
+    "raw",
+    doc="Row of Table 12.2-1, after the letter of its group: 92 texts from 'A. Special reinforced concrete shear walls' to 'H. Steel systems not specifically detailed for seismic resistance, excluding cantilever column systems'.",
+)
+@xw.arg("SDC", "raw", doc="Seismic Design Category: A, B, C, D, E, F.")
+@xw.arg("increase", "raw", doc="Whether 12.2.5.4 is used and its conditions hold (see its note): yes, no.")
+@xw.arg(
+    "edition",
+    "raw",
+    doc="Edition of ASCE/SEI 7, as text (in a cell: format the cell as Text, or it turns into a date): 7-16, 7-22.",
+)
+@xw.arg("units", "raw", doc="Unit system: us (kip, ft, in) or si (kN, m, mm): us, si.")
+@xw.ret("raw")
+def ELF_HEIGHT_STATUS(h_n: Any, system: Any, SDC: Any, increase: Any, edition: Any, units: Any) -> Any:
+    """Whether the structural height keeps the limit of the system. ASCE/SEI 7-16: 12.2.1, Table 12.2-1; 7-22: 12.2.1, Table 12.2-1. Partly from memory: confirm."""
+    return call("ELF_HEIGHT_STATUS", h_n, system, SDC, increase, edition, units)
+
+
+@xw.func(category="Storyledger: Systems")
+@xw.arg("Omega_0", "raw", doc="Overstrength factor as tabulated [no unit], at least 1.")
+@xw.arg("reduction", "raw", doc="Whether the reduction is taken: as tabulated, flexible diaphragms.")
+@xw.ret("raw")
+def ELF_OMEGA(Omega_0: Any, reduction: Any) -> Any:
+    """Overstrength factor, less 0.5 where diaphragms are flexible and it is at least 2.5. ASCE/SEI 7-16: 12.2.1, Table 12.2-1; 7-22: 12.2.1, Table 12.2-1. Partly from memory: confirm."""
+    return call("ELF_OMEGA", Omega_0, reduction)
+
+
+@xw.func(category="Storyledger: Systems")
+@xw.arg("upper", "raw", doc="The coefficient of the upper system [no unit], at least 1.")
+@xw.arg("lower", "raw", doc="The same coefficient of the lower system [no unit], at least 1.")
+@xw.arg("R_upper", "raw", doc="Response modification coefficient of the upper part [no unit], at least 1.")
+@xw.arg("R_lower", "raw", doc="Response modification coefficient of the lower part [no unit], at least 1.")
+@xw.ret("raw")
+def ELF_LOWER_PART(upper: Any, lower: Any, R_upper: Any, R_lower: Any) -> Any:
+    """R, Omega_0 or C_d for the lower part where one system stands on another. ASCE/SEI 7-16: 12.2.3.1; 7-22: 12.2.3.1. Partly from memory: confirm."""
+    return call("ELF_LOWER_PART", upper, lower, R_upper, R_lower)
+
+
+@xw.func(category="Storyledger: Systems")
+@xw.arg("R_upper", "raw", doc="Response modification coefficient of the upper part [no unit], at least 1.")
+@xw.arg("R_lower", "raw", doc="Response modification coefficient of the lower part [no unit], at least 1.")
+@xw.ret("raw")
+def ELF_TRANSFER_FACTOR(R_upper: Any, R_lower: Any) -> Any:
+    """Factor on the forces that an upper system hands down to a lower one with a lower R. ASCE/SEI 7-16: 12.2.3.1; 7-22: 12.2.3.1. Partly from memory: confirm."""
+    return call("ELF_TRANSFER_FACTOR", R_upper, R_lower)
+
+
+@xw.func(category="Storyledger: Systems")
+@xw.arg(
+    "R_systems",
+    "raw",
+    doc="Response modification coefficients of the systems in one direction [no unit], one cell a system, at least 1.",
+)
+@xw.ret("raw")
+def ELF_R_LEAST(R_systems: Any) -> Any:
+    """R of several systems that act in one direction: the least. ASCE/SEI 7-16: 12.2.3.3; 7-22: 12.2.3.3. Partly from memory: confirm."""
+    return call("ELF_R_LEAST", R_systems)
+
+
+@xw.func(category="Storyledger: Systems")
+@xw.arg(
+    "coefficients", "raw", doc="Omega_0 or C_d of the same systems [no unit], one cell a system, at least 1."
+)
+@xw.arg(
+    "R_systems",
+    "raw",
+    doc="Response modification coefficients of the systems in one direction [no unit], one cell a system, at least 1.",
+)
+@xw.ret("raw")
+def ELF_LEAST_R_VALUE(coefficients: Any, R_systems: Any) -> Any:
+    """Omega_0 or C_d of several systems in one direction: that of the system with the least R. ASCE/SEI 7-16: 12.2.3.3; 7-22: 12.2.3.3. Partly from memory: confirm."""
+    return call("ELF_LEAST_R_VALUE", coefficients, R_systems)
+
+
 @xw.func(category="Storyledger: Ground motion")
 @xw.arg("T", "raw", doc="Period, 0 allowed [s], at least 0.")
 @xw.arg("T_i", "raw", doc="Periods of the spectrum [s], one cell a period, at least 0.")
@@ -414,6 +599,86 @@ def ELF_PERIOD(T_a: Any, C_u: Any, T_computed: Any) -> Any:
     return call("ELF_PERIOD", T_a, C_u, T_computed)
 
 
+@xw.func(category="Storyledger: Period")
+@xw.arg("N", "raw", doc="Number of stories above the base [no unit], at least 1.")
+@xw.arg("h_n", "raw", doc="Structural height, in ft (us) or m (si) [a length unit], above 0.")
+@xw.arg("frames", "raw", doc="Whether moment frames of concrete or steel alone resist the force: yes, no.")
+@xw.arg("units", "raw", doc="Unit system: us (kip, ft, in) or si (kN, m, mm): us, si.")
+@xw.ret("raw")
+def ELF_TA_STORIES_STATUS(N: Any, h_n: Any, frames: Any, units: Any) -> Any:
+    """Whether the approximate period may be taken as 0.1 N. ASCE/SEI 7-16: 12.8.2.1, Eq. 12.8-8; 7-22: 12.8.2.1, Eq. 12.8-9. Partly from memory: confirm."""
+    return call("ELF_TA_STORIES_STATUS", N, h_n, frames, units)
+
+
+@xw.func(category="Storyledger: Period")
+@xw.arg("T_a", "raw", doc="Approximate fundamental period [s], above 0.")
+@xw.arg("C_u", "raw", doc="Coefficient for the upper limit on the period [no unit], at least 1.")
+@xw.arg("T_computed", "raw", doc="Period from a structural analysis [s], above 0.")
+@xw.ret("raw")
+def ELF_PERIOD_GOVERNS(T_a: Any, C_u: Any, T_computed: Any) -> Any:
+    """Whether the computed period or its upper limit C_u T_a is used for strength. ASCE/SEI 7-16: 12.8.2; 7-22: 12.8.2."""
+    return call("ELF_PERIOD_GOVERNS", T_a, C_u, T_computed)
+
+
+@xw.func(category="Storyledger: Period")
+@xw.arg("T_a", "raw", doc="Approximate fundamental period [s], above 0.")
+@xw.arg("C_u", "raw", doc="Coefficient for the upper limit on the period [no unit], at least 1.")
+@xw.arg("T_computed", "raw", doc="Period from a structural analysis [s], above 0.")
+@xw.arg("cap", "raw", doc="Whether the relief for drift is used: without the cap, with the cap.")
+@xw.ret("raw")
+def ELF_PERIOD_DRIFT(T_a: Any, C_u: Any, T_computed: Any, cap: Any) -> Any:
+    """Period for drift alone: the computed one, with or without its upper limit C_u T_a. ASCE/SEI 7-16: 12.8.6.2; 7-22: 12.8.6.2. Partly from memory: confirm."""
+    return call("ELF_PERIOD_DRIFT", T_a, C_u, T_computed, cap)
+
+
+@xw.func(category="Storyledger: Period")
+@xw.arg("A_B", "raw", doc="Area of the base [a area unit], above 0.")
+@xw.arg("h_n", "raw", doc="Structural height [a length unit], above 0.")
+@xw.arg(
+    "wall_areas",
+    "raw",
+    doc="Web areas of the shear walls in the direction [a area unit], one cell a wall, above 0.",
+)
+@xw.arg("wall_lengths", "raw", doc="Lengths of the same walls [a length unit], one cell a wall, above 0.")
+@xw.ret("raw")
+def ELF_CW(A_B: Any, h_n: Any, wall_areas: Any, wall_lengths: Any) -> Any:
+    """Effective ratio of shear wall area to base area, in per cent, for the approximate period. ASCE/SEI 7-16: 12.8.2.1, Eq. 12.8-10; 7-22: 12.8.2.1, Eq. 12.8-11. Partly from memory: confirm."""
+    return call("ELF_CW", A_B, h_n, wall_areas, wall_lengths)
+
+
+@xw.func(category="Storyledger: Period")
+@xw.arg(
+    "h_n",
+    "raw",
+    doc="Structural height, in ft (us) or m (si, at most 36.6) [a length unit], above 0 and at most 120.",
+)
+@xw.arg("C_w", "raw", doc="Effective wall area ratio in per cent [no unit], above 0.")
+@xw.arg("units", "raw", doc="Unit system: us (kip, ft, in) or si (kN, m, mm): us, si.")
+@xw.ret("raw")
+def ELF_TA_WALLS(h_n: Any, C_w: Any, units: Any) -> Any:
+    """Approximate period of structures with masonry or concrete shear walls, to 120 ft (36.6 m). ASCE/SEI 7-16: 12.8.2.1, Eq. 12.8-9; 7-22: 12.8.2.1, Eq. 12.8-10. Partly from memory: confirm."""
+    return call("ELF_TA_WALLS", h_n, C_w, units)
+
+
+@xw.func(category="Storyledger: Period")
+@xw.arg(
+    "weights",
+    "raw",
+    doc="Effective seismic weights of all levels [a force unit], one cell a level, at least 0.",
+)
+@xw.arg("forces", "raw", doc="Lateral forces on all levels [a force unit], one cell a level, at least 0.")
+@xw.arg(
+    "displacements",
+    "raw",
+    doc="Elastic displacements under these forces, in in (us) or mm (si) [a displacement unit], one cell a level, at least 0.",
+)
+@xw.arg("units", "raw", doc="Unit system: us (kip, ft, in) or si (kN, m, mm): us, si.")
+@xw.ret("raw")
+def ELF_RAYLEIGH(weights: Any, forces: Any, displacements: Any, units: Any) -> Any:
+    """Computed period from the displacements of all levels under lateral forces. ASCE/SEI 7-16: 12.8.2; 7-22: 12.8.2."""
+    return call("ELF_RAYLEIGH", weights, forces, displacements, units)
+
+
 @xw.func(category="Storyledger: Base shear")
 @xw.arg("S_DS", "raw", doc="Design spectral acceleration at short periods [g], above 0.")
 @xw.arg("R", "raw", doc="Response modification coefficient [no unit], at least 1.")
@@ -500,6 +765,150 @@ def ELF_CS_GOVERNS(S_DS: Any, S_D1: Any, S_1: Any, T: Any, T_L: Any, R: Any, I_e
 def ELF_V(C_s: Any, W: Any) -> Any:
     """Seismic base shear. ASCE/SEI 7-16: 12.8.1, Eq. 12.8-1; 7-22: 12.8.1, Eq. 12.8-1."""
     return call("ELF_V", C_s, W)
+
+
+@xw.func(category="Storyledger: Base shear")
+@xw.arg("S_a", "raw", doc="Multi-period spectrum at T, no less than its peak left of the peak [g], above 0.")
+@xw.arg("R", "raw", doc="Response modification coefficient [no unit], at least 1.")
+@xw.arg("I_e", "raw", doc="Importance factor [no unit], at least 1.")
+@xw.ret("raw")
+def ELF_CS_MULTI_BOUND(S_a: Any, R: Any, I_e: Any) -> Any:
+    """Seismic response coefficient of the multi-period spectrum, before the minimums. ASCE/SEI 7-22: 12.8.1.1, Eq. 12.8-2. Partly from memory: confirm."""
+    return call("ELF_CS_MULTI_BOUND", S_a, R, I_e)
+
+
+@xw.func(category="Storyledger: Base shear")
+@xw.arg("S_a", "raw", doc="Multi-period spectrum at T, no less than its peak left of the peak [g], above 0.")
+@xw.arg("S_DS", "raw", doc="Design spectral acceleration at short periods [g], above 0.")
+@xw.arg("S_1", "raw", doc="Mapped MCE_R spectral acceleration at 1 s [g], at least 0.")
+@xw.arg("R", "raw", doc="Response modification coefficient [no unit], at least 1.")
+@xw.arg("I_e", "raw", doc="Importance factor [no unit], at least 1.")
+@xw.arg("edition", "raw", doc="Edition of ASCE/SEI 7 that has the method, as text: 7-22.")
+@xw.ret("raw")
+def ELF_CS_MULTI(S_a: Any, S_DS: Any, S_1: Any, R: Any, I_e: Any, edition: Any) -> Any:
+    """Governing seismic response coefficient of the multi-period spectrum. ASCE/SEI 7-22: 12.8.1.1, Eq. 12.8-2. Partly from memory: confirm."""
+    return call("ELF_CS_MULTI", S_a, S_DS, S_1, R, I_e, edition)
+
+
+@xw.func(category="Storyledger: Base shear")
+@xw.arg("S_a", "raw", doc="Multi-period spectrum at T, no less than its peak left of the peak [g], above 0.")
+@xw.arg("S_DS", "raw", doc="Design spectral acceleration at short periods [g], above 0.")
+@xw.arg("S_1", "raw", doc="Mapped MCE_R spectral acceleration at 1 s [g], at least 0.")
+@xw.arg("R", "raw", doc="Response modification coefficient [no unit], at least 1.")
+@xw.arg("I_e", "raw", doc="Importance factor [no unit], at least 1.")
+@xw.arg("edition", "raw", doc="Edition of ASCE/SEI 7 that has the method, as text: 7-22.")
+@xw.ret("raw")
+def ELF_CS_MULTI_GOVERNS(S_a: Any, S_DS: Any, S_1: Any, R: Any, I_e: Any, edition: Any) -> Any:
+    """The bound that governs C_s of the multi-period spectrum, with its equation number. ASCE/SEI 7-22: 12.8.1.1, Eq. 12.8-2. Partly from memory: confirm."""
+    return call("ELF_CS_MULTI_GOVERNS", S_a, S_DS, S_1, R, I_e, edition)
+
+
+@xw.func(category="Storyledger: Base shear")
+@xw.arg("S_DS", "raw", doc="Design spectral acceleration at short periods [g], above 0.")
+@xw.arg("S_D1", "raw", doc="Design spectral acceleration at 1 s [g], above 0.")
+@xw.arg("S_1", "raw", doc="Mapped MCE_R spectral acceleration at 1 s [g], at least 0.")
+@xw.arg("T", "raw", doc="Fundamental period [s], above 0.")
+@xw.arg("T_L", "raw", doc="Long-period transition period [s], above 0.")
+@xw.arg("R", "raw", doc="Response modification coefficient [no unit], at least 1.")
+@xw.arg("I_e", "raw", doc="Importance factor [no unit], at least 1.")
+@xw.arg(
+    "edition",
+    "raw",
+    doc="Edition of ASCE/SEI 7, as text (in a cell: format the cell as Text, or it turns into a date): 7-16, 7-22.",
+)
+@xw.ret("raw")
+def ELF_CS_DRIFT(S_DS: Any, S_D1: Any, S_1: Any, T: Any, T_L: Any, R: Any, I_e: Any, edition: Any) -> Any:
+    """C_s for drift alone, two-period spectrum: without the minimum 0.044 S_DS I_e. ASCE/SEI 7-16: 12.8.6.1; 7-22: 12.8.6.1. Partly from memory: confirm."""
+    return call("ELF_CS_DRIFT", S_DS, S_D1, S_1, T, T_L, R, I_e, edition)
+
+
+@xw.func(category="Storyledger: Base shear")
+@xw.arg("S_DS", "raw", doc="Design spectral acceleration at short periods [g], above 0.")
+@xw.arg("S_D1", "raw", doc="Design spectral acceleration at 1 s [g], above 0.")
+@xw.arg("S_1", "raw", doc="Mapped MCE_R spectral acceleration at 1 s [g], at least 0.")
+@xw.arg("T", "raw", doc="Fundamental period [s], above 0.")
+@xw.arg("T_L", "raw", doc="Long-period transition period [s], above 0.")
+@xw.arg("R", "raw", doc="Response modification coefficient [no unit], at least 1.")
+@xw.arg("I_e", "raw", doc="Importance factor [no unit], at least 1.")
+@xw.arg(
+    "edition",
+    "raw",
+    doc="Edition of ASCE/SEI 7, as text (in a cell: format the cell as Text, or it turns into a date): 7-16, 7-22.",
+)
+@xw.ret("raw")
+def ELF_CS_DRIFT_GOVERNS(
+    S_DS: Any, S_D1: Any, S_1: Any, T: Any, T_L: Any, R: Any, I_e: Any, edition: Any
+) -> Any:
+    """The bound that governs C_s for drift alone, two-period spectrum. ASCE/SEI 7-16: 12.8.6.1; 7-22: 12.8.6.1. Partly from memory: confirm."""
+    return call("ELF_CS_DRIFT_GOVERNS", S_DS, S_D1, S_1, T, T_L, R, I_e, edition)
+
+
+@xw.func(category="Storyledger: Base shear")
+@xw.arg("S_a", "raw", doc="Multi-period spectrum at T, no less than its peak left of the peak [g], above 0.")
+@xw.arg("S_1", "raw", doc="Mapped MCE_R spectral acceleration at 1 s [g], at least 0.")
+@xw.arg("R", "raw", doc="Response modification coefficient [no unit], at least 1.")
+@xw.arg("I_e", "raw", doc="Importance factor [no unit], at least 1.")
+@xw.arg("edition", "raw", doc="Edition of ASCE/SEI 7 that has the method, as text: 7-22.")
+@xw.ret("raw")
+def ELF_CS_DRIFT_MULTI(S_a: Any, S_1: Any, R: Any, I_e: Any, edition: Any) -> Any:
+    """C_s for drift alone, multi-period spectrum: without the minimum 0.044 S_DS I_e. ASCE/SEI 7-22: 12.8.1.1, Eq. 12.8-2. Partly from memory: confirm."""
+    return call("ELF_CS_DRIFT_MULTI", S_a, S_1, R, I_e, edition)
+
+
+@xw.func(category="Storyledger: Base shear")
+@xw.arg("S_a", "raw", doc="Multi-period spectrum at T, no less than its peak left of the peak [g], above 0.")
+@xw.arg("S_1", "raw", doc="Mapped MCE_R spectral acceleration at 1 s [g], at least 0.")
+@xw.arg("R", "raw", doc="Response modification coefficient [no unit], at least 1.")
+@xw.arg("I_e", "raw", doc="Importance factor [no unit], at least 1.")
+@xw.arg("edition", "raw", doc="Edition of ASCE/SEI 7 that has the method, as text: 7-22.")
+@xw.ret("raw")
+def ELF_CS_DRIFT_MULTI_GOVERNS(S_a: Any, S_1: Any, R: Any, I_e: Any, edition: Any) -> Any:
+    """The bound that governs C_s for drift alone, multi-period spectrum. ASCE/SEI 7-22: 12.8.1.1, Eq. 12.8-2. Partly from memory: confirm."""
+    return call("ELF_CS_DRIFT_MULTI_GOVERNS", S_a, S_1, R, I_e, edition)
+
+
+@xw.func(category="Storyledger: Base shear")
+@xw.arg("S_DS", "raw", doc="Design spectral acceleration at short periods [g], above 0.")
+@xw.arg(
+    "N", "raw", doc="Stories above the lower of base and grade plane, with mezzanines [no unit], at least 1."
+)
+@xw.arg("T", "raw", doc="Fundamental period [s], above 0.")
+@xw.arg("regular", "raw", doc="Whether the structure is free of the irregularities of 12.3.2: yes, no.")
+@xw.arg("redundant", "raw", doc="Whether it qualifies for rho = 1.0: yes, no.")
+@xw.arg("soft_site", "raw", doc="Whether the site class is E or F (DE in 7-22: uncertain): yes, no.")
+@xw.arg("risk_category", "raw", doc="Risk category: I, II, III, IV.")
+@xw.ret("raw")
+def ELF_SDS_CAP(
+    S_DS: Any, N: Any, T: Any, regular: Any, redundant: Any, soft_site: Any, risk_category: Any
+) -> Any:
+    """S_DS for C_s and E_v: max(1.0, 0.7 S_DS) for a short regular building, where that is less. ASCE/SEI 7-16: 12.8.1.3; 7-22: 12.8.1.3. Partly from memory: confirm."""
+    return call("ELF_SDS_CAP", S_DS, N, T, regular, redundant, soft_site, risk_category)
+
+
+@xw.func(category="Storyledger: Base shear")
+@xw.arg(
+    "N", "raw", doc="Stories above the lower of base and grade plane, with mezzanines [no unit], at least 1."
+)
+@xw.arg("T", "raw", doc="Fundamental period [s], above 0.")
+@xw.arg("regular", "raw", doc="Whether the structure is free of the irregularities of 12.3.2: yes, no.")
+@xw.arg("redundant", "raw", doc="Whether it qualifies for rho = 1.0: yes, no.")
+@xw.arg("soft_site", "raw", doc="Whether the site class is E or F (DE in 7-22: uncertain): yes, no.")
+@xw.arg("risk_category", "raw", doc="Risk category: I, II, III, IV.")
+@xw.ret("raw")
+def ELF_SDS_CAP_STATUS(
+    N: Any, T: Any, regular: Any, redundant: Any, soft_site: Any, risk_category: Any
+) -> Any:
+    """Whether S_DS may be capped for a short regular building, and what fails. ASCE/SEI 7-16: 12.8.1.3; 7-22: 12.8.1.3. Partly from memory: confirm."""
+    return call("ELF_SDS_CAP_STATUS", N, T, regular, redundant, soft_site, risk_category)
+
+
+@xw.func(category="Storyledger: Base shear")
+@xw.arg("V", "raw", doc="Base shear without interaction [a force unit], above 0.")
+@xw.arg("R", "raw", doc="Response modification coefficient [no unit], at least 1.")
+@xw.ret("raw")
+def ELF_SSI_MIN(V: Any, R: Any) -> Any:
+    """Least base shear when it is reduced for soil-structure interaction. ASCE/SEI 7-16: 19.2; 7-22: 19.2. Partly from memory: confirm."""
+    return call("ELF_SSI_MIN", V, R)
 
 
 @xw.func(category="Storyledger: Vertical distribution")
@@ -595,6 +1004,92 @@ def ELF_BELOW(h_x: Any, values: Any, heights: Any) -> Any:
 
 
 @xw.func(category="Storyledger: Torsion")
+@xw.arg("x_M", "raw", doc="Place of the centre of mass [a length unit], any number.")
+@xw.arg("x_R", "raw", doc="Place of the centre of rigidity on the same axis [a length unit], any number.")
+@xw.ret("raw")
+def ELF_ECC(x_M: Any, x_R: Any) -> Any:
+    """Eccentricity between the centre of mass and the centre of rigidity, signed. ASCE/SEI 7-16: 12.8.4.1; 7-22: 12.8.4.1."""
+    return call("ELF_ECC", x_M, x_R)
+
+
+@xw.func(category="Storyledger: Torsion")
+@xw.arg("L_perp", "raw", doc="Plan dimension perpendicular to the force [a length unit], above 0.")
+@xw.ret("raw")
+def ELF_ECC_ACC(L_perp: Any) -> Any:
+    """Accidental offset of the centre of mass, to either side. ASCE/SEI 7-16: 12.8.4.2; 7-22: 12.8.4.2."""
+    return call("ELF_ECC_ACC", L_perp)
+
+
+@xw.func(category="Storyledger: Torsion")
+@xw.arg("h_x", "raw", doc="Height of level x above the base [a length unit], above 0.")
+@xw.arg("x_R", "raw", doc="Place of the centre of rigidity of the story [a length unit], any number.")
+@xw.arg("forces", "raw", doc="Story forces of all levels [a force unit], one cell a level, any number.")
+@xw.arg(
+    "centers",
+    "raw",
+    doc="Places of the centres of mass of all levels, or eccentricities with x_R = 0 [a length unit], one cell a level, any number.",
+)
+@xw.arg(
+    "heights", "raw", doc="Heights of all levels above the base [a length unit], one cell a level, above 0."
+)
+@xw.ret("raw")
+def ELF_MT(h_x: Any, x_R: Any, forces: Any, centers: Any, heights: Any) -> Any:
+    """Inherent torsion of the story below a level, about the story's centre of rigidity. ASCE/SEI 7-16: 12.8.4.1; 7-22: 12.8.4.1."""
+    return call("ELF_MT", h_x, x_R, forces, centers, heights)
+
+
+@xw.func(category="Storyledger: Torsion")
+@xw.arg("h_x", "raw", doc="Height of level x above the base [a length unit], above 0.")
+@xw.arg("forces", "raw", doc="Story forces of all levels [a force unit], one cell a level, any number.")
+@xw.arg(
+    "dimensions",
+    "raw",
+    doc="Plan dimensions of all levels perpendicular to the force [a length unit], one cell a level, above 0.",
+)
+@xw.arg(
+    "amplifications",
+    "raw",
+    doc="Factors A_x of all levels, 1 where none applies [no unit], one cell a level, at least 1 and at most 3.",
+)
+@xw.arg(
+    "heights", "raw", doc="Heights of all levels above the base [a length unit], one cell a level, above 0."
+)
+@xw.ret("raw")
+def ELF_MTA(h_x: Any, forces: Any, dimensions: Any, amplifications: Any, heights: Any) -> Any:
+    """Accidental torsion of the story below a level, to be taken with either sign. ASCE/SEI 7-16: 12.8.4.2; 7-22: 12.8.4.2."""
+    return call("ELF_MTA", h_x, forces, dimensions, amplifications, heights)
+
+
+@xw.func(category="Storyledger: Torsion")
+@xw.arg("TIR", "raw", doc="Torsional irregularity ratio [no unit], at least 1.")
+@xw.arg("SDC", "raw", doc="Seismic Design Category: A, B, C, D, E, F.")
+@xw.arg(
+    "edition",
+    "raw",
+    doc="Edition of ASCE/SEI 7, as text (in a cell: format the cell as Text, or it turns into a date): 7-16, 7-22.",
+)
+@xw.ret("raw")
+def ELF_MTA_SCOPE(TIR: Any, SDC: Any, edition: Any) -> Any:
+    """Where accidental torsion counts: in the test of irregularity alone, or in forces too. ASCE/SEI 7-16: 12.8.4.2; 7-22: 12.8.4.2. Partly from memory: confirm."""
+    return call("ELF_MTA_SCOPE", TIR, SDC, edition)
+
+
+@xw.func(category="Storyledger: Torsion")
+@xw.arg(
+    "Delta_1", "raw", doc="Story drift at one edge, found with A_x = 1 [a displacement unit], any number."
+)
+@xw.arg(
+    "Delta_2",
+    "raw",
+    doc="Story drift at the opposite edge, same sign convention [a displacement unit], any number.",
+)
+@xw.ret("raw")
+def ELF_TIR(Delta_1: Any, Delta_2: Any) -> Any:
+    """Torsional irregularity ratio of a story from the drifts at two opposite edges. ASCE/SEI 7-16: 12.3.2.1, Table 12.3-1; 7-22: 12.3.2.1, Table 12.3-1. Partly from memory: confirm."""
+    return call("ELF_TIR", Delta_1, Delta_2)
+
+
+@xw.func(category="Storyledger: Torsion")
 @xw.arg(
     "d_max", "raw", doc="Largest displacement at level x, found with A_x = 1 [a displacement unit], above 0."
 )
@@ -603,6 +1098,555 @@ def ELF_BELOW(h_x: Any, values: Any, heights: Any) -> Any:
 def ELF_AX(d_max: Any, d_avg: Any) -> Any:
     """Torsional amplification factor of a level, between 1 and 3. ASCE/SEI 7-16: 12.8.4.3, Eq. 12.8-14; 7-22: 12.8.4.3, Eq. 12.8-15. Partly from memory: confirm."""
     return call("ELF_AX", d_max, d_avg)
+
+
+@xw.func(category="Storyledger: Torsion")
+@xw.arg(
+    "d_max", "raw", doc="Largest displacement at level x, found with A_x = 1 [a displacement unit], above 0."
+)
+@xw.arg("d_avg", "raw", doc="Average of the extreme points at level x [a displacement unit], above 0.")
+@xw.arg("TIR", "raw", doc="Torsional irregularity ratio [no unit], at least 1.")
+@xw.arg("SDC", "raw", doc="Seismic Design Category: A, B, C, D, E, F.")
+@xw.ret("raw")
+def ELF_AX_APPLIED(d_max: Any, d_avg: Any, TIR: Any, SDC: Any) -> Any:
+    """Torsional amplification factor where it applies, else 1. ASCE/SEI 7-16: 12.8.4.3, Eq. 12.8-14; 7-22: 12.8.4.3, Eq. 12.8-15. Partly from memory: confirm."""
+    return call("ELF_AX_APPLIED", d_max, d_avg, TIR, SDC)
+
+
+@xw.func(category="Storyledger: Torsion")
+@xw.arg("rigidities", "raw", doc="Relative rigidities of the walls [no unit], one cell a wall, above 0.")
+@xw.arg(
+    "positions",
+    "raw",
+    doc="Places of the walls across the direction [a length unit], one cell a wall, any number.",
+)
+@xw.ret("raw")
+def ELF_RIGIDITY_CENTER(rigidities: Any, positions: Any) -> Any:
+    """Centre of rigidity of the walls that resist one direction. ASCE/SEI 7-16: 12.8.4; 7-22: 12.8.4."""
+    return call("ELF_RIGIDITY_CENTER", rigidities, positions)
+
+
+@xw.func(category="Storyledger: Torsion")
+@xw.arg("rigidities", "raw", doc="Relative rigidities of the walls [no unit], one cell a wall, above 0.")
+@xw.arg(
+    "distances",
+    "raw",
+    doc="Distances of the walls from the centre of rigidity [a length unit], one cell a wall, any number.",
+)
+@xw.ret("raw")
+def ELF_RIGIDITY_POLAR(rigidities: Any, distances: Any) -> Any:
+    """Polar rigidity of the walls of both directions about the centre of rigidity. ASCE/SEI 7-16: 12.8.4; 7-22: 12.8.4."""
+    return call("ELF_RIGIDITY_POLAR", rigidities, distances)
+
+
+@xw.func(category="Storyledger: Torsion")
+@xw.arg("V", "raw", doc="Story shear of the direction [a force unit], at least 0.")
+@xw.arg("R_i", "raw", doc="Relative rigidity of the wall [no unit], above 0.")
+@xw.arg("rigidities", "raw", doc="Relative rigidities of the walls [no unit], one cell a wall, above 0.")
+@xw.ret("raw")
+def ELF_WALL_DIRECT(V: Any, R_i: Any, rigidities: Any) -> Any:
+    """Share of a wall in the story shear, without torsion. ASCE/SEI 7-16: 12.8.4; 7-22: 12.8.4."""
+    return call("ELF_WALL_DIRECT", V, R_i, rigidities)
+
+
+@xw.func(category="Storyledger: Torsion")
+@xw.arg("M_t", "raw", doc="Torsion of the story [a moment unit], any number.")
+@xw.arg("R_i", "raw", doc="Relative rigidity of the wall [no unit], above 0.")
+@xw.arg("d_i", "raw", doc="Distance of the wall from the centre of rigidity [a length unit], any number.")
+@xw.arg("J", "raw", doc="Polar rigidity of all walls [no unit], above 0.")
+@xw.ret("raw")
+def ELF_WALL_TORSION(M_t: Any, R_i: Any, d_i: Any, J: Any) -> Any:
+    """Shear of a wall from torsion about the centre of rigidity, signed. ASCE/SEI 7-16: 12.8.4; 7-22: 12.8.4."""
+    return call("ELF_WALL_TORSION", M_t, R_i, d_i, J)
+
+
+@xw.func(category="Storyledger: Irregularity")
+@xw.arg("h_x", "raw", doc="Height of the level on top of the story, above the base [a length unit], above 0.")
+@xw.arg(
+    "stiffnesses",
+    "raw",
+    doc="Lateral stiffnesses of all stories [a stiffness unit], one cell a level, above 0.",
+)
+@xw.arg(
+    "heights", "raw", doc="Heights of all levels above the base [a length unit], one cell a level, above 0."
+)
+@xw.ret("raw")
+def ELF_SOFT_RATIO(h_x: Any, stiffnesses: Any, heights: Any) -> Any:
+    """Stiffness of a story over that of the story above; 1 at the top. ASCE/SEI 7-16: 12.3.2.2, Table 12.3-2; 7-22: 12.3.2.2, Table 12.3-2. Partly from memory: confirm."""
+    return call("ELF_SOFT_RATIO", h_x, stiffnesses, heights)
+
+
+@xw.func(category="Storyledger: Irregularity")
+@xw.arg("h_x", "raw", doc="Height of the level on top of the story, above the base [a length unit], above 0.")
+@xw.arg(
+    "stiffnesses",
+    "raw",
+    doc="Lateral stiffnesses of all stories [a stiffness unit], one cell a level, above 0.",
+)
+@xw.arg(
+    "heights", "raw", doc="Heights of all levels above the base [a length unit], one cell a level, above 0."
+)
+@xw.ret("raw")
+def ELF_SOFT_RATIO_THREE(h_x: Any, stiffnesses: Any, heights: Any) -> Any:
+    """Stiffness of a story over the mean of three stories above; 1 where fewer stand above. ASCE/SEI 7-16: 12.3.2.2, Table 12.3-2; 7-22: 12.3.2.2, Table 12.3-2. Partly from memory: confirm."""
+    return call("ELF_SOFT_RATIO_THREE", h_x, stiffnesses, heights)
+
+
+@xw.func(category="Storyledger: Irregularity")
+@xw.arg("h_x", "raw", doc="Height of the level on top of the story, above the base [a length unit], above 0.")
+@xw.arg("strengths", "raw", doc="Lateral strengths of all stories [a force unit], one cell a level, above 0.")
+@xw.arg(
+    "heights", "raw", doc="Heights of all levels above the base [a length unit], one cell a level, above 0."
+)
+@xw.ret("raw")
+def ELF_WEAK_RATIO(h_x: Any, strengths: Any, heights: Any) -> Any:
+    """Strength of a story over that of the story above; 1 at the top. ASCE/SEI 7-16: 12.3.2.2, Table 12.3-2; 7-22: 12.3.2.2, Table 12.3-2. Partly from memory: confirm."""
+    return call("ELF_WEAK_RATIO", h_x, strengths, heights)
+
+
+@xw.func(category="Storyledger: Irregularity")
+@xw.arg("h_x", "raw", doc="Height of level x above the base [a length unit], above 0.")
+@xw.arg(
+    "weights",
+    "raw",
+    doc="Effective seismic weights of all levels [a force unit], one cell a level, at least 0.",
+)
+@xw.arg(
+    "heights", "raw", doc="Heights of all levels above the base [a length unit], one cell a level, above 0."
+)
+@xw.ret("raw")
+def ELF_WEIGHT_RATIO(h_x: Any, weights: Any, heights: Any) -> Any:
+    """Weight of a level over the lighter one of its neighbours; a lighter roof is left out. ASCE/SEI 7-16: 12.3.2.2, Table 12.3-2."""
+    return call("ELF_WEIGHT_RATIO", h_x, weights, heights)
+
+
+@xw.func(category="Storyledger: Irregularity")
+@xw.arg("h_x", "raw", doc="Height of the level on top of the story, above the base [a length unit], above 0.")
+@xw.arg(
+    "dimensions",
+    "raw",
+    doc="Dimensions of the force-resisting system, by story [a length unit], one cell a level, above 0.",
+)
+@xw.arg(
+    "heights", "raw", doc="Heights of all levels above the base [a length unit], one cell a level, above 0."
+)
+@xw.ret("raw")
+def ELF_GEOMETRY_RATIO(h_x: Any, dimensions: Any, heights: Any) -> Any:
+    """Dimension of the force-resisting system in a story over the smaller one of its neighbours. ASCE/SEI 7-16: 12.3.2.2, Table 12.3-2; 7-22: 12.3.2.2, Table 12.3-2. Partly from memory: confirm."""
+    return call("ELF_GEOMETRY_RATIO", h_x, dimensions, heights)
+
+
+@xw.func(category="Storyledger: Irregularity")
+@xw.arg("h_x", "raw", doc="Height of the level on top of the story, above the base [a length unit], above 0.")
+@xw.arg(
+    "drift_ratios", "raw", doc="Story drift ratios, torsion left out [no unit], one cell a level, above 0."
+)
+@xw.arg(
+    "heights", "raw", doc="Heights of all levels above the base [a length unit], one cell a level, above 0."
+)
+@xw.ret("raw")
+def ELF_DRIFT_RATIO_ABOVE(h_x: Any, drift_ratios: Any, heights: Any) -> Any:
+    """Story drift ratio over that of the story above; 1 for the top two stories. ASCE/SEI 7-16: 12.3.2.2; 7-22: 12.3.2.2. Partly from memory: confirm."""
+    return call("ELF_DRIFT_RATIO_ABOVE", h_x, drift_ratios, heights)
+
+
+@xw.func(category="Storyledger: Irregularity")
+@xw.arg(
+    "drift_ratios", "raw", doc="Story drift ratios, torsion left out [no unit], one cell a level, above 0."
+)
+@xw.arg(
+    "heights", "raw", doc="Heights of all levels above the base [a length unit], one cell a level, above 0."
+)
+@xw.ret("raw")
+def ELF_DRIFT_EXCEPTION(drift_ratios: Any, heights: Any) -> Any:
+    """Whether the exception by story drift ratios holds for the building: yes or no. ASCE/SEI 7-16: 12.3.2.2; 7-22: 12.3.2.2. Partly from memory: confirm."""
+    return call("ELF_DRIFT_EXCEPTION", drift_ratios, heights)
+
+
+@xw.func(category="Storyledger: Irregularity")
+@xw.arg("p_x", "raw", doc="Projection beyond the corner along x [a length unit], at least 0.")
+@xw.arg("p_y", "raw", doc="Projection beyond the corner along y [a length unit], at least 0.")
+@xw.arg("L_x", "raw", doc="Plan dimension along x [a length unit], above 0.")
+@xw.arg("L_y", "raw", doc="Plan dimension along y [a length unit], above 0.")
+@xw.ret("raw")
+def ELF_REENTRANT_RATIO(p_x: Any, p_y: Any, L_x: Any, L_y: Any) -> Any:
+    """Smaller one of both projections beyond a re-entrant corner, in parts of the plan dimension. ASCE/SEI 7-16: 12.3.2.1, Table 12.3-1; 7-22: 12.3.2.1, Table 12.3-1. Partly from memory: confirm."""
+    return call("ELF_REENTRANT_RATIO", p_x, p_y, L_x, L_y)
+
+
+@xw.func(category="Storyledger: Irregularity")
+@xw.arg("TIR", "raw", doc="Torsional irregularity ratio [no unit], at least 1.")
+@xw.arg("diaphragm", "raw", doc="Diaphragm, by 12.3.1: rigid or semirigid, flexible.")
+@xw.arg(
+    "one_sided",
+    "raw",
+    doc="More than 75 % of a story's strength at or on one side of the centre of mass (7-22 alone): yes, no.",
+)
+@xw.arg(
+    "edition",
+    "raw",
+    doc="Edition of ASCE/SEI 7, as text (in a cell: format the cell as Text, or it turns into a date): 7-16, 7-22.",
+)
+@xw.ret("raw")
+def ELF_TORSION_STATUS(TIR: Any, diaphragm: Any, one_sided: Any, edition: Any) -> Any:
+    """Torsional irregularity of a story, with the type of the edition. ASCE/SEI 7-16: 12.3.2.1, Table 12.3-1; 7-22: 12.3.2.1, Table 12.3-1. Partly from memory: confirm."""
+    return call("ELF_TORSION_STATUS", TIR, diaphragm, one_sided, edition)
+
+
+@xw.func(category="Storyledger: Irregularity")
+@xw.arg("ratio", "raw", doc="Smaller projection in parts of the plan dimension [no unit], at least 0.")
+@xw.arg(
+    "edition",
+    "raw",
+    doc="Edition of ASCE/SEI 7, as text (in a cell: format the cell as Text, or it turns into a date): 7-16, 7-22.",
+)
+@xw.ret("raw")
+def ELF_REENTRANT_STATUS(ratio: Any, edition: Any) -> Any:
+    """Re-entrant corner irregularity, with its type and limit. ASCE/SEI 7-16: 12.3.2.1, Table 12.3-1; 7-22: 12.3.2.1, Table 12.3-1. Partly from memory: confirm."""
+    return call("ELF_REENTRANT_STATUS", ratio, edition)
+
+
+@xw.func(category="Storyledger: Irregularity")
+@xw.arg(
+    "opening",
+    "raw",
+    doc="Open area over gross enclosed area of the diaphragm [no unit], at least 0 and at most 1.",
+)
+@xw.arg(
+    "change", "raw", doc="Change of diaphragm stiffness from story to story, in parts [no unit], at least 0."
+)
+@xw.arg(
+    "edition",
+    "raw",
+    doc="Edition of ASCE/SEI 7, as text (in a cell: format the cell as Text, or it turns into a date): 7-16, 7-22.",
+)
+@xw.ret("raw")
+def ELF_DIAPHRAGM_STATUS(opening: Any, change: Any, edition: Any) -> Any:
+    """Diaphragm discontinuity by openings or a change of stiffness, with its type. ASCE/SEI 7-16: 12.3.2.1, Table 12.3-1; 7-22: 12.3.2.1, Table 12.3-1."""
+    return call("ELF_DIAPHRAGM_STATUS", opening, change, edition)
+
+
+@xw.func(category="Storyledger: Irregularity")
+@xw.arg("h_x", "raw", doc="Height of the level on top of the story, above the base [a length unit], above 0.")
+@xw.arg(
+    "stiffnesses",
+    "raw",
+    doc="Lateral stiffnesses of all stories [a stiffness unit], one cell a level, above 0.",
+)
+@xw.arg(
+    "heights", "raw", doc="Heights of all levels above the base [a length unit], one cell a level, above 0."
+)
+@xw.arg(
+    "drift_exception",
+    "raw",
+    doc="No story drift ratio above 1.3 times that of the story above (12.3.2.2): yes, no.",
+)
+@xw.arg("SDC", "raw", doc="Seismic Design Category: A, B, C, D, E, F.")
+@xw.arg(
+    "edition",
+    "raw",
+    doc="Edition of ASCE/SEI 7, as text (in a cell: format the cell as Text, or it turns into a date): 7-16, 7-22.",
+)
+@xw.ret("raw")
+def ELF_SOFT_STATUS(
+    h_x: Any, stiffnesses: Any, heights: Any, drift_exception: Any, SDC: Any, edition: Any
+) -> Any:
+    """Soft story irregularity, with its type and the exception that frees it. ASCE/SEI 7-16: 12.3.2.2, Table 12.3-2; 7-22: 12.3.2.2, Table 12.3-2. Partly from memory: confirm."""
+    return call("ELF_SOFT_STATUS", h_x, stiffnesses, heights, drift_exception, SDC, edition)
+
+
+@xw.func(category="Storyledger: Irregularity")
+@xw.arg("h_x", "raw", doc="Height of level x above the base [a length unit], above 0.")
+@xw.arg(
+    "weights",
+    "raw",
+    doc="Effective seismic weights of all levels [a force unit], one cell a level, at least 0.",
+)
+@xw.arg(
+    "heights", "raw", doc="Heights of all levels above the base [a length unit], one cell a level, above 0."
+)
+@xw.arg(
+    "drift_exception",
+    "raw",
+    doc="No story drift ratio above 1.3 times that of the story above (12.3.2.2): yes, no.",
+)
+@xw.arg("SDC", "raw", doc="Seismic Design Category: A, B, C, D, E, F.")
+@xw.arg(
+    "edition",
+    "raw",
+    doc="Edition of ASCE/SEI 7, as text (in a cell: format the cell as Text, or it turns into a date): 7-16, 7-22.",
+)
+@xw.ret("raw")
+def ELF_WEIGHT_STATUS(
+    h_x: Any, weights: Any, heights: Any, drift_exception: Any, SDC: Any, edition: Any
+) -> Any:
+    """Weight irregularity, with its type and the exception that frees it; no type of 7-22. ASCE/SEI 7-16: 12.3.2.2, Table 12.3-2."""
+    return call("ELF_WEIGHT_STATUS", h_x, weights, heights, drift_exception, SDC, edition)
+
+
+@xw.func(category="Storyledger: Irregularity")
+@xw.arg("h_x", "raw", doc="Height of the level on top of the story, above the base [a length unit], above 0.")
+@xw.arg(
+    "dimensions",
+    "raw",
+    doc="Dimensions of the force-resisting system, by story [a length unit], one cell a level, above 0.",
+)
+@xw.arg(
+    "heights", "raw", doc="Heights of all levels above the base [a length unit], one cell a level, above 0."
+)
+@xw.arg(
+    "edition",
+    "raw",
+    doc="Edition of ASCE/SEI 7, as text (in a cell: format the cell as Text, or it turns into a date): 7-16, 7-22.",
+)
+@xw.ret("raw")
+def ELF_GEOMETRY_STATUS(h_x: Any, dimensions: Any, heights: Any, edition: Any) -> Any:
+    """Vertical geometric irregularity, with its type. ASCE/SEI 7-16: 12.3.2.2, Table 12.3-2; 7-22: 12.3.2.2, Table 12.3-2. Partly from memory: confirm."""
+    return call("ELF_GEOMETRY_STATUS", h_x, dimensions, heights, edition)
+
+
+@xw.func(category="Storyledger: Irregularity")
+@xw.arg("h_x", "raw", doc="Height of the level on top of the story, above the base [a length unit], above 0.")
+@xw.arg("strengths", "raw", doc="Lateral strengths of all stories [a force unit], one cell a level, above 0.")
+@xw.arg(
+    "heights", "raw", doc="Heights of all levels above the base [a length unit], one cell a level, above 0."
+)
+@xw.arg(
+    "edition",
+    "raw",
+    doc="Edition of ASCE/SEI 7, as text (in a cell: format the cell as Text, or it turns into a date): 7-16, 7-22.",
+)
+@xw.ret("raw")
+def ELF_WEAK_STATUS(h_x: Any, strengths: Any, heights: Any, edition: Any) -> Any:
+    """Weak story irregularity, with its type. ASCE/SEI 7-16: 12.3.2.2, Table 12.3-2; 7-22: 12.3.2.2, Table 12.3-2. Partly from memory: confirm."""
+    return call("ELF_WEAK_STATUS", h_x, strengths, heights, edition)
+
+
+@xw.func(category="Storyledger: Irregularity")
+@xw.arg(
+    "irregularity",
+    "raw",
+    doc="Irregularity: out-of-plane offset, nonparallel system, in-plane discontinuity.",
+)
+@xw.arg("exists", "raw", doc="Whether it exists: yes, no.")
+@xw.arg(
+    "edition",
+    "raw",
+    doc="Edition of ASCE/SEI 7, as text (in a cell: format the cell as Text, or it turns into a date): 7-16, 7-22.",
+)
+@xw.ret("raw")
+def ELF_IRREGULARITY(irregularity: Any, exists: Any, edition: Any) -> Any:
+    """An irregularity that is read off the plans, with its type. ASCE/SEI 7-16: 12.3.2; 7-22: 12.3.2."""
+    return call("ELF_IRREGULARITY", irregularity, exists, edition)
+
+
+@xw.func(category="Storyledger: Irregularity")
+@xw.arg("irregularity", "raw", doc="Irregularity: 13 texts from 'torsional' to 'extreme weak story'.")
+@xw.arg("SDC", "raw", doc="Seismic Design Category: A, B, C, D, E, F.")
+@xw.arg(
+    "edition",
+    "raw",
+    doc="Edition of ASCE/SEI 7, as text (in a cell: format the cell as Text, or it turns into a date): 7-16, 7-22.",
+)
+@xw.ret("raw")
+def ELF_CONSEQUENCE(irregularity: Any, SDC: Any, edition: Any) -> Any:
+    """What an irregularity entails in a Seismic Design Category, clause by clause. ASCE/SEI 7-16: 12.3.3; 7-22: 12.3.3. Partly from memory: confirm."""
+    return call("ELF_CONSEQUENCE", irregularity, SDC, edition)
+
+
+@xw.func(category="Storyledger: Redundancy")
+@xw.arg("SDC", "raw", doc="Seismic Design Category: A, B, C, D, E, F.")
+@xw.arg(
+    "configuration",
+    "raw",
+    doc="Condition of 12.3.4.2 that the direction meets: none, a: loss of one element, b: regular plan with two bays a side.",
+)
+@xw.arg("TIR_X", "raw", doc="Largest torsional irregularity ratio, forces along X [no unit], at least 1.")
+@xw.arg("TIR_Y", "raw", doc="Largest torsional irregularity ratio, forces along Y [no unit], at least 1.")
+@xw.arg(
+    "edition",
+    "raw",
+    doc="Edition of ASCE/SEI 7, as text (in a cell: format the cell as Text, or it turns into a date): 7-16, 7-22.",
+)
+@xw.ret("raw")
+def ELF_RHO(SDC: Any, configuration: Any, TIR_X: Any, TIR_Y: Any, edition: Any) -> Any:
+    """Redundancy factor of one direction. ASCE/SEI 7-16: 12.3.4.2; 7-22: 12.3.4.2. Partly from memory: confirm."""
+    return call("ELF_RHO", SDC, configuration, TIR_X, TIR_Y, edition)
+
+
+@xw.func(category="Storyledger: Redundancy")
+@xw.arg("SDC", "raw", doc="Seismic Design Category: A, B, C, D, E, F.")
+@xw.arg(
+    "configuration",
+    "raw",
+    doc="Condition of 12.3.4.2 that the direction meets: none, a: loss of one element, b: regular plan with two bays a side.",
+)
+@xw.arg("TIR_X", "raw", doc="Largest torsional irregularity ratio, forces along X [no unit], at least 1.")
+@xw.arg("TIR_Y", "raw", doc="Largest torsional irregularity ratio, forces along Y [no unit], at least 1.")
+@xw.arg(
+    "edition",
+    "raw",
+    doc="Edition of ASCE/SEI 7, as text (in a cell: format the cell as Text, or it turns into a date): 7-16, 7-22.",
+)
+@xw.ret("raw")
+def ELF_RHO_REASON(SDC: Any, configuration: Any, TIR_X: Any, TIR_Y: Any, edition: Any) -> Any:
+    """Why the redundancy factor is what it is. ASCE/SEI 7-16: 12.3.4.2; 7-22: 12.3.4.2. Partly from memory: confirm."""
+    return call("ELF_RHO_REASON", SDC, configuration, TIR_X, TIR_Y, edition)
+
+
+@xw.func(category="Storyledger: Redundancy")
+@xw.arg(
+    "use",
+    "raw",
+    doc="What it is used for: strength, transfer forces, drift and P-delta, inertial diaphragm forces, overstrength, nonstructural components, nonbuilding structures, walls out of plane, damped structures.",
+)
+@xw.arg("rho", "raw", doc="Redundancy factor [no unit], at least 1 and at most 1.3.")
+@xw.ret("raw")
+def ELF_RHO_USE(use: Any, rho: Any) -> Any:
+    """Redundancy factor that counts in a use: rho for strength and transfer forces, else 1.0. ASCE/SEI 7-16: 12.3.4.1; 7-22: 12.3.4.1."""
+    return call("ELF_RHO_USE", use, rho)
+
+
+@xw.func(category="Storyledger: Redundancy")
+@xw.arg("L_w", "raw", doc="Length of the shear wall [a length unit], above 0.")
+@xw.arg("h_sx", "raw", doc="Story height [a length unit], above 0.")
+@xw.arg("light_frame", "raw", doc="Light-frame wall: yes, no.")
+@xw.ret("raw")
+def ELF_WALL_BAYS(L_w: Any, h_sx: Any, light_frame: Any) -> Any:
+    """Bays that a shear wall counts for in condition b of the redundancy factor. ASCE/SEI 7-16: 12.3.4.2; 7-22: 12.3.4.2."""
+    return call("ELF_WALL_BAYS", L_w, h_sx, light_frame)
+
+
+@xw.func(category="Storyledger: Redundancy")
+@xw.arg("V_x", "raw", doc="Story shear [a force unit], at least 0.")
+@xw.arg("V", "raw", doc="Base shear [a force unit], above 0.")
+@xw.ret("raw")
+def ELF_RHO_STORY(V_x: Any, V: Any) -> Any:
+    """Whether a story counts for the conditions of the redundancy factor: yes or no. ASCE/SEI 7-16: 12.3.4.2; 7-22: 12.3.4.2. Partly from memory: confirm."""
+    return call("ELF_RHO_STORY", V_x, V)
+
+
+@xw.func(category="Storyledger: Load effects")
+@xw.arg("rho", "raw", doc="Redundancy factor [no unit], at least 1 and at most 1.3.")
+@xw.arg(
+    "Q_E",
+    "raw",
+    doc="Effect of the horizontal seismic forces, in any unit of an effect [a force unit], any number.",
+)
+@xw.ret("raw")
+def ELF_EH(rho: Any, Q_E: Any) -> Any:
+    """Horizontal seismic load effect. ASCE/SEI 7-16: 12.4.2.1, Eq. 12.4-3; 7-22: 12.4.2.1, Eq. 12.4-3."""
+    return call("ELF_EH", rho, Q_E)
+
+
+@xw.func(category="Storyledger: Load effects")
+@xw.arg("S_DS", "raw", doc="Design spectral acceleration at short periods [g], above 0.")
+@xw.arg("D", "raw", doc="Effect of dead load, in any unit of an effect [a force unit], any number.")
+@xw.arg(
+    "taken",
+    "raw",
+    doc="How it is taken: counted, zero in Seismic Design Category B, zero at the foundation-soil interface.",
+)
+@xw.ret("raw")
+def ELF_EV(S_DS: Any, D: Any, taken: Any) -> Any:
+    """Vertical seismic load effect, or zero by one of the two cases of the clause. ASCE/SEI 7-16: 12.4.2.2, Eq. 12.4-4a; 7-22: 12.4.2.2, Eq. 12.4-4a. Partly from memory: confirm."""
+    return call("ELF_EV", S_DS, D, taken)
+
+
+@xw.func(category="Storyledger: Load effects")
+@xw.arg("S_av", "raw", doc="Design vertical spectral acceleration by 11.9 [g], above 0.")
+@xw.arg("D", "raw", doc="Effect of dead load, in any unit of an effect [a force unit], any number.")
+@xw.ret("raw")
+def ELF_EV_SPECTRUM(S_av: Any, D: Any) -> Any:
+    """Vertical seismic load effect from the vertical response spectrum. ASCE/SEI 7-16: 12.4.2.2, Eq. 12.4-4b; 7-22: 12.4.2.2, Eq. 12.4-4b. Partly from memory: confirm."""
+    return call("ELF_EV_SPECTRUM", S_av, D)
+
+
+@xw.func(category="Storyledger: Load effects")
+@xw.arg("Omega_0", "raw", doc="Overstrength factor [no unit], at least 1.")
+@xw.arg(
+    "Q_E",
+    "raw",
+    doc="Effect of the horizontal seismic forces, in any unit of an effect [a force unit], any number.",
+)
+@xw.ret("raw")
+def ELF_EMH(Omega_0: Any, Q_E: Any) -> Any:
+    """Horizontal seismic load effect with overstrength. ASCE/SEI 7-16: 12.4.3.1, Eq. 12.4-7; 7-22: 12.4.3.1, Eq. 12.4-7. Partly from memory: confirm."""
+    return call("ELF_EMH", Omega_0, Q_E)
+
+
+@xw.func(category="Storyledger: Load effects")
+@xw.arg("Omega_0", "raw", doc="Overstrength factor [no unit], at least 1.")
+@xw.arg(
+    "Q_E",
+    "raw",
+    doc="Effect of the horizontal seismic forces, in any unit of an effect [a force unit], any number.",
+)
+@xw.arg(
+    "E_cl", "raw", doc="Capacity-limited effect, a magnitude in the unit of Q_E [a force unit], at least 0."
+)
+@xw.ret("raw")
+def ELF_EMH_LIMITED(Omega_0: Any, Q_E: Any, E_cl: Any) -> Any:
+    """Horizontal seismic load effect with overstrength, at most the capacity-limited effect. ASCE/SEI 7-16: 12.4.3.2; 7-22: 12.4.3.2."""
+    return call("ELF_EMH_LIMITED", Omega_0, Q_E, E_cl)
+
+
+@xw.func(category="Storyledger: Load effects")
+@xw.arg(
+    "combination",
+    "raw",
+    doc="Load combination: 2.3.6 strength, 2.4.5 allowable stress: 2.3.6-6, 2.3.6-7, 2.4.5-8, 2.4.5-9, 2.4.5-10.",
+)
+@xw.arg("term", "raw", doc="Term: D, E_v, E_h, L, S.")
+@xw.arg(
+    "edition",
+    "raw",
+    doc="Edition of ASCE/SEI 7, as text (in a cell: format the cell as Text, or it turns into a date): 7-16, 7-22.",
+)
+@xw.ret("raw")
+def ELF_COMBINATION_FACTOR(combination: Any, term: Any, edition: Any) -> Any:
+    """Factor on one term in a load combination; E_h stands for E_mh as well. ASCE/SEI 7-16: 2.3.6 and 2.4.5; 7-22: 2.3.6 and 2.4.5. Partly from memory: confirm."""
+    return call("ELF_COMBINATION_FACTOR", combination, term, edition)
+
+
+@xw.func(category="Storyledger: Load effects")
+@xw.arg(
+    "combination",
+    "raw",
+    doc="Load combination: 2.3.6 strength, 2.4.5 allowable stress: 2.3.6-6, 2.3.6-7, 2.4.5-8, 2.4.5-9, 2.4.5-10.",
+)
+@xw.arg("D", "raw", doc="Effect of dead load, in any unit of an effect [a force unit], any number.")
+@xw.arg("E_v", "raw", doc="Vertical seismic effect, in the unit of D [a force unit], any number.")
+@xw.arg("E_h", "raw", doc="Horizontal seismic effect, or E_mh, in the unit of D [a force unit], any number.")
+@xw.arg("L", "raw", doc="Effect of live load, in the unit of D [a force unit], any number.")
+@xw.arg("S", "raw", doc="Effect of snow load, in the unit of D [a force unit], any number.")
+@xw.arg(
+    "edition",
+    "raw",
+    doc="Edition of ASCE/SEI 7, as text (in a cell: format the cell as Text, or it turns into a date): 7-16, 7-22.",
+)
+@xw.ret("raw")
+def ELF_COMBINE(combination: Any, D: Any, E_v: Any, E_h: Any, L: Any, S: Any, edition: Any) -> Any:
+    """Sum of a load combination; E_h acts both ways, so work it out with either sign. ASCE/SEI 7-16: 2.3.6 and 2.4.5; 7-22: 2.3.6 and 2.4.5. Partly from memory: confirm."""
+    return call("ELF_COMBINE", combination, D, E_v, E_h, L, S, edition)
+
+
+@xw.func(category="Storyledger: Load effects")
+@xw.arg(
+    "combination",
+    "raw",
+    doc="Load combination: 2.3.6 strength, 2.4.5 allowable stress: 2.3.6-6, 2.3.6-7, 2.4.5-8, 2.4.5-9, 2.4.5-10.",
+)
+@xw.arg("S_DS", "raw", doc="Design spectral acceleration at short periods [g], above 0.")
+@xw.arg(
+    "edition",
+    "raw",
+    doc="Edition of ASCE/SEI 7, as text (in a cell: format the cell as Text, or it turns into a date): 7-16, 7-22.",
+)
+@xw.ret("raw")
+def ELF_DEAD_FACTOR(combination: Any, S_DS: Any, edition: Any) -> Any:
+    """Factor on dead load in a combination, with the vertical seismic effect taken in. ASCE/SEI 7-16: 2.3.6 and 2.4.5; 7-22: 2.3.6 and 2.4.5. Partly from memory: confirm."""
+    return call("ELF_DEAD_FACTOR", combination, S_DS, edition)
 
 
 @xw.func(category="Storyledger: Drift")
@@ -651,6 +1695,28 @@ def ELF_DRIFT(d_upper: Any, d_lower: Any, C_d: Any, I_e: Any) -> Any:
 def ELF_DRIFT_LIMIT(h_sx: Any, structure: Any, risk_category: Any, rho: Any = OMITTED) -> Any:
     """Allowable story drift; divided by rho where the clause on moment frames asks for it. ASCE/SEI 7-16: 12.12.1, Table 12.12-1; 7-22: 12.12.1, Table 12.12-1. Partly from memory: confirm."""
     return call("ELF_DRIFT_LIMIT", h_sx, structure, risk_category, rho)
+
+
+@xw.func(category="Storyledger: Drift")
+@xw.arg("TIR", "raw", doc="Torsional irregularity ratio [no unit], at least 1.")
+@xw.arg("SDC", "raw", doc="Seismic Design Category: A, B, C, D, E, F.")
+@xw.ret("raw")
+def ELF_DRIFT_EDGES(TIR: Any, SDC: Any) -> Any:
+    """Whether the design story drift is taken along the edges: yes or no. ASCE/SEI 7-16: 12.8.6; 7-22: 12.8.6."""
+    return call("ELF_DRIFT_EDGES", TIR, SDC)
+
+
+@xw.func(category="Storyledger: Drift")
+@xw.arg(
+    "Delta_cm", "raw", doc="Design story drift between the centres of mass [a displacement unit], any number."
+)
+@xw.arg("Delta_1", "raw", doc="Design story drift along one edge [a displacement unit], any number.")
+@xw.arg("Delta_2", "raw", doc="Design story drift along the opposite edge [a displacement unit], any number.")
+@xw.arg("edges", "raw", doc="Along the edges: yes, no.")
+@xw.ret("raw")
+def ELF_DRIFT_CHECKED(Delta_cm: Any, Delta_1: Any, Delta_2: Any, edges: Any) -> Any:
+    """Design story drift that is compared with the allowable one: along the edges where due. ASCE/SEI 7-16: 12.8.6; 7-22: 12.8.6."""
+    return call("ELF_DRIFT_CHECKED", Delta_cm, Delta_1, Delta_2, edges)
 
 
 @xw.func(category="Storyledger: Stability")
@@ -750,6 +1816,363 @@ def ELF_FPX(w_px: Any, h_x: Any, forces: Any, weights: Any, heights: Any, S_DS: 
 def ELF_FPX_GOVERNS(w_px: Any, h_x: Any, forces: Any, weights: Any, heights: Any, S_DS: Any, I_e: Any) -> Any:
     """Which of the three diaphragm force equations governs at a level. ASCE/SEI 7-16: 12.10.1.1, Eq. 12.10-1; 7-22: 12.10.1.1, Eq. 12.10-1."""
     return call("ELF_FPX_GOVERNS", w_px, h_x, forces, weights, heights, S_DS, I_e)
+
+
+@xw.func(category="Storyledger: Diaphragm")
+@xw.arg(
+    "delta_MDD", "raw", doc="Largest in-plane deflection of the diaphragm [a displacement unit], at least 0."
+)
+@xw.arg("Delta_ADVE", "raw", doc="Mean drift of adjoining vertical elements [a displacement unit], above 0.")
+@xw.ret("raw")
+def ELF_FLEX_RATIO(delta_MDD: Any, Delta_ADVE: Any) -> Any:
+    """Deflection of a diaphragm over the drift of the vertical elements beside it. ASCE/SEI 7-16: 12.3.1.3, Eq. 12.3-1; 7-22: 12.3.1.3, Eq. 12.3-1. Partly from memory: confirm."""
+    return call("ELF_FLEX_RATIO", delta_MDD, Delta_ADVE)
+
+
+@xw.func(category="Storyledger: Diaphragm")
+@xw.arg(
+    "delta_MDD", "raw", doc="Largest in-plane deflection of the diaphragm [a displacement unit], at least 0."
+)
+@xw.arg("Delta_ADVE", "raw", doc="Mean drift of adjoining vertical elements [a displacement unit], above 0.")
+@xw.ret("raw")
+def ELF_FLEX_STATUS(delta_MDD: Any, Delta_ADVE: Any) -> Any:
+    """Whether a diaphragm is flexible by calculation. ASCE/SEI 7-16: 12.3.1.3, Eq. 12.3-1; 7-22: 12.3.1.3, Eq. 12.3-1. Partly from memory: confirm."""
+    return call("ELF_FLEX_STATUS", delta_MDD, Delta_ADVE)
+
+
+@xw.func(category="Storyledger: Diaphragm")
+@xw.arg("F_px", "raw", doc="Diaphragm design force of the level [a force unit], at least 0.")
+@xw.arg("F_transfer", "raw", doc="Force transferred between vertical elements [a force unit], at least 0.")
+@xw.arg("rho", "raw", doc="Redundancy factor [no unit], at least 1 and at most 1.3.")
+@xw.arg("Omega_0", "raw", doc="Overstrength factor [no unit], at least 1.")
+@xw.arg("offset", "raw", doc="Transfer by an out-of-plane offset (horizontal Type 4): yes, no.")
+@xw.ret("raw")
+def ELF_FPX_TRANSFER(F_px: Any, F_transfer: Any, rho: Any, Omega_0: Any, offset: Any) -> Any:
+    """Diaphragm force with the forces transferred through it. ASCE/SEI 7-16: 12.10.1.1; 7-22: 12.10.1.1. Partly from memory: confirm."""
+    return call("ELF_FPX_TRANSFER", F_px, F_transfer, rho, Omega_0, offset)
+
+
+@xw.func(category="Storyledger: Diaphragm")
+@xw.arg(
+    "E_story", "raw", doc="Collector force under the story forces of 12.8 or 12.9 [a force unit], at least 0."
+)
+@xw.arg("E_sum", "raw", doc="Collector force under the forces of Eq. 12.10-1 [a force unit], at least 0.")
+@xw.arg("E_low", "raw", doc="Collector force under the forces of Eq. 12.10-2 [a force unit], at least 0.")
+@xw.arg("Omega_0", "raw", doc="Overstrength factor [no unit], at least 1.")
+@xw.arg("light_frame", "raw", doc="Braced by light-frame shear walls alone: yes, no.")
+@xw.ret("raw")
+def ELF_COLLECTOR(E_story: Any, E_sum: Any, E_low: Any, Omega_0: Any, light_frame: Any) -> Any:
+    """Governing force of a collector, Seismic Design Category C to F. ASCE/SEI 7-16: 12.10.2.1; 7-22: 12.10.2.1. Partly from memory: confirm."""
+    return call("ELF_COLLECTOR", E_story, E_sum, E_low, Omega_0, light_frame)
+
+
+@xw.func(category="Storyledger: Diaphragm")
+@xw.arg(
+    "E_story", "raw", doc="Collector force under the story forces of 12.8 or 12.9 [a force unit], at least 0."
+)
+@xw.arg("E_sum", "raw", doc="Collector force under the forces of Eq. 12.10-1 [a force unit], at least 0.")
+@xw.arg("E_low", "raw", doc="Collector force under the forces of Eq. 12.10-2 [a force unit], at least 0.")
+@xw.arg("Omega_0", "raw", doc="Overstrength factor [no unit], at least 1.")
+@xw.arg("light_frame", "raw", doc="Braced by light-frame shear walls alone: yes, no.")
+@xw.ret("raw")
+def ELF_COLLECTOR_GOVERNS(E_story: Any, E_sum: Any, E_low: Any, Omega_0: Any, light_frame: Any) -> Any:
+    """Which force governs a collector. ASCE/SEI 7-16: 12.10.2.1; 7-22: 12.10.2.1. Partly from memory: confirm."""
+    return call("ELF_COLLECTOR_GOVERNS", E_story, E_sum, E_low, Omega_0, light_frame)
+
+
+@xw.func(category="Storyledger: Diaphragm")
+@xw.arg("S_DS", "raw", doc="Design spectral acceleration at short periods [g], above 0.")
+@xw.arg("S_D1", "raw", doc="Design spectral acceleration at 1 s [g], above 0.")
+@xw.arg("I_e", "raw", doc="Importance factor [no unit], at least 1.")
+@xw.arg(
+    "R_diaph",
+    "raw",
+    doc="Response modification coefficient of the diaphragm: confirm; recalled as 4.5 or 1.5 [no unit], at least 1.",
+)
+@xw.arg(
+    "T_diaph",
+    "raw",
+    doc="Period of the diaphragm: confirm; recalled as 0.002 L_f (wood), 0.001 L_f (deck), L_f in ft [s], above 0.",
+)
+@xw.ret("raw")
+def ELF_CS_DIAPH(S_DS: Any, S_D1: Any, I_e: Any, R_diaph: Any, T_diaph: Any) -> Any:
+    """Response coefficient of a flexible diaphragm, one-story method: all of it uncertain. ASCE/SEI 7-22: 12.10.4. Partly from memory: confirm."""
+    return call("ELF_CS_DIAPH", S_DS, S_D1, I_e, R_diaph, T_diaph)
+
+
+@xw.func(category="Storyledger: Diaphragm")
+@xw.arg("S_DS", "raw", doc="Design spectral acceleration at short periods [g], above 0.")
+@xw.arg("I_e", "raw", doc="Importance factor [no unit], at least 1.")
+@xw.arg("W_w", "raw", doc="Weight of the wall [a force unit], at least 0.")
+@xw.ret("raw")
+def ELF_FP_WALL(S_DS: Any, I_e: Any, W_w: Any) -> Any:
+    """Force on a structural wall out of its plane. ASCE/SEI 7-16: 12.11.1; 7-22: 12.11.1. Partly from memory: confirm."""
+    return call("ELF_FP_WALL", S_DS, I_e, W_w)
+
+
+@xw.func(category="Storyledger: Diaphragm")
+@xw.arg("L_f", "raw", doc="Span of the flexible diaphragm [a length unit], at least 0.")
+@xw.arg("diaphragm", "raw", doc="Diaphragm: rigid, flexible.")
+@xw.arg("units", "raw", doc="Unit system: us (kip, ft, in) or si (kN, m, mm): us, si.")
+@xw.ret("raw")
+def ELF_KA(L_f: Any, diaphragm: Any, units: Any) -> Any:
+    """Amplification of the anchorage force by a flexible diaphragm. ASCE/SEI 7-16: 12.11.2.1, Eq. 12.11-2; 7-22: 12.11.2.1, Eq. 12.11-2. Partly from memory: confirm."""
+    return call("ELF_KA", L_f, diaphragm, units)
+
+
+@xw.func(category="Storyledger: Diaphragm")
+@xw.arg("S_DS", "raw", doc="Design spectral acceleration at short periods [g], above 0.")
+@xw.arg("k_a", "raw", doc="Amplification by a flexible diaphragm [no unit], at least 1 and at most 2.")
+@xw.arg("I_e", "raw", doc="Importance factor [no unit], at least 1.")
+@xw.arg("W_p", "raw", doc="Weight of the wall tributary to the anchor [a force unit], at least 0.")
+@xw.ret("raw")
+def ELF_FP_ANCHOR(S_DS: Any, k_a: Any, I_e: Any, W_p: Any) -> Any:
+    """Anchorage force of a structural wall. ASCE/SEI 7-16: 12.11.2.1, Eq. 12.11-1; 7-22: 12.11.2.1, Eq. 12.11-1. Partly from memory: confirm."""
+    return call("ELF_FP_ANCHOR", S_DS, k_a, I_e, W_p)
+
+
+@xw.func(category="Storyledger: Alternative diaphragm procedure")
+@xw.arg(
+    "system",
+    "raw",
+    doc="Seismic force-resisting system: buckling-restrained braced frame, moment frame, dual system with moment frame, all other.",
+)
+@xw.ret("raw")
+def ELF_ZS(system: Any) -> Any:
+    """Mode shape factor of a seismic force-resisting system, for diaphragms. ASCE/SEI 7-16: 12.10.3.2; 7-22: 12.10.3.2. Partly from memory: confirm."""
+    return call("ELF_ZS", system)
+
+
+@xw.func(category="Storyledger: Alternative diaphragm procedure")
+@xw.arg(
+    "diaphragm",
+    "raw",
+    doc="Diaphragm: cast-in-place concrete flexure, cast-in-place concrete shear, precast concrete elastic design, precast concrete basic design, precast concrete reduced design, wood sheathed.",
+)
+@xw.ret("raw")
+def ELF_RS(diaphragm: Any) -> Any:
+    """Design force reduction factor of a diaphragm; steel deck of 7-22 is your own entry. ASCE/SEI 7-16: 12.10.3.5, Table 12.10-1; 7-22: 12.10.3.5, Table 12.10-1. Partly from memory: confirm."""
+    return call("ELF_RS", diaphragm)
+
+
+@xw.func(category="Storyledger: Alternative diaphragm procedure")
+@xw.arg("S_DS", "raw", doc="Design spectral acceleration at short periods [g], above 0.")
+@xw.arg("I_e", "raw", doc="Importance factor [no unit], at least 1.")
+@xw.ret("raw")
+def ELF_CP0(S_DS: Any, I_e: Any) -> Any:
+    """Diaphragm acceleration coefficient at the base. ASCE/SEI 7-16: 12.10.3.2; 7-22: 12.10.3.2. Partly from memory: confirm."""
+    return call("ELF_CP0", S_DS, I_e)
+
+
+@xw.func(category="Storyledger: Alternative diaphragm procedure")
+@xw.arg("z_s", "raw", doc="Mode shape factor [no unit], above 0.")
+@xw.arg("N", "raw", doc="Stories above the base, a whole number [no unit], at least 1.")
+@xw.arg("c_m1", "raw", doc="Coefficient, recalled as 0.5: confirm before you enter it [no unit], at least 0.")
+@xw.ret("raw")
+def ELF_GM1(z_s: Any, N: Any, c_m1: Any) -> Any:
+    """First mode contribution factor; its coefficient is uncertain and an entry. ASCE/SEI 7-16: 12.10.3.2; 7-22: 12.10.3.2. Partly from memory: confirm."""
+    return call("ELF_GM1", z_s, N, c_m1)
+
+
+@xw.func(category="Storyledger: Alternative diaphragm procedure")
+@xw.arg("z_s", "raw", doc="Mode shape factor [no unit], above 0.")
+@xw.arg("N", "raw", doc="Stories above the base, a whole number [no unit], at least 1.")
+@xw.ret("raw")
+def ELF_GM2(z_s: Any, N: Any) -> Any:
+    """Higher mode contribution factor. ASCE/SEI 7-16: 12.10.3.2; 7-22: 12.10.3.2. Partly from memory: confirm."""
+    return call("ELF_GM2", z_s, N)
+
+
+@xw.func(category="Storyledger: Alternative diaphragm procedure")
+@xw.arg("N", "raw", doc="Stories above the base, a whole number [no unit], at least 1.")
+@xw.arg("S_DS", "raw", doc="Design spectral acceleration at short periods [g], above 0.")
+@xw.arg("S_D1", "raw", doc="Design spectral acceleration at 1 s [g], above 0.")
+@xw.arg("I_e", "raw", doc="Importance factor [no unit], at least 1.")
+@xw.ret("raw")
+def ELF_CS_HIGHER(N: Any, S_DS: Any, S_D1: Any, I_e: Any) -> Any:
+    """Higher mode seismic response coefficient; 0 for one story. ASCE/SEI 7-16: 12.10.3.2; 7-22: 12.10.3.2. Partly from memory: confirm."""
+    return call("ELF_CS_HIGHER", N, S_DS, S_D1, I_e)
+
+
+@xw.func(category="Storyledger: Alternative diaphragm procedure")
+@xw.arg("C_p0", "raw", doc="Acceleration coefficient at the base [no unit], above 0.")
+@xw.arg("G_m1", "raw", doc="First mode contribution factor [no unit], at least 1.")
+@xw.arg("Omega_0", "raw", doc="Overstrength factor [no unit], at least 1.")
+@xw.arg("C_s", "raw", doc="Seismic response coefficient of 12.8 or 12.9 [no unit], above 0.")
+@xw.ret("raw")
+def ELF_CPI(C_p0: Any, G_m1: Any, Omega_0: Any, C_s: Any) -> Any:
+    """Diaphragm acceleration coefficient at 0.8 h_n, and the least at the top. ASCE/SEI 7-16: 12.10.3.2; 7-22: 12.10.3.2. Partly from memory: confirm."""
+    return call("ELF_CPI", C_p0, G_m1, Omega_0, C_s)
+
+
+@xw.func(category="Storyledger: Alternative diaphragm procedure")
+@xw.arg("C_pi", "raw", doc="Acceleration coefficient at 0.8 h_n [no unit], above 0.")
+@xw.arg("G_m1", "raw", doc="First mode contribution factor [no unit], at least 1.")
+@xw.arg("Omega_0", "raw", doc="Overstrength factor [no unit], at least 1.")
+@xw.arg("C_s", "raw", doc="Seismic response coefficient of 12.8 or 12.9 [no unit], above 0.")
+@xw.arg("G_m2", "raw", doc="Higher mode contribution factor [no unit], at least 0.")
+@xw.arg("C_s2", "raw", doc="Higher mode seismic response coefficient [no unit], at least 0.")
+@xw.ret("raw")
+def ELF_CPN(C_pi: Any, G_m1: Any, Omega_0: Any, C_s: Any, G_m2: Any, C_s2: Any) -> Any:
+    """Diaphragm acceleration coefficient at the top. ASCE/SEI 7-16: 12.10.3.2; 7-22: 12.10.3.2. Partly from memory: confirm."""
+    return call("ELF_CPN", C_pi, G_m1, Omega_0, C_s, G_m2, C_s2)
+
+
+@xw.func(category="Storyledger: Alternative diaphragm procedure")
+@xw.arg("h_x", "raw", doc="Height of level x above the base, at most h_n [a length unit], at least 0.")
+@xw.arg("h_n", "raw", doc="Structural height [a length unit], above 0.")
+@xw.arg("N", "raw", doc="Stories above the base, a whole number [no unit], at least 1.")
+@xw.arg("C_p0", "raw", doc="Acceleration coefficient at the base [no unit], above 0.")
+@xw.arg("C_pi", "raw", doc="Acceleration coefficient at 0.8 h_n [no unit], above 0.")
+@xw.arg("C_pn", "raw", doc="Acceleration coefficient at the top [no unit], above 0.")
+@xw.ret("raw")
+def ELF_CPX(h_x: Any, h_n: Any, N: Any, C_p0: Any, C_pi: Any, C_pn: Any) -> Any:
+    """Diaphragm acceleration coefficient of a level. ASCE/SEI 7-16: 12.10.3.2; 7-22: 12.10.3.2. Partly from memory: confirm."""
+    return call("ELF_CPX", h_x, h_n, N, C_p0, C_pi, C_pn)
+
+
+@xw.func(category="Storyledger: Alternative diaphragm procedure")
+@xw.arg("C_px", "raw", doc="Acceleration coefficient of the level [no unit], above 0.")
+@xw.arg("w_px", "raw", doc="Weight tributary to the diaphragm at level x [a force unit], at least 0.")
+@xw.arg("R_s", "raw", doc="Design force reduction factor of the diaphragm [no unit], above 0.")
+@xw.arg("S_DS", "raw", doc="Design spectral acceleration at short periods [g], above 0.")
+@xw.arg("I_e", "raw", doc="Importance factor [no unit], at least 1.")
+@xw.ret("raw")
+def ELF_FPX_ALT(C_px: Any, w_px: Any, R_s: Any, S_DS: Any, I_e: Any) -> Any:
+    """Diaphragm design force of a level by the alternative procedure. ASCE/SEI 7-16: 12.10.3.2, Eq. 12.10-4; 7-22: 12.10.3.2, Eq. 12.10-4. Partly from memory: confirm."""
+    return call("ELF_FPX_ALT", C_px, w_px, R_s, S_DS, I_e)
+
+
+@xw.func(category="Storyledger: Separation")
+@xw.arg(
+    "delta_max",
+    "raw",
+    doc="Largest elastic displacement, torsion included [a displacement unit], at least 0.",
+)
+@xw.arg(
+    "delta_di",
+    "raw",
+    doc="Diaphragm deflection at the design earthquake; 0 where none [a displacement unit], at least 0.",
+)
+@xw.arg("C_d", "raw", doc="Deflection amplification factor [no unit], at least 1.")
+@xw.arg("I_e", "raw", doc="Importance factor [no unit], at least 1.")
+@xw.arg(
+    "edition",
+    "raw",
+    doc="Edition of ASCE/SEI 7, as text (in a cell: format the cell as Text, or it turns into a date): 7-16, 7-22.",
+)
+@xw.ret("raw")
+def ELF_DELTA_M(delta_max: Any, delta_di: Any, C_d: Any, I_e: Any, edition: Any) -> Any:
+    """Displacement that a separation has to take in; the set-back from a property line. ASCE/SEI 7-16: 12.12.3, Eq. 12.12-1; 7-22: 12.12.3, Eq. 12.12-1. Partly from memory: confirm."""
+    return call("ELF_DELTA_M", delta_max, delta_di, C_d, I_e, edition)
+
+
+@xw.func(category="Storyledger: Separation")
+@xw.arg(
+    "delta_M1", "raw", doc="Displacement of one structure at the place [a displacement unit], at least 0."
+)
+@xw.arg("delta_M2", "raw", doc="Displacement of the other at that height [a displacement unit], at least 0.")
+@xw.ret("raw")
+def ELF_DELTA_MT(delta_M1: Any, delta_M2: Any) -> Any:
+    """Least gap between two structures on one property. ASCE/SEI 7-16: 12.12.3, Eq. 12.12-2; 7-22: 12.12.3, Eq. 12.12-2. Partly from memory: confirm."""
+    return call("ELF_DELTA_MT", delta_M1, delta_M2)
+
+
+@xw.func(category="Storyledger: Separation")
+@xw.arg("gap", "raw", doc="Clear distance [a displacement unit], at least 0.")
+@xw.arg("delta_MT", "raw", doc="Least distance [a displacement unit], at least 0.")
+@xw.ret("raw")
+def ELF_GAP_STATUS(gap: Any, delta_MT: Any) -> Any:
+    """Whether a gap is wide enough; to a property line, give delta_M as the least distance. ASCE/SEI 7-16: 12.12.3, Eq. 12.12-2; 7-22: 12.12.3, Eq. 12.12-2. Partly from memory: confirm."""
+    return call("ELF_GAP_STATUS", gap, delta_MT)
+
+
+@xw.func(category="Storyledger: Separation")
+@xw.arg(
+    "delta_e",
+    "raw",
+    doc="Elastic displacement under the strength-level forces [a displacement unit], any number.",
+)
+@xw.arg(
+    "delta_di",
+    "raw",
+    doc="Diaphragm deflection at the design earthquake; 0 where none [a displacement unit], at least 0.",
+)
+@xw.arg("R", "raw", doc="Response modification coefficient [no unit], at least 1.")
+@xw.arg("I_e", "raw", doc="Importance factor [no unit], at least 1.")
+@xw.ret("raw")
+def ELF_DELTA_MCE(delta_e: Any, delta_di: Any, R: Any, I_e: Any) -> Any:
+    """Displacement at the maximum considered earthquake, for members between structures. ASCE/SEI 7-16: 12.12.4; 7-22: 12.8.6, Eq. 12.8-17. Partly from memory: confirm."""
+    return call("ELF_DELTA_MCE", delta_e, delta_di, R, I_e)
+
+
+@xw.func(category="Storyledger: Two-stage procedure")
+@xw.arg("V", "raw", doc="Base shear of the part (lower: with the upper reactions) [a force unit], above 0.")
+@xw.arg("delta", "raw", doc="Elastic displacement at its top, base fixed [a displacement unit], above 0.")
+@xw.ret("raw")
+def ELF_PART_STIFFNESS(V: Any, delta: Any) -> Any:
+    """Stiffness of the upper or lower part: its base shear over the displacement at its own top. ASCE/SEI 7-16: 12.2.3.2, item a; 7-22: 12.2.3.2, item a. Partly from memory: confirm."""
+    return call("ELF_PART_STIFFNESS", V, delta)
+
+
+@xw.func(category="Storyledger: Two-stage procedure")
+@xw.arg("K_lower", "raw", doc="Stiffness of the lower part [a stiffness unit], above 0.")
+@xw.arg("K_upper", "raw", doc="Stiffness of the upper part [a stiffness unit], above 0.")
+@xw.ret("raw")
+def ELF_STIFFNESS_RATIO(K_lower: Any, K_upper: Any) -> Any:
+    """Stiffness of the lower part over that of the upper part: at least 10. ASCE/SEI 7-16: 12.2.3.2, item a; 7-22: 12.2.3.2, item a. Partly from memory: confirm."""
+    return call("ELF_STIFFNESS_RATIO", K_lower, K_upper)
+
+
+@xw.func(category="Storyledger: Two-stage procedure")
+@xw.arg("T_whole", "raw", doc="Period of the whole structure [s], above 0.")
+@xw.arg("T_upper", "raw", doc="Period of the upper part on a fixed base [s], above 0.")
+@xw.ret("raw")
+def ELF_PERIOD_RATIO(T_whole: Any, T_upper: Any) -> Any:
+    """Period of the whole over that of the upper part on a fixed base: at most 1.1. ASCE/SEI 7-16: 12.2.3.2, item b; 7-22: 12.2.3.2, item b. Partly from memory: confirm."""
+    return call("ELF_PERIOD_RATIO", T_whole, T_upper)
+
+
+@xw.func(category="Storyledger: Two-stage procedure")
+@xw.arg("R_upper", "raw", doc="Response modification coefficient of the upper part [no unit], at least 1.")
+@xw.arg("rho_upper", "raw", doc="Redundancy factor of the upper part [no unit], at least 1.")
+@xw.arg("R_lower", "raw", doc="Response modification coefficient of the lower part [no unit], at least 1.")
+@xw.arg("rho_lower", "raw", doc="Redundancy factor of the lower part [no unit], at least 1.")
+@xw.ret("raw")
+def ELF_REACTION_FACTOR(R_upper: Any, rho_upper: Any, R_lower: Any, rho_lower: Any) -> Any:
+    """Factor on the reactions of the upper part as they act on the lower part, at least 1. ASCE/SEI 7-16: 12.2.3.2, item d; 7-22: 12.2.3.2, item d. Partly from memory: confirm."""
+    return call("ELF_REACTION_FACTOR", R_upper, rho_upper, R_lower, rho_lower)
+
+
+@xw.func(category="Storyledger: Two-stage procedure")
+@xw.arg("stiffness_ratio", "raw", doc="Stiffness ratio, lower to upper [no unit], above 0.")
+@xw.arg("period_ratio", "raw", doc="Period ratio, whole to upper [no unit], above 0.")
+@xw.arg(
+    "upper_procedure",
+    "raw",
+    doc="Procedure by which the upper part is analysed: equivalent lateral force, modal, another.",
+)
+@xw.arg(
+    "lower_procedure",
+    "raw",
+    doc="Procedure by which the lower part is analysed: equivalent lateral force, modal, another.",
+)
+@xw.ret("raw")
+def ELF_TWO_STAGE(stiffness_ratio: Any, period_ratio: Any, upper_procedure: Any, lower_procedure: Any) -> Any:
+    """Whether the two-stage procedure may be used, and what fails. ASCE/SEI 7-16: 12.2.3.2; 7-22: 12.2.3.2. Partly from memory: confirm."""
+    return call("ELF_TWO_STAGE", stiffness_ratio, period_ratio, upper_procedure, lower_procedure)
+
+
+@xw.func(category="Storyledger: Two-stage procedure")
+@xw.arg(
+    "discontinuity",
+    "raw",
+    doc="Whether there is an out-of-plane or in-plane offset at the transition: yes, no.",
+)
+@xw.ret("raw")
+def ELF_TWO_STAGE_TRANSITION(discontinuity: Any) -> Any:
+    """What a discontinuity at the transition between the parts brings. ASCE/SEI 7-16: 12.2.3.2; 7-22: 12.2.3.2. Partly from memory: confirm."""
+    return call("ELF_TWO_STAGE_TRANSITION", discontinuity)
 
 
 @xw.func(category="Storyledger: Story stiffness")

@@ -147,6 +147,102 @@ failed:
     ELF_SA = CVErr(2015)
 End Function
 
+Public Function ELF_SYSTEM_R(system, edition)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_SYSTEM_R = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_SYSTEM_R", Array(Contents(system), Contents(edition)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_SYSTEM_R = CVErr(2015)
+End Function
+
+Public Function ELF_SYSTEM_OMEGA(system, edition)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_SYSTEM_OMEGA = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_SYSTEM_OMEGA", Array(Contents(system), Contents(edition)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_SYSTEM_OMEGA = CVErr(2015)
+End Function
+
+Public Function ELF_SYSTEM_CD(system, edition)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_SYSTEM_CD = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_SYSTEM_CD", Array(Contents(system), Contents(edition)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_SYSTEM_CD = CVErr(2015)
+End Function
+
+Public Function ELF_SYSTEM_SOURCE(system, edition)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_SYSTEM_SOURCE = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_SYSTEM_SOURCE", Array(Contents(system), Contents(edition)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_SYSTEM_SOURCE = CVErr(2015)
+End Function
+
+Public Function ELF_SYSTEM_STATUS(system, R, Omega_0, C_d, edition)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_SYSTEM_STATUS = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_SYSTEM_STATUS", Array(Contents(system), Contents(R), Contents(Omega_0), Contents(C_d), Contents(edition)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_SYSTEM_STATUS = CVErr(2015)
+End Function
+
+Public Function ELF_HEIGHT_LIMIT(system, SDC, increase, edition, units)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_HEIGHT_LIMIT = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_HEIGHT_LIMIT", Array(Contents(system), Contents(SDC), Contents(increase), Contents(edition), Contents(units)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_HEIGHT_LIMIT = CVErr(2015)
+End Function
+
+Public Function ELF_HEIGHT_STATUS(h_n, system, SDC, increase, edition, units)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_HEIGHT_STATUS = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_HEIGHT_STATUS", Array(Contents(h_n), Contents(system), Contents(SDC), Contents(increase), Contents(edition), Contents(units)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_HEIGHT_STATUS = CVErr(2015)
+End Function
+
+Public Function ELF_OMEGA(Omega_0, reduction)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_OMEGA = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_OMEGA", Array(Contents(Omega_0), Contents(reduction)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_OMEGA = CVErr(2015)
+End Function
+
+Public Function ELF_LOWER_PART(upper, lower, R_upper, R_lower)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_LOWER_PART = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_LOWER_PART", Array(Contents(upper), Contents(lower), Contents(R_upper), Contents(R_lower)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_LOWER_PART = CVErr(2015)
+End Function
+
+Public Function ELF_TRANSFER_FACTOR(R_upper, R_lower)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_TRANSFER_FACTOR = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_TRANSFER_FACTOR", Array(Contents(R_upper), Contents(R_lower)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_TRANSFER_FACTOR = CVErr(2015)
+End Function
+
+Public Function ELF_R_LEAST(R_systems)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_R_LEAST = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_R_LEAST", Array(Contents(R_systems)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_R_LEAST = CVErr(2015)
+End Function
+
+Public Function ELF_LEAST_R_VALUE(coefficients, R_systems)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_LEAST_R_VALUE = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_LEAST_R_VALUE", Array(Contents(coefficients), Contents(R_systems)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_LEAST_R_VALUE = CVErr(2015)
+End Function
+
 Public Function ELF_SA_MULTI(T, T_i, S_ai, T_L, tail)
     If TypeOf Application.Caller Is Range Then On Error GoTo failed
     ELF_SA_MULTI = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_SA_MULTI", Array(Contents(T), Contents(T_i), Contents(S_ai), Contents(T_L), Contents(tail)), ThisWorkbook, Application.Caller))
@@ -283,6 +379,54 @@ failed:
     ELF_PERIOD = CVErr(2015)
 End Function
 
+Public Function ELF_TA_STORIES_STATUS(N, h_n, frames, units)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_TA_STORIES_STATUS = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_TA_STORIES_STATUS", Array(Contents(N), Contents(h_n), Contents(frames), Contents(units)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_TA_STORIES_STATUS = CVErr(2015)
+End Function
+
+Public Function ELF_PERIOD_GOVERNS(T_a, C_u, T_computed)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_PERIOD_GOVERNS = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_PERIOD_GOVERNS", Array(Contents(T_a), Contents(C_u), Contents(T_computed)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_PERIOD_GOVERNS = CVErr(2015)
+End Function
+
+Public Function ELF_PERIOD_DRIFT(T_a, C_u, T_computed, cap)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_PERIOD_DRIFT = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_PERIOD_DRIFT", Array(Contents(T_a), Contents(C_u), Contents(T_computed), Contents(cap)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_PERIOD_DRIFT = CVErr(2015)
+End Function
+
+Public Function ELF_CW(A_B, h_n, wall_areas, wall_lengths)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_CW = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_CW", Array(Contents(A_B), Contents(h_n), Contents(wall_areas), Contents(wall_lengths)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_CW = CVErr(2015)
+End Function
+
+Public Function ELF_TA_WALLS(h_n, C_w, units)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_TA_WALLS = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_TA_WALLS", Array(Contents(h_n), Contents(C_w), Contents(units)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_TA_WALLS = CVErr(2015)
+End Function
+
+Public Function ELF_RAYLEIGH(weights, forces, displacements, units)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_RAYLEIGH = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_RAYLEIGH", Array(Contents(weights), Contents(forces), Contents(displacements), Contents(units)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_RAYLEIGH = CVErr(2015)
+End Function
+
 Public Function ELF_CS_PLATEAU(S_DS, R, I_e)
     If TypeOf Application.Caller Is Range Then On Error GoTo failed
     ELF_CS_PLATEAU = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_CS_PLATEAU", Array(Contents(S_DS), Contents(R), Contents(I_e)), ThisWorkbook, Application.Caller))
@@ -337,6 +481,86 @@ Public Function ELF_V(C_s, W)
     Exit Function
 failed:
     ELF_V = CVErr(2015)
+End Function
+
+Public Function ELF_CS_MULTI_BOUND(S_a, R, I_e)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_CS_MULTI_BOUND = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_CS_MULTI_BOUND", Array(Contents(S_a), Contents(R), Contents(I_e)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_CS_MULTI_BOUND = CVErr(2015)
+End Function
+
+Public Function ELF_CS_MULTI(S_a, S_DS, S_1, R, I_e, edition)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_CS_MULTI = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_CS_MULTI", Array(Contents(S_a), Contents(S_DS), Contents(S_1), Contents(R), Contents(I_e), Contents(edition)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_CS_MULTI = CVErr(2015)
+End Function
+
+Public Function ELF_CS_MULTI_GOVERNS(S_a, S_DS, S_1, R, I_e, edition)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_CS_MULTI_GOVERNS = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_CS_MULTI_GOVERNS", Array(Contents(S_a), Contents(S_DS), Contents(S_1), Contents(R), Contents(I_e), Contents(edition)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_CS_MULTI_GOVERNS = CVErr(2015)
+End Function
+
+Public Function ELF_CS_DRIFT(S_DS, S_D1, S_1, T, T_L, R, I_e, edition)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_CS_DRIFT = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_CS_DRIFT", Array(Contents(S_DS), Contents(S_D1), Contents(S_1), Contents(T), Contents(T_L), Contents(R), Contents(I_e), Contents(edition)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_CS_DRIFT = CVErr(2015)
+End Function
+
+Public Function ELF_CS_DRIFT_GOVERNS(S_DS, S_D1, S_1, T, T_L, R, I_e, edition)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_CS_DRIFT_GOVERNS = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_CS_DRIFT_GOVERNS", Array(Contents(S_DS), Contents(S_D1), Contents(S_1), Contents(T), Contents(T_L), Contents(R), Contents(I_e), Contents(edition)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_CS_DRIFT_GOVERNS = CVErr(2015)
+End Function
+
+Public Function ELF_CS_DRIFT_MULTI(S_a, S_1, R, I_e, edition)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_CS_DRIFT_MULTI = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_CS_DRIFT_MULTI", Array(Contents(S_a), Contents(S_1), Contents(R), Contents(I_e), Contents(edition)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_CS_DRIFT_MULTI = CVErr(2015)
+End Function
+
+Public Function ELF_CS_DRIFT_MULTI_GOVERNS(S_a, S_1, R, I_e, edition)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_CS_DRIFT_MULTI_GOVERNS = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_CS_DRIFT_MULTI_GOVERNS", Array(Contents(S_a), Contents(S_1), Contents(R), Contents(I_e), Contents(edition)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_CS_DRIFT_MULTI_GOVERNS = CVErr(2015)
+End Function
+
+Public Function ELF_SDS_CAP(S_DS, N, T, regular, redundant, soft_site, risk_category)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_SDS_CAP = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_SDS_CAP", Array(Contents(S_DS), Contents(N), Contents(T), Contents(regular), Contents(redundant), Contents(soft_site), Contents(risk_category)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_SDS_CAP = CVErr(2015)
+End Function
+
+Public Function ELF_SDS_CAP_STATUS(N, T, regular, redundant, soft_site, risk_category)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_SDS_CAP_STATUS = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_SDS_CAP_STATUS", Array(Contents(N), Contents(T), Contents(regular), Contents(redundant), Contents(soft_site), Contents(risk_category)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_SDS_CAP_STATUS = CVErr(2015)
+End Function
+
+Public Function ELF_SSI_MIN(V, R)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_SSI_MIN = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_SSI_MIN", Array(Contents(V), Contents(R)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_SSI_MIN = CVErr(2015)
 End Function
 
 Public Function ELF_EXPONENT(T, Optional rule)
@@ -403,12 +627,340 @@ failed:
     ELF_BELOW = CVErr(2015)
 End Function
 
+Public Function ELF_ECC(x_M, x_R)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_ECC = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_ECC", Array(Contents(x_M), Contents(x_R)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_ECC = CVErr(2015)
+End Function
+
+Public Function ELF_ECC_ACC(L_perp)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_ECC_ACC = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_ECC_ACC", Array(Contents(L_perp)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_ECC_ACC = CVErr(2015)
+End Function
+
+Public Function ELF_MT(h_x, x_R, forces, centers, heights)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_MT = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_MT", Array(Contents(h_x), Contents(x_R), Contents(forces), Contents(centers), Contents(heights)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_MT = CVErr(2015)
+End Function
+
+Public Function ELF_MTA(h_x, forces, dimensions, amplifications, heights)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_MTA = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_MTA", Array(Contents(h_x), Contents(forces), Contents(dimensions), Contents(amplifications), Contents(heights)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_MTA = CVErr(2015)
+End Function
+
+Public Function ELF_MTA_SCOPE(TIR, SDC, edition)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_MTA_SCOPE = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_MTA_SCOPE", Array(Contents(TIR), Contents(SDC), Contents(edition)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_MTA_SCOPE = CVErr(2015)
+End Function
+
+Public Function ELF_TIR(Delta_1, Delta_2)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_TIR = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_TIR", Array(Contents(Delta_1), Contents(Delta_2)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_TIR = CVErr(2015)
+End Function
+
 Public Function ELF_AX(d_max, d_avg)
     If TypeOf Application.Caller Is Range Then On Error GoTo failed
     ELF_AX = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_AX", Array(Contents(d_max), Contents(d_avg)), ThisWorkbook, Application.Caller))
     Exit Function
 failed:
     ELF_AX = CVErr(2015)
+End Function
+
+Public Function ELF_AX_APPLIED(d_max, d_avg, TIR, SDC)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_AX_APPLIED = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_AX_APPLIED", Array(Contents(d_max), Contents(d_avg), Contents(TIR), Contents(SDC)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_AX_APPLIED = CVErr(2015)
+End Function
+
+Public Function ELF_RIGIDITY_CENTER(rigidities, positions)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_RIGIDITY_CENTER = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_RIGIDITY_CENTER", Array(Contents(rigidities), Contents(positions)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_RIGIDITY_CENTER = CVErr(2015)
+End Function
+
+Public Function ELF_RIGIDITY_POLAR(rigidities, distances)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_RIGIDITY_POLAR = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_RIGIDITY_POLAR", Array(Contents(rigidities), Contents(distances)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_RIGIDITY_POLAR = CVErr(2015)
+End Function
+
+Public Function ELF_WALL_DIRECT(V, R_i, rigidities)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_WALL_DIRECT = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_WALL_DIRECT", Array(Contents(V), Contents(R_i), Contents(rigidities)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_WALL_DIRECT = CVErr(2015)
+End Function
+
+Public Function ELF_WALL_TORSION(M_t, R_i, d_i, J)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_WALL_TORSION = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_WALL_TORSION", Array(Contents(M_t), Contents(R_i), Contents(d_i), Contents(J)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_WALL_TORSION = CVErr(2015)
+End Function
+
+Public Function ELF_SOFT_RATIO(h_x, stiffnesses, heights)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_SOFT_RATIO = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_SOFT_RATIO", Array(Contents(h_x), Contents(stiffnesses), Contents(heights)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_SOFT_RATIO = CVErr(2015)
+End Function
+
+Public Function ELF_SOFT_RATIO_THREE(h_x, stiffnesses, heights)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_SOFT_RATIO_THREE = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_SOFT_RATIO_THREE", Array(Contents(h_x), Contents(stiffnesses), Contents(heights)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_SOFT_RATIO_THREE = CVErr(2015)
+End Function
+
+Public Function ELF_WEAK_RATIO(h_x, strengths, heights)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_WEAK_RATIO = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_WEAK_RATIO", Array(Contents(h_x), Contents(strengths), Contents(heights)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_WEAK_RATIO = CVErr(2015)
+End Function
+
+Public Function ELF_WEIGHT_RATIO(h_x, weights, heights)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_WEIGHT_RATIO = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_WEIGHT_RATIO", Array(Contents(h_x), Contents(weights), Contents(heights)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_WEIGHT_RATIO = CVErr(2015)
+End Function
+
+Public Function ELF_GEOMETRY_RATIO(h_x, dimensions, heights)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_GEOMETRY_RATIO = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_GEOMETRY_RATIO", Array(Contents(h_x), Contents(dimensions), Contents(heights)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_GEOMETRY_RATIO = CVErr(2015)
+End Function
+
+Public Function ELF_DRIFT_RATIO_ABOVE(h_x, drift_ratios, heights)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_DRIFT_RATIO_ABOVE = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_DRIFT_RATIO_ABOVE", Array(Contents(h_x), Contents(drift_ratios), Contents(heights)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_DRIFT_RATIO_ABOVE = CVErr(2015)
+End Function
+
+Public Function ELF_DRIFT_EXCEPTION(drift_ratios, heights)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_DRIFT_EXCEPTION = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_DRIFT_EXCEPTION", Array(Contents(drift_ratios), Contents(heights)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_DRIFT_EXCEPTION = CVErr(2015)
+End Function
+
+Public Function ELF_REENTRANT_RATIO(p_x, p_y, L_x, L_y)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_REENTRANT_RATIO = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_REENTRANT_RATIO", Array(Contents(p_x), Contents(p_y), Contents(L_x), Contents(L_y)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_REENTRANT_RATIO = CVErr(2015)
+End Function
+
+Public Function ELF_TORSION_STATUS(TIR, diaphragm, one_sided, edition)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_TORSION_STATUS = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_TORSION_STATUS", Array(Contents(TIR), Contents(diaphragm), Contents(one_sided), Contents(edition)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_TORSION_STATUS = CVErr(2015)
+End Function
+
+Public Function ELF_REENTRANT_STATUS(ratio, edition)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_REENTRANT_STATUS = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_REENTRANT_STATUS", Array(Contents(ratio), Contents(edition)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_REENTRANT_STATUS = CVErr(2015)
+End Function
+
+Public Function ELF_DIAPHRAGM_STATUS(opening, change, edition)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_DIAPHRAGM_STATUS = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_DIAPHRAGM_STATUS", Array(Contents(opening), Contents(change), Contents(edition)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_DIAPHRAGM_STATUS = CVErr(2015)
+End Function
+
+Public Function ELF_SOFT_STATUS(h_x, stiffnesses, heights, drift_exception, SDC, edition)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_SOFT_STATUS = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_SOFT_STATUS", Array(Contents(h_x), Contents(stiffnesses), Contents(heights), Contents(drift_exception), Contents(SDC), Contents(edition)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_SOFT_STATUS = CVErr(2015)
+End Function
+
+Public Function ELF_WEIGHT_STATUS(h_x, weights, heights, drift_exception, SDC, edition)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_WEIGHT_STATUS = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_WEIGHT_STATUS", Array(Contents(h_x), Contents(weights), Contents(heights), Contents(drift_exception), Contents(SDC), Contents(edition)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_WEIGHT_STATUS = CVErr(2015)
+End Function
+
+Public Function ELF_GEOMETRY_STATUS(h_x, dimensions, heights, edition)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_GEOMETRY_STATUS = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_GEOMETRY_STATUS", Array(Contents(h_x), Contents(dimensions), Contents(heights), Contents(edition)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_GEOMETRY_STATUS = CVErr(2015)
+End Function
+
+Public Function ELF_WEAK_STATUS(h_x, strengths, heights, edition)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_WEAK_STATUS = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_WEAK_STATUS", Array(Contents(h_x), Contents(strengths), Contents(heights), Contents(edition)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_WEAK_STATUS = CVErr(2015)
+End Function
+
+Public Function ELF_IRREGULARITY(irregularity, exists, edition)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_IRREGULARITY = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_IRREGULARITY", Array(Contents(irregularity), Contents(exists), Contents(edition)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_IRREGULARITY = CVErr(2015)
+End Function
+
+Public Function ELF_CONSEQUENCE(irregularity, SDC, edition)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_CONSEQUENCE = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_CONSEQUENCE", Array(Contents(irregularity), Contents(SDC), Contents(edition)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_CONSEQUENCE = CVErr(2015)
+End Function
+
+Public Function ELF_RHO(SDC, configuration, TIR_X, TIR_Y, edition)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_RHO = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_RHO", Array(Contents(SDC), Contents(configuration), Contents(TIR_X), Contents(TIR_Y), Contents(edition)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_RHO = CVErr(2015)
+End Function
+
+Public Function ELF_RHO_REASON(SDC, configuration, TIR_X, TIR_Y, edition)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_RHO_REASON = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_RHO_REASON", Array(Contents(SDC), Contents(configuration), Contents(TIR_X), Contents(TIR_Y), Contents(edition)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_RHO_REASON = CVErr(2015)
+End Function
+
+Public Function ELF_RHO_USE(use, rho)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_RHO_USE = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_RHO_USE", Array(Contents(use), Contents(rho)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_RHO_USE = CVErr(2015)
+End Function
+
+Public Function ELF_WALL_BAYS(L_w, h_sx, light_frame)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_WALL_BAYS = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_WALL_BAYS", Array(Contents(L_w), Contents(h_sx), Contents(light_frame)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_WALL_BAYS = CVErr(2015)
+End Function
+
+Public Function ELF_RHO_STORY(V_x, V)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_RHO_STORY = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_RHO_STORY", Array(Contents(V_x), Contents(V)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_RHO_STORY = CVErr(2015)
+End Function
+
+Public Function ELF_EH(rho, Q_E)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_EH = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_EH", Array(Contents(rho), Contents(Q_E)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_EH = CVErr(2015)
+End Function
+
+Public Function ELF_EV(S_DS, D, taken)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_EV = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_EV", Array(Contents(S_DS), Contents(D), Contents(taken)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_EV = CVErr(2015)
+End Function
+
+Public Function ELF_EV_SPECTRUM(S_av, D)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_EV_SPECTRUM = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_EV_SPECTRUM", Array(Contents(S_av), Contents(D)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_EV_SPECTRUM = CVErr(2015)
+End Function
+
+Public Function ELF_EMH(Omega_0, Q_E)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_EMH = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_EMH", Array(Contents(Omega_0), Contents(Q_E)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_EMH = CVErr(2015)
+End Function
+
+Public Function ELF_EMH_LIMITED(Omega_0, Q_E, E_cl)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_EMH_LIMITED = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_EMH_LIMITED", Array(Contents(Omega_0), Contents(Q_E), Contents(E_cl)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_EMH_LIMITED = CVErr(2015)
+End Function
+
+Public Function ELF_COMBINATION_FACTOR(combination, term, edition)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_COMBINATION_FACTOR = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_COMBINATION_FACTOR", Array(Contents(combination), Contents(term), Contents(edition)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_COMBINATION_FACTOR = CVErr(2015)
+End Function
+
+Public Function ELF_COMBINE(combination, D, E_v, E_h, L, S, edition)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_COMBINE = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_COMBINE", Array(Contents(combination), Contents(D), Contents(E_v), Contents(E_h), Contents(L), Contents(S), Contents(edition)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_COMBINE = CVErr(2015)
+End Function
+
+Public Function ELF_DEAD_FACTOR(combination, S_DS, edition)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_DEAD_FACTOR = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_DEAD_FACTOR", Array(Contents(combination), Contents(S_DS), Contents(edition)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_DEAD_FACTOR = CVErr(2015)
 End Function
 
 Public Function ELF_DEFLECTION(delta_xe, C_d, I_e)
@@ -433,6 +985,22 @@ Public Function ELF_DRIFT_LIMIT(h_sx, structure, risk_category, Optional rho)
     Exit Function
 failed:
     ELF_DRIFT_LIMIT = CVErr(2015)
+End Function
+
+Public Function ELF_DRIFT_EDGES(TIR, SDC)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_DRIFT_EDGES = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_DRIFT_EDGES", Array(Contents(TIR), Contents(SDC)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_DRIFT_EDGES = CVErr(2015)
+End Function
+
+Public Function ELF_DRIFT_CHECKED(Delta_cm, Delta_1, Delta_2, edges)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_DRIFT_CHECKED = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_DRIFT_CHECKED", Array(Contents(Delta_cm), Contents(Delta_1), Contents(Delta_2), Contents(edges)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_DRIFT_CHECKED = CVErr(2015)
 End Function
 
 Public Function ELF_THETA(P_x, Delta, I_e, V_x, h_sx, C_d)
@@ -489,6 +1057,238 @@ Public Function ELF_FPX_GOVERNS(w_px, h_x, forces, weights, heights, S_DS, I_e)
     Exit Function
 failed:
     ELF_FPX_GOVERNS = CVErr(2015)
+End Function
+
+Public Function ELF_FLEX_RATIO(delta_MDD, Delta_ADVE)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_FLEX_RATIO = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_FLEX_RATIO", Array(Contents(delta_MDD), Contents(Delta_ADVE)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_FLEX_RATIO = CVErr(2015)
+End Function
+
+Public Function ELF_FLEX_STATUS(delta_MDD, Delta_ADVE)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_FLEX_STATUS = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_FLEX_STATUS", Array(Contents(delta_MDD), Contents(Delta_ADVE)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_FLEX_STATUS = CVErr(2015)
+End Function
+
+Public Function ELF_FPX_TRANSFER(F_px, F_transfer, rho, Omega_0, offset)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_FPX_TRANSFER = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_FPX_TRANSFER", Array(Contents(F_px), Contents(F_transfer), Contents(rho), Contents(Omega_0), Contents(offset)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_FPX_TRANSFER = CVErr(2015)
+End Function
+
+Public Function ELF_COLLECTOR(E_story, E_sum, E_low, Omega_0, light_frame)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_COLLECTOR = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_COLLECTOR", Array(Contents(E_story), Contents(E_sum), Contents(E_low), Contents(Omega_0), Contents(light_frame)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_COLLECTOR = CVErr(2015)
+End Function
+
+Public Function ELF_COLLECTOR_GOVERNS(E_story, E_sum, E_low, Omega_0, light_frame)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_COLLECTOR_GOVERNS = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_COLLECTOR_GOVERNS", Array(Contents(E_story), Contents(E_sum), Contents(E_low), Contents(Omega_0), Contents(light_frame)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_COLLECTOR_GOVERNS = CVErr(2015)
+End Function
+
+Public Function ELF_CS_DIAPH(S_DS, S_D1, I_e, R_diaph, T_diaph)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_CS_DIAPH = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_CS_DIAPH", Array(Contents(S_DS), Contents(S_D1), Contents(I_e), Contents(R_diaph), Contents(T_diaph)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_CS_DIAPH = CVErr(2015)
+End Function
+
+Public Function ELF_FP_WALL(S_DS, I_e, W_w)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_FP_WALL = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_FP_WALL", Array(Contents(S_DS), Contents(I_e), Contents(W_w)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_FP_WALL = CVErr(2015)
+End Function
+
+Public Function ELF_KA(L_f, diaphragm, units)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_KA = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_KA", Array(Contents(L_f), Contents(diaphragm), Contents(units)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_KA = CVErr(2015)
+End Function
+
+Public Function ELF_FP_ANCHOR(S_DS, k_a, I_e, W_p)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_FP_ANCHOR = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_FP_ANCHOR", Array(Contents(S_DS), Contents(k_a), Contents(I_e), Contents(W_p)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_FP_ANCHOR = CVErr(2015)
+End Function
+
+Public Function ELF_ZS(system)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_ZS = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_ZS", Array(Contents(system)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_ZS = CVErr(2015)
+End Function
+
+Public Function ELF_RS(diaphragm)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_RS = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_RS", Array(Contents(diaphragm)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_RS = CVErr(2015)
+End Function
+
+Public Function ELF_CP0(S_DS, I_e)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_CP0 = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_CP0", Array(Contents(S_DS), Contents(I_e)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_CP0 = CVErr(2015)
+End Function
+
+Public Function ELF_GM1(z_s, N, c_m1)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_GM1 = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_GM1", Array(Contents(z_s), Contents(N), Contents(c_m1)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_GM1 = CVErr(2015)
+End Function
+
+Public Function ELF_GM2(z_s, N)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_GM2 = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_GM2", Array(Contents(z_s), Contents(N)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_GM2 = CVErr(2015)
+End Function
+
+Public Function ELF_CS_HIGHER(N, S_DS, S_D1, I_e)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_CS_HIGHER = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_CS_HIGHER", Array(Contents(N), Contents(S_DS), Contents(S_D1), Contents(I_e)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_CS_HIGHER = CVErr(2015)
+End Function
+
+Public Function ELF_CPI(C_p0, G_m1, Omega_0, C_s)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_CPI = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_CPI", Array(Contents(C_p0), Contents(G_m1), Contents(Omega_0), Contents(C_s)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_CPI = CVErr(2015)
+End Function
+
+Public Function ELF_CPN(C_pi, G_m1, Omega_0, C_s, G_m2, C_s2)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_CPN = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_CPN", Array(Contents(C_pi), Contents(G_m1), Contents(Omega_0), Contents(C_s), Contents(G_m2), Contents(C_s2)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_CPN = CVErr(2015)
+End Function
+
+Public Function ELF_CPX(h_x, h_n, N, C_p0, C_pi, C_pn)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_CPX = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_CPX", Array(Contents(h_x), Contents(h_n), Contents(N), Contents(C_p0), Contents(C_pi), Contents(C_pn)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_CPX = CVErr(2015)
+End Function
+
+Public Function ELF_FPX_ALT(C_px, w_px, R_s, S_DS, I_e)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_FPX_ALT = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_FPX_ALT", Array(Contents(C_px), Contents(w_px), Contents(R_s), Contents(S_DS), Contents(I_e)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_FPX_ALT = CVErr(2015)
+End Function
+
+Public Function ELF_DELTA_M(delta_max, delta_di, C_d, I_e, edition)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_DELTA_M = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_DELTA_M", Array(Contents(delta_max), Contents(delta_di), Contents(C_d), Contents(I_e), Contents(edition)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_DELTA_M = CVErr(2015)
+End Function
+
+Public Function ELF_DELTA_MT(delta_M1, delta_M2)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_DELTA_MT = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_DELTA_MT", Array(Contents(delta_M1), Contents(delta_M2)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_DELTA_MT = CVErr(2015)
+End Function
+
+Public Function ELF_GAP_STATUS(gap, delta_MT)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_GAP_STATUS = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_GAP_STATUS", Array(Contents(gap), Contents(delta_MT)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_GAP_STATUS = CVErr(2015)
+End Function
+
+Public Function ELF_DELTA_MCE(delta_e, delta_di, R, I_e)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_DELTA_MCE = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_DELTA_MCE", Array(Contents(delta_e), Contents(delta_di), Contents(R), Contents(I_e)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_DELTA_MCE = CVErr(2015)
+End Function
+
+Public Function ELF_PART_STIFFNESS(V, delta)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_PART_STIFFNESS = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_PART_STIFFNESS", Array(Contents(V), Contents(delta)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_PART_STIFFNESS = CVErr(2015)
+End Function
+
+Public Function ELF_STIFFNESS_RATIO(K_lower, K_upper)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_STIFFNESS_RATIO = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_STIFFNESS_RATIO", Array(Contents(K_lower), Contents(K_upper)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_STIFFNESS_RATIO = CVErr(2015)
+End Function
+
+Public Function ELF_PERIOD_RATIO(T_whole, T_upper)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_PERIOD_RATIO = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_PERIOD_RATIO", Array(Contents(T_whole), Contents(T_upper)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_PERIOD_RATIO = CVErr(2015)
+End Function
+
+Public Function ELF_REACTION_FACTOR(R_upper, rho_upper, R_lower, rho_lower)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_REACTION_FACTOR = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_REACTION_FACTOR", Array(Contents(R_upper), Contents(rho_upper), Contents(R_lower), Contents(rho_lower)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_REACTION_FACTOR = CVErr(2015)
+End Function
+
+Public Function ELF_TWO_STAGE(stiffness_ratio, period_ratio, upper_procedure, lower_procedure)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_TWO_STAGE = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_TWO_STAGE", Array(Contents(stiffness_ratio), Contents(period_ratio), Contents(upper_procedure), Contents(lower_procedure)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_TWO_STAGE = CVErr(2015)
+End Function
+
+Public Function ELF_TWO_STAGE_TRANSITION(discontinuity)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_TWO_STAGE_TRANSITION = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_TWO_STAGE_TRANSITION", Array(Contents(discontinuity)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_TWO_STAGE_TRANSITION = CVErr(2015)
 End Function
 
 Public Function ELF_DELTA_XE(h_x, forces, stiffnesses, heights)
