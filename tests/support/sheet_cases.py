@@ -131,7 +131,7 @@ def placed(entry: SheetFunction, name: str, number: float) -> dict[str, Any]:
         call["heights"][at] = number
     if number > 0 and {"h_x", "h_n"} <= call.keys():
         call["h_n"], call["h_x"] = max(call["h_x"], call["h_n"]), min(call["h_x"], call["h_n"])
-    if number >= 0 and name in ("w_x", "w_px"):
+    if number >= 0 and name in ("w_x", "w_px") and "weights" in call:
         call["weights"][at] = number
     if number > 0 and name in ("d_max", "d_avg"):
         other = "d_avg" if name == "d_max" else "d_max"

@@ -190,7 +190,8 @@ def test_6_a_result_out_of_reach_of_arithmetic(name: str, cells: list[Any]) -> N
 def test_9_more_than_a_thousand_levels(entry: SheetFunction) -> None:
     def rows(count: int) -> list[Any]:
         return with_rows(
-            entry, lambda cells: cells + [cells[-1] + 1.0 + n for n in range(count - len(cells))]
+            entry,
+            lambda cells: cells + [cells[-1] * (1 + 1e-5 * n) for n in range(1, count - len(cells) + 1)],
         )
 
     each = next(a.each for a in entry.arguments if a.kind is Kind.LEVELS)

@@ -52,7 +52,7 @@ FUNCTIONS = (
         ),
         result=Result("delta_MT", "displacement", "least gap"),
         function=separation.required_separation,
-        expression="√({delta_M1}² + {delta_M2}²)",
+        expression="√({delta_M1}^2 + {delta_M2}^2)",
         native="SQRT({delta_M1}^2+{delta_M2}^2)",
         example=Example({"delta_M1": 3.0, "delta_M2": 4.0}, "5"),
     ),
