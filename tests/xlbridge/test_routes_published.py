@@ -27,7 +27,10 @@ from xlbridge.headless.compute import compute
 from xlbridge.values import Scalar
 
 TOP = 3
-BY_FORMULA = {f"{e.function.__module__}.{e.function.__name__}": e for e in CATALOGUE.values()}
+#: a formula is named by its concept, whatever file of the concept it stands in
+BY_FORMULA = {
+    f"{'.'.join(e.function.__module__.split('.')[:2])}.{e.function.__name__}": e for e in CATALOGUE.values()
+}
 #: the factors of all levels at once are a column of single factors in a worksheet
 COLUMN = {"engine.vertical.distribution_factors": ("ELF_CVX", {"w_x": "weights", "h_x": "heights"})}
 NOT_IN_CELLS = {
@@ -76,7 +79,7 @@ class Table:
     def formulas(self, entry: SheetFunction, places: Mapping[str, list[str]]) -> list[str]:
         """One formula a row, then one array formula for all of them."""
         whole = {a.name for a in entry.arguments if a.kind is Kind.LEVELS}
-        count = max(len(cells) for name, cells in places.items() if name not in whole)
+        count = max((len(cells) for name, cells in places.items() if name not in whole), default=1)
         results = self.put(entry.name, [call(entry, places, whole, n) for n in range(count)])
         letter, bottom = get_column_letter(self.columns + 1), TOP + count - 1
         area = f"{letter}{TOP}:{letter}{bottom}"
