@@ -167,7 +167,7 @@ def two_stage_status(
     return reasons(texts, fails, "permitted", lead="not permitted: ")
 
 
-def transition_amplification(discontinuity: str) -> str:
+def transition_amplification(discontinuity: str) -> Words:
     """What a discontinuity at the transition between the parts brings, in words.
 
     none, or the overstrength and transfer amplifications as well

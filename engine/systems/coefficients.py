@@ -98,7 +98,7 @@ def deflection_amplification(system: str, edition: str) -> np.float64:
     return _coefficient(system, edition, "Cd")
 
 
-def confidence(system: str, edition: str) -> str:
+def confidence(system: str, edition: str) -> Words:
     """What the row of a system rests on, in words.
 
     for the coefficients and for the height limits: seen (and where), from memory, or uncertain

@@ -20,7 +20,7 @@ WITHOUT: Final = "A"
 NOT_DUE: Final = "Table 12.2-1 does not apply in Seismic Design Category A"
 
 
-def height_limit(system: str, SDC: str, increase: str, edition: str, units: str) -> str:
+def height_limit(system: str, SDC: str, increase: str, edition: str, units: str) -> Words:
     """Limit on the structural height of a system, in words.
 
     the cell of Table 12.2-1, or with the increase 240 ft (D, E) and 160 ft (F)
