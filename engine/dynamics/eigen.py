@@ -7,7 +7,7 @@ periods to round-off however many stories there are, and takes levels without we
 they come.
 
 A sheet asks for one level and one mode a cell: the results of the last few buildings are kept by the bytes
-of their sorted levels, so that a building is solved once and not once a cell.
+of their levels, so that a building is solved once and not once a cell.
 """
 
 from __future__ import annotations
@@ -83,14 +83,16 @@ def solved(weights: ArrayLike, stiffnesses: ArrayLike, heights: ArrayLike) -> Mo
     """Return the modes of a building; levels in any order give the same ones."""
     h = levels.checked_heights(heights)
     w = levels.checked_weights(weights, h)
-    h, w, k = chained(h, w, checked_stiffnesses(stiffnesses, h))
-    f = flexibilities(k, h)
-    return _solved(h.shape, h.tobytes(), w.tobytes(), f.tobytes())
+    h, w, k = np.broadcast_arrays(h, w, checked_stiffnesses(stiffnesses, h))
+    found = _solved(h.shape, h.tobytes(), w.tobytes(), k.tobytes())
+    _refuse_lost(found.share)  # not kept with the results: a refusal would be solved for in each cell
+    return found
 
 
 @lru_cache(maxsize=KEPT)
-def _solved(shape: tuple[int, ...], heights: bytes, weights: bytes, flexibility: bytes) -> Modes:
-    h, w, f = (np.frombuffer(data).reshape(shape) for data in (heights, weights, flexibility))
+def _solved(shape: tuple[int, ...], heights: bytes, weights: bytes, stiffnesses: bytes) -> Modes:
+    h, w, k = chained(*(np.frombuffer(data).reshape(shape) for data in (heights, weights, stiffnesses)))
+    f = flexibilities(k, h)
     period, drift = _decomposed(w, f)
     phi = _normalised(np.cumsum(np.sqrt(f)[..., None] * drift, axis=-2))
     excitation = (w[..., None] * phi).sum(axis=-2)
@@ -98,7 +100,6 @@ def _solved(shape: tuple[int, ...], heights: bytes, weights: bytes, flexibility:
     exists = period > RESOLVED * period[..., :1]
     participation = np.divide(excitation, inertia, out=np.zeros_like(inertia), where=exists)
     share = participation * excitation / levels.total(w)[..., None]
-    _refuse_lost(share)
     force = w[..., None] * phi * participation[..., None, :]
     shear = np.cumsum(force[..., ::-1, :], axis=-2)[..., ::-1, :]
     return Modes(h, f, period**2, phi, shear, participation, share, np.asarray(exists.sum(axis=-1)))

@@ -173,7 +173,7 @@ FUNCTIONS = (
     ),
     SheetFunction(
         name="ELF_MODAL_DRIFT_SCALE",
-        summary="Factor on combined drifts: up to the base shear by the minimum for S_1 ≥ 0.6, at least 1.",
+        summary="Factor on combined drifts: up to the base shear by the minimum from S_1 = 0.6 on, at least 1.",
         category=MODAL,
         rule="modal_drift_scaling",
         arguments=(V_t, Argument("W", "force", "Effective seismic weight", POSITIVE), S_1, R, I_e),

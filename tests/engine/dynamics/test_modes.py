@@ -257,11 +257,21 @@ def test_a_building_is_solved_once_for_all_its_cells(monkeypatch):
     for h_x in model["heights"]:
         for mode in range(1, 21):
             mode_shape(mode=mode, h_x=h_x, **model)
-    turned = {key: value[::-1] for key, value in model.items()}
-    mode_period(mode=1, **turned, units="us")
     assert len(calls) == 1
     mode_period(mode=1, **{**model, "weights": [101.0] * 60}, units="us")
     assert len(calls) == 2
+
+
+def test_a_building_that_is_refused_is_solved_once_too(monkeypatch):
+    calls = []
+    svd = np.linalg.svd
+    monkeypatch.setattr(np.linalg, "svd", lambda G: calls.append(1) or svd(G))
+    model = {**uniform(3), "stiffnesses": [1e17, 31.54, 31.54]}
+    eigen._solved.cache_clear()
+    for mode in (1, 2, 3):
+        with pytest.raises(ImpossibleValue, match="weight is lost in the modes"):
+            mode_period(mode=mode, **model, units="us")
+    assert len(calls) == 1
 
 
 def test_kept_results_can_not_be_written_to():
