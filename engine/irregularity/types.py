@@ -7,7 +7,7 @@ from typing import Final
 from engine.editions import EDITIONS
 from engine.errors import NotApplicable
 from engine.occupancy import DESIGN_CATEGORIES
-from engine.require import choice, yes
+from engine.require import Words, choice, yes
 from engine.tables import table
 
 IRREGULARITIES: Final = table("irregularity_types").keys
@@ -33,7 +33,7 @@ def named(irregularity: str, edition: str) -> str:
     return f"Type {_type(irregularity, edition)}, {irregularity}"
 
 
-def judged_irregularity(irregularity: str, exists: str, edition: str) -> str:
+def judged_irregularity(irregularity: str, exists: str, edition: str) -> Words:
     """Verdict on an irregularity that the engineer reads off the plans.
 
     the type number where it exists
@@ -57,7 +57,7 @@ def judged_irregularity(irregularity: str, exists: str, edition: str) -> str:
     return name if yes("exists", exists) else NONE
 
 
-def consequence(irregularity: str, SDC: str, edition: str) -> str:
+def consequence(irregularity: str, SDC: str, edition: str) -> Words:
     """What an irregularity entails in a Seismic Design Category, clause by clause.
 
     the rows of the table of consequences, joined
