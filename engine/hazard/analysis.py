@@ -7,7 +7,6 @@ from typing import Final
 import numpy as np
 from numpy.typing import ArrayLike
 
-from engine.hazard.two_period import corner_period_TS
 from engine.hazard.words import (
     C_S_INCREASED,
     F_A_OF_CLASS_C,
@@ -24,7 +23,6 @@ from engine.require import (
     at_least,
     choice,
     exceeds,
-    finite,
     formula,
     reasons,
     yes,
@@ -37,6 +35,7 @@ TRIGGERS: Final = (
     "isolated or damped with S_1 at least 0.6",
 )
 NO_TRIGGER: Final = "none"
+MAX_INCREASE: Final = 1.5
 _SHORT_LIMIT, _LONG_LIMIT, _ISOLATED_LIMIT = 1.0, 0.2, 0.6
 
 
@@ -99,37 +98,30 @@ def analysis_triggers(
 
 
 @formula
-def coefficient_increase(
-    T: ArrayLike, S_DS: ArrayLike, S_D1: ArrayLike, T_L: ArrayLike, exception: str
-) -> Result:
+def coefficient_increase(T: ArrayLike, T_S: ArrayLike, exception: str) -> Result:
     """Factor on the upper bound of C_s where exception 2 of 11.4.8 is used as first printed.
 
-    factor = plateau/min(plateau, cap) to T = 1.5 T_S, 1.5 beyond; 1 without that exception
+    factor = T/T_S, at least 1 and at most 1.5; 1 without that exception
 
     Parameters
         T: design period [s], above 0; any shape
-        S_DS: design spectral acceleration at short periods [g], above 0
-        S_D1: design spectral acceleration at 1 s [g], above 0
-        T_L: long-period transition period [s], above 0
+        T_S: period at which the plateau of the design spectrum ends [s], above 0
         exception: one of LONG_EXCEPTIONS
     Returns
-        factor [-], 1 to 1.5 where T_L is at least 1.5 T_S, the broadcast shape
+        factor [-], the broadcast shape
     Raises
         ImpossibleValue: a value outside its range. NotApplicable: another exception
     Notes
-        Multiplies min(plateau, cap) before the minimums. So C_s is that of the plateau to 1.5 T_S and 1.5
-        times the cap beyond. The factor beyond T_L is from memory.
+        Multiplies min(plateau, cap) before the minimums. The clause takes the plateau to T = 1.5 T_S, which
+        is T/T_S times the cap there, and 1.5 times the cap beyond, on either side of T_L (beyond it from
+        memory). A T_L below 1.5 T_S is not foreseen.
     Example
-        >>> print(coefficient_increase(T=0.75, S_DS=1.0, S_D1=0.6, T_L=8.0, exception=C_S_INCREASED))
+        >>> print(coefficient_increase(T=0.75, T_S=0.6, exception=C_S_INCREASED))
         1.25
 
     Reference
         rule C_s_increase: 7-16 11.4.8, exception 2; 7-22 none
     """
-    T = above(0, "T", T)
-    T_S = corner_period_TS(S_DS, S_D1)
-    cap = finite("S_D1", S_D1) / T * np.minimum(above(0, "T_L", T_L) / T, 1.0)
-    upper = np.minimum(finite("S_DS", S_DS), cap)
-    raised = np.where(T <= 1.5 * T_S, S_DS / upper, 1.5)
+    factor = np.clip(above(0, "T", T) / above(0, "T_S", T_S), 1.0, MAX_INCREASE)
     used = choice("exception", exception, LONG_EXCEPTIONS) == C_S_INCREASED
-    return raised if used else np.ones_like(raised)
+    return factor if used else np.ones_like(factor)

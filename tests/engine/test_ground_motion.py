@@ -126,14 +126,14 @@ class TestTriggers:
 class TestIncrease:
     def test_the_coefficient_is_the_plateau_to_1_5_T_S_and_1_5_times_the_cap_beyond(self):
         S_DS, S_D1, T_L = 1.0, 0.6, 8.0
-        for T in (0.1, 0.6, 0.7, 0.9 - EPS, 0.9, 0.9 + EPS, 2.0, 8.0, 8.1, 20.0):
+        for T in (0.1, 0.6, 0.7, 0.9 - EPS, 0.9, 0.9 + EPS, 0.93, 2.0, 8.0, 8.1, 20.0):
             cap = S_D1 / T * min(T_L / T, 1)
             ordinary = min(S_DS, cap)
             expected = S_DS if T <= 0.9 else 1.5 * cap
-            found = ordinary * coefficient_increase(T, S_DS, S_D1, T_L, INCREASED)
+            found = ordinary * coefficient_increase(T, S_D1 / S_DS, INCREASED)
             assert found == pytest.approx(expected, rel=1e-8)
             for other in (NONE, RAISED, SHORT_T):
-                assert coefficient_increase(T, S_DS, S_D1, T_L, other) == 1.0
+                assert coefficient_increase(T, S_D1 / S_DS, other) == 1.0
 
 
 class TestMultiPeriod:

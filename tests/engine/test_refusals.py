@@ -65,7 +65,7 @@ def test_word_that_is_not_in_the_list(name, key, bad, error):
 
 ZERO_REFUSED = {
     "weight.storage_ratio": ["w_other"],
-    "hazard.coefficient_increase": ["T", "S_DS", "S_D1", "T_L"],
+    "hazard.coefficient_increase": ["T", "T_S"],
     "hazard.analysis_triggers": ["T", "T_S"],
     "hazard.mce_parameter_short": ["F_a"],
     "hazard.mce_parameter_one_second": ["F_v"],

@@ -71,9 +71,7 @@ CALLS: dict[str, dict[str, Any]] = {
         **{"S_S": 1.2, "S_1": 0.5, "site_class": "E", "isolated": "yes", "short_exception": "none"},
         **{"long_exception": "exception 3: T at most T_S", "T": 0.4, "T_S": 0.9},
     },
-    "hazard.coefficient_increase": {
-        **{"T": 0.7, "S_DS": 0.9, "S_D1": 0.45, "T_L": 6.0, "exception": "exception 2: C_s increased"}
-    },
+    "hazard.coefficient_increase": {**{"T": 0.7, "T_S": 0.5, "exception": "exception 2: C_s increased"}},
     "hazard.mce_parameter_short": {"S_S": 1.1, "F_a": 1.06},
     "hazard.mce_parameter_one_second": {
         **{"S_1": 0.4, "F_v": 1.9, "exception": "exception 2 of Supplement 3: S_M1 up 50 %"}

@@ -5,7 +5,7 @@ from __future__ import annotations
 from engine import hazard
 from engine.require import YES_NO
 from engine.tables import table
-from xlbridge.catalogue.common import S_1, S_D1, S_DS, T_L, T
+from xlbridge.catalogue.common import S_1, T
 from xlbridge.catalogue.entry import (
     NOT_NEGATIVE,
     POSITIVE,
@@ -19,6 +19,7 @@ from xlbridge.catalogue.entry import (
 
 S_S = Argument("S_S", "acceleration", "Mapped MCE_R spectral acceleration at short periods", NOT_NEGATIVE)
 F_a = Argument("F_a", "none", "Site coefficient at short periods", POSITIVE)
+T_S = Argument("T_S", "time", "Period at which the plateau of the design spectrum ends", POSITIVE)
 F_v = Argument("F_v", "none", "Site coefficient at long periods", POSITIVE)
 row_class = Argument(
     "site_class",
@@ -75,8 +76,6 @@ def _fv_native() -> str:
     return _by_class({**rows, "B not measured": "1"})
 
 
-_CAP = "{S_D1}/{T}*MIN({T_L}/{T},1)"
-
 FUNCTIONS = (
     SheetFunction(
         name="ELF_FA",
@@ -117,7 +116,7 @@ FUNCTIONS = (
             _exception("short_exception", hazard.SHORT_EXCEPTIONS),
             _exception("long_exception", hazard.LONG_EXCEPTIONS),
             Argument("T", "time", "Longest period used in design, either direction", POSITIVE),
-            Argument("T_S", "time", "Period at which the plateau ends", POSITIVE),
+            T_S,
         ),
         result=Result("trigger", "text", "triggers that no exception lifts"),
         function=hazard.analysis_triggers,
@@ -196,20 +195,12 @@ FUNCTIONS = (
         summary="Factor on the upper bound of C_s where exception 2 is used as first printed; 1 otherwise.",
         category="Ground motion",
         rule="C_s_increase",
-        arguments=(T, S_DS, S_D1, T_L, long_exception),
+        arguments=(T, T_S, long_exception),
         result=Result("factor", "none", "factor on min(plateau; cap)"),
         function=hazard.coefficient_increase,
-        expression=(
-            "with exception 2: {S_DS}/min({S_DS}; {S_D1}/{T}·min({T_L}/{T}; 1)) to T = 1.5·T_S, 1.5 beyond; "
-            "else 1; {exception}"
-        ),
-        native=(
-            f'IF({{exception}}="{_INCREASED}",IF({{T}}<=1.5*{{S_D1}}/{{S_DS}},{{S_DS}}/MIN({{S_DS}},{_CAP}),1.5),1)'
-        ),
-        example=Example(
-            {"T": 0.75, "S_DS": 1.0, "S_D1": 0.6, "T_L": 8.0, "exception": _INCREASED},
-            "1.25",
-        ),
+        expression="with exception 2: min(max({T}/{T_S}; 1); 1.5); else 1; {exception}",
+        native=f'IF({{exception}}="{_INCREASED}",MIN(MAX({{T}}/{{T_S}},1),1.5),1)',
+        example=Example({"T": 0.75, "T_S": 0.6, "exception": _INCREASED}, "1.25"),
         note="Multiplies min(plateau; cap) before the minimums of C_s are applied.",
     ),
 )

@@ -122,7 +122,7 @@ def ELF_FV(S_1: Any, site_class: Any) -> Any:
     doc="Exception of 11.4.8 used: none, exception 2: C_s increased, exception 2 of Supplement 3: S_M1 up 50 %, exception 3: T at most T_S.",
 )
 @xw.arg("T", "raw", doc="Longest period used in design, either direction [s], above 0.")
-@xw.arg("T_S", "raw", doc="Period at which the plateau ends [s], above 0.")
+@xw.arg("T_S", "raw", doc="Period at which the plateau of the design spectrum ends [s], above 0.")
 @xw.ret("raw")
 def ELF_SITE_TRIGGER(
     S_S: Any,
@@ -179,18 +179,16 @@ def ELF_SD1(S_M1: Any) -> Any:
 
 @xw.func(category="Storyledger: Ground motion")
 @xw.arg("T", "raw", doc="Fundamental period [s], above 0.")
-@xw.arg("S_DS", "raw", doc="Design spectral acceleration at short periods [g], above 0.")
-@xw.arg("S_D1", "raw", doc="Design spectral acceleration at 1 s [g], above 0.")
-@xw.arg("T_L", "raw", doc="Long-period transition period [s], above 0.")
+@xw.arg("T_S", "raw", doc="Period at which the plateau of the design spectrum ends [s], above 0.")
 @xw.arg(
     "exception",
     "raw",
     doc="Exception of 11.4.8 used: none, exception 2: C_s increased, exception 2 of Supplement 3: S_M1 up 50 %, exception 3: T at most T_S.",
 )
 @xw.ret("raw")
-def ELF_CS_INCREASE(T: Any, S_DS: Any, S_D1: Any, T_L: Any, exception: Any) -> Any:
+def ELF_CS_INCREASE(T: Any, T_S: Any, exception: Any) -> Any:
     """Factor on the upper bound of C_s where exception 2 is used as first printed; 1 otherwise. ASCE/SEI 7-16: 11.4.8, exception 2. Partly from memory: confirm."""
-    return call("ELF_CS_INCREASE", T, S_DS, S_D1, T_L, exception)
+    return call("ELF_CS_INCREASE", T, T_S, exception)
 
 
 @xw.func(category="Storyledger: Ground motion")

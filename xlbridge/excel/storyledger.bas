@@ -107,9 +107,9 @@ failed:
     ELF_SD1 = CVErr(2015)
 End Function
 
-Public Function ELF_CS_INCREASE(T, S_DS, S_D1, T_L, exception)
+Public Function ELF_CS_INCREASE(T, T_S, exception)
     If TypeOf Application.Caller Is Range Then On Error GoTo failed
-    ELF_CS_INCREASE = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_CS_INCREASE", Array(Contents(T), Contents(S_DS), Contents(S_D1), Contents(T_L), Contents(exception)), ThisWorkbook, Application.Caller))
+    ELF_CS_INCREASE = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_CS_INCREASE", Array(Contents(T), Contents(T_S), Contents(exception)), ThisWorkbook, Application.Caller))
     Exit Function
 failed:
     ELF_CS_INCREASE = CVErr(2015)
