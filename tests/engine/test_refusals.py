@@ -26,7 +26,20 @@ def refused(name, error, match, **changes):
 
 EITHER_WAY = {
     *("delta_xe", "d_upper", "d_lower", "forces", "values", "displacements"),
-    *("x_M", "x_R", "centers", "Delta_1", "Delta_2", "Delta_cm", "positions", "distances", "M_t", "d_i"),
+    *(
+        "z_x",
+        "z_0",
+        "x_M",
+        "x_R",
+        "centers",
+        "Delta_1",
+        "Delta_2",
+        "Delta_cm",
+        "positions",
+        "distances",
+        "M_t",
+        "d_i",
+    ),
     *("Q_E", "D", "E_v", "E_h", "L", "S", "delta_e"),
 }
 NEVER = [
