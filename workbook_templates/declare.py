@@ -110,11 +110,16 @@ YES_NO: Final = ("yes", "no")
 
 @dataclass(frozen=True, slots=True)
 class Block:
-    """Quantities under one title: a group of criteria rows, or a band of level columns."""
+    """Quantities under one title: a group of criteria rows, or a band of level columns.
+
+    ``without`` is the key of a part that has the same quantities: the block stands only where that part
+    does not.
+    """
 
     title: str
     quantities: tuple[Quantity, ...]
     per_direction: bool = False
+    without: str = ""
 
 
 @dataclass(frozen=True, slots=True)
@@ -155,7 +160,8 @@ class Figure:
 class Part:
     """A part of the workbook; a job that does not need it leaves it out.
 
-    ``needs`` are the level entries of BUILDING.toml without which the part cannot be filled in.
+    ``needs`` are the level entries of BUILDING.toml without which the part cannot be filled in;
+    ``requires`` the keys of the parts that come along, because formulas of this one refer to them.
     """
 
     key: str
@@ -166,6 +172,7 @@ class Part:
     headlines: tuple[Headline, ...] = ()
     figures: tuple[Figure, ...] = ()
     needs: tuple[str, ...] = ()
+    requires: tuple[str, ...] = ()
 
 
 def entry(key: str, feeds: str, text: str = "", **more: Any) -> Quantity:

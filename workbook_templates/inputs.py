@@ -12,7 +12,7 @@ from typing import Any, Final
 
 from engine.errors import MissingValue, NotApplicable
 from workbook_templates.declare import DIRECTIONS, Quantity, Start
-from workbook_templates.parts import CORE, PARTS
+from workbook_templates.parts import PARTS, with_required
 
 STARTER: Final = "starter value"
 DEFAULT: Final = "default"
@@ -48,13 +48,13 @@ class Inputs:
 
     @property
     def parts(self) -> frozenset[str]:
-        """The parts that are asked for, and those whose level entries are given."""
+        """The parts that are asked for, those whose level entries are given, and what they require."""
         asked = self.given.get("parts", () if "level" in self.given else BLANK_PARTS)
         for key in asked:
             if key not in PARTS:
                 raise NotApplicable("parts", key, f"must be one of {', '.join(PARTS)}")
         found = {key for key, part in PARTS.items() if part.needs and self._has(part.needs)}
-        return frozenset({CORE, *asked, *found})
+        return with_required({*asked, *found})
 
     def _has(self, needs: tuple[str, ...]) -> bool:
         given = [key for key in needs if any(level.get(key) is not None for level in self.levels)]

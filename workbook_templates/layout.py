@@ -68,7 +68,8 @@ class Layout:
     @property
     def criteria(self) -> list[Block]:
         """The criteria blocks of the parts that are in."""
-        return [block for part in self.parts for block in part.criteria]
+        blocks = (block for part in self.parts for block in part.criteria)
+        return [block for block in blocks if block.without not in self.part_keys]
 
     @cached_property
     def parts(self) -> tuple[Part, ...]:

@@ -74,8 +74,19 @@ class Reader:
         return [row for row in self._table[HEADER_ROWS:] if any(row[i] is not None for i in inputs)]
 
     def _has(self, part: Part) -> bool:
-        """Whether the story table has a column of the part."""
-        return any(self._heads(c) for c in Layout(1, frozenset({part.key})).table)
+        """Whether the story table has a column of the part, or the criteria its first row if it has none."""
+        layout = Layout(1, frozenset({part.key}))
+        if layout.table:
+            return any(self._heads(c) for c in layout.table)
+        block = layout.criteria[0]
+        return self._defined(layout.name(block.quantities[0].key, DIRECTIONS[0]))
+
+    def _defined(self, name: str) -> bool:
+        try:
+            self.ask(f"={name}")
+        except NotEvaluated:
+            return False
+        return True
 
     def _heads(self, column: Column) -> bool:
         return column.heading in self._table[0]

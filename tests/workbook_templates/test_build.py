@@ -20,10 +20,10 @@ from tests.support.buildings import buildings
 from tests.support.story_books import assert_routes_agree, story_book
 from workbook_templates import generate
 from workbook_templates.build import build, write_workbook
-from workbook_templates.declare import DIRECTIONS
+from workbook_templates.declare import DIRECTIONS, Part
 from workbook_templates.inputs import STARTER
 from workbook_templates.layout import LEVELS, SHEETS, Layout
-from workbook_templates.parts import CORE, PARTS
+from workbook_templates.parts import CORE, PARTS, with_required
 from workbook_templates.read import Reader
 from xlbridge.catalogue import CATALOGUE
 from xlbridge.headless.builtins import BUILTINS
@@ -84,6 +84,20 @@ def test_parts_come_back_out_of_the_workbook(tmp_path: Path) -> None:
     again = assert_routes_agree(story_book(tmp_path, tables, name="again.xlsx"), 190)
     linked = sum(bool(column.quantity.linked) for column in Layout(6, frozenset(PARTS)).table)
     assert len(again.results.cells) == len(computed.results.cells) - 6 * linked  # links come back as numbers
+
+
+def test_every_required_part_exists_and_comes_along() -> None:
+    assert {key for part in PARTS.values() for key in part.requires} <= set(PARTS)
+    for key, part in PARTS.items():
+        assert with_required([key]) >= {CORE, key, *part.requires}
+
+
+def test_a_part_brings_those_that_its_required_parts_require(monkeypatch: pytest.MonkeyPatch) -> None:
+    chain = {"a": Part("a", "A", requires=("b",)), "b": Part("b", "B", requires=("c", "a"))}
+    chain |= {"c": Part("c", "C"), "d": Part("d", "D"), CORE: PARTS[CORE]}
+    monkeypatch.setattr("workbook_templates.parts.PARTS", chain)
+    assert with_required(["a"]) == {CORE, "a", "b", "c"}
+    assert with_required([]) == {CORE}
 
 
 def test_an_unknown_part_is_refused(tmp_path: Path) -> None:

@@ -2,6 +2,7 @@
 
 from __future__ import annotations
 
+from collections.abc import Iterable
 from types import MappingProxyType
 from typing import Final
 
@@ -16,3 +17,12 @@ PARTS: Final = MappingProxyType({part.key: part for part in (story.PART, drift.P
 def chosen(keys: frozenset[str]) -> tuple[Part, ...]:
     """Return the parts of these keys in the order of the workbook."""
     return tuple(part for key, part in PARTS.items() if key in keys)
+
+
+def with_required(keys: Iterable[str]) -> frozenset[str]:
+    """Return these keys with those of the core and of all parts that they require."""
+    found, open_keys = {CORE}, set(keys)
+    while open_keys:
+        found |= open_keys
+        open_keys = {key for part in open_keys for key in PARTS[part].requires} - found
+    return frozenset(found)

@@ -12,26 +12,48 @@ from engine.building.results import DirectionResult, Package
 
 #: takes building, package, direction, its results so far; returns more of them, none without inputs
 DirectionPart = Callable[[Building, Package, str, DirectionResult], Mapping[str, Any]]
-#: the same for results that both directions share, after those of the directions
+#: the same for results that both directions share
 BuildingPart = Callable[[Building, Package], Mapping[str, Any]]
-
-DIRECTION_PARTS: Final[tuple[tuple[DirectionPart, tuple[str, ...]], ...]] = (
-    (diaphragm.solve, diaphragm.RULES),
-)
-BUILDING_PARTS: Final[tuple[tuple[BuildingPart, tuple[str, ...]], ...]] = ()
+Step = Callable[[Building, Package], Package]
 
 
 def with_parts(building: Building, package: Package) -> Package:
     """Return the package with the results of every part whose inputs the building has."""
-    for solve, rules in DIRECTION_PARTS:
-        found = {name: solve(building, package, name, result) for name, result in package.direction.items()}
-        if any(found.values()):
-            results = {
-                name: replace(result, more={**result.more, **found[name]})
-                for name, result in package.direction.items()
-            }
-            package = replace(package, direction=results, rules=(*package.rules, *rules))
-    for solve_all, rules in BUILDING_PARTS:
-        if more := solve_all(building, package):
-            package = replace(package, more={**package.more, **more}, rules=(*package.rules, *rules))
+    for step in STEPS:
+        package = step(building, package)
     return package
+
+
+def _each_direction(solve: DirectionPart, rules: tuple[str, ...]) -> Step:
+    """Make the step of a part that works on one direction at a time."""
+
+    def step(building: Building, package: Package) -> Package:
+        found = {name: solve(building, package, name, result) for name, result in package.direction.items()}
+        if not any(found.values()):
+            return package
+        results = {
+            name: replace(result, more={**result.more, **found[name]})
+            for name, result in package.direction.items()
+        }
+        return replace(package, direction=results, rules=_joined(package.rules, rules))
+
+    return step
+
+
+def _whole_building(solve: BuildingPart, rules: tuple[str, ...]) -> Step:
+    """Make the step of a part whose results hold for the building."""
+
+    def step(building: Building, package: Package) -> Package:
+        if not (found := solve(building, package)):
+            return package
+        return replace(package, more={**package.more, **found}, rules=_joined(package.rules, rules))
+
+    return step
+
+
+def _joined(rules: tuple[str, ...], more: tuple[str, ...]) -> tuple[str, ...]:
+    return tuple(dict.fromkeys((*rules, *more)))
+
+
+#: in the order of the standard's flow: a step finds the results of those before it in the package
+STEPS: Final[tuple[Step, ...]] = (_each_direction(diaphragm.solve, diaphragm.RULES),)
