@@ -35,8 +35,8 @@ displacements = Argument(
     kind=Kind.LEVELS,
     symbol="delta_ei",
 )
-mode = Argument("mode", "none", "Number of the mode, whole, 1 for the longest period", Span(1))
-modes = Argument("modes", "none", "How many modes, from the first on, whole", Span(1))
+mode = Argument("mode", "none", "Number of the mode, whole, 1 for the longest period", Span(1), symbol="m")
+modes = Argument("modes", "none", "How many modes, from the first on, whole", Span(1), symbol="N_m")
 MODEL = (weights, stiffnesses, heights)
 
 #: five equal stories in kip and in

@@ -27,7 +27,9 @@ values = Argument(
 periods = Argument(
     "periods", "time", "Periods of the modes", POSITIVE, Kind.LEVELS, symbol="T_m", each="mode"
 )
-damping = Argument("damping", "none", "Damping ratio of the modes, 0.05 for 5 %", Span(0, 1, low_open=True))
+damping = Argument(
+    "damping", "none", "Damping ratio of the modes, 0.05 for 5 %", Span(0, 1, low_open=True), symbol="zeta"
+)
 T_i = Argument("T_i", "time", "Period of one mode", POSITIVE)
 V_t = Argument("V_t", "force", "Combined base shear of the modes", POSITIVE)
 
@@ -173,7 +175,7 @@ FUNCTIONS = (
     ),
     SheetFunction(
         name="ELF_MODAL_DRIFT_SCALE",
-        summary="Factor on combined drifts: up to the base shear by the minimum from S_1 = 0.6 on, at least 1.",
+        summary="Factor on combined drifts: up to the shear by the minimum for S_1 from 0.6 on, at least 1.",
         category=MODAL,
         rule="modal_drift_scaling",
         arguments=(V_t, Argument("W", "force", "Effective seismic weight", POSITIVE), S_1, R, I_e),

@@ -2523,5 +2523,5 @@ def ELF_MODAL_SCALE(V: Any, V_t: Any) -> Any:
 @xw.arg("I_e", "raw", doc="Importance factor [no unit], at least 1.")
 @xw.ret("raw")
 def ELF_MODAL_DRIFT_SCALE(V_t: Any, W: Any, S_1: Any, R: Any, I_e: Any) -> Any:
-    """Factor on combined drifts: up to the base shear by the minimum from S_1 = 0.6 on, at least 1. ASCE/SEI 7-16: 12.9.1.4.2; 7-22: 12.9.1.4.2. Partly from memory: confirm."""
+    """Factor on combined drifts: up to the shear by the minimum for S_1 from 0.6 on, at least 1. ASCE/SEI 7-16: 12.9.1.4.2; 7-22: 12.9.1.4.2. Partly from memory: confirm."""
     return call("ELF_MODAL_DRIFT_SCALE", V_t, W, S_1, R, I_e)
