@@ -68,7 +68,7 @@ def test_the_editions_differ_in_snow_alone(edition):
 
 @pytest.mark.parametrize(("taken", "effect"), list(zip(VERTICAL_CASES, (-18.0, 0.0, 0.0), strict=True)))
 def test_vertical_effect_is_counted_or_zero(taken, effect):
-    assert vertical_effect(S_DS=0.9, D=-100.0, taken=taken) == pytest.approx(effect, abs=0)
+    assert vertical_effect(S_DS=0.9, D=-100.0, taken=taken) == pytest.approx(effect, abs=0, rel=1e-14)
 
 
 @pytest.mark.parametrize(
