@@ -41,7 +41,7 @@ def build(given: Mapping[str, Any], level_count: int = DEFAULT_LEVELS) -> bytes:
     levels.draw(sheets[places.LEVELS], layout, inputs)
     checks.draw(sheets[places.CHECKS], layout, inputs)
     figures.draw(sheets[places.FIGURES], sheets[places.LEVELS], layout, inputs)
-    functions.draw(sheets[places.FUNCTIONS], inputs)
+    functions.draw(sheets[places.FUNCTIONS], layout, inputs)
     return _package(workbook)
 
 

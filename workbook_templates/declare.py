@@ -74,6 +74,11 @@ class Quantity:
     base: str = ""
     width: float = 11
 
+    @property
+    def calls(self) -> list[str]:
+        """The worksheet functions that its formulas call."""
+        return _CALL.findall(f"{self.formula} {self.base} {self.linked}")
+
     @cached_property
     def function(self) -> SheetFunction | None:
         """The worksheet function in the formula, if any."""

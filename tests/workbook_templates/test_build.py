@@ -194,6 +194,15 @@ def test_pages_repeat_their_headers_and_carry_the_caution(blank: openpyxl.Workbo
         assert sheet.oddFooter.right.text == "&D   page &P of &N"
 
 
+def test_the_functions_called_are_listed_with_their_equations(blank: openpyxl.Workbook) -> None:
+    called = {name for s in blank.worksheets for f in formulas(s) for name in CALLED.findall(f)} & set(
+        CATALOGUE
+    )
+    rows = list(blank["Functions"].iter_rows(min_row=5, max_col=4, values_only=True))
+    assert {str(row[0]).partition("(")[0] for row in rows} == called
+    assert all("=" in str(row[3]) for row in rows)
+
+
 def test_starter_values_are_marked_and_counted(blank: openpyxl.Workbook) -> None:
     marks = [c.value for s in blank.worksheets for row in s.iter_rows() for c in row if c.value == STARTER]
     assert len(marks) == 11 + 6

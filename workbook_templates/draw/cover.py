@@ -44,7 +44,7 @@ CONTENTS = {
     places.LEVELS: "the story table: weights, forces, drift and stability, one row a level",
     places.CHECKS: "what must hold, line by line",
     places.FIGURES: "forces, shears and drifts over the height",
-    places.FUNCTIONS: "every worksheet function with its equation and clause",
+    places.FUNCTIONS: "the worksheet functions called here, with equation and clause",
 }
 GUIDE = (
     "Insert a level: insert a row between the two grey guard rows of the story table, fill it down (or up) "
