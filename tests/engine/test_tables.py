@@ -29,6 +29,11 @@ def cells(name):
         ("upper_limit_coefficient", 5, ["S_D1"], 1.15),
         ("upper_limit_coefficient", 5, ["C_u"], 7.6),
         ("allowable_drift", 4, ["I", "II", "III", "IV"], 0.218),
+        ("mode_shape_factor", 4, ["z_s"], 2.85),
+        ("diaphragm_reduction", 6, ["R_s"], 9.6),
+        ("load_combinations", 10, ["D", "E_h", "L"], 20.75),
+        ("load_combinations", 10, ["E_v"], 1.05),
+        ("load_combinations", 10, ["S"], 1.2),
         ("systems", 92, ["R"], 435.5),
         ("systems", 92, ["Omega0"], 230.25),
         ("systems", 92, ["Cd"], 355.75),
@@ -41,7 +46,12 @@ def test_checksum_of_the_file(name, rows, columns, total):
 
 
 @pytest.mark.parametrize(
-    "name", ["importance_factor", "period_coefficients", "upper_limit_coefficient", "allowable_drift"]
+    "name",
+    [
+        *("importance_factor", "period_coefficients", "upper_limit_coefficient", "allowable_drift"),
+        *("mode_shape_factor", "diaphragm_reduction", "load_combinations"),
+        *("irregularity_types", "irregularity_consequences"),
+    ],
 )
 def test_file_says_where_it_is_from(name):
     about = table(name).about
