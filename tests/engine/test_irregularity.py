@@ -20,6 +20,7 @@ from engine.irregularity import (
     geometric_irregularity,
     judged_irregularity,
     reentrant_irregularity,
+    reentrant_ratio,
     soft_story,
     stiffness_ratio,
     stiffness_ratio_of_three,
@@ -184,6 +185,11 @@ def test_no_torsional_type_for_flexible_diaphragms(edition):
 )
 def test_reentrant_corner(ratio, edition, verdict):
     assert reentrant_irregularity(ratio=ratio, edition=edition) == verdict
+
+
+@pytest.mark.parametrize(("p_x", "p_y", "ratio"), [(30.0, 8.0, 0.1), (6.0, 40.0, 0.05), (0.0, 40.0, 0.0)])
+def test_the_smaller_projection_decides(p_x, p_y, ratio):
+    assert reentrant_ratio(p_x=p_x, p_y=p_y, L_x=120.0, L_y=80.0) == pytest.approx(ratio)
 
 
 @pytest.mark.parametrize(

@@ -4,7 +4,16 @@ from __future__ import annotations
 
 from engine import torsion
 from xlbridge.catalogue.common import SDC, TIR, edition, forces, h_x, heights
-from xlbridge.catalogue.entry import NOT_NEGATIVE, POSITIVE, Argument, Example, Kind, Result, SheetFunction, Span
+from xlbridge.catalogue.entry import (
+    NOT_NEGATIVE,
+    POSITIVE,
+    Argument,
+    Example,
+    Kind,
+    Result,
+    SheetFunction,
+    Span,
+)
 
 d_max = Argument("d_max", "displacement", "Largest displacement at level x, found with A_x = 1", POSITIVE)
 d_avg = Argument("d_avg", "displacement", "Average of the extreme points at level x", POSITIVE)
