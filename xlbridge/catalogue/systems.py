@@ -14,7 +14,9 @@ known_system = Argument("system", "text", _TEXT, kind=Kind.CHOICE, choices=syste
 Omega_0 = Argument("Omega_0", "none", "Overstrength factor as tabulated", Span(1))
 R_upper = Argument("R_upper", "none", "Response modification coefficient of the upper part", Span(1))
 R_lower = Argument("R_lower", "none", "Response modification coefficient of the lower part", Span(1))
-increase = question("increase", "Whether 12.2.5.4 is used and its conditions hold (see its note)")
+increase = question(
+    "increase", "Whether 12.2.5.4 is used: no extreme torsion, at most 60 % of the force in one plane"
+)
 R_systems = Argument(
     "R_systems",
     "none",

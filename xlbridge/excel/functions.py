@@ -323,7 +323,11 @@ def ELF_SYSTEM_STATUS(system: Any, R: Any, Omega_0: Any, C_d: Any, edition: Any)
     doc="Row of Table 12.2-1, after the letter of its group: 92 texts from 'A. Special reinforced concrete shear walls' to 'H. Steel systems not specifically detailed for seismic resistance, excluding cantilever column systems'.",
 )
 @xw.arg("SDC", "raw", doc="Seismic Design Category: A, B, C, D, E, F.")
-@xw.arg("increase", "raw", doc="Whether 12.2.5.4 is used and its conditions hold (see its note): yes, no.")
+@xw.arg(
+    "increase",
+    "raw",
+    doc="Whether 12.2.5.4 is used: no extreme torsion, at most 60 % of the force in one plane: yes, no.",
+)
 @xw.arg(
     "edition",
     "raw",
@@ -344,7 +348,11 @@ def ELF_HEIGHT_LIMIT(system: Any, SDC: Any, increase: Any, edition: Any, units: 
     doc="Row of Table 12.2-1, after the letter of its group: 92 texts from 'A. Special reinforced concrete shear walls' to 'H. Steel systems not specifically detailed for seismic resistance, excluding cantilever column systems'.",
 )
 @xw.arg("SDC", "raw", doc="Seismic Design Category: A, B, C, D, E, F.")
-@xw.arg("increase", "raw", doc="Whether 12.2.5.4 is used and its conditions hold (see its note): yes, no.")
+@xw.arg(
+    "increase",
+    "raw",
+    doc="Whether 12.2.5.4 is used: no extreme torsion, at most 60 % of the force in one plane: yes, no.",
+)
 @xw.arg(
     "edition",
     "raw",
