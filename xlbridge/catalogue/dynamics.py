@@ -36,7 +36,7 @@ displacements = Argument(
     symbol="delta_ei",
 )
 mode = Argument("mode", "none", "Number of the mode, whole, 1 for the longest period", Span(1), symbol="m")
-modes = Argument("modes", "none", "How many modes, from the first on, whole", Span(1), symbol="N_m")
+modes = Argument("modes", "none", "How many modes, from the first on, whole", Span(1))
 MODEL = (weights, stiffnesses, heights)
 
 #: five equal stories in kip and in
@@ -154,7 +154,7 @@ FUNCTIONS = (
         arguments=(modes, *MODEL),
         result=Result("ΣW_m/W", "none", "effective modal mass of the modes over the total mass"),
         function=dynamics.modes_weight_share,
-        expression="Σ of W_m/W of modes 1 to {modes} of {weights} on {stiffnesses} at {heights}",
+        expression="Σ of W_m/W, first to last of {modes}, of {weights} on {stiffnesses} at {heights}",
         example=Example({"modes": 2.0, **FIVE}, "0.967"),
     ),
     SheetFunction(
@@ -179,7 +179,7 @@ FUNCTIONS = (
         arguments=(modes, *MODEL, units),
         result=Result("status", "text", "consequence"),
         function=dynamics.modes_verdict,
-        expression="{held} of modes 1 to {modes} against 1 and 0.90; the next period against 0.05 s, {units}",
+        expression="{held}, first to last of {modes}, against 1 and 0.90; the next period against 0.05 s, {units}",
         example=Example(
             {"modes": 2.0, **FIVE, "units": "us"},
             "at least 90 % of the weight: enough by the exception",

@@ -136,7 +136,7 @@ FUNCTIONS = (
         arguments=(values, periods, damping),
         result=Result("r", "any", "combined response, in the unit of the values"),
         function=dynamics.complete_combination,
-        expression="√(ΣΣ rho_ij·r_i·r_j) of r = {values} at T = {periods}, damping {damping}",
+        expression="√(ΣΣ rho_ij·r_i·r_j) of r = {values} at T = {periods}, {damping} of critical",
         example=Example({"values": [3.0, 4.0], "periods": [1.0, 0.9], "damping": 0.05}, "6.03"),
     ),
     SheetFunction(
