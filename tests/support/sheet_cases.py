@@ -133,6 +133,8 @@ def placed(entry: SheetFunction, name: str, number: float) -> dict[str, Any]:
         call["h_n"], call["h_x"] = max(call["h_x"], call["h_n"]), min(call["h_x"], call["h_n"])
     if number >= 0 and name in ("w_x", "w_px") and "weights" in call:
         call["weights"][at] = number
+    if name in ("z_x", "z_0"):  # a level stands above the base
+        call |= {"z_0": number - 12.5} if name == "z_x" else {"z_x": number + 12.5}
     if number > 0 and name in ("d_max", "d_avg"):
         other = "d_avg" if name == "d_max" else "d_max"
         call[other] = (min if name == "d_max" else max)(call[other], number)
@@ -250,6 +252,8 @@ def _settle(call: dict[str, Any], levels: Mapping[str, list[float]], at: int, ra
         call["h_x"] = call["h_n"] * random.choice((0.0, 0.8, 1.0, random.random()))
     if {"h_n", "C_w", "units"} <= call.keys() and call["units"] == "si":
         call["h_n"] *= 0.3048
+    if "z_0" in call:
+        call["z_x"] = call["z_0"] + random.uniform(2.0, 90.0)
     if {"d_max", "d_avg"} <= call.keys():
         call["d_max"] = call["d_avg"] * random.uniform(1.0, 2.5)
 

@@ -92,7 +92,7 @@ def test_numbers_outside_are_known_for_most_arguments() -> None:
     assert unbounded == {
         *("forces", "displacements", "values", "delta_xe", "d_upper", "d_lower"),
         *("x_M", "x_R", "centers", "positions", "distances", "d_i", "M_t", "Delta_1", "Delta_2", "Delta_cm"),
-        *("Q_E", "D", "E_v", "E_h", "L", "S", "delta_e"),
+        *("Q_E", "D", "E_v", "E_h", "L", "S", "delta_e", "z_x", "z_0"),
     }
 
 
