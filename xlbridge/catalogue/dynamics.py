@@ -179,7 +179,7 @@ FUNCTIONS = (
         arguments=(modes, *MODEL, units),
         result=Result("status", "text", "consequence"),
         function=dynamics.modes_verdict,
-        expression="{held}, first to last of {modes}, against 1 and 0.90; the next period against 0.05 s, {units}",
+        expression="{held}, first to last of {modes}, against 1 and 0.90; next T_m against 0.05 s, {units}",
         example=Example(
             {"modes": 2.0, **FIVE, "units": "us"},
             "at least 90 % of the weight: enough by the exception",

@@ -27,9 +27,7 @@ values = Argument(
 periods = Argument(
     "periods", "time", "Periods of the modes", POSITIVE, Kind.LEVELS, symbol="T_m", each="mode"
 )
-damping = Argument(
-    "damping", "none", "Damping ratio of the modes, 0.05 for 5 %", Span(0, 1, low_open=True), symbol="zeta"
-)
+damping = Argument("damping", "none", "Damping ratio of the modes, 0.05 for 5 %", Span(0, 1, low_open=True))
 T_i = Argument("T_i", "time", "Period of one mode", POSITIVE)
 V_t = Argument("V_t", "force", "Combined base shear of the modes", POSITIVE)
 
