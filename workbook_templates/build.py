@@ -15,7 +15,7 @@ from openpyxl import Workbook
 
 from engine.version import __version__
 from workbook_templates import layout as places
-from workbook_templates.draw import checks, cover, criteria, figures, functions, levels
+from workbook_templates.draw import checks, cover, criteria, figures, functions, tables
 from workbook_templates.inputs import Inputs
 from workbook_templates.layout import Layout
 from xlbridge.headless.compute import Computed, compute_into
@@ -32,13 +32,14 @@ def build(given: Mapping[str, Any], level_count: int = DEFAULT_LEVELS) -> bytes:
     ``level_count`` levels of them if no level is given.
     """
     inputs = Inputs(given, level_count)
-    layout = Layout(len(inputs.levels), inputs.parts)
+    layout = Layout(len(inputs.rows(places.STORY_TABLE)), inputs.parts, inputs.row_counts)
     workbook = Workbook()
     workbook.remove(workbook.worksheets[0])
-    sheets = {name: workbook.create_sheet(name) for name in places.SHEETS}
+    sheets = {name: workbook.create_sheet(name) for name in layout.sheets}
     cover.draw(sheets[places.COVER], layout, inputs)
     criteria.draw(sheets[places.CRITERIA], layout, inputs)
-    levels.draw(sheets[places.LEVELS], layout, inputs)
+    for grid in layout.grids:
+        tables.draw(sheets[grid.table.sheet], layout, grid, inputs)
     checks.draw(sheets[places.CHECKS], layout, inputs)
     figures.draw(sheets[places.FIGURES], sheets[places.LEVELS], layout, inputs)
     functions.draw(sheets[places.FUNCTIONS], layout, inputs)

@@ -1,7 +1,7 @@
 """The words in which a workbook is declared: quantities, blocks of them, check lines, parts.
 
-A formula is a template. ``{key}`` is the cell of a quantity in the same row (levels) or the same column
-(criteria); ``{key:all}`` is its whole level column, guard rows included; ``{key:wide}`` the same with one
+A formula is a template. ``{key}`` is the cell of a quantity in the same row (tables) or the same column
+(criteria); ``{key:all}`` is its whole table column, guard rows included; ``{key:wide}`` the same with one
 row more at either end; ``{key:total}`` and ``{key:base}`` are its cells in the totals row and in the base
 row. A criteria quantity met on another sheet is written by its defined name.
 """
@@ -9,8 +9,8 @@ row. A criteria quantity met on another sheet is written by its defined name.
 from __future__ import annotations
 
 import re
-from collections.abc import Callable
-from dataclasses import dataclass
+from collections.abc import Callable, Mapping
+from dataclasses import dataclass, field
 from enum import StrEnum
 from functools import cached_property
 from typing import Any, Final
@@ -19,6 +19,8 @@ from xlbridge.catalogue import CATALOGUE, SheetFunction
 from xlbridge.catalogue.entry import Argument, Span
 
 DIRECTIONS: Final = ("X", "Y")
+#: the mark of a value that nobody has entered yet
+STARTER: Final = "starter value"
 _CALL = re.compile(r"\b(ELF_[A-Z0-9_]+)\(")
 
 
@@ -48,7 +50,7 @@ Starter = Callable[[Start], Any]
 
 @dataclass(frozen=True)
 class Quantity:
-    """One criteria row or one level column.
+    """One criteria row or one table column.
 
     ``unit`` is a key of engine.units; ``rule`` a key of the edition data, taken from the worksheet
     function in the formula where there is one. An input says what it allows (``span``, ``choices``), what
@@ -128,6 +130,27 @@ class Block:
 
 
 @dataclass(frozen=True, slots=True)
+class Table:
+    """A sheet with rows of its own between two guard rows: ``stored`` names them in BUILDING.toml.
+
+    ``base`` says what the row of the base holds, where the table has one; ``text`` is its line in the
+    contents. A blank workbook starts with one row a level.
+    """
+
+    sheet: str
+    title: str
+    text: str
+    stored: str
+    bands: tuple[Block, ...] = ()
+    base: Mapping[str, str | int] = field(default_factory=dict)
+
+    @property
+    def name(self) -> str:
+        """The defined name of the headings and rows."""
+        return f"{self.stored}_table"
+
+
+@dataclass(frozen=True, slots=True)
 class Check:
     """One check line: ``left`` against ``right``. A warning asks for a look, it is not a failure."""
 
@@ -167,12 +190,16 @@ class Part:
 
     ``needs`` are the level entries of BUILDING.toml without which the part cannot be filled in;
     ``requires`` the keys of the parts that come along, because formulas of this one refer to them.
+    ``bands`` widen the story table, ``tables`` are further sheets; ``replaces`` are quantities that take the
+    place of those of other parts with the same key.
     """
 
     key: str
     title: str
     criteria: tuple[Block, ...] = ()
     bands: tuple[Block, ...] = ()
+    tables: tuple[Table, ...] = ()
+    replaces: tuple[Quantity, ...] = ()
     checks: tuple[Check, ...] = ()
     headlines: tuple[Headline, ...] = ()
     figures: tuple[Figure, ...] = ()
@@ -186,6 +213,11 @@ def entry(key: str, feeds: str, text: str = "", **more: Any) -> Quantity:
     a: Argument = next(a for a in CATALOGUE[function].arguments if a.name == name)
     span = None if a.choices else a.span
     return Quantity(key, text or a.text, a.unit, Role.INPUT, span=span, choices=a.choices, **more)
+
+
+def level_name(start: Start) -> str:
+    """Return the name of a level in a blank workbook; what stands on the base is Level 1."""
+    return "Roof" if start.level == start.count else f"Level {start.level + 1}"
 
 
 def always(value: Any) -> Starter:

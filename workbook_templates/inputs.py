@@ -11,23 +11,22 @@ from dataclasses import dataclass
 from typing import Any, Final
 
 from engine.errors import MissingValue, NotApplicable
-from workbook_templates.declare import DIRECTIONS, Quantity, Start
+from workbook_templates.declare import DIRECTIONS, STARTER, Quantity, Start, Table
 from workbook_templates.parts import PARTS, with_required
 
-STARTER: Final = "starter value"
 DEFAULT: Final = "default"
 UNTITLED: Final = "Untitled building"
 JOB_KEYS: Final = ("number", "engineer", "checker", "revision", "date")
 BLANK_PARTS: Final = ("drift",)
 
-Table = Mapping[str, Any]
+Entries = Mapping[str, Any]
 
 
 @dataclass(frozen=True)
 class Inputs:
     """The inputs of one workbook: the tables of a BUILDING.toml, gaps filled by starter values."""
 
-    given: Table
+    given: Entries
     level_count: int
 
     @property
@@ -40,11 +39,16 @@ class Inputs:
         """The unit system's key."""
         return str(self.given["units"])
 
+    def rows(self, table: Table) -> Sequence[Entries]:
+        """The rows of a table, in the order given; as many empty ones as levels where none is given."""
+        rows: Sequence[Entries] = self.given.get(table.stored) or [{}] * self.level_count
+        return rows
+
     @property
-    def levels(self) -> Sequence[Table]:
-        """The levels, in the order given; empty tables where none is given."""
-        levels: Sequence[Table] = self.given.get("level") or [{}] * self.level_count
-        return levels
+    def row_counts(self) -> dict[str, int]:
+        """The number of rows of each table that the parts bring."""
+        tables = (table for key in self.parts for table in PARTS[key].tables)
+        return {table.stored: len(self.rows(table)) for table in tables}
 
     @property
     def parts(self) -> frozenset[str]:
@@ -54,10 +58,13 @@ class Inputs:
             if key not in PARTS:
                 raise NotApplicable("parts", key, f"must be one of {', '.join(PARTS)}")
         found = {key for key, part in PARTS.items() if part.needs and self._has(part.needs)}
+        found |= {key for key, part in PARTS.items() if any(t.stored in self.given for t in part.tables)}
         return with_required({*asked, *found})
 
     def _has(self, needs: tuple[str, ...]) -> bool:
-        given = [key for key in needs if any(level.get(key) is not None for level in self.levels)]
+        given = [
+            key for key in needs if any(level.get(key) is not None for level in self.given.get("level", ()))
+        ]
         if given and len(given) < len(needs):
             missing = ", ".join(key for key in needs if key not in given)
             raise MissingValue(missing, None, f"is needed at every level beside {', '.join(given)}")
@@ -78,17 +85,20 @@ class Inputs:
             return STARTER
         return str(self.given.get("sources", {}).get(q.key, "" if given else DEFAULT))
 
-    def level(self, number: int, q: Quantity, direction: str | None) -> Any:
-        """Return an entry of a level, counted from the first row."""
+    def row(self, table: Table, number: int, q: Quantity, direction: str | None) -> Any:
+        """Return an entry of a row of a table, counted from the first."""
         if "level" in self.given:
-            return self.levels[number].get(q.stored_key(direction))
-        if q.key == "source":
-            return STARTER
+            return self._rows_needed(table)[number].get(q.stored_key(direction))
         return (
             q.starter(Start(self.units, self.level_count - number, self.level_count))
             if q.starter
             else q.default
         )
+
+    def _rows_needed(self, table: Table) -> Sequence[Entries]:
+        if not self.given.get(table.stored):
+            raise MissingValue(table.stored, None, f"must have rows for the sheet {table.sheet}")
+        return self.rows(table)
 
     def job(self, key: str) -> str:
         """Return a text of the cover."""
@@ -96,7 +106,7 @@ class Inputs:
             return str(self.given.get("title") or UNTITLED)
         return str(self.given.get("job", {}).get(key, ""))
 
-    def _table(self, direction: str | None) -> Table:
+    def _table(self, direction: str | None) -> Entries:
         site, directions = self.given.get("site", {}), self.given.get("direction", {})
-        found: Table = site if direction is None else directions.get(direction, {})
+        found: Entries = site if direction is None else directions.get(direction, {})
         return found

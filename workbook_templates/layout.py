@@ -3,22 +3,30 @@
 from __future__ import annotations
 
 import re
-from dataclasses import dataclass, field
+from collections.abc import Iterable
+from dataclasses import dataclass, field, replace
 from functools import cached_property
 from typing import Final
 
 from openpyxl.utils import get_column_letter
 
-from workbook_templates.declare import DIRECTIONS, Block, Part, Quantity
+from workbook_templates.declare import DIRECTIONS, Block, Part, Quantity, Table
 from workbook_templates.parts import chosen
 
 COVER: Final = "Cover"
 CRITERIA: Final = "Criteria"
-LEVELS: Final = "Levels"
 CHECKS: Final = "Checks"
 FIGURES: Final = "Figures"
 FUNCTIONS: Final = "Functions"
-SHEETS: Final = (COVER, CRITERIA, LEVELS, CHECKS, FIGURES, FUNCTIONS)
+#: the table that every workbook has; the bands of the parts are its columns
+STORY_TABLE: Final = Table(
+    "Levels",
+    "Story table",
+    "the story table: weights, forces, drift and stability, one row a level",
+    "level",
+    base={"name": "Base", "elevation": "=base_elevation", "h_x": 0},
+)
+LEVELS: Final = STORY_TABLE.sheet
 
 CRITERIA_TOP: Final = 5
 CRITERIA_COLUMN: Final = {None: "D", "X": "D", "Y": "E"}
@@ -33,7 +41,7 @@ Key = tuple[str, str | None]
 
 @dataclass(frozen=True, slots=True)
 class Column:
-    """One column of the story table."""
+    """One column of a table."""
 
     letter: str
     band: Block
@@ -48,28 +56,73 @@ class Column:
 
 
 @dataclass(frozen=True)
+class Grid:
+    """A table as it stands on its sheet: its columns, and how many rows there are."""
+
+    table: Table
+    count: int
+
+    @cached_property
+    def columns(self) -> list[Column]:
+        """The columns, those of one direction of a band together."""
+        places = (
+            (band, direction, q)
+            for band in self.table.bands
+            for direction in (DIRECTIONS if band.per_direction else (None,))
+            for q in band.quantities
+        )
+        return [Column(get_column_letter(n), *place) for n, place in enumerate(places, 1)]
+
+    @cached_property
+    def letters(self) -> dict[Key, str]:
+        """The letter of each column."""
+        return {(c.quantity.key, c.direction): c.letter for c in self.columns}
+
+    @property
+    def bottom_guard(self) -> int:
+        """The guard row below the lowest row."""
+        return FIRST_LEVEL + self.count
+
+    @property
+    def base_row(self) -> int:
+        """The row of the base; that of the totals in a table without one."""
+        return self.bottom_guard + 1
+
+    @property
+    def total_row(self) -> int:
+        """The row of the totals."""
+        return self.base_row + bool(self.table.base)
+
+    def letter(self, key: str, direction: str | None) -> str:
+        """Return the letter of a column, in the given direction or common to both."""
+        return self.letters.get((key, direction)) or self.letters[key, None]
+
+    def address(self, key: str, part: str | None, direction: str | None, row: int) -> str:
+        """Return the address on the sheet of a place in a template."""
+        column = self.letter(key, direction)
+        if part == "wide":
+            return f"${column}${ROLE_ROW}:${column}${self.base_row}"
+        if part == "all":
+            return f"${column}${TOP_GUARD}:${column}${self.bottom_guard}"
+        if part is not None:
+            return f"${column}${self.total_row if part == 'total' else self.base_row}"
+        return f"{column}{row}"
+
+
+@dataclass(frozen=True)
 class Layout:
-    """The addresses of one workbook: how many levels, which parts."""
+    """The addresses of one workbook: how many levels, which parts, how many rows the further tables have."""
 
     level_count: int
     part_keys: frozenset[str]
+    row_counts: dict[str, int] = field(default_factory=dict)
     rows: dict[str, int] = field(init=False, default_factory=dict)
-    table: list[Column] = field(init=False, default_factory=list)
 
     def __post_init__(self) -> None:
         top = CRITERIA_TOP
         for block in self.criteria:
             self.rows.update({q.key: top + n for n, q in enumerate(block.quantities, 1)})
             top += len(block.quantities) + 2
-        for band, direction in self.bands:
-            for q in band.quantities:
-                self.table.append(Column(get_column_letter(len(self.table) + 1), band, direction, q))
-
-    @property
-    def criteria(self) -> list[Block]:
-        """The criteria blocks of the parts that are in."""
-        blocks = (block for part in self.parts for block in part.criteria)
-        return [block for block in blocks if block.without not in self.part_keys]
 
     @cached_property
     def parts(self) -> tuple[Part, ...]:
@@ -77,30 +130,54 @@ class Layout:
         return chosen(self.part_keys)
 
     @property
-    def bands(self) -> list[tuple[Block, str | None]]:
-        """The bands of the story table with their direction, those of one direction together."""
-        bands = (band for part in self.parts for band in part.bands)
-        return [(b, d) for b in bands for d in (DIRECTIONS if b.per_direction else (None,))]
+    def criteria(self) -> list[Block]:
+        """The criteria blocks of the parts that are in."""
+        return self._standing(block for part in self.parts for block in part.criteria)
 
     @cached_property
-    def letters(self) -> dict[Key, str]:
-        """The letter of each level column."""
-        return {(c.quantity.key, c.direction): c.letter for c in self.table}
+    def grids(self) -> list[Grid]:
+        """The tables: the story table first, then those that parts bring."""
+        story = replace(STORY_TABLE, bands=tuple(band for part in self.parts for band in part.bands))
+        tables = (story, *(table for part in self.parts for table in part.tables))
+        return [
+            Grid(
+                replace(t, bands=tuple(self._standing(t.bands))),
+                self.row_counts.get(t.stored, self.level_count),
+            )
+            for t in tables
+        ]
+
+    @property
+    def levels(self) -> Grid:
+        """The story table."""
+        return self.grids[0]
+
+    @property
+    def table(self) -> list[Column]:
+        """The columns of the story table."""
+        return self.levels.columns
 
     @property
     def bottom_guard(self) -> int:
         """The guard row below the lowest level."""
-        return FIRST_LEVEL + self.level_count
+        return self.levels.bottom_guard
 
     @property
-    def base_row(self) -> int:
-        """The row of the base."""
-        return self.bottom_guard + 1
+    def sheets(self) -> tuple[str, ...]:
+        """The sheets in their order."""
+        return (COVER, CRITERIA, *(grid.table.sheet for grid in self.grids), CHECKS, FIGURES, FUNCTIONS)
 
-    @property
-    def total_row(self) -> int:
-        """The row of the totals."""
-        return self.bottom_guard + 2
+    def grid(self, key: str) -> Grid:
+        """Return the table that has a quantity among its columns; no two tables share one."""
+        return next(g for g in self.grids if any(c.quantity.key == key for c in g.columns))
+
+    def column(self, key: str, direction: str | None) -> str:
+        """Return the letter of a column of any table, in the given direction or common to both."""
+        return self.grid(key).letter(key, direction)
+
+    def level_range(self, key: str, direction: str | None) -> str:
+        """Return a column from guard row to guard row, so that rows put in at either end count."""
+        return self.grid(key).address(key, "all", direction, 0)
 
     def is_site(self, key: str) -> bool:
         """Whether a criteria quantity holds for the whole building."""
@@ -119,31 +196,25 @@ class Layout:
         """Return the defined name of the source cell of a criteria entry."""
         return f"source_{key}"
 
-    def level_range(self, key: str, direction: str | None) -> str:
-        """Return a level column from guard row to guard row, so that rows put in at either end count."""
-        column = self.column(key, direction)
-        return f"${column}${TOP_GUARD}:${column}${self.bottom_guard}"
-
-    def column(self, key: str, direction: str | None) -> str:
-        """Return the letter of a level column, in the given direction or common to both."""
-        return self.letters.get((key, direction)) or self.letters[key, None]
-
     def write(self, template: str, sheet: str, direction: str | None, row: int = 0) -> str:
         """Return the formula of a template for one cell."""
         return _PLACE.sub(lambda m: self._place(m[1], m[2], sheet, direction, row), template)
 
+    def _standing(self, blocks: Iterable[Block]) -> list[Block]:
+        """Leave out blocks that another part stands for; put in the quantities that parts replace."""
+        instead = {q.key: q for part in self.parts for q in part.replaces}
+        return [
+            replace(block, quantities=tuple(instead.get(q.key, q) for q in block.quantities))
+            for block in blocks
+            if block.without not in self.part_keys
+        ]
+
     def _place(self, key: str, part: str | None, sheet: str, direction: str | None, row: int) -> str:
         if key in self.rows:
             return self._criteria_place(key, sheet, direction)
-        prefix = "" if sheet == LEVELS else f"{LEVELS}!"
-        column = self.column(key, direction)
-        if part == "wide":
-            return f"{prefix}${column}${ROLE_ROW}:${column}${self.base_row}"
-        if part == "all":
-            return prefix + self.level_range(key, direction)
-        if part is not None:
-            return f"{prefix}${column}${self.total_row if part == 'total' else self.base_row}"
-        return f"{column}{row}"
+        grid = self.grid(key)
+        prefix = "" if sheet == grid.table.sheet else f"{grid.table.sheet}!"
+        return prefix + grid.address(key, part, direction, row)
 
     def _criteria_place(self, key: str, sheet: str, direction: str | None) -> str:
         if sheet != CRITERIA:

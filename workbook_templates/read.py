@@ -11,9 +11,9 @@ from dataclasses import dataclass
 from functools import cached_property
 from typing import Any, Final
 
-from workbook_templates.declare import DIRECTIONS, Part, Quantity
+from workbook_templates.declare import DIRECTIONS, Part, Quantity, Table
 from workbook_templates.inputs import JOB_KEYS
-from workbook_templates.layout import ROLE_ROW, SYMBOL_ROW, Column, Layout
+from workbook_templates.layout import ROLE_ROW, STORY_TABLE, SYMBOL_ROW, Column, Grid, Layout
 from workbook_templates.parts import CORE, PARTS
 from xlbridge.headless.operands import NotEvaluated
 from xlbridge.values import CellError, Scalar, Value
@@ -46,7 +46,7 @@ class Reader:
             "job": _filled({key: self._cell(f"job_{key}") for key in JOB_KEYS}),
             "site": self._entries(None),
             "direction": {d: self._entries(d) for d in DIRECTIONS},
-            "level": [self._level(row) for row in self._rows],
+            **{grid.table.stored: self._entered(grid) for grid in self._layout.grids},
             "sources": self._sources(),
         }
         return {key: table for key, table in tables.items() if table not in (None, {}, [])}
@@ -56,28 +56,40 @@ class Reader:
         return {**self._computed(None), "direction": {d: self._computed(d) for d in DIRECTIONS}}
 
     @cached_property
-    def _table(self) -> tuple[Row, ...]:
-        table = self._value("level_table")
-        if not isinstance(table, tuple) or len(table) <= HEADER_ROWS:
-            raise ReadError("level_table: the name does not cover a story table")
-        return table
-
-    @cached_property
     def _layout(self) -> Layout:
-        present = frozenset(key for key, part in PARTS.items() if self._has(part))
-        return Layout(len(self._rows), present)
+        return Layout(1, frozenset(key for key, part in PARTS.items() if self._has(part)))
 
     @cached_property
-    def _rows(self) -> list[Row]:
-        """The rows below the headings in which any input is filled in."""
-        inputs = [self._place(c) for c in Layout(1, frozenset({CORE})).table if c.quantity.is_input]
-        return [row for row in self._table[HEADER_ROWS:] if any(row[i] is not None for i in inputs)]
+    def _tables(self) -> dict[str, tuple[Row, ...]]:
+        """The headings and rows of each table, by the name that covers them."""
+        tables: dict[str, tuple[Row, ...]] = {}
+        for name in {t.name for part in PARTS.values() for t in (STORY_TABLE, *part.tables)}:
+            if self._defined(name):
+                found = self._value(name)
+                if not isinstance(found, tuple) or len(found) <= HEADER_ROWS:
+                    raise ReadError(f"{name}: the name does not cover a table")
+                tables[name] = found
+        return tables
+
+    def _headings(self, table: Table) -> Row:
+        if table.name not in self._tables:
+            raise ReadError(f"{table.name}: the workbook has no such name")
+        return self._tables[table.name][0]
+
+    def _rows(self, grid: Grid) -> list[Row]:
+        """The rows in which any input is filled in; a link filled down an empty row does not count."""
+        inputs = [self._place(grid, c) for c in grid.columns if c.quantity.is_input and not c.quantity.linked]
+        rows = self._tables[grid.table.name][HEADER_ROWS:]
+        return [row for row in rows if any(row[i] is not None for i in inputs)]
 
     def _has(self, part: Part) -> bool:
-        """Whether the story table has a column of the part, or the criteria its first row if it has none."""
+        """Whether its table stands, a column of it in the story table, or its first criteria row."""
         layout = Layout(1, frozenset({part.key}))
+        if part.tables:
+            return any(table.name in self._tables for table in part.tables)
         if layout.table:
-            return any(self._heads(c) for c in layout.table)
+            headings = self._headings(STORY_TABLE)
+            return any(c.heading in headings for c in layout.table)
         block = layout.criteria[0]
         return self._defined(layout.name(block.quantities[0].key, DIRECTIONS[0]))
 
@@ -88,18 +100,11 @@ class Reader:
             return False
         return True
 
-    def _heads(self, column: Column) -> bool:
-        return column.heading in self._table[0]
-
-    def _place(self, column: Column) -> int:
-        if not self._heads(column):
-            raise ReadError(f"the story table has no column headed {column.heading}")
-        return self._table[0].index(column.heading)
-
-    def _columns(self, direction: str | None, wanted: bool) -> Iterator[tuple[Quantity, int]]:
-        for column in self._layout.table:
-            if column.direction == direction and column.quantity.is_input is wanted:
-                yield column.quantity, self._place(column)
+    def _place(self, grid: Grid, column: Column) -> int:
+        headings = self._headings(grid.table)
+        if column.heading not in headings:
+            raise ReadError(f"the {grid.table.title.lower()} has no column headed {column.heading}")
+        return headings.index(column.heading)
 
     def _quantities(self, direction: str | None, wanted: bool) -> Iterator[Quantity]:
         for block in self._layout.criteria:
@@ -114,13 +119,17 @@ class Reader:
             values[q.key] = FLAGS.get(str(value), value) if q.is_flag else value
         return _filled(values)
 
-    def _level(self, row: Row) -> dict[str, Any]:
-        level: dict[str, Any] = {}
-        for direction in (None, *DIRECTIONS):
-            for q, place in self._columns(direction, True):
-                name = q.stored_key(direction)
-                level[name] = _sound(f"level {row[0]}: {name}", row[place])
-        return _filled(level)
+    def _entered(self, grid: Grid) -> list[dict[str, Any]]:
+        """Return the entries of each row of a table."""
+        keys = {
+            c.quantity.stored_key(c.direction): self._place(grid, c)
+            for c in grid.columns
+            if c.quantity.is_input
+        }
+        return [
+            _filled({key: _sound(f"{grid.table.stored} {row[0]}: {key}", row[i]) for key, i in keys.items()})
+            for row in self._rows(grid)
+        ]
 
     def _sources(self) -> dict[str, Any]:
         keys = [q.key for d in (None, "X") for q in self._quantities(d, True)]
@@ -131,7 +140,12 @@ class Reader:
             q.key: self._value(self._layout.name(q.key, direction))
             for q in self._quantities(direction, False)
         }
-        found.update({q.key: [row[i] for row in self._rows] for q, i in self._columns(direction, False)})
+        for grid in self._layout.grids:
+            rows = self._rows(grid)
+            for c in grid.columns:
+                if c.direction == direction and not c.quantity.is_input:
+                    place = self._place(grid, c)
+                    found[c.quantity.key] = [row[place] for row in rows]
         return found
 
     def _value(self, name: str) -> Value:

@@ -20,9 +20,8 @@ from tests.support.buildings import buildings
 from tests.support.story_books import assert_routes_agree, story_book
 from workbook_templates import generate
 from workbook_templates.build import build, write_workbook
-from workbook_templates.declare import DIRECTIONS, Part
-from workbook_templates.inputs import STARTER
-from workbook_templates.layout import LEVELS, SHEETS, Layout
+from workbook_templates.declare import DIRECTIONS, STARTER, Part
+from workbook_templates.layout import LEVELS, Layout
 from workbook_templates.parts import CORE, PARTS, with_required
 from workbook_templates.read import Reader
 from xlbridge.catalogue import CATALOGUE
@@ -133,7 +132,7 @@ def test_written_workbook_carries_its_values(tmp_path: Path) -> None:
 
 
 def test_nothing_is_hidden_merged_external_or_volatile(blank: openpyxl.Workbook) -> None:
-    assert blank.sheetnames == list(SHEETS)
+    assert blank.sheetnames == list(Layout(6, frozenset(PARTS)).sheets)
     for sheet in blank.worksheets:
         assert sheet.sheet_state == "visible"
         assert not sheet.merged_cells.ranges
@@ -149,7 +148,7 @@ def test_every_defined_name_is_one_sound_reference(blank: openpyxl.Workbook) -> 
     assert len(blank.defined_names) > 60
     for name in blank.defined_names.values():
         sheet, _, address = name.attr_text.rpartition("!")
-        assert sheet in SHEETS
+        assert sheet in blank.sheetnames
         assert blank[sheet][address.replace("$", "")] is not None
 
 

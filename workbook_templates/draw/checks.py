@@ -5,9 +5,9 @@ from __future__ import annotations
 from openpyxl.worksheet.worksheet import Worksheet
 
 from engine.units import symbol
-from workbook_templates.declare import DIRECTIONS, Check, Quantity, Role
+from workbook_templates.declare import DIRECTIONS, STARTER, Check, Quantity, Role
 from workbook_templates.draw import sheets, style
-from workbook_templates.inputs import STARTER, Inputs
+from workbook_templates.inputs import Inputs
 from workbook_templates.layout import CHECKS as SHEET
 from workbook_templates.layout import CRITERIA, Layout
 
@@ -71,11 +71,12 @@ def _verdict(check: Check, row: int) -> str:
 def _draw_summary(sheet: Worksheet, layout: Layout, last: int) -> None:
     verdicts = f"I{HEADER + 1}:I{last}"
     sources = f"{CRITERIA}!$H$1:$H${max(layout.rows.values())}"
-    levels = layout.write("{source:all}", SHEET, None)
+    rows = (q.key for g in layout.grids for c in g.columns if (q := c.quantity).stored_key(None) == "source")
+    marks = (layout.write(f"{{{key}:all}}", SHEET, None) for key in rows)
     lines = {
         STARTERS: (
             "Entries that still hold a starter value (their source cell says so)",
-            f'=COUNTIF({sources},"{STARTER}")+COUNTIF({levels},"{STARTER}")',
+            "=" + "+".join(f'COUNTIF({cells},"{STARTER}")' for cells in (sources, *marks)),
         ),
         HOLD: ("Checks that hold", f'=COUNTIF({verdicts},"{HOLDS}")'),
         LOOK: ("Warnings: to be looked at", f'=COUNTIF({verdicts},"{LOOKS}")'),

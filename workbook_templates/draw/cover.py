@@ -41,7 +41,6 @@ LEGEND = {
 }
 CONTENTS = {
     places.CRITERIA: "site, occupancy, systems and base shear of both directions",
-    places.LEVELS: "the story table: weights, forces, drift and stability, one row a level",
     places.CHECKS: "what must hold, line by line",
     places.FIGURES: "forces, shears and drifts over the height",
     places.FUNCTIONS: "the worksheet functions called here, with equation and clause",
@@ -63,7 +62,7 @@ def draw(sheet: Worksheet, layout: Layout, inputs: Inputs) -> None:
     row = _draw_headlines(sheet, layout, inputs, row + 1)
     row = _draw_texts(sheet, "Cautions", CAUTIONS, row + 1)
     row = _draw_legend(sheet, row + 1)
-    row = _draw_contents(sheet, row + 1)
+    row = _draw_contents(sheet, layout, row + 1)
     row = _draw_texts(sheet, "Working with the table", GUIDE, row + 1)
     _draw_log(sheet, row + 1)
     sheets.page(sheet, inputs.units, "1:2", landscape=False)
@@ -118,13 +117,14 @@ def _draw_legend(sheet: Worksheet, row: int) -> int:
     return row + 1
 
 
-def _draw_contents(sheet: Worksheet, row: int) -> int:
+def _draw_contents(sheet: Worksheet, layout: Layout, row: int) -> int:
     style.write(sheet.cell(row, 1), "Contents", style.HEADING)
-    for name, text in CONTENTS.items():
+    texts = CONTENTS | {grid.table.sheet: grid.table.text for grid in layout.grids}
+    for name in layout.sheets[1:]:
         row += 1
         style.write(sheet.cell(row, 1), name, style.LINKED)
         sheet.cell(row, 1).hyperlink = Hyperlink(ref=f"A{row}", location=f"'{name}'!A1", display=name)
-        style.write(sheet.cell(row, 2), text)
+        style.write(sheet.cell(row, 2), texts[name])
     return row + 1
 
 

@@ -31,7 +31,7 @@ def draw(sheet: Worksheet, layout: Layout, inputs: Inputs) -> None:
 
 def _called(layout: Layout) -> Iterator[SheetFunction]:
     """The functions in the formulas of the parts, in the order of the catalogue."""
-    blocks = (block for part in layout.parts for block in (*part.criteria, *part.bands))
+    blocks = (*layout.criteria, *(band for grid in layout.grids for band in grid.table.bands))
     names = {name for block in blocks for q in block.quantities for name in q.calls}
     return (entry for name, entry in CATALOGUE.items() if name in names)
 

@@ -5,6 +5,7 @@ from __future__ import annotations
 from engine.editions import EDITIONS
 from engine.units import SYSTEMS
 from workbook_templates.declare import (
+    STARTER,
     YES_NO,
     Block,
     Check,
@@ -16,6 +17,7 @@ from workbook_templates.declare import (
     always,
     by_units,
     entry,
+    level_name,
 )
 from xlbridge.catalogue.entry import ANY, NOT_NEGATIVE, Span
 
@@ -152,7 +154,7 @@ LEVEL = Block(
             INPUT,
             symbol="x",
             width=15,
-            starter=lambda s: "Roof" if s.level == s.count else f"Level {s.level + 1}",
+            starter=level_name,
         ),
         Quantity(
             "elevation",
@@ -174,7 +176,15 @@ LEVEL = Block(
             stored="weight",
             starter=by_units(1000.0, 4500.0),
         ),
-        Quantity("source", "Source of the inputs in this row", "text", INPUT, symbol="source", width=24),
+        Quantity(
+            "source",
+            "Source of the inputs in this row",
+            "text",
+            INPUT,
+            symbol="source",
+            width=24,
+            starter=always(STARTER),
+        ),
         Quantity(
             "h_x", "Height above base", "length", CALC, "=ELF_HX({elevation},{base_elevation})", total="max"
         ),

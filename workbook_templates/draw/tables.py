@@ -1,4 +1,4 @@
-"""Draw the story table: levels top-down between two guard rows, then the base and the totals.
+"""Draw a table: rows between two guard rows, then the base if there is one, and the totals.
 
 Every range in a formula runs from guard row to guard row. A row put in anywhere between them, the top and
 the bottom included, is inside every range; blank guard rows count for nothing.
@@ -6,7 +6,6 @@ the bottom included, is inside every range; blank guard rows count for nothing.
 
 from __future__ import annotations
 
-from collections.abc import Mapping
 from itertools import groupby
 
 from openpyxl.utils import column_index_from_string
@@ -18,30 +17,29 @@ from workbook_templates import layout as places
 from workbook_templates.declare import Role
 from workbook_templates.draw import sheets, style
 from workbook_templates.inputs import Inputs
-from workbook_templates.layout import FIRST_LEVEL, LEVELS, TOP_GUARD, Column, Layout
+from workbook_templates.layout import FIRST_LEVEL, TOP_GUARD, Column, Grid, Layout
 from xlbridge.catalogue.entry import NOT_NEGATIVE
 
 TOTALS = {"sum": "SUM", "max": "MAX"}
-BASE: Mapping[str, str | int] = {"name": "Base", "elevation": "=base_elevation", "h_x": 0}
 PAGE_WIDTH = 180  # units of column width on one landscape page at SCALE
 SCALE = 68  # per cent
 
 
-def draw(sheet: Worksheet, layout: Layout, inputs: Inputs) -> None:
-    """Fill the story table."""
-    breaks = _break_pages(sheet, layout)
-    sheets.head(sheet, "Story table", ("B", *breaks))
-    for column in layout.table:
+def draw(sheet: Worksheet, layout: Layout, grid: Grid, inputs: Inputs) -> None:
+    """Fill the sheet of a table."""
+    breaks = _break_pages(sheet, grid)
+    sheets.head(sheet, grid.table.title, ("B", *breaks))
+    for column in grid.columns:
         _draw_header(sheet, inputs, column)
-        _draw_cells(sheet, layout, inputs, column)
-        _draw_foot(sheet, layout, inputs, column)
-        _watch(sheet, layout, column)
+        _draw_cells(sheet, layout, grid, inputs, column)
+        _draw_foot(sheet, layout, grid, inputs, column)
+        _watch(sheet, grid, column)
     for row, height in ((places.TEXT_ROW, 36), (places.CLAUSE_ROW, 24), (places.SYMBOL_ROW, 26)):
         sheet.row_dimensions[row].height = height
-    for row in (TOP_GUARD, layout.bottom_guard):
+    for row in (TOP_GUARD, grid.bottom_guard):
         sheet.row_dimensions[row].height = 5
-    area = f"$A${places.SYMBOL_ROW}:${layout.table[-1].letter}${layout.bottom_guard}"
-    sheets.name(sheet, "level_table", area)
+    area = f"$A${places.SYMBOL_ROW}:${grid.columns[-1].letter}${grid.bottom_guard}"
+    sheets.name(sheet, grid.table.name, area)
     sheet.freeze_panes = f"B{TOP_GUARD}"
     sheets.page(sheet, inputs.units, f"1:{places.ROLE_ROW}")
     sheet.sheet_properties.pageSetUpPr.fitToPage = False
@@ -68,53 +66,55 @@ def _draw_header(sheet: Worksheet, inputs: Inputs, column: Column) -> None:
     sheet.column_dimensions[column.letter].width = q.width
 
 
-def _draw_cells(sheet: Worksheet, layout: Layout, inputs: Inputs, column: Column) -> None:
+def _draw_cells(sheet: Worksheet, layout: Layout, grid: Grid, inputs: Inputs, column: Column) -> None:
     q, direction = column.quantity, column.direction
     number_format = style.number_format(q, inputs.units)
-    for row in range(FIRST_LEVEL, layout.bottom_guard):
+    for row in range(FIRST_LEVEL, grid.bottom_guard):
         cell = sheet[f"{column.letter}{row}"]
-        entered = inputs.level(row - FIRST_LEVEL, q, direction) if q.is_input else None
+        entered = inputs.row(grid.table, row - FIRST_LEVEL, q, direction) if q.is_input else None
         cell.value = (
-            layout.write(q.formula or q.linked, LEVELS, direction, row) if entered is None else entered
+            layout.write(q.formula or q.linked, sheet.title, direction, row) if entered is None else entered
         )
         style.dress(cell, q.role, number_format)
-    for row in (TOP_GUARD, layout.bottom_guard):
+    for row in (TOP_GUARD, grid.bottom_guard):
         sheet[f"{column.letter}{row}"].fill = style.GUARD_FILL
 
 
-def _draw_foot(sheet: Worksheet, layout: Layout, inputs: Inputs, column: Column) -> None:
-    for row, value in ((layout.base_row, _base(layout, column)), (layout.total_row, _total(layout, column))):
+def _draw_foot(sheet: Worksheet, layout: Layout, grid: Grid, inputs: Inputs, column: Column) -> None:
+    total = _total(layout, grid, column)
+    for row, value in ((grid.base_row, _base(layout, grid, column)), (grid.total_row, total)):
         if value is not None:
             cell = sheet[f"{column.letter}{row}"]
             cell.value = value
             style.dress(cell, Role.RESULT, style.number_format(column.quantity, inputs.units))
 
 
-def _base(layout: Layout, column: Column) -> str | int | None:
+def _base(layout: Layout, grid: Grid, column: Column) -> str | int | None:
     q = column.quantity
     if q.base:
-        return layout.write(q.base, LEVELS, column.direction, layout.base_row)
-    return BASE.get(q.key)
+        return layout.write(q.base, grid.table.sheet, column.direction, grid.base_row)
+    return grid.table.base.get(q.key)
 
 
-def _total(layout: Layout, column: Column) -> str | None:
+def _total(layout: Layout, grid: Grid, column: Column) -> str | None:
     """A total counts first: no cell that failed can drop out of it in silence, no negative entry enter."""
     q = column.quantity
-    if q.key == "name":
+    names = grid.columns[0].quantity.key
+    if q.key == names:
         return "Total or largest"
     if not q.total:
         return None
     cells = f"{{{q.key}:all}}"
-    sound = f"COUNT({cells})=COUNTA({{name:all}})"
+    sound = f"COUNT({cells})=COUNTA({{{names}:all}})"
     if q.span == NOT_NEGATIVE:
         sound = f'AND({sound},COUNTIF({cells},"<0")=0)'
     template = f"=IF({sound},{TOTALS[q.total]}({cells}),NA())"
-    return layout.write(template, LEVELS, column.direction)
+    return layout.write(template, grid.table.sheet, column.direction)
 
 
-def _watch(sheet: Worksheet, layout: Layout, column: Column) -> None:
+def _watch(sheet: Worksheet, grid: Grid, column: Column) -> None:
     """Put the entry rule on an input column, the verdict colours on a verdict column."""
-    area = f"{column.letter}{TOP_GUARD}:{column.letter}{layout.bottom_guard}"
+    area = f"{column.letter}{TOP_GUARD}:{column.letter}{grid.bottom_guard}"
     if column.quantity.role is Role.INPUT and (rule := sheets.validation(column.quantity)) is not None:
         rule.allow_blank = True
         rule.add(area)
@@ -123,11 +123,11 @@ def _watch(sheet: Worksheet, layout: Layout, column: Column) -> None:
         sheets.flag_verdicts(sheet, area)
 
 
-def _break_pages(sheet: Worksheet, layout: Layout) -> list[str]:
+def _break_pages(sheet: Worksheet, grid: Grid) -> list[str]:
     """Break the pages between bands; return the first column of each page after the first."""
-    names = used = layout.table[0].quantity.width
+    names = used = grid.columns[0].quantity.width
     starts = []
-    for _, columns in groupby(layout.table[1:], key=lambda c: (c.band, c.direction)):
+    for _, columns in groupby(grid.columns[1:], key=lambda c: (c.band, c.direction)):
         band = list(columns)
         wide = sum(c.quantity.width for c in band)
         if used + wide > PAGE_WIDTH:
