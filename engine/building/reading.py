@@ -7,10 +7,19 @@ from dataclasses import fields
 from difflib import get_close_matches
 from typing import Any, TypeVar
 
-from engine.building.records import Building, Direction, Level, Site, level_label, may_be_left_out
+from engine.building.records import (
+    Building,
+    Direction,
+    Level,
+    Site,
+    WeightRow,
+    level_label,
+    may_be_left_out,
+    row_label,
+)
 from engine.errors import MissingValue, NotApplicable, WrongType
 
-Record = TypeVar("Record", Site, Direction, Level, Building)
+Record = TypeVar("Record", Site, Direction, Level, WeightRow, Building)
 
 
 def from_mapping(data: Mapping[str, Any]) -> Building:
@@ -29,7 +38,9 @@ def from_mapping(data: Mapping[str, Any]) -> Building:
             name: _record(Direction, f"direction.{name}.", entry) for name, entry in directions.items()
         }
     if "level" in parts:
-        parts["level"] = tuple(_levels(parts["level"]))
+        parts["level"] = tuple(_rows(Level, "level", parts["level"]))
+    if "weight" in parts:
+        parts["weight"] = tuple(_rows(WeightRow, "weight", parts["weight"]))
     if isinstance(parts.get("parts"), list):
         parts["parts"] = tuple(parts["parts"])
     for free in ("job", "sources"):
@@ -43,17 +54,22 @@ def to_mapping(building: Building) -> dict[str, Any]:
     data["site"] = _plain(building.site)
     data["direction"] = {name: _plain(entry) for name, entry in building.direction.items()}
     data["level"] = [_plain(level) for level in building.level]
-    return {key: data[key] for key in data if data[key] != {}}
+    data["weight"] = [_plain(row) for row in building.weight]
+    return {key: data[key] for key in data if data[key] not in ({}, [])}
 
 
-def _levels(entries: object) -> list[Level]:
+def _rows(kind: type[Record], name: str, entries: object) -> list[Record]:
     if not isinstance(entries, list | tuple):
-        raise WrongType("level", entries, "must be an array of tables")
-    labels = (
-        level_label(place, entry.get("name", "")) if isinstance(entry, Mapping) else f"level {place}"
-        for place, entry in enumerate(entries, start=1)
-    )
-    return [_record(Level, f"{label}: ", entry) for label, entry in zip(labels, entries, strict=True)]
+        raise WrongType(name, entries, "must be an array of tables")
+    return [_record(kind, f"{_label(name, *row)}: ", row[1]) for row in enumerate(entries, start=1)]
+
+
+def _label(name: str, place: int, entry: object) -> str:
+    if not isinstance(entry, Mapping):
+        return f"{name} {place}"
+    if name == "level":
+        return level_label(place, entry.get("name", ""))
+    return row_label(place, entry.get("what", ""))
 
 
 def _record(kind: type[Record], prefix: str, data: object) -> Record:

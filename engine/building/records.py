@@ -12,7 +12,7 @@ from typing import Any, Final
 
 from engine.drift import DRIFT_STRUCTURES
 from engine.editions import EDITIONS
-from engine.errors import ImpossibleValue, MissingValue, WrongType
+from engine.errors import ImpossibleValue, MissingValue, NotApplicable, WrongType
 from engine.levels import MAX_LEVELS
 from engine.occupancy import RISK_CATEGORIES
 from engine.period import PERIOD_SYSTEMS
@@ -110,12 +110,13 @@ class Direction:
 class Level:
     """One level: elevation [ft or m], weight and P_x [kip or kN], elastic displacements [in or mm].
 
-    ``source`` says in words where the numbers come from.
+    The weight is left out where rows of the take-off give it. ``source`` says in words where the numbers
+    come from.
     """
 
     name: str = checked(is_text)
     elevation: float = number(finite)
-    weight: float = number(partial(at_least, 0))
+    weight: float | None = number(partial(at_least, 0), None)
     P_x: float | None = number(partial(at_least, 0), None)
     delta_xe_X: float | None = number(finite, None)
     delta_xe_Y: float | None = number(finite, None)
@@ -123,9 +124,30 @@ class Level:
     source: str | None = checked(is_text, None)
 
 
+WEIGHT_KINDS: Final = (
+    *("dead", "partition", "storage", "garage storage", "snow", "equipment", "landscaping"),
+)
+
+
+@dataclass(frozen=True, slots=True, kw_only=True)
+class WeightRow:
+    """One row of the weight take-off: a load [psf or kN/m2] on an area [ft2 or m2], or an amount [kip or kN].
+
+    An amount is entered as it counts; of a load the part counts that its kind says.
+    """
+
+    level: str = checked(is_text)
+    what: str = checked(is_text)
+    kind: str = word(WEIGHT_KINDS)
+    area: float | None = number(partial(at_least, 0), None)
+    load: float | None = number(partial(at_least, 0), None)
+    amount: float | None = number(partial(at_least, 0), None)
+    source: str | None = checked(is_text, None)
+
+
 #: entries that stand at every level or at none
 LEVEL_OPTIONS: Final = tuple(
-    entry.name for entry in fields(Level) if entry.default is None and entry.name != "source"
+    entry.name for entry in fields(Level) if entry.default is None and entry.name not in ("weight", "source")
 )
 
 
@@ -142,6 +164,7 @@ class Building:
     site: Site
     direction: Mapping[str, Direction]
     level: tuple[Level, ...]
+    weight: tuple[WeightRow, ...] = ()
     job: Mapping[str, object] = field(default_factory=dict)
     sources: Mapping[str, str] = field(default_factory=dict)
     parts: tuple[str, ...] = checked(is_list_of_texts, ())
@@ -156,6 +179,10 @@ class Building:
             choice("direction", name, DIRECTIONS)
             check_fields(f"direction.{name}.", direction)
         _check_levels(self.level, self.site.base_elevation)
+        if self.weight:
+            _check_rows(self.weight, self.level)
+        else:
+            _check_weights(self.level)
 
 
 def check_fields(prefix: str, record: Any) -> None:
@@ -189,8 +216,39 @@ def _check_levels(levels: tuple[Level, ...], base: float) -> None:
         for optional in LEVEL_OPTIONS:
             if (getattr(level, optional) is None) != (getattr(levels[0], optional) is None):
                 raise _half_filled(levels, optional)
-    if not any(level.weight > 0 for level in levels):
+
+
+def _check_weights(levels: tuple[Level, ...]) -> None:
+    for place, level in enumerate(levels, start=1):
+        if level.weight is None:
+            raise MissingValue(f"{level_label(place, level.name)}: weight", None, "must be given")
+    if not any(level.weight for level in levels):
         raise ImpossibleValue("level", "all weights 0", "at least one level must have a weight above 0")
+
+
+def _check_rows(rows: tuple[WeightRow, ...], levels: tuple[Level, ...]) -> None:
+    for place, level in enumerate(levels, start=1):
+        if level.weight is not None:
+            label = f"{level_label(place, level.name)}: weight"
+            raise NotApplicable(label, level.weight, "must be left out where rows of weights are given")
+    names = [level.name.casefold() for level in levels]
+    for place, row in enumerate(rows, start=1):
+        label = row_label(place, row.what)
+        check_fields(f"{label}: ", row)
+        if names.count(row.level.casefold()) != 1:
+            raise NotApplicable(f"{label}: level", row.level, "must be the name of one level")
+        _check_amount(label, row)
+
+
+def _check_amount(label: str, row: WeightRow) -> None:
+    given = [entry is not None for entry in (row.area, row.load, row.amount)]
+    if given not in ([True, True, False], [False, False, True]):
+        raise MissingValue(f"{label}: area", row.area, "must be given with load, or amount alone")
+
+
+def row_label(place: int, what: object) -> str:
+    """Name a row of the weight take-off in a message, counted from 1 as listed."""
+    return f'weight {place} ("{what}")'
 
 
 def _half_filled(levels: tuple[Level, ...], optional: str) -> MissingValue:

@@ -11,6 +11,7 @@ from engine import base_shear, drift, hazard, occupancy, period, stability, vert
 from engine.building.parts import with_parts
 from engine.building.records import Building, Direction, level_label
 from engine.building.results import DirectionResult, Package, texts
+from engine.building.weights import level_weights
 from engine.errors import ImpossibleValue
 from engine.levels import TOLERANCE
 from engine.require import Array
@@ -32,7 +33,7 @@ def solve(building: Building) -> Package:
     """
     site = building.site
     h = np.array([level.elevation - site.base_elevation for level in building.level])
-    w = np.array([level.weight for level in building.level], dtype=np.float64)
+    w = level_weights(building)
     package = Package(
         title=building.title,
         edition=building.edition,

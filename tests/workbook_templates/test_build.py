@@ -100,7 +100,7 @@ def test_a_part_brings_those_that_its_required_parts_require(monkeypatch: pytest
 
 
 def test_an_unknown_part_is_refused(tmp_path: Path) -> None:
-    with pytest.raises(NotApplicable, match="parts = 'roofs': must be one of story, drift"):
+    with pytest.raises(NotApplicable, match="parts = 'roofs': must be one of story, weights, drift"):
         story_book(tmp_path, {**BLANK, "parts": ["roofs"]})
 
 
@@ -152,9 +152,13 @@ def test_every_defined_name_is_one_sound_reference(blank: openpyxl.Workbook) -> 
         assert blank[sheet][address.replace("$", "")] is not None
 
 
-def test_column_headings_are_unique() -> None:
-    headings = [column.heading for column in Layout(3, frozenset(PARTS)).table]
-    assert len(set(headings)) == len(headings)
+def test_column_headings_are_unique_in_a_table_and_keys_in_the_workbook() -> None:
+    layout = Layout(3, frozenset(PARTS))
+    for grid in layout.grids:
+        headings = [column.heading for column in grid.columns]
+        assert len(set(headings)) == len(headings)
+    keys = [key for grid in layout.grids for key in {column.quantity.key for column in grid.columns}]
+    assert len({*keys, *layout.rows}) == len(keys) + len(layout.rows)
 
 
 def test_every_number_or_choice_input_has_an_entry_rule(blank: openpyxl.Workbook) -> None:
@@ -170,10 +174,12 @@ def test_every_number_or_choice_input_has_an_entry_rule(blank: openpyxl.Workbook
             for direction in DIRECTIONS if block.per_direction else (None,):
                 if q.is_input and (q.span or q.choices):
                     assert ("Criteria", layout.criteria_cell(q.key, direction).replace("$", "")) in ruled
-    for column in layout.table:
-        if column.quantity.is_input and column.quantity.span:
-            area = layout.level_range(column.quantity.key, column.direction).replace("$", "")
-            assert (LEVELS, area) in ruled
+    for grid in layout.grids:
+        for column in grid.columns:
+            q = column.quantity
+            if q.is_input and (q.span or q.choices):
+                area = layout.level_range(q.key, column.direction).replace("$", "")
+                assert (grid.table.sheet, area) in ruled
 
 
 def test_inline_lists_fit_the_limit_and_hold_no_comma_in_a_word(blank: openpyxl.Workbook) -> None:
@@ -204,7 +210,7 @@ def test_the_functions_called_are_listed_with_their_equations(blank: openpyxl.Wo
 
 def test_starter_values_are_marked_and_counted(blank: openpyxl.Workbook) -> None:
     marks = [c.value for s in blank.worksheets for row in s.iter_rows() for c in row if c.value == STARTER]
-    assert len(marks) == 11 + 6
+    assert len(marks) == 11 + 6 + 6  # criteria, levels, rows of the weight take-off
 
 
 def test_doubtful_clauses_are_marked_where_the_user_meets_them(blank: openpyxl.Workbook) -> None:

@@ -16,6 +16,7 @@ from openpyxl.worksheet.worksheet import Worksheet
 from engine.editions import clause
 from workbook_templates.declare import Quantity
 from workbook_templates.draw import style
+from xlbridge.catalogue import CATALOGUE
 
 CAUTION: Final = (
     "An aid to a licensed engineer's judgement. Confirm every value against the standard adopted by the "
@@ -23,6 +24,8 @@ CAUTION: Final = (
 )
 LINE: Final = 14.0  # points
 EDGE: Final = 1e-9  # no operator says "above … and at most …"
+#: the most doubtful first
+MARKS: Final = {"U": "uncertain", "M": "from memory"}
 PAPER: Final = {"us": 1, "si": 9}  # Letter, A4
 
 
@@ -139,7 +142,11 @@ def clause_note(q: Quantity, edition: str) -> str:
 
 
 def clause_mark(q: Quantity, edition: str) -> str:
-    """Return the short mark of a clause that is not confirmed by a public source."""
-    if not q.clause_rule:
-        return ""
-    return {"H": "", "M": "from memory", "U": "uncertain"}[clause(edition, q.clause_rule).confidence]
+    """Return the short mark of a quantity where a clause that it goes by is not confirmed by a public source.
+
+    Of several, the most doubtful: a formula may call functions of more rules than the one it is filed under.
+    """
+    called = (CATALOGUE[name].clauses.get(edition) for name in q.calls)
+    own = [clause(edition, q.clause_rule)] if q.clause_rule else []
+    found = {rule.confidence for rule in (*own, *called) if rule is not None}
+    return next((mark for confidence, mark in MARKS.items() if confidence in found), "")

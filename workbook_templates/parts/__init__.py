@@ -7,11 +7,13 @@ from types import MappingProxyType
 from typing import Final
 
 from workbook_templates.declare import Part
-from workbook_templates.parts import diaphragm, drift, story
+from workbook_templates.parts import diaphragm, drift, story, weights
 
 #: the part that every workbook has
 CORE: Final = story.PART.key
-PARTS: Final = MappingProxyType({part.key: part for part in (story.PART, drift.PART, diaphragm.PART)})
+PARTS: Final = MappingProxyType(
+    {part.key: part for part in (story.PART, weights.PART, drift.PART, diaphragm.PART)}
+)
 
 
 def chosen(keys: frozenset[str]) -> tuple[Part, ...]:
