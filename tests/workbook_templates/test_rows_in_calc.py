@@ -10,13 +10,14 @@ import pytest
 
 from tests.support import office as offices
 from tests.support.story_books import assert_routes_agree, story_book
+from workbook_templates.inputs import BLANK_PARTS
 from workbook_templates.layout import FIRST_LEVEL, LEVELS, Layout
-from workbook_templates.parts import PARTS
+from workbook_templates.parts import with_required
 from workbook_templates.read import Reader
 from xlbridge.headless.compute import compute
 
 COUNT = 4
-LAYOUT = Layout(COUNT, frozenset(PARTS))
+LAYOUT = Layout(COUNT, with_required(BLANK_PARTS))
 LAST = LAYOUT.table[-1].letter
 STORY = 4.0  # metres in the starter workbook of the SI system
 
