@@ -15,7 +15,7 @@ import pytest
 from openpyxl import Workbook
 
 from engine.building import from_mapping, solve
-from engine.building.records import Direction, Level, Site, WeightRow
+from engine.building.records import Direction, Level, Site, SpectrumRow, WeightRow
 from engine.building.results import RULES
 from tests.support import readme
 from tests.support.command import ROOT
@@ -153,7 +153,13 @@ class TestBuildingFile:
             (table.strip("`"), key.strip("`")): optional.startswith("yes")
             for table, key, optional, _ in readme.rows("table", "key", "may be left out", "what")
         }
-        records = {"site": Site, "direction": Direction, "level": Level, "weight": WeightRow}
+        records = {
+            "site": Site,
+            "direction": Direction,
+            "level": Level,
+            "weight": WeightRow,
+            "spectrum": SpectrumRow,
+        }
         assert listed == {
             (table, entry.name): entry.default is not MISSING
             for table, record in records.items()

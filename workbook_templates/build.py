@@ -41,7 +41,7 @@ def build(given: Mapping[str, Any], level_count: int = DEFAULT_LEVELS) -> bytes:
     for grid in layout.grids:
         tables.draw(sheets[grid.table.sheet], layout, grid, inputs)
     checks.draw(sheets[places.CHECKS], layout, inputs)
-    figures.draw(sheets[places.FIGURES], sheets[places.LEVELS], layout, inputs)
+    figures.draw(sheets, layout, inputs)
     functions.draw(sheets[places.FUNCTIONS], layout, inputs)
     return _package(workbook)
 

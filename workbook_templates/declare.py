@@ -134,7 +134,8 @@ class Table:
     """A sheet with rows of its own between two guard rows: ``stored`` names them in BUILDING.toml.
 
     ``base`` says what the row of the base holds, where the table has one; ``text`` is its line in the
-    contents. A blank workbook starts with one row a level.
+    contents. A table without rows of its own starts with ``start`` rows; where that is 0, one a level, and
+    a building with levels must bring its rows.
     """
 
     sheet: str
@@ -143,6 +144,7 @@ class Table:
     stored: str
     bands: tuple[Block, ...] = ()
     base: Mapping[str, str | int] = field(default_factory=dict)
+    start: int = 0
 
     @property
     def name(self) -> str:
@@ -185,6 +187,16 @@ class Figure:
 
 
 @dataclass(frozen=True, slots=True)
+class Curve:
+    """A chart of columns of a table over another column of it; ``point`` marks a place of each direction."""
+
+    title: str
+    over: str
+    keys: tuple[str, ...]
+    point: tuple[str, str]
+
+
+@dataclass(frozen=True, slots=True)
 class Part:
     """A part of the workbook; a job that does not need it leaves it out.
 
@@ -203,6 +215,7 @@ class Part:
     checks: tuple[Check, ...] = ()
     headlines: tuple[Headline, ...] = ()
     figures: tuple[Figure, ...] = ()
+    curves: tuple[Curve, ...] = ()
     needs: tuple[str, ...] = ()
     requires: tuple[str, ...] = ()
 

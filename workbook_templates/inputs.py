@@ -40,8 +40,8 @@ class Inputs:
         return str(self.given["units"])
 
     def rows(self, table: Table) -> Sequence[Entries]:
-        """The rows of a table, in the order given; as many empty ones as levels where none is given."""
-        rows: Sequence[Entries] = self.given.get(table.stored) or [{}] * self.level_count
+        """The rows of a table, in the order given; empty ones where none is given."""
+        rows: Sequence[Entries] = self.given.get(table.stored) or [{}] * (table.start or self.level_count)
         return rows
 
     @property
@@ -87,13 +87,10 @@ class Inputs:
 
     def row(self, table: Table, number: int, q: Quantity, direction: str | None) -> Any:
         """Return an entry of a row of a table, counted from the first."""
-        if "level" in self.given:
+        if table.stored in self.given or ("level" in self.given and not table.start):
             return self._rows_needed(table)[number].get(q.stored_key(direction))
-        return (
-            q.starter(Start(self.units, self.level_count - number, self.level_count))
-            if q.starter
-            else q.default
-        )
+        count = table.start or self.level_count
+        return q.starter(Start(self.units, count - number, count)) if q.starter else q.default
 
     def _rows_needed(self, table: Table) -> Sequence[Entries]:
         if not self.given.get(table.stored):

@@ -142,7 +142,7 @@ class Layout:
         return [
             Grid(
                 replace(t, bands=tuple(self._standing(t.bands))),
-                self.row_counts.get(t.stored, self.level_count),
+                self.row_counts.get(t.stored, t.start or self.level_count),
             )
             for t in tables
         ]

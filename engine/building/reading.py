@@ -12,6 +12,7 @@ from engine.building.records import (
     Direction,
     Level,
     Site,
+    SpectrumRow,
     WeightRow,
     level_label,
     may_be_left_out,
@@ -19,7 +20,7 @@ from engine.building.records import (
 )
 from engine.errors import MissingValue, NotApplicable, WrongType
 
-Record = TypeVar("Record", Site, Direction, Level, WeightRow, Building)
+Record = TypeVar("Record", Site, Direction, Level, WeightRow, SpectrumRow, Building)
 
 
 def from_mapping(data: Mapping[str, Any]) -> Building:
@@ -41,6 +42,8 @@ def from_mapping(data: Mapping[str, Any]) -> Building:
         parts["level"] = tuple(_rows(Level, "level", parts["level"]))
     if "weight" in parts:
         parts["weight"] = tuple(_rows(WeightRow, "weight", parts["weight"]))
+    if "spectrum" in parts:
+        parts["spectrum"] = tuple(_rows(SpectrumRow, "spectrum", parts["spectrum"]))
     if isinstance(parts.get("parts"), list):
         parts["parts"] = tuple(parts["parts"])
     for free in ("job", "sources"):
@@ -54,7 +57,8 @@ def to_mapping(building: Building) -> dict[str, Any]:
     data["site"] = _plain(building.site)
     data["direction"] = {name: _plain(entry) for name, entry in building.direction.items()}
     data["level"] = [_plain(level) for level in building.level]
-    data["weight"] = [_plain(row) for row in building.weight]
+    for rows in ("weight", "spectrum"):
+        data[rows] = [_plain(row) for row in getattr(building, rows)]
     return {key: data[key] for key in data if data[key] not in ({}, [])}
 
 
@@ -69,7 +73,7 @@ def _label(name: str, place: int, entry: object) -> str:
         return f"{name} {place}"
     if name == "level":
         return level_label(place, entry.get("name", ""))
-    return row_label(place, entry.get("what", ""))
+    return row_label(place, entry.get("what", "")) if name == "weight" else f"{name} {place}"
 
 
 def _record(kind: type[Record], prefix: str, data: object) -> Record:

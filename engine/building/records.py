@@ -145,6 +145,13 @@ class WeightRow:
     source: str | None = checked(is_text, None)
 
 
+@dataclass(frozen=True, slots=True, kw_only=True)
+class SpectrumRow:
+    """One period [s] at which the spectrum is wanted."""
+
+    T: float = number(partial(at_least, 0))
+
+
 #: entries that stand at every level or at none
 LEVEL_OPTIONS: Final = tuple(
     entry.name for entry in fields(Level) if entry.default is None and entry.name not in ("weight", "source")
@@ -165,6 +172,7 @@ class Building:
     direction: Mapping[str, Direction]
     level: tuple[Level, ...]
     weight: tuple[WeightRow, ...] = ()
+    spectrum: tuple[SpectrumRow, ...] = ()
     job: Mapping[str, object] = field(default_factory=dict)
     sources: Mapping[str, str] = field(default_factory=dict)
     parts: tuple[str, ...] = checked(is_list_of_texts, ())
@@ -179,6 +187,8 @@ class Building:
             choice("direction", name, DIRECTIONS)
             check_fields(f"direction.{name}.", direction)
         _check_levels(self.level, self.site.base_elevation)
+        for place, row in enumerate(self.spectrum, start=1):
+            check_fields(f"spectrum {place}: ", row)
         if self.weight:
             _check_rows(self.weight, self.level)
         else:

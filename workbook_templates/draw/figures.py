@@ -2,16 +2,18 @@
 
 from __future__ import annotations
 
+from collections.abc import Mapping
+
 from openpyxl.chart import BarChart, Reference, ScatterChart, Series
 from openpyxl.chart.shapes import GraphicalProperties
 from openpyxl.drawing.line import LineProperties
 from openpyxl.worksheet.worksheet import Worksheet
 
 from engine.units import symbol
-from workbook_templates.declare import DIRECTIONS, Figure, Role
+from workbook_templates.declare import DIRECTIONS, Curve, Figure, Role
 from workbook_templates.draw import sheets, style
 from workbook_templates.inputs import Inputs
-from workbook_templates.layout import TOP_GUARD, Layout
+from workbook_templates.layout import CRITERIA, FIGURES, LEVELS, TOP_GUARD, Layout
 
 #: direction -> colour and dash; they differ in lightness too, so they hold in black and white.
 LINES = {"X": ("1F3A5F", "solid"), "Y": ("B8651B", "sysDash")}
@@ -19,8 +21,9 @@ LIMIT_ROW = 4
 WIDTH, HEIGHT, ROWS = 19.0, 7.6, 16  # cm, cm, sheet rows: three charts on one upright page
 
 
-def draw(sheet: Worksheet, levels: Worksheet, layout: Layout, inputs: Inputs) -> None:
+def draw(book: Mapping[str, Worksheet], layout: Layout, inputs: Inputs) -> None:
     """Place the charts one below the other."""
+    sheet, levels = book[FIGURES], book[LEVELS]
     sheets.head(sheet, "Figures")
     sheet.column_dimensions["A"].width = 30
     figures = [figure for part in layout.parts for figure in part.figures]
@@ -29,10 +32,52 @@ def draw(sheet: Worksheet, levels: Worksheet, layout: Layout, inputs: Inputs) ->
         chart = draw_one(levels, layout, inputs, figure)
         if figure.limit:
             chart.series.append(_limit_line(sheet))
-        chart.width, chart.height = WIDTH, HEIGHT
-        sheet.add_chart(chart, f"A{LIMIT_ROW + 3 + ROWS * number}")
+        _place(sheet, chart, number)
+    curves = (curve for part in layout.parts for curve in part.curves)
+    for number, curve in enumerate(curves, len(figures)):
+        _place(sheet, _curves(book, layout, inputs, curve), number)
     sheets.page(sheet, inputs.units, "1:2", landscape=False)
     sheet.page_setup.fitToHeight = 1
+
+
+def _place(sheet: Worksheet, chart: BarChart | ScatterChart, number: int) -> None:
+    chart.width, chart.height = WIDTH, HEIGHT
+    sheet.add_chart(chart, f"A{LIMIT_ROW + 3 + ROWS * number}")
+
+
+def _curves(book: Mapping[str, Worksheet], layout: Layout, inputs: Inputs, curve: Curve) -> ScatterChart:
+    """Columns of a table over one of its columns, and a marked point of each direction."""
+    chart = ScatterChart()
+    chart.style, chart.scatterStyle = 13, "lineMarker"
+    grid = layout.grid(curve.over)
+    quantities = {c.quantity.key: c.quantity for c in grid.columns}
+    x, *ys = (
+        Reference(book[grid.table.sheet], range_string=f"{grid.table.sheet}!{layout.level_range(key, None)}")
+        for key in (curve.over, *curve.keys)
+    )
+    for key, y, line in zip(curve.keys, ys, LINES.values(), strict=False):
+        series = Series(y, x, title=f"{quantities[key].shown_symbol}: {quantities[key].text}")
+        _stroke(series, *line)
+        series.marker.symbol = "none"
+        chart.series.append(series)
+    chart.series.extend(_point(layout, curve, direction) for direction in DIRECTIONS)
+    chart.x_axis.scaling.min = chart.y_axis.scaling.min = 0
+    x_title, y_title = (
+        f"{q.text} [{symbol(q.unit, inputs.units)}]"
+        for q in (quantities[curve.over], quantities[curve.keys[0]])
+    )
+    _finish(chart, curve.title, x_title, y_title)
+    return chart
+
+
+def _point(layout: Layout, curve: Curve, direction: str) -> Series:
+    x, y = (
+        Reference(range_string=f"{CRITERIA}!{layout.criteria_cell(key, direction)}") for key in curve.point
+    )
+    series = Series(y, x, title=f"{curve.point[0]}, direction {direction}")
+    series.marker.symbol, series.marker.size = ("circle" if direction == "X" else "diamond"), 9
+    series.graphicalProperties = GraphicalProperties(ln=LineProperties(noFill=True))
+    return series
 
 
 def _title(layout: Layout, inputs: Inputs, figure: Figure) -> str:

@@ -7,12 +7,12 @@ from types import MappingProxyType
 from typing import Final
 
 from workbook_templates.declare import Part
-from workbook_templates.parts import diaphragm, drift, story, weights
+from workbook_templates.parts import diaphragm, drift, spectrum, story, weights
 
 #: the part that every workbook has
 CORE: Final = story.PART.key
 PARTS: Final = MappingProxyType(
-    {part.key: part for part in (story.PART, weights.PART, drift.PART, diaphragm.PART)}
+    {part.key: part for part in (story.PART, weights.PART, drift.PART, diaphragm.PART, spectrum.PART)}
 )
 
 
