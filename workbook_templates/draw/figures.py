@@ -56,7 +56,7 @@ def _curves(book: Mapping[str, Worksheet], layout: Layout, inputs: Inputs, curve
         for key in (curve.over, *curve.keys)
     )
     for key, y, line in zip(curve.keys, ys, LINES.values(), strict=False):
-        series = Series(y, x, title=f"{quantities[key].shown_symbol}: {quantities[key].text}")
+        series = Series(y, x, title=quantities[key].shown_symbol)
         _stroke(series, *line)
         series.marker.symbol = "none"
         chart.series.append(series)
@@ -76,7 +76,9 @@ def _point(layout: Layout, curve: Curve, direction: str) -> Series:
     )
     series = Series(y, x, title=f"{curve.point[0]}, direction {direction}")
     series.marker.symbol, series.marker.size = ("circle" if direction == "X" else "diamond"), 9
+    series.marker.graphicalProperties = GraphicalProperties(solidFill=LINES[direction][0])
     series.graphicalProperties = GraphicalProperties(ln=LineProperties(noFill=True))
+    series.smooth = False
     return series
 
 

@@ -101,7 +101,7 @@ def _total(layout: Layout, grid: Grid, column: Column) -> str | None:
     q = column.quantity
     names = grid.columns[0].quantity.key
     if q.key == names:
-        return "Total or largest"
+        return "Total or largest" if any(c.quantity.total for c in grid.columns) else None
     if not q.total:
         return None
     cells = f"{{{q.key}:all}}"
