@@ -102,11 +102,6 @@ class Quantity:
         """The symbol as printed."""
         return self.symbol or self.key
 
-    @property
-    def clause_rule(self) -> str:
-        """The key of the rule in the edition data, or an empty text."""
-        return self.rule or (self.function.rule if self.function else "")
-
     def stored_key(self, direction: str | None) -> str:
         """The key of a level input in BUILDING.toml."""
         return f"{self.key}_{direction}" if direction else (self.stored or self.key)

@@ -7,7 +7,7 @@ Confidence: "H" seen in a public source, "M" from memory, "U" uncertain (the not
 from __future__ import annotations
 
 import tomllib
-from collections.abc import Mapping
+from collections.abc import Mapping, Sequence
 from dataclasses import dataclass
 from functools import cache
 from importlib.resources import files
@@ -88,16 +88,40 @@ def text(edition: str, key: str) -> str:
     return texts[key]
 
 
-def clauses(key: str) -> Mapping[str, Clause]:
+def clauses(key: str, *further: str) -> Mapping[str, Clause]:
     """Return the clause of a rule in each edition that has it; refuse a rule that none has.
+
+    ``further`` rules that apply together with it are taken into the clause.
 
     >>> list(clauses("C_s_method1"))
     ['7-22']
+    >>> str(clauses("C_s_cap", "C_s_cap_long")["7-22"])
+    '12.8.1.1, Eq. 12.8-4, 12.8-5'
     """
-    found = {edition: rules(edition)[key] for edition in EDITIONS if key in rules(edition)}
+    found = {}
+    for edition in EDITIONS:
+        known = rules(edition)
+        if key in known:
+            found[edition] = together([known[k] for k in (key, *further) if k in known])
     if not found:
         raise NotApplicable("rule", key, "not a rule of any edition")
     return MappingProxyType(found)
+
+
+def together(parts: Sequence[Clause]) -> Clause:
+    """Return several clauses of one edition as one: all their numbers and notes, the least confidence."""
+    sections = tuple(dict.fromkeys(part.section for part in parts))
+    if len(sections) == 1:
+        section, equation = sections[0], ", ".join(dict.fromkeys(p.equation for p in parts if p.equation))
+    else:
+        section, equation = "; ".join(dict.fromkeys(map(str, parts))), ""
+    return Clause(
+        parts[0].standard,
+        section,
+        equation,
+        max((part.confidence for part in parts), key=CONFIDENCE.index),
+        "; ".join(dict.fromkeys(part.note for part in parts if part.note)),
+    )
 
 
 def differences(key: str) -> tuple[str, ...]:

@@ -13,7 +13,7 @@ from openpyxl.workbook.defined_name import DefinedName
 from openpyxl.worksheet.datavalidation import DataValidation
 from openpyxl.worksheet.worksheet import Worksheet
 
-from engine.editions import clause
+from engine.editions import Clause, clause
 from workbook_templates.declare import Quantity
 from workbook_templates.draw import style
 from xlbridge.catalogue import CATALOGUE
@@ -133,12 +133,14 @@ def _number_rule(q: Quantity) -> DataValidation:
 
 def clause_text(q: Quantity, edition: str) -> str:
     """Return the clause of a quantity as printed in its row."""
-    return str(clause(edition, q.clause_rule)) if q.clause_rule else ""
+    found = _clause(q, edition)
+    return str(found) if found else ""
 
 
 def clause_note(q: Quantity, edition: str) -> str:
     """Return what the user must know of the clause: from memory, or the doubt in words."""
-    return clause(edition, q.clause_rule).note if q.clause_rule else ""
+    found = _clause(q, edition)
+    return found.note if found else ""
 
 
 def clause_mark(q: Quantity, edition: str) -> str:
@@ -147,6 +149,12 @@ def clause_mark(q: Quantity, edition: str) -> str:
     Of several, the most doubtful: a formula may call functions of more rules than the one it is filed under.
     """
     called = (CATALOGUE[name].clauses.get(edition) for name in q.calls)
-    own = [clause(edition, q.clause_rule)] if q.clause_rule else []
-    found = {rule.confidence for rule in (*own, *called) if rule is not None}
+    found = {rule.confidence for rule in (_clause(q, edition), *called) if rule is not None}
     return next((mark for confidence, mark in MARKS.items() if confidence in found), "")
+
+
+def _clause(q: Quantity, edition: str) -> Clause | None:
+    """The clause of a quantity: its own, or that of the worksheet function in its formula."""
+    if q.rule:
+        return clause(edition, q.rule)
+    return q.function.clauses.get(edition) if q.function else None

@@ -135,7 +135,7 @@ BASE_SHEAR = Block(
             "k_rule",
             "ELF_EXPONENT.rule",
             "Exponent between 0.5 s and 2.5 s",
-            rule="exponent",
+            rule="exponent_two",
             symbol="-",
             default="interpolate",
         ),

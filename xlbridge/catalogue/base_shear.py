@@ -47,6 +47,7 @@ FUNCTIONS = (
         summary="Upper bound of the seismic response coefficient from the period, on either side of T_L.",
         category="Base shear",
         rule="C_s_cap",
+        also=("C_s_cap_long",),
         arguments=(S_D1, T, T_L, R, I_e),
         result=Result("C_s", "none", "bound of C_s"),
         function=base_shear.coefficient_cap,

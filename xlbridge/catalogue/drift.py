@@ -62,6 +62,7 @@ FUNCTIONS = (
         summary="Allowable story drift; divided by rho where the clause on moment frames asks for it.",
         category="Drift",
         rule="Delta_a",
+        also=("rho_drift",),
         arguments=(
             h_sx,
             Argument(

@@ -102,7 +102,8 @@ class Example:
 class SheetFunction:
     """One worksheet function.
 
-    ``rule`` is the key of its clause in the edition data; an edition may lack it. ``expression`` and
+    ``rule`` is the key of its clause in the edition data, ``also`` are those of rules that it applies
+    besides; an edition may lack them. ``expression`` and
     ``native`` are templates with ``{argument}`` places: the equation in symbols, and the same in built-in
     functions.
     """
@@ -119,6 +120,7 @@ class SheetFunction:
     native: str = ""
     terms: tuple[Term, ...] = ()
     note: str = ""
+    also: tuple[str, ...] = ()
     since: str = "0.1"
 
     @property
@@ -130,7 +132,7 @@ class SheetFunction:
     @property
     def clauses(self) -> Mapping[str, Clause]:
         """The clause in each edition that has the rule."""
-        return clauses(self.rule)
+        return clauses(self.rule, *self.also)
 
     @property
     def defaults(self) -> Mapping[str, Any]:

@@ -96,7 +96,8 @@ def _template_faults(entry: SheetFunction) -> list[str]:
 
 def _clause_faults(entry: SheetFunction) -> list[str]:
     try:
-        clauses(entry.rule)
+        for key in (entry.rule, *entry.also):
+            clauses(key)
     except ValueError as error:
         return [f"rule {entry.rule!r}: {error}"]
     return []

@@ -24,6 +24,7 @@ FUNCTIONS = (
         summary="Exponent k of the vertical distribution.",
         category="Vertical distribution",
         rule="exponent",
+        also=("exponent_two",),
         arguments=(
             T,
             Argument(
