@@ -93,6 +93,11 @@ class Quantity:
         return self.role is Role.INPUT
 
     @property
+    def may_be_blank(self) -> bool:
+        """Whether an entry may be left blank: one that nothing stands in for, such as a computed period."""
+        return self.starter is None and self.default is None
+
+    @property
     def is_flag(self) -> bool:
         """Whether the entry says yes or no; BUILDING.toml keeps true or false."""
         return self.choices == YES_NO

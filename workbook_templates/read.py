@@ -115,7 +115,10 @@ class Reader:
         """Return the filled criteria entries of the site or of a direction."""
         values = {}
         for q in self._quantities(direction, True):
-            value = self._cell(self._layout.name(q.key, direction))
+            name = self._layout.name(q.key, direction)
+            value = self._cell(name)
+            if value in (None, "") and not q.may_be_blank:
+                raise ReadError(f"{name}: the cell is blank")
             values[q.key] = FLAGS.get(str(value), value) if q.is_flag else value
         return _filled(values)
 
@@ -126,8 +129,14 @@ class Reader:
             for c in grid.columns
             if c.quantity.is_input
         }
+        words = {c.quantity.stored_key(c.direction) for c in grid.columns if c.quantity.unit == "text"}
         return [
-            _filled({key: _sound(f"{grid.table.stored} {row[0]}: {key}", row[i]) for key, i in keys.items()})
+            _filled(
+                {
+                    key: _read(f"{grid.table.stored} {row[0]}: {key}", row[i], key in words)
+                    for key, i in keys.items()
+                }
+            )
             for row in self._rows(grid)
         ]
 
@@ -166,6 +175,16 @@ def _sound(field: str, value: Scalar) -> Scalar:
     if isinstance(value, CellError):
         raise ReadError(f"{field}: the cell holds {value.code}")
     return value
+
+
+def _field(grid: Grid, row: Row, key: str) -> str:
+    return f"{grid.table.stored} {row[0]}: {key}"
+
+
+def _read(field: str, value: Scalar, is_text: bool) -> Scalar:
+    """Return a cell of a table; a level that is named 8 is called "8", as the cell shows it."""
+    sound = _sound(field, value)
+    return f"{sound:g}" if is_text and isinstance(sound, float) else sound
 
 
 def _filled(entries: dict[str, Any]) -> dict[str, Any]:

@@ -23,7 +23,7 @@ from workbook_templates.build import build, write_workbook
 from workbook_templates.declare import DIRECTIONS, STARTER, Part
 from workbook_templates.layout import LEVELS, Layout
 from workbook_templates.parts import CORE, PARTS, with_required
-from workbook_templates.read import Reader
+from workbook_templates.read import Reader, ReadError
 from xlbridge.catalogue import CATALOGUE
 from xlbridge.headless.builtins import BUILTINS
 from xlbridge.headless.compute import compute
@@ -219,3 +219,33 @@ def test_doubtful_clauses_are_marked_where_the_user_meets_them(blank: openpyxl.W
     notes = [row[8].value for row in blank["Criteria"].iter_rows(min_row=5) if row[8].value]
     assert any("from memory" in note for note in notes)
     assert any("uncertain" in note for note in notes)
+
+
+@pytest.mark.parametrize(
+    "name", ["rho_X", "moment_frames_only_Y", "base_elevation", "beta_X", "k_rule_Y", "R_X", "S_DS"]
+)
+def test_a_blank_entry_is_no_default(tmp_path: Path, name: str) -> None:
+    """The cells refuse it, and so does the way back: the model route must not fill it in on its own."""
+    path = story_book(tmp_path, BLANK)
+    workbook = openpyxl.load_workbook(path)
+    sheet, _, address = workbook.defined_names[name].attr_text.partition("!")
+    workbook[sheet][address.replace("$", "")].value = None
+    workbook.save(path)
+    computed = compute(path)
+    assert computed.errors or name == "rho_X"  # no cell reads rho where moment frames do not act alone
+    with pytest.raises(ReadError, match=f"{name}: the cell is blank"):
+        Reader(computed.evaluator.evaluate_text).inputs()
+
+
+def test_a_blank_computed_period_is_no_entry(tmp_path: Path) -> None:
+    computed = compute(story_book(tmp_path, BLANK))
+    assert "T_computed" not in Reader(computed.evaluator.evaluate_text).inputs()["direction"]["X"]
+
+
+def test_a_level_named_by_a_number_comes_back_as_text(tmp_path: Path) -> None:
+    path = story_book(tmp_path, BLANK)
+    workbook = openpyxl.load_workbook(path)
+    workbook[LEVELS]["A12"].value = 8
+    workbook.save(path)
+    computed = assert_routes_agree(path, 80)
+    assert Reader(computed.evaluator.evaluate_text).inputs()["level"][0]["name"] == "8"

@@ -29,7 +29,6 @@ def draw(sheet: Worksheet, layout: Layout, inputs: Inputs) -> None:
         top += len(block.quantities) + 2
     sheet.freeze_panes = "D5"
     sheets.page(sheet, inputs.units, "1:4")
-    sheet.page_setup.fitToHeight = 1
 
 
 def _draw_row(sheet: Worksheet, layout: Layout, inputs: Inputs, block: Block, q: Quantity) -> None:

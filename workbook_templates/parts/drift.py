@@ -206,7 +206,7 @@ CHECKS = (
         decimals=4,
     ),
     Check(
-        "0.10 is not above theta_max (else both limits hold: redesign rules before amplifying)",
+        "theta_max is at least 0.10 (if not, theta between the two needs no amplifying but is unstable)",
         "=0.1",
         "={theta_max}",
         "at most",

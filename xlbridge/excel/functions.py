@@ -703,7 +703,7 @@ def ELF_CS_PLATEAU(S_DS: Any, R: Any, I_e: Any) -> Any:
 @xw.arg("I_e", "raw", doc="Importance factor [no unit], at least 1.")
 @xw.ret("raw")
 def ELF_CS_CAP(S_D1: Any, T: Any, T_L: Any, R: Any, I_e: Any) -> Any:
-    """Upper bound of the seismic response coefficient from the period, on either side of T_L. ASCE/SEI 7-16: 12.8.1.1, Eq. 12.8-3; 7-22: 12.8.1.1, Eq. 12.8-4. Partly from memory: confirm."""
+    """Upper bound of the seismic response coefficient from the period, on either side of T_L. ASCE/SEI 7-16: 12.8.1.1, Eq. 12.8-3, 12.8-4; 7-22: 12.8.1.1, Eq. 12.8-4, 12.8-5. Partly from memory: confirm."""
     return call("ELF_CS_CAP", S_D1, T, T_L, R, I_e)
 
 
@@ -741,7 +741,7 @@ def ELF_CS_MIN_S1(S_1: Any, R: Any, I_e: Any) -> Any:
 )
 @xw.ret("raw")
 def ELF_CS(S_DS: Any, S_D1: Any, S_1: Any, T: Any, T_L: Any, R: Any, I_e: Any, edition: Any) -> Any:
-    """Governing seismic response coefficient of the two-period spectrum. ASCE/SEI 7-16: 12.8.1.1; 7-22: 12.8.1.1."""
+    """Governing seismic response coefficient of the two-period spectrum. ASCE/SEI 7-16: 12.8.1.1; 7-22: 12.8.1.1. Partly from memory: confirm."""
     return call("ELF_CS", S_DS, S_D1, S_1, T, T_L, R, I_e, edition)
 
 
@@ -760,7 +760,7 @@ def ELF_CS(S_DS: Any, S_D1: Any, S_1: Any, T: Any, T_L: Any, R: Any, I_e: Any, e
 )
 @xw.ret("raw")
 def ELF_CS_GOVERNS(S_DS: Any, S_D1: Any, S_1: Any, T: Any, T_L: Any, R: Any, I_e: Any, edition: Any) -> Any:
-    """The bound that governs the seismic response coefficient, with its equation number. ASCE/SEI 7-16: 12.8.1.1; 7-22: 12.8.1.1."""
+    """The bound that governs the seismic response coefficient, with its equation number. ASCE/SEI 7-16: 12.8.1.1; 7-22: 12.8.1.1. Partly from memory: confirm."""
     return call("ELF_CS_GOVERNS", S_DS, S_D1, S_1, T, T_L, R, I_e, edition)
 
 
@@ -922,7 +922,7 @@ def ELF_SSI_MIN(V: Any, R: Any) -> Any:
 @xw.arg("rule", "raw", doc="Between 0.5 s and 2.5 s: interpolate, or the permitted two: interpolate, two.")
 @xw.ret("raw")
 def ELF_EXPONENT(T: Any, rule: Any = OMITTED) -> Any:
-    """Exponent k of the vertical distribution. ASCE/SEI 7-16: 12.8.3; 7-22: 12.8.3."""
+    """Exponent k of the vertical distribution. ASCE/SEI 7-16: 12.8.3; 7-22: 12.8.3. Partly from memory: confirm."""
     return call("ELF_EXPONENT", T, rule)
 
 
@@ -1699,7 +1699,7 @@ def ELF_DRIFT(d_upper: Any, d_lower: Any, C_d: Any, I_e: Any) -> Any:
 )
 @xw.ret("raw")
 def ELF_DRIFT_LIMIT(h_sx: Any, structure: Any, risk_category: Any, rho: Any = OMITTED) -> Any:
-    """Allowable story drift; divided by rho where the clause on moment frames asks for it. ASCE/SEI 7-16: 12.12.1, Table 12.12-1; 7-22: 12.12.1, Table 12.12-1. Partly from memory: confirm."""
+    """Allowable story drift; divided by rho where the clause on moment frames asks for it. ASCE/SEI 7-16: 12.12.1, Table 12.12-1; 12.12.1.1; 7-22: 12.12.1, Table 12.12-1; 12.12.1.1. Partly from memory: confirm."""
     return call("ELF_DRIFT_LIMIT", h_sx, structure, risk_category, rho)
 
 
@@ -1800,7 +1800,7 @@ def ELF_PDELTA_STATUS(theta: Any, theta_max: Any) -> Any:
 @xw.arg("I_e", "raw", doc="Importance factor [no unit], at least 1.")
 @xw.ret("raw")
 def ELF_FPX(w_px: Any, h_x: Any, forces: Any, weights: Any, heights: Any, S_DS: Any, I_e: Any) -> Any:
-    """Diaphragm design force of a level, with its lower and upper limits. ASCE/SEI 7-16: 12.10.1.1, Eq. 12.10-1; 7-22: 12.10.1.1, Eq. 12.10-1."""
+    """Diaphragm design force of a level, with its lower and upper limits. ASCE/SEI 7-16: 12.10.1.1, Eq. 12.10-1, 12.10-2, 12.10-3; 7-22: 12.10.1.1, Eq. 12.10-1, 12.10-2, 12.10-3."""
     return call("ELF_FPX", w_px, h_x, forces, weights, heights, S_DS, I_e)
 
 
@@ -1820,7 +1820,7 @@ def ELF_FPX(w_px: Any, h_x: Any, forces: Any, weights: Any, heights: Any, S_DS: 
 @xw.arg("I_e", "raw", doc="Importance factor [no unit], at least 1.")
 @xw.ret("raw")
 def ELF_FPX_GOVERNS(w_px: Any, h_x: Any, forces: Any, weights: Any, heights: Any, S_DS: Any, I_e: Any) -> Any:
-    """Which of the three diaphragm force equations governs at a level. ASCE/SEI 7-16: 12.10.1.1, Eq. 12.10-1; 7-22: 12.10.1.1, Eq. 12.10-1."""
+    """Which of the three diaphragm force equations governs at a level. ASCE/SEI 7-16: 12.10.1.1, Eq. 12.10-1, 12.10-2, 12.10-3; 7-22: 12.10.1.1, Eq. 12.10-1, 12.10-2, 12.10-3."""
     return call("ELF_FPX_GOVERNS", w_px, h_x, forces, weights, heights, S_DS, I_e)
 
 
