@@ -168,6 +168,7 @@ class TestBuildingFile:
 
     def test_the_stated_defaults_are_the_engines(self) -> None:
         text = {"1": 1.0, "0": 0.0, '"interpolate"': "interpolate", "false": False, "T_a is used": None}
+        text |= {'"rigid or semirigid"': "rigid or semirigid", '"none"': "none"}
         defaults = {e.name: e.default for record in (Site, Direction) for e in fields(record)}
         for _, key, optional, _ in readme.rows("table", "key", "may be left out", "what"):
             if ": " in optional:

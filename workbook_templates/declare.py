@@ -55,7 +55,8 @@ class Quantity:
     ``unit`` is a key of engine.units; ``rule`` a key of the edition data, taken from the worksheet
     function in the formula where there is one. An input says what it allows (``span``, ``choices``), what
     holds if it is left out (``default``, or ``linked``: the formula of a level entry), and what a blank
-    workbook starts with (``starter``); ``stored`` is its key in BUILDING.toml.
+    workbook starts with (``starter``); ``stored`` is its key in BUILDING.toml. A criteria row
+    whose formula gives a long text has room for ``lines`` of it, in small print.
     """
 
     key: str
@@ -75,6 +76,7 @@ class Quantity:
     total: str = ""
     base: str = ""
     width: float = 11
+    lines: int = 1
 
     @property
     def calls(self) -> list[str]:
@@ -178,12 +180,12 @@ class Headline:
 
 @dataclass(frozen=True, slots=True)
 class Figure:
-    """A chart of a level column over the height; ``bars`` draws it level by level, ``limit`` a line at 1."""
+    """A chart of a level column over the height; ``bars`` draws it level by level, ``limit`` adds a line."""
 
     key: str
     title: str
     bars: bool = False
-    limit: bool = False
+    limit: float | None = None
 
 
 @dataclass(frozen=True, slots=True)

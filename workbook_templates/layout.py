@@ -131,8 +131,9 @@ class Layout:
 
     @property
     def criteria(self) -> list[Block]:
-        """The criteria blocks of the parts that are in."""
-        return self._standing(block for part in self.parts for block in part.criteria)
+        """The criteria blocks of the parts that are in, one that several parts share once."""
+        blocks = dict.fromkeys(block for part in self.parts for block in part.criteria)
+        return self._standing(block for block in blocks if block.without not in self.part_keys)
 
     @cached_property
     def grids(self) -> list[Grid]:

@@ -90,7 +90,7 @@ class Reader:
         if layout.table:
             headings = self._headings(STORY_TABLE)
             return any(c.heading in headings for c in layout.table)
-        block = layout.criteria[0]
+        block = next(block for block in part.criteria if not block.without)
         return self._defined(layout.name(block.quantities[0].key, DIRECTIONS[0]))
 
     def _defined(self, name: str) -> bool:

@@ -10,13 +10,17 @@ from dataclasses import MISSING, Field, dataclass, field, fields
 from functools import partial
 from typing import Any, Final
 
+import numpy as np
+
 from engine.drift import DRIFT_STRUCTURES
 from engine.editions import EDITIONS
 from engine.errors import ImpossibleValue, MissingValue, NotApplicable, WrongType
+from engine.irregularity import DIAPHRAGMS
 from engine.levels import MAX_LEVELS
-from engine.occupancy import RISK_CATEGORIES
+from engine.occupancy import DESIGN_CATEGORIES, RISK_CATEGORIES
 from engine.period import PERIOD_SYSTEMS
-from engine.require import above, at_least, choice, finite, within
+from engine.redundancy import CONFIGURATIONS
+from engine.require import Array, above, at_least, choice, finite, within
 from engine.units import SYSTEMS
 from engine.vertical import EXPONENT_RULES
 
@@ -76,7 +80,10 @@ def word(words: tuple[str, ...], default: Any = MISSING) -> Any:
 
 @dataclass(frozen=True, slots=True, kw_only=True)
 class Site:
-    """Ground motion [g, s], Risk Category, and the elevation of the base [ft or m]."""
+    """Ground motion [g, s], Risk Category, the elevation of the base [ft or m], and what the plans show.
+
+    ``diaphragms`` and the fields below it decide on irregularities.
+    """
 
     S_DS: float = number(partial(above, 0))
     S_D1: float = number(partial(above, 0))
@@ -84,13 +91,22 @@ class Site:
     T_L: float = number(partial(above, 0))
     risk_category: str = word(RISK_CATEGORIES)
     base_elevation: float = number(finite, 0.0)
+    SDC: str | None = word(DESIGN_CATEGORIES, None)
+    diaphragms: str = word(DIAPHRAGMS, DIAPHRAGMS[0])
+    drift_exception: bool = checked(is_flag, False)
+    reentrant_ratio: float | None = number(partial(at_least, 0), None)
+    diaphragm_opening: float | None = number(partial(within, 0, 1), None)
+    diaphragm_change: float | None = number(partial(at_least, 0), None)
+    out_of_plane_offset: bool | None = checked(is_flag, None)
+    nonparallel_system: bool | None = checked(is_flag, None)
 
 
 @dataclass(frozen=True, slots=True, kw_only=True)
 class Direction:
     """The seismic force-resisting system of one plan direction.
 
-    ``rho`` divides the allowable drift only where ``moment_frames_only`` is true.
+    ``rho`` divides the allowable drift only where ``moment_frames_only`` is true. ``TIR_max`` is the largest
+    torsional irregularity ratio, where the levels do not give the displacements of the edges.
     """
 
     system: str = checked(is_text)
@@ -104,14 +120,20 @@ class Direction:
     rho: float = number(partial(within, 1, 1.3), 1.0)
     moment_frames_only: bool = checked(is_flag, False)
     beta: float = number(lambda name, value: above(0, name, within(0, 1, name, value)), 1.0)
+    one_sided: bool = checked(is_flag, False)
+    in_plane_discontinuity: bool | None = checked(is_flag, None)
+    configuration: str = word(CONFIGURATIONS, CONFIGURATIONS[0])
+    TIR_max: float | None = number(partial(at_least, 1), None)
 
 
 @dataclass(frozen=True, slots=True, kw_only=True)
 class Level:
     """One level: elevation [ft or m], weight and P_x [kip or kN], elastic displacements [in or mm].
 
-    The weight is left out where rows of the take-off give it. ``source`` says in words where the numbers
-    come from.
+    The weight is left out where rows of the take-off give it. ``d_1`` and ``d_2`` are those of opposite
+    edges with A_x = 1; ``x_M`` and ``x_R`` the centres of mass and rigidity on one axis. ``K_x``,
+    ``strength`` and ``L_sys`` belong to the story below the level. ``source`` says in words where the
+    numbers come from.
     """
 
     name: str = checked(is_text)
@@ -121,6 +143,22 @@ class Level:
     delta_xe_X: float | None = number(finite, None)
     delta_xe_Y: float | None = number(finite, None)
     w_px: float | None = number(partial(at_least, 0), None)
+    L_perp_X: float | None = number(partial(above, 0), None)
+    L_perp_Y: float | None = number(partial(above, 0), None)
+    d_1_X: float | None = number(finite, None)
+    d_1_Y: float | None = number(finite, None)
+    d_2_X: float | None = number(finite, None)
+    d_2_Y: float | None = number(finite, None)
+    x_M_X: float | None = number(finite, None)
+    x_M_Y: float | None = number(finite, None)
+    x_R_X: float | None = number(finite, None)
+    x_R_Y: float | None = number(finite, None)
+    K_x_X: float | None = number(partial(above, 0), None)
+    K_x_Y: float | None = number(partial(above, 0), None)
+    strength_X: float | None = number(partial(above, 0), None)
+    strength_Y: float | None = number(partial(above, 0), None)
+    L_sys_X: float | None = number(partial(above, 0), None)
+    L_sys_Y: float | None = number(partial(above, 0), None)
     source: str | None = checked(is_text, None)
 
 
@@ -211,6 +249,13 @@ def may_be_left_out(entry: Field[Any]) -> bool:
 def level_label(place: int, name: object) -> str:
     """Name a level in a message, counted from 1 as listed."""
     return f'level {place} ("{name}")'
+
+
+def level_values(building: Building, key: str) -> Array | None:
+    """Return an entry of all levels as an array, ``None`` where it is not given."""
+    if getattr(building.level[0], key) is None:
+        return None
+    return np.array([getattr(level, key) for level in building.level], dtype=np.float64)
 
 
 def _check_levels(levels: tuple[Level, ...], base: float) -> None:

@@ -8,7 +8,7 @@ from typing import Any, Final
 
 import numpy as np
 
-from engine.editions import clause
+from engine.editions import rules
 from engine.require import Array
 
 #: the rules that every package applies, in the order of the work
@@ -84,7 +84,8 @@ class Package:
 
     def to_json(self) -> dict[str, Any]:
         """Return plain numbers, texts and lists, with the clause and any doubt of every rule applied."""
-        clauses = {key: clause(self.edition, key) for key in self.rules}
+        known = rules(self.edition)
+        clauses = {key: known[key] for key in self.rules if key in known}
         return {
             **_plain(self),
             "direction": {name: _plain(result) for name, result in self.direction.items()},

@@ -1,6 +1,7 @@
 """Irregularities (12.3.2): ratios, limits and types of both editions, and what each one entails (12.3.3)."""
 
 from engine.irregularity.horizontal import (
+    DIAPHRAGMS,
     diaphragm_irregularity,
     reentrant_irregularity,
     reentrant_ratio,
@@ -29,6 +30,7 @@ from engine.irregularity.vertical import (
 )
 
 __all__ = [
+    "DIAPHRAGMS",
     "IRREGULARITIES",
     "JUDGED",
     "consequence",

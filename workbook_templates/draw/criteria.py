@@ -5,6 +5,7 @@ from __future__ import annotations
 from collections.abc import Mapping
 from typing import Any
 
+from openpyxl.worksheet.pagebreak import Break
 from openpyxl.worksheet.worksheet import Worksheet
 
 from engine.units import DISPLACEMENT_PER_LENGTH, symbol
@@ -14,6 +15,7 @@ from workbook_templates.inputs import Inputs
 from workbook_templates.layout import CRITERIA, CRITERIA_COLUMN, CRITERIA_TOP, Layout
 
 HEADERS = ("", "Quantity", "Symbol", "X, or both", "Y", "Unit", "Clause", "Source of the entry", "Note")
+PAGE_HEIGHT = 690.0  # points of rows on one landscape page, fitted to its width
 WIDTHS = (3, 46, 13, 25, 25, 7, 23, 31, 50)
 
 
@@ -22,11 +24,17 @@ def draw(sheet: Worksheet, layout: Layout, inputs: Inputs) -> None:
     sheets.head(sheet, "Criteria")
     sheets.table_head(sheet, 4, HEADERS, WIDTHS)
     top = CRITERIA_TOP
+    used = 0.0
     for block in layout.criteria:
         style.write(sheet.cell(top, 2), block.title, style.HEADING)
         for q in block.quantities:
             _draw_row(sheet, layout, inputs, block, q)
-        top += len(block.quantities) + 2
+        bottom = top + len(block.quantities) + 2
+        high = sum(sheet.row_dimensions[row].height or sheets.LINE for row in range(top, bottom))
+        if used and used + high > PAGE_HEIGHT:
+            sheet.row_breaks.append(Break(id=top - 1))
+            used = 0.0
+        top, used = bottom, used + high
     sheet.freeze_panes = "D5"
     sheets.page(sheet, inputs.units, "1:4")
 
@@ -49,6 +57,8 @@ def _draw_row(sheet: Worksheet, layout: Layout, inputs: Inputs, block: Block, q:
         cell = sheet[f"{CRITERIA_COLUMN[direction]}{row}"]
         cell.value = _content(layout, inputs, q, direction)
         style.dress(cell, q.role, style.number_format(q, inputs.units))
+        if q.lines > 1:
+            cell.font = style.SMALL
         sheets.name(sheet, layout.name(q.key, direction), layout.criteria_cell(q.key, direction))
         if q.role is Role.INPUT and (rule := sheets.validation(q)) is not None:
             rule.add(cell)
@@ -57,7 +67,9 @@ def _draw_row(sheet: Worksheet, layout: Layout, inputs: Inputs, block: Block, q:
         source = sheet.cell(row, 8, inputs.source(q, block.per_direction))
         style.dress(source, Role.INPUT, "@")
         sheets.name(sheet, layout.source_name(q.key), f"$H${row}")
-    sheets.fit_row(sheet, row, WIDTHS, least=2 if q.unit == "text" and q.function else 1)
+    if q.role is Role.VERDICT:
+        sheets.flag_verdicts(sheet, f"D{row}:E{row}")
+    sheets.fit_row(sheet, row, WIDTHS, least=max(q.lines, 2 if q.unit == "text" and q.function else 1))
 
 
 def _content(layout: Layout, inputs: Inputs, q: Quantity, direction: str | None) -> Any:

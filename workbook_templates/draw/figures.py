@@ -27,22 +27,24 @@ def draw(book: Mapping[str, Worksheet], layout: Layout, inputs: Inputs) -> None:
     sheets.head(sheet, "Figures")
     sheet.column_dimensions["A"].width = 30
     figures = [figure for part in layout.parts for figure in part.figures]
+    limited = [figure for figure in figures if figure.limit is not None]
+    top = LIMIT_ROW + len(limited) + 1
     for number, figure in enumerate(figures):
         draw_one = _bars if figure.bars else _profile
         chart = draw_one(levels, layout, inputs, figure)
-        if figure.limit:
-            chart.series.append(_limit_line(sheet))
-        _place(sheet, chart, number)
+        if figure in limited:
+            chart.series.append(_limit_line(sheet, figure, LIMIT_ROW + limited.index(figure)))
+        _place(sheet, chart, top + ROWS * number)
     curves = (curve for part in layout.parts for curve in part.curves)
     for number, curve in enumerate(curves, len(figures)):
-        _place(sheet, _curves(book, layout, inputs, curve), number)
+        _place(sheet, _curves(book, layout, inputs, curve), top + ROWS * number)
     sheets.page(sheet, inputs.units, "1:2", landscape=False)
     sheet.page_setup.fitToHeight = 1
 
 
-def _place(sheet: Worksheet, chart: BarChart | ScatterChart, number: int) -> None:
+def _place(sheet: Worksheet, chart: BarChart | ScatterChart, row: int) -> None:
     chart.width, chart.height = WIDTH, HEIGHT
-    sheet.add_chart(chart, f"A{LIMIT_ROW + 3 + ROWS * number}")
+    sheet.add_chart(chart, f"A{row}")
 
 
 def _curves(book: Mapping[str, Worksheet], layout: Layout, inputs: Inputs, curve: Curve) -> ScatterChart:
@@ -124,15 +126,14 @@ def _profile(levels: Worksheet, layout: Layout, inputs: Inputs, figure: Figure) 
     return chart
 
 
-def _limit_line(sheet: Worksheet) -> Series:
-    """The limit as a vertical line: two points in cells that anyone can read."""
-    style.write(sheet.cell(LIMIT_ROW, 1), "Limit line: ratio, height", style.SMALL)
-    for column, (ratio, height) in enumerate(((1, 0), (1, "=h_n")), 2):
-        for row, value in ((LIMIT_ROW, ratio), (LIMIT_ROW + 1, height)):
-            sheet.cell(row, column, value)
-            style.dress(sheet.cell(row, column), Role.LINK, "0.00")
-    x = Reference(sheet, min_col=2, max_col=3, min_row=LIMIT_ROW)
-    y = Reference(sheet, min_col=2, max_col=3, min_row=LIMIT_ROW + 1)
+def _limit_line(sheet: Worksheet, figure: Figure, row: int) -> Series:
+    """The limit as a vertical line: two points in cells that anyone can read, values before heights."""
+    style.write(sheet.cell(row, 1), f"Limit line, {figure.key}: value, height", style.SMALL)
+    for column, value in enumerate((figure.limit, figure.limit, 0, "=h_n"), 2):
+        sheet.cell(row, column, value)
+        style.dress(sheet.cell(row, column), Role.LINK, "0.00")
+    x = Reference(sheet, min_col=2, max_col=3, min_row=row)
+    y = Reference(sheet, min_col=4, max_col=5, min_row=row)
     series = Series(y, x, title="Limit")
     _stroke(series, "8A0F1E", "lgDash")
     series.marker.symbol = "none"

@@ -13,7 +13,7 @@ from openpyxl.workbook.defined_name import DefinedName
 from openpyxl.worksheet.datavalidation import DataValidation
 from openpyxl.worksheet.worksheet import Worksheet
 
-from engine.editions import Clause, clause
+from engine.editions import Clause, rules
 from workbook_templates.declare import Quantity
 from workbook_templates.draw import style
 from xlbridge.catalogue import CATALOGUE
@@ -154,7 +154,7 @@ def clause_mark(q: Quantity, edition: str) -> str:
 
 
 def _clause(q: Quantity, edition: str) -> Clause | None:
-    """The clause of a quantity: its own, or that of the worksheet function in its formula."""
+    """The clause of a quantity, its own or that of the function it calls; an edition may lack it."""
     if q.rule:
-        return clause(edition, q.rule)
+        return rules(edition).get(q.rule)
     return q.function.clauses.get(edition) if q.function else None

@@ -7,12 +7,35 @@ from types import MappingProxyType
 from typing import Final
 
 from workbook_templates.declare import Part
-from workbook_templates.parts import diaphragm, drift, spectrum, story, weights
+from workbook_templates.parts import (
+    diaphragm,
+    drift,
+    irregularity,
+    redundancy,
+    spectrum,
+    story,
+    torsion,
+    weights,
+)
 
 #: the part that every workbook has
 CORE: Final = story.PART.key
 PARTS: Final = MappingProxyType(
-    {part.key: part for part in (story.PART, weights.PART, drift.PART, diaphragm.PART, spectrum.PART)}
+    {
+        part.key: part
+        for part in (
+            story.PART,
+            weights.PART,
+            drift.PART,
+            torsion.PART,
+            torsion.INHERENT,
+            irregularity.STIFFNESS_PART,
+            irregularity.PART,
+            redundancy.PART,
+            diaphragm.PART,
+            spectrum.PART,
+        )
+    }
 )
 
 

@@ -226,6 +226,6 @@ PART = Part(
         Headline("Largest drift over limit", "none", "={drift_over_limit:total}"),
         Headline("Largest theta", "none", "={theta:total}"),
     ),
-    figures=(Figure("drift_over_limit", "Drift over its limit, Delta/Delta_a", limit=True),),
+    figures=(Figure("drift_over_limit", "Drift over its limit, Delta/Delta_a", limit=1.0),),
     needs=("P_x", *(f"delta_xe_{direction}" for direction in DIRECTIONS)),
 )

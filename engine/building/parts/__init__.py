@@ -6,7 +6,7 @@ from collections.abc import Callable, Mapping
 from dataclasses import replace
 from typing import Any, Final
 
-from engine.building.parts import diaphragm, spectrum, weights
+from engine.building.parts import diaphragm, irregularity, redundancy, spectrum, torsion, weights
 from engine.building.records import Building
 from engine.building.results import DirectionResult, Package
 
@@ -60,5 +60,12 @@ STEPS: Final[tuple[Step, ...]] = (
     _whole_building(weights.solve, weights.RULES),
     _whole_building(spectrum.solve, spectrum.RULES),
     _each_direction(spectrum.solve_direction, spectrum.RULES),
+    _each_direction(torsion.ratios, torsion.RATIO_RULES),
+    _whole_building(torsion.structure, torsion.STRUCTURE_RULES),
+    _each_direction(torsion.accidental, torsion.ACCIDENTAL_RULES),
+    _each_direction(torsion.inherent, torsion.INHERENT_RULES),
+    _each_direction(irregularity.stories, irregularity.STORY_RULES),
+    _whole_building(irregularity.whole, irregularity.BUILDING_RULES),
+    _each_direction(redundancy.solve, redundancy.RULES),
     _each_direction(diaphragm.solve, diaphragm.RULES),
 )
