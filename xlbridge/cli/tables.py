@@ -6,6 +6,7 @@ from collections.abc import Iterable, Iterator
 from typing import Any
 
 from engine.building import DirectionResult, Package
+from engine.editions import clause
 from engine.units import symbol
 from xlbridge.cli import CAUTION
 
@@ -22,7 +23,26 @@ def package_text(package: Package) -> str:
     ]
     for name, result in package.direction.items():
         lines += ["", f"Direction {name}", *_summary(package, result), *_aligned(_columns(package, result))]
-    return "\n".join([*lines, "", *(f"! {warning}" for warning in package.warnings), CAUTION])
+        lines += [f"! {text}" for text in _exceeded(package, result)]
+    return "\n".join([*lines, "", *(f"! {text}" for text in package.warnings), _doubts(package), CAUTION])
+
+
+def _exceeded(package: Package, result: DirectionResult) -> Iterator[str]:
+    """Name the levels whose drift or theta is above its limit."""
+    if result.drift_over_limit is not None:
+        for level, ratio in zip(package.levels, result.drift_over_limit, strict=True):
+            if ratio > 1:
+                yield f"{level}: drift is {ratio:.3f} times its limit"
+    if result.theta is not None:
+        for level, theta in zip(package.levels, result.theta, strict=True):
+            if theta > result.theta_max:
+                yield f"{level}: theta = {theta:.4f} is above theta_max = {result.theta_max:.4f}"
+
+
+def _doubts(package: Package) -> str:
+    """Name the rules that could not be confirmed in a public source."""
+    doubtful = [key for key in package.rules if clause(package.edition, key).confidence != "H"]
+    return f"From memory or uncertain, in the words of --json: {', '.join(dict.fromkeys(doubtful))}."
 
 
 def _summary(package: Package, result: DirectionResult) -> list[str]:

@@ -204,7 +204,8 @@ class TestSolve:
         path.write_text("\n".join(lines), encoding="utf-8")
         outcome = run("solve", path)
         assert outcome.code == 0
-        assert "theta" not in outcome.out
+        assert "Delta_a" not in outcome.out.split("From memory")[0]
+        assert "theta" not in outcome.out.split("From memory")[0]
         assert "F_x [kip]" in outcome.out
 
     def test_a_warning_is_printed(self, tmp_path: Path) -> None:
@@ -313,3 +314,15 @@ class TestFunctions:
         assert run("functions", "--builtins").out.splitlines() == sorted(BUILTINS)
         assert json.loads(run("functions", "--builtins", "--json").out) == sorted(BUILTINS)
         assert len(BUILTINS) >= 80
+
+
+class TestSolveInWords:
+    def test_what_exceeds_its_limit_and_what_is_doubtful_is_said(self, tmp_path: Path) -> None:
+        (tmp_path / "demo.toml").write_text(building_text(), encoding="utf-8")
+        lines = run("solve", tmp_path / "demo.toml").out.splitlines()
+        assert [line for line in lines if line.startswith("! Level")] == [
+            "! Level 3: drift is 1.146 times its limit"
+        ]
+        (doubts,) = (line for line in lines if line.startswith("From memory or uncertain"))
+        assert {"theta_max", "C_u", "exponent_two"} <= set(doubts.rstrip(".").replace(":", ",").split(", "))
+        assert "C_vx" not in doubts
