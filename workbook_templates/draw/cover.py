@@ -28,8 +28,8 @@ CAUTIONS = (
     sheets.CAUTION,
     "Rows marked “from memory” could not be read in a public source; rows marked “uncertain” carry a doubt "
     "that their note puts in words. Look both up in the standard before use.",
-    "Cells named ELF_… need the Storyledger add-in to be recalculated. The numbers stored in a computed copy "
-    "show without it.",
+    "Cells that call ELF_… functions need the Storyledger add-in to be recalculated. The numbers stored in "
+    "a computed copy show without it.",
 )
 LEGEND = {
     Role.INPUT: "an entry of yours: value, and its source beside it",

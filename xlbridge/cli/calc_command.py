@@ -9,7 +9,7 @@ from typing import Any
 
 import click
 
-from xlbridge.cli.failure import CLEAN, FINDINGS, INCOMPLETE
+from xlbridge.cli.failure import CLEAN, FINDINGS, INCOMPLETE, Refusal
 from xlbridge.cli.files import refuse_existing
 from xlbridge.headless.compute import Computed, compute_into
 from xlbridge.values import CellError, Scalar
@@ -34,6 +34,8 @@ def command(book: Path, output: Path | None, as_json: bool, force: bool) -> int:
     values, 2 that some could not be evaluated (they are stored as #N/A).
     """
     target = output or book.with_name(f"{book.stem}-computed{book.suffix}")
+    if target.suffix.lower() != book.suffix.lower():
+        raise Refusal(f"{target}: the copy of a workbook keeps its ending, {book.suffix or 'none'}")
     refuse_existing(target, force)
     computed = compute_into(book, target, force)
     if as_json:

@@ -92,6 +92,13 @@ class TestCalc:
         stored = load_workbook(tmp_path / "a-computed.xlsx", data_only=True).active
         assert [stored[a].value for a in ("A1", "A2", "A3")] == ["#N/A", "#DIV/0!", "#N/A"]
 
+    def test_the_copy_keeps_the_ending_of_the_workbook(self, tmp_path: Path) -> None:
+        path = workbook(tmp_path / "a.xlsx", A1="=1+1")
+        outcome = run("calc", path, "-o", tmp_path / "out.txt")
+        assert outcome.code == 3
+        assert "out.txt: the copy of a workbook keeps its ending, .xlsx" in outcome.err
+        assert not (tmp_path / "out.txt").exists()
+
     def test_a_long_list_is_cut_and_says_so(self, tmp_path: Path) -> None:
         cells = {f"A{n}": f"=NOSUCH_{n}(1)" for n in range(1, 31)}
         outcome = run("calc", workbook(tmp_path / "a.xlsx", **cells))
