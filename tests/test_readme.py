@@ -8,14 +8,12 @@ import re
 import shutil
 import subprocess
 import tomllib
-from dataclasses import MISSING, fields
 from pathlib import Path
 
 import pytest
 from openpyxl import Workbook
 
 from engine.building import from_mapping, solve
-from engine.building.records import Direction, Level, Site, SpectrumRow, WeightRow
 from engine.building.results import RULES
 from tests.support import readme
 from tests.support.command import ROOT
@@ -147,32 +145,6 @@ class TestBuildingFile:
         assert package.h_n == 28
         assert package.direction["Y"].theta is not None
         assert package.direction["X"].drift_over_limit.max() < 1  # type: ignore[union-attr]
-
-    def test_the_reference_lists_every_field_and_whether_it_is_needed(self) -> None:
-        listed = {
-            (table.strip("`"), key.strip("`")): optional.startswith("yes")
-            for table, key, optional, _ in readme.rows("table", "key", "may be left out", "what")
-        }
-        records = {
-            "site": Site,
-            "direction": Direction,
-            "level": Level,
-            "weight": WeightRow,
-            "spectrum": SpectrumRow,
-        }
-        assert listed == {
-            (table, entry.name): entry.default is not MISSING
-            for table, record in records.items()
-            for entry in fields(record)
-        }
-
-    def test_the_stated_defaults_are_the_engines(self) -> None:
-        text = {"1": 1.0, "0": 0.0, '"interpolate"': "interpolate", "false": False, "T_a is used": None}
-        text |= {'"rigid or semirigid"': "rigid or semirigid", '"none"': "none"}
-        defaults = {e.name: e.default for record in (Site, Direction) for e in fields(record)}
-        for _, key, optional, _ in readme.rows("table", "key", "may be left out", "what"):
-            if ": " in optional:
-                assert defaults[key.strip("`")] == text[optional.partition(": ")[2]], key
 
 
 class TestWords:

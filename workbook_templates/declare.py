@@ -15,6 +15,7 @@ from enum import StrEnum
 from functools import cached_property
 from typing import Any, Final
 
+from engine.editions import EDITIONS
 from xlbridge.catalogue import CATALOGUE, SheetFunction
 from xlbridge.catalogue.entry import Argument, Span
 
@@ -205,7 +206,7 @@ class Part:
     ``needs`` are the level entries of BUILDING.toml without which the part cannot be filled in;
     ``requires`` the keys of the parts that come along, because formulas of this one refer to them.
     ``bands`` widen the story table, ``tables`` are further sheets; ``replaces`` are quantities that take the
-    place of those of other parts with the same key.
+    place of those of other parts with the same key; ``editions`` are those that have the procedure.
     """
 
     key: str
@@ -220,6 +221,7 @@ class Part:
     curves: tuple[Curve, ...] = ()
     needs: tuple[str, ...] = ()
     requires: tuple[str, ...] = ()
+    editions: tuple[str, ...] = EDITIONS
 
 
 def entry(key: str, feeds: str, text: str = "", **more: Any) -> Quantity:

@@ -59,7 +59,11 @@ class Inputs:
                 raise NotApplicable("parts", key, f"must be one of {', '.join(PARTS)}")
         found = {key for key, part in PARTS.items() if part.needs and self._has(part.needs)}
         found |= {key for key, part in PARTS.items() if any(t.stored in self.given for t in part.tables)}
-        return with_required({*asked, *found})
+        keys = with_required({*asked, *found})
+        for key in keys:
+            if self.edition not in PARTS[key].editions:
+                raise NotApplicable("parts", key, f"is a part of {' and '.join(PARTS[key].editions)} only")
+        return keys
 
     def _has(self, needs: tuple[str, ...]) -> bool:
         given = [

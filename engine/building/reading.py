@@ -5,22 +5,21 @@ from __future__ import annotations
 from collections.abc import Mapping
 from dataclasses import fields
 from difflib import get_close_matches
-from typing import Any, TypeVar
+from typing import Any, TypeVar, cast
 
 from engine.building.records import (
+    ROW_TABLES,
     Building,
     Direction,
     Level,
     Site,
-    SpectrumRow,
-    WeightRow,
     level_label,
     may_be_left_out,
     row_label,
 )
 from engine.errors import MissingValue, NotApplicable, WrongType
 
-Record = TypeVar("Record", Site, Direction, Level, WeightRow, SpectrumRow, Building)
+Record = TypeVar("Record")
 
 
 def from_mapping(data: Mapping[str, Any]) -> Building:
@@ -40,10 +39,9 @@ def from_mapping(data: Mapping[str, Any]) -> Building:
         }
     if "level" in parts:
         parts["level"] = tuple(_rows(Level, "level", parts["level"]))
-    if "weight" in parts:
-        parts["weight"] = tuple(_rows(WeightRow, "weight", parts["weight"]))
-    if "spectrum" in parts:
-        parts["spectrum"] = tuple(_rows(SpectrumRow, "spectrum", parts["spectrum"]))
+    for name, kind in ROW_TABLES.items():
+        if name in parts:
+            parts[name] = tuple(_rows(kind, name, parts[name]))
     if isinstance(parts.get("parts"), list):
         parts["parts"] = tuple(parts["parts"])
     for free in ("job", "sources"):
@@ -57,7 +55,7 @@ def to_mapping(building: Building) -> dict[str, Any]:
     data["site"] = _plain(building.site)
     data["direction"] = {name: _plain(entry) for name, entry in building.direction.items()}
     data["level"] = [_plain(level) for level in building.level]
-    for rows in ("weight", "spectrum"):
+    for rows in ROW_TABLES:
         data[rows] = [_plain(row) for row in getattr(building, rows)]
     return {key: data[key] for key in data if data[key] not in ({}, [])}
 
@@ -73,12 +71,12 @@ def _label(name: str, place: int, entry: object) -> str:
         return f"{name} {place}"
     if name == "level":
         return level_label(place, entry.get("name", ""))
-    return row_label(place, entry.get("what", "")) if name == "weight" else f"{name} {place}"
+    return row_label(name, place, entry)
 
 
 def _record(kind: type[Record], prefix: str, data: object) -> Record:
     table = _table(prefix.rstrip(".: "), data)
-    known = {entry.name: may_be_left_out(entry) for entry in fields(kind)}
+    known = {entry.name: may_be_left_out(entry) for entry in fields(cast(Any, kind))}
     for key in table:
         if key not in known:
             raise NotApplicable(f"{prefix}{key}", table[key], _hint(key, tuple(known)))
@@ -97,11 +95,9 @@ def _table(name: str, data: object) -> Mapping[str, Any]:
 def _hint(key: str, known: tuple[str, ...]) -> str:
     folded = {word.lower(): word for word in known}
     close = get_close_matches(key.lower(), folded, n=1)
-    return (
-        f"unknown key, did you mean {folded[close[0]]}?"
-        if close
-        else f"unknown key; known are {', '.join(known)}"
-    )
+    if close:
+        return f"unknown key, did you mean {folded[close[0]]}?"
+    return "unknown key; `storyledger entries` lists the known ones"
 
 
 def _plain(record: Any) -> dict[str, Any]:

@@ -46,7 +46,7 @@ def test_a_pipe_gets_the_text_alone(tmp_path: Path) -> None:
         ["inputs", "d/story.xlsx"],
         ["solve", "d/building.toml"],
     ]
-    calls += [["new", "n.xlsx", "--levels", "60"], ["eval", "=1+1", "--work"], ["functions"]]
+    calls += [["new", "n.xlsx", "--levels", "60"], ["eval", "=1+1", "--work"], ["functions"], ["entries"]]
     assert {call[0] for call in calls} == set(COMMANDS)
     for call in calls:
         outcome = run_apart(*call, cwd=tmp_path)

@@ -168,6 +168,6 @@ def test_help_of_every_command(command: str) -> None:
     assert outcome.out.startswith("Usage: storyledger")
     if not command:
         assert "engineer's judgement" in " ".join(outcome.out.split())
-        assert [line.split()[0] for line in outcome.out.split("Commands:\n")[1].splitlines()[:7]] == list(
-            COMMANDS
-        )
+        assert [
+            line.split()[0] for line in outcome.out.split("Commands:\n")[1].splitlines()[: len(COMMANDS)]
+        ] == list(COMMANDS)

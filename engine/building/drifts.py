@@ -1,0 +1,74 @@
+"""Drifts and stability of one direction against their limits."""
+
+from __future__ import annotations
+
+from typing import Any
+
+import numpy as np
+
+from engine import drift, stability, vertical
+from engine.building.records import Building, Direction, level_label
+from engine.building.results import Package, texts
+from engine.errors import ImpossibleValue
+from engine.require import Array
+from engine.units import DISPLACEMENT_PER_LENGTH
+
+
+def limits(building: Building, package: Package, given: Direction) -> dict[str, Any]:
+    """Return the allowable drifts, and the limit of the stability coefficient."""
+    rho = given.rho if given.moment_frames_only else 1.0
+    beta = float(stability.demand_ratio(given.beta, given.Omega_0, building.edition))
+    allowable = drift.allowable_drift(package.h_sx, given.drift_structure, building.site.risk_category, rho)
+    return {
+        "Delta_a": allowable * DISPLACEMENT_PER_LENGTH[building.units],
+        "beta_used": beta,
+        "theta_max": float(stability.stability_limit(given.C_d, beta)),
+    }
+
+
+def drifts(building: Building, package: Package, name: str) -> dict[str, Any]:
+    """Return the design story drifts, where displacements are given."""
+    given, h = building.direction[name], package.h_x
+    elastic = [getattr(level, f"delta_xe_{name}") for level in building.level]
+    if elastic[0] is None:
+        return {}
+    lower = vertical.value_below(h, elastic, h)
+    Delta = drift.design_story_drift(elastic, lower, given.C_d, package.I_e)
+    return {
+        "delta_x": drift.amplified_deflection(elastic, given.C_d, package.I_e),
+        "Delta": Delta,
+        "drift_ratio": Delta / (package.h_sx * DISPLACEMENT_PER_LENGTH[building.units]),
+    }
+
+
+def second_order(
+    building: Building, package: Package, given: Direction, known: dict[str, Any]
+) -> dict[str, Any]:
+    """Return the stability coefficients and the drifts that they amplify, where vertical loads are given."""
+    if "Delta" not in known:
+        return {}
+    if building.level[0].P_x is None:
+        return {"drift_over_limit": known["Delta"] / known["Delta_a"]}
+    P_x = np.array([level.P_x for level in building.level], dtype=np.float64)
+    _refuse_where(
+        building, "V_x", known["V_x"], known["V_x"] <= 0, "must be above 0 for a stability coefficient"
+    )
+    h_sx = package.h_sx * DISPLACEMENT_PER_LENGTH[building.units]
+    theta = np.asarray(
+        stability.stability_coefficient(P_x, known["Delta"], package.I_e, known["V_x"], h_sx, given.C_d)
+    )
+    _refuse_where(building, "theta", theta, theta >= 1, "must be below 1: the story is unstable")
+    factor = stability.second_order_factor(theta)
+    return {
+        "theta": theta,
+        "theta_factor": factor,
+        "theta_verdict": texts(stability.stability_verdict(theta, known["theta_max"])),
+        "Delta_amplified": known["Delta"] * factor,
+        "drift_over_limit": known["Delta"] * factor / known["Delta_a"],
+    }
+
+
+def _refuse_where(building: Building, symbol: str, values: Array, bad: Any, allowed: str) -> None:
+    for place in np.flatnonzero(bad):
+        label = level_label(int(place) + 1, building.level[place].name)
+        raise ImpossibleValue(f"{label}: {symbol}", float(values[place]), allowed)

@@ -1,0 +1,29 @@
+"""The inputs of one building as frozen records; each field carries its own check.
+
+Heights and weights in the unit system's length and force units, displacements in its displacement unit.
+"""
+
+from __future__ import annotations
+
+from engine.building.records.building import Building, level_values
+from engine.building.records.direction import DIRECTIONS, Direction
+from engine.building.records.fields import may_be_left_out
+from engine.building.records.level import Level, level_label
+from engine.building.records.rows import ROW_TABLES, WEIGHT_KINDS, SpectrumRow, WeightRow, row_label
+from engine.building.records.site import Site
+
+__all__ = [
+    "DIRECTIONS",
+    "ROW_TABLES",
+    "WEIGHT_KINDS",
+    "Building",
+    "Direction",
+    "Level",
+    "Site",
+    "SpectrumRow",
+    "WeightRow",
+    "level_label",
+    "level_values",
+    "may_be_left_out",
+    "row_label",
+]

@@ -1,0 +1,112 @@
+"""One building as a frozen record: what its fields say together is checked here."""
+
+from __future__ import annotations
+
+from collections.abc import Mapping
+from dataclasses import asdict, dataclass, field
+
+import numpy as np
+
+from engine.building.records.direction import DIRECTIONS, Direction
+from engine.building.records.fields import check_fields, checked, is_list_of_texts, is_text, word
+from engine.building.records.level import LEVEL_OPTIONS, Level, level_label
+from engine.building.records.rows import ROW_TABLES, SpectrumRow, WeightRow, row_label
+from engine.building.records.site import Site
+from engine.editions import EDITIONS
+from engine.errors import ImpossibleValue, MissingValue, NotApplicable
+from engine.levels import MAX_LEVELS
+from engine.require import Array, choice
+from engine.units import SYSTEMS
+
+
+@dataclass(frozen=True, slots=True, kw_only=True)
+class Building:
+    """Everything the equivalent lateral force procedure needs to know of one building.
+
+    ``parts`` names parts of the workbook that are wanted although no entry of a level asks for them.
+    """
+
+    title: str = checked(is_text)
+    edition: str = word(EDITIONS)
+    units: str = word(SYSTEMS)
+    site: Site
+    direction: Mapping[str, Direction]
+    level: tuple[Level, ...]
+    weight: tuple[WeightRow, ...] = ()
+    spectrum: tuple[SpectrumRow, ...] = ()
+    job: Mapping[str, object] = field(default_factory=dict)
+    sources: Mapping[str, str] = field(default_factory=dict)
+    parts: tuple[str, ...] = checked(is_list_of_texts, ())
+
+    def __post_init__(self) -> None:
+        """Check every field of every record, then what fields say together."""
+        check_fields("", self)
+        check_fields("site.", self.site)
+        if not self.direction:
+            raise MissingValue("direction", None, "must have a table X or Y or both")
+        for name, direction in self.direction.items():
+            choice("direction", name, DIRECTIONS)
+            check_fields(f"direction.{name}.", direction)
+        _check_levels(self.level, self.site.base_elevation)
+        for table in ROW_TABLES:
+            for place, row in enumerate(getattr(self, table), start=1):
+                check_fields(f"{row_label(table, place, asdict(row))}: ", row)
+        if self.weight:
+            _check_take_off(self.weight, self.level)
+        else:
+            _check_weights(self.level)
+
+
+def level_values(building: Building, key: str) -> Array | None:
+    """Return an entry of all levels as an array, ``None`` where it is not given."""
+    if getattr(building.level[0], key) is None:
+        return None
+    return np.array([getattr(level, key) for level in building.level], dtype=np.float64)
+
+
+def _check_levels(levels: tuple[Level, ...], base: float) -> None:
+    if not 1 <= len(levels) <= MAX_LEVELS:
+        raise ImpossibleValue("level", f"{len(levels)} levels", f"must be 1 to {MAX_LEVELS} levels")
+    for place, level in enumerate(levels, start=1):
+        label = level_label(place, level.name)
+        check_fields(f"{label}: ", level)
+        if level.elevation <= base:
+            raise ImpossibleValue(
+                f"{label}: elevation", level.elevation, f"must be above the base at {base:g}"
+            )
+        for optional in LEVEL_OPTIONS:
+            if (getattr(level, optional) is None) != (getattr(levels[0], optional) is None):
+                raise _half_filled(levels, optional)
+
+
+def _check_weights(levels: tuple[Level, ...]) -> None:
+    for place, level in enumerate(levels, start=1):
+        if level.weight is None:
+            raise MissingValue(f"{level_label(place, level.name)}: weight", None, "must be given")
+    if not any(level.weight for level in levels):
+        raise ImpossibleValue("level", "all weights 0", "at least one level must have a weight above 0")
+
+
+def _check_take_off(rows: tuple[WeightRow, ...], levels: tuple[Level, ...]) -> None:
+    for place, level in enumerate(levels, start=1):
+        if level.weight is not None:
+            label = f"{level_label(place, level.name)}: weight"
+            raise NotApplicable(label, level.weight, "must be left out where rows of weights are given")
+    names = [level.name.casefold() for level in levels]
+    for place, row in enumerate(rows, start=1):
+        label = row_label("weight", place, asdict(row))
+        if names.count(row.level.casefold()) != 1:
+            raise NotApplicable(f"{label}: level", row.level, "must be the name of one level")
+        _check_amount(label, row)
+
+
+def _check_amount(label: str, row: WeightRow) -> None:
+    given = [entry is not None for entry in (row.area, row.load, row.amount)]
+    if given not in ([True, True, False], [False, False, True]):
+        raise MissingValue(f"{label}: area", row.area, "must be given with load, or amount alone")
+
+
+def _half_filled(levels: tuple[Level, ...], optional: str) -> MissingValue:
+    place = next(i for i, level in enumerate(levels, start=1) if getattr(level, optional) is None)
+    name = f"{level_label(place, levels[place - 1].name)}: {optional}"
+    return MissingValue(name, None, "must be given at all levels or at none")

@@ -1,0 +1,50 @@
+"""Entries of one plan direction; those of a part of the package in a class of their own."""
+
+from __future__ import annotations
+
+from dataclasses import dataclass
+from functools import partial
+from typing import Final
+
+from engine.building.records.fields import POSITIVE, checked, is_flag, is_text, number, word
+from engine.drift import DRIFT_STRUCTURES
+from engine.period import PERIOD_SYSTEMS
+from engine.redundancy import CONFIGURATIONS
+from engine.require import above, at_least, within
+from engine.vertical import EXPONENT_RULES
+
+DIRECTIONS: Final = ("X", "Y")
+
+
+@dataclass(frozen=True, kw_only=True)
+class PlanDirectionEntries:
+    """What decides on irregularities and redundancy.
+
+    ``TIR_max`` is the largest torsional irregularity ratio, where the levels do not give the displacements
+    of the edges.
+    """
+
+    one_sided: bool = checked(is_flag, False)
+    in_plane_discontinuity: bool | None = checked(is_flag, None)
+    configuration: str = word(CONFIGURATIONS, CONFIGURATIONS[0])
+    TIR_max: float | None = number(partial(at_least, 1), None)
+
+
+@dataclass(frozen=True, kw_only=True)
+class Direction(PlanDirectionEntries):
+    """The seismic force-resisting system of one plan direction.
+
+    ``rho`` divides the allowable drift only where ``moment_frames_only`` is true.
+    """
+
+    system: str = checked(is_text)
+    R: float = number(partial(at_least, 1))
+    Omega_0: float = number(partial(at_least, 1))
+    C_d: float = number(partial(at_least, 1))
+    period_system: str = word(PERIOD_SYSTEMS)
+    drift_structure: str = word(DRIFT_STRUCTURES)
+    T_computed: float | None = number(POSITIVE, None)
+    k_rule: str = word(EXPONENT_RULES, "interpolate")
+    rho: float = number(partial(within, 1, 1.3), 1.0)
+    moment_frames_only: bool = checked(is_flag, False)
+    beta: float = number(lambda name, value: above(0, name, within(0, 1, name, value)), 1.0)

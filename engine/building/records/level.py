@@ -1,0 +1,55 @@
+"""Entries of one level of the story table."""
+
+from __future__ import annotations
+
+from dataclasses import dataclass, fields
+from typing import Final
+
+from engine.building.records.fields import ANY, NOT_NEGATIVE, POSITIVE, checked, is_text, number
+
+
+@dataclass(frozen=True, slots=True, kw_only=True)
+class Level:
+    """One level: elevation [ft or m], weight and P_x [kip or kN], elastic displacements [in or mm].
+
+    The weight is left out where rows of the take-off give it. ``d_1`` and ``d_2`` are those of opposite
+    edges with A_x = 1; ``x_M`` and ``x_R`` the centres of mass and rigidity on one axis. ``K_x``,
+    ``strength`` and ``L_sys`` belong to the story below the level. ``source`` says in words where the
+    numbers come from.
+    """
+
+    name: str = checked(is_text)
+    elevation: float = number(ANY)
+    weight: float | None = number(NOT_NEGATIVE, None)
+    P_x: float | None = number(NOT_NEGATIVE, None)
+    delta_xe_X: float | None = number(ANY, None)
+    delta_xe_Y: float | None = number(ANY, None)
+    w_px: float | None = number(NOT_NEGATIVE, None)
+    L_perp_X: float | None = number(POSITIVE, None)
+    L_perp_Y: float | None = number(POSITIVE, None)
+    d_1_X: float | None = number(ANY, None)
+    d_1_Y: float | None = number(ANY, None)
+    d_2_X: float | None = number(ANY, None)
+    d_2_Y: float | None = number(ANY, None)
+    x_M_X: float | None = number(ANY, None)
+    x_M_Y: float | None = number(ANY, None)
+    x_R_X: float | None = number(ANY, None)
+    x_R_Y: float | None = number(ANY, None)
+    K_x_X: float | None = number(POSITIVE, None)
+    K_x_Y: float | None = number(POSITIVE, None)
+    strength_X: float | None = number(POSITIVE, None)
+    strength_Y: float | None = number(POSITIVE, None)
+    L_sys_X: float | None = number(POSITIVE, None)
+    L_sys_Y: float | None = number(POSITIVE, None)
+    source: str | None = checked(is_text, None)
+
+
+#: entries that stand at every level or at none
+LEVEL_OPTIONS: Final = tuple(
+    entry.name for entry in fields(Level) if entry.default is None and entry.name not in ("weight", "source")
+)
+
+
+def level_label(place: int, name: object) -> str:
+    """Name a level in a message, counted from 1 as listed."""
+    return f'level {place} ("{name}")'

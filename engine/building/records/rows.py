@@ -1,0 +1,55 @@
+"""Rows of the tables beside the story table; ``NAMED_BY`` is the field by which a message names a row."""
+
+from __future__ import annotations
+
+from collections.abc import Mapping
+from dataclasses import dataclass
+from types import MappingProxyType
+from typing import Any, ClassVar, Final
+
+from engine.building.records.fields import NOT_NEGATIVE, checked, is_text, number, word
+
+WEIGHT_KINDS: Final = (
+    *("dead", "partition", "storage", "garage storage", "snow", "equipment", "landscaping"),
+)
+
+
+@dataclass(frozen=True, slots=True, kw_only=True)
+class WeightRow:
+    """One row of the weight take-off: a load [psf or kN/m2] on an area [ft2 or m2], or an amount [kip or kN].
+
+    An amount is entered as it counts; of a load the part counts that its kind says.
+    """
+
+    NAMED_BY: ClassVar = "what"
+
+    level: str = checked(is_text)
+    what: str = checked(is_text)
+    kind: str = word(WEIGHT_KINDS)
+    area: float | None = number(NOT_NEGATIVE, None)
+    load: float | None = number(NOT_NEGATIVE, None)
+    amount: float | None = number(NOT_NEGATIVE, None)
+    source: str | None = checked(is_text, None)
+
+
+@dataclass(frozen=True, slots=True, kw_only=True)
+class SpectrumRow:
+    """One period [s] at which the spectrum is wanted."""
+
+    NAMED_BY: ClassVar = ""
+
+    T: float = number(NOT_NEGATIVE)
+
+
+#: the tables of a BUILDING.toml beside the story table, with the record of a row
+ROW_TABLES: Final[Mapping[str, type[Any]]] = MappingProxyType({"weight": WeightRow, "spectrum": SpectrumRow})
+
+
+def row_label(table: str, place: int, entry: Mapping[str, Any]) -> str:
+    """Name a row in a message, counted from 1 as listed.
+
+    >>> row_label("weight", 2, {"what": "roofing"}), row_label("spectrum", 1, {"T": 0.5})
+    ('weight 2 ("roofing")', 'spectrum 1')
+    """
+    named_by = ROW_TABLES[table].NAMED_BY
+    return f'{table} {place} ("{entry.get(named_by, "")}")' if named_by else f"{table} {place}"

@@ -1,0 +1,48 @@
+"""Period, response coefficient and base shear of one direction, and the forces of its levels."""
+
+from __future__ import annotations
+
+from typing import Any
+
+from engine import base_shear, period, vertical
+from engine.building.records import Building, Direction
+from engine.building.results import Package
+
+
+def strength(building: Building, package: Package, given: Direction) -> dict[str, Any]:
+    """Return the steps from the period to the base shear and the exponent."""
+    site, I_e, R = building.site, package.I_e, given.R
+    T_a = float(period.approximate_period(package.h_n, given.period_system, building.units))
+    C_u = float(period.upper_limit_coefficient(site.S_D1))
+    T = T_a if given.T_computed is None else float(period.design_period(T_a, C_u, given.T_computed))
+    spectrum = (site.S_DS, site.S_D1, site.S_1, T, site.T_L, R, I_e, building.edition)
+    C_s = float(base_shear.response_coefficient(*spectrum))
+    return {
+        "T_a": T_a,
+        "C_u": C_u,
+        "T_max": float(period.period_limit(C_u, T_a)),
+        "T": T,
+        "C_s_plateau": float(base_shear.coefficient_plateau(site.S_DS, R, I_e)),
+        "C_s_cap": float(base_shear.coefficient_cap(site.S_D1, T, site.T_L, R, I_e)),
+        "C_s_min": float(base_shear.coefficient_minimum(site.S_DS, I_e)),
+        "C_s_min_S1": float(base_shear.coefficient_minimum_near_fault(site.S_1, R, I_e)),
+        "C_s": C_s,
+        "governing_bound": base_shear.governing_bound(*spectrum),
+        "V": float(base_shear.base_shear(C_s, package.W)),
+        "k": float(vertical.exponent(T, given.k_rule)),
+    }
+
+
+def forces(package: Package, strength: dict[str, Any]) -> dict[str, Any]:
+    """Return the forces, shears and overturning moments of every level."""
+    w, h = package.w_x, package.h_x
+    C_vx = vertical.distribution_factors(w, h, strength["k"])
+    F = vertical.story_force(strength["V"], C_vx)
+    return {
+        "C_vx": C_vx,
+        "F_x": F,
+        "V_x": vertical.story_shear(h, F, h),
+        "V_base": float(vertical.story_shear(0.0, F, h)),
+        "M_x": vertical.overturning_moment(h, F, h),
+        "M_base": float(vertical.overturning_moment(0.0, F, h)),
+    }
