@@ -223,6 +223,13 @@ class Part:
     requires: tuple[str, ...] = ()
     editions: tuple[str, ...] = EDITIONS
 
+    @property
+    def calls(self) -> list[str]:
+        """The worksheet functions that its formulas call."""
+        bands = (band for table in self.tables for band in table.bands)
+        quantities = (q for block in (*self.criteria, *self.bands, *bands) for q in block.quantities)
+        return [name for q in (*quantities, *self.replaces) for name in q.calls]
+
 
 def entry(key: str, feeds: str, text: str = "", **more: Any) -> Quantity:
     """Declare an input that allows what the argument it feeds allows (``FUNCTION.argument``)."""

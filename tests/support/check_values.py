@@ -1,8 +1,9 @@
 """Check values as data: rows of tests/check_values/*.toml, evaluated and compared as printed.
 
 A row names a function, its inputs, the expected text as printed, the source and its kind. An input may be
-another call. Numbers are compared at the printed digits, fractions exactly, or within the row's own
-tolerance, which then has a reason. A row with ``misprint`` also proves that the printed slip is one.
+another call. Words are compared as they stand, numbers at the printed digits, fractions exactly, or within
+the row's own tolerance, which then has a reason. A row with ``misprint`` also proves that the printed slip
+is one.
 """
 
 from __future__ import annotations
@@ -45,6 +46,8 @@ def shortfalls(row: Mapping[str, Any], expected: str | list[str]) -> list[str]:
     got = np.atleast_1d(evaluate(row))
     if got.shape != (len(texts),):
         return [f"{got.shape[0]} values, {len(texts)} expected"]
+    if got.dtype.kind in "OU":
+        return [f"got {word}, expected {text}" for word, text in zip(got, texts, strict=True) if word != text]
     return [
         f"[{place}] got {value!r}, expected {text}, relative {value / float(Fraction(text)) - 1:.2g}"
         if float(Fraction(text))

@@ -9,21 +9,27 @@ import click
 
 from xlbridge import work
 from xlbridge.catalogue import CATALOGUE, SheetFunction
+from xlbridge.catalogue.checked import outside_checks
 from xlbridge.catalogue.validate import describe
-from xlbridge.cli.failure import Refusal
+from xlbridge.cli.failure import CLEAN, FINDINGS, Refusal
 
 
 @click.command("functions")
 @click.argument("name", required=False)
 @click.option("--json", "as_json", is_flag=True, help="Print as JSON.")
 @click.option("--builtins", is_flag=True, help="List the built-in functions that are evaluated headless.")
-def command(name: str | None, as_json: bool, builtins: bool) -> None:
+@click.option("--coverage", is_flag=True, help="List capabilities, their functions, places and checks.")
+def command(name: str | None, as_json: bool, builtins: bool, coverage: bool) -> int:
     """List the worksheet functions, or describe one of them."""
+    if name is not None and (builtins or coverage):
+        raise Refusal(f"{name}: the lists of --builtins and --coverage take no name")
+    if coverage:
+        return _print_coverage()
     if builtins:
         from xlbridge.headless.builtins import BUILTINS
 
         click.echo(json.dumps(sorted(BUILTINS)) if as_json else "\n".join(sorted(BUILTINS)))
-        return
+        return CLEAN
     entries = list(CATALOGUE.values()) if name is None else [_named(name)]
     if as_json:
         click.echo(json.dumps([record(entry) for entry in entries], indent=1, ensure_ascii=False))
@@ -32,6 +38,16 @@ def command(name: str | None, as_json: bool, builtins: bool) -> None:
         click.echo("\n".join(f"{entry.name:<{width}}  {entry.summary}" for entry in entries))
     else:
         click.echo(_page(entries[0]))
+    return CLEAN
+
+
+def _print_coverage() -> int:
+    """Print the coverage list and what it lacks; gaps are findings."""
+    from xlbridge.cli.coverage import coverage
+
+    lines, gaps = coverage()
+    click.echo("\n".join([*lines, "", *(f"! {gap}" for gap in gaps)]).rstrip())
+    return FINDINGS if gaps else CLEAN
 
 
 def _named(name: str) -> SheetFunction:
@@ -72,6 +88,10 @@ def record(entry: SheetFunction) -> dict[str, Any]:
             edition: {"clause": str(c), "confidence": c.confidence, "note": c.note}
             for edition, c in entry.clauses.items()
         },
+        "checks": [
+            {"source": check.source, "kind": check.kind, "values": check.values}
+            for check in outside_checks().get(entry.name, ())
+        ],
         "example": {"arguments": dict(entry.example.arguments), "result": entry.example.result},
         "since": entry.since,
     }
@@ -83,5 +103,6 @@ def _page(entry: SheetFunction) -> str:
     lines += ["", f"returns {entry.result.text} [{entry.result.unit}]"]
     for found in entry.clauses.values():
         lines.append(f"{found.standard} {found}{f' ({found.note})' if found.note else ''}")
+    lines += [f"checked against {check}" for check in outside_checks().get(entry.name, ())]
     given = ", ".join(f"{key} = {value}" for key, value in entry.example.arguments.items())
     return "\n".join([*lines, "", f"example: {given}: {entry.example.result}"])

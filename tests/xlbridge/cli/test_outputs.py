@@ -311,7 +311,7 @@ class TestFunctions:
             assert all(argument.keys() == shape["arguments"][0].keys() for argument in record["arguments"])
             assert shape["clauses"] in ({"7-16": clause, "7-22": clause}, {"7-16": clause}, {"7-22": clause})
             assert shape["result"] == {"symbol": TEXT, "unit": TEXT, "text": TEXT}
-            assert tuple(shape) == (*RECORD, "example", "since")
+            assert tuple(shape) == (*RECORD, "checks", "example", "since")
             assert tuple(shape["arguments"][0]) == ARGUMENT
         assert json.loads(run("functions", "ELF_V", "--json").out) == [
             record for record in records if record["name"] == "ELF_V"
