@@ -3,6 +3,7 @@
 from __future__ import annotations
 
 import inspect
+import re
 from collections.abc import Iterable, Sequence
 from typing import Any
 
@@ -10,9 +11,11 @@ import numpy as np
 
 from engine.errors import EngineError
 from xlbridge.catalogue.entry import Argument as Declared
-from xlbridge.catalogue.entry import SheetFunction, Term
+from xlbridge.catalogue.entry import Case, SheetFunction, Term
 from xlbridge.values import OMITTED, Argument, Value
 
+_TWICE = re.compile(r"(?<!\w)(\w+)(?: =|:)? \(?\1(?!\w)\)?")
+LEFT_OPEN = "…"  # stands for what can not be worked out
 SHOWN = 6  # significant digits of a number in an equation
 
 
@@ -24,7 +27,16 @@ def equation(entry: SheetFunction) -> str:
     'F_x = C_vx·V'
     """
     symbols = {part.name: part.symbol for part in _parts(entry)}
-    return f"{entry.result.symbol} = {entry.expression.format_map(symbols)}"
+    return f"{entry.result.symbol} = {_once(entry.expression.format_map(symbols))}"
+
+
+def _once(text: str) -> str:
+    """Return a text in symbols without the repetitions of places that name what they hold.
+
+    >>> _once("table at S_D1 = S_D1, rule rule")
+    'table at S_D1, rule'
+    """
+    return _TWICE.sub(r"\1", text)
 
 
 def _parts(entry: SheetFunction) -> Iterable[Declared | Term]:
@@ -39,10 +51,35 @@ def numbers(entry: SheetFunction, arguments: Sequence[Argument]) -> str:
     >>> numbers(CATALOGUE["ELF_FX"], [286.0, 0.28])
     '0.28·286'
     """
+    values = _values(entry, arguments)
+    case = _case(entry, values)
+    return _put_in(entry.expression if case is None else case.expression, values)
+
+
+def _values(entry: SheetFunction, arguments: Sequence[Argument]) -> dict[str, Any]:
+    """Return the values of the arguments, those left out included, and of the terms."""
     given = {a.name: v for a, v in zip(entry.arguments, arguments, strict=False) if v is not OMITTED}
     values = {**entry.defaults, **given}
-    terms = {term.name: _term(term, values) for term in entry.terms}
-    return entry.expression.format_map({name: shown(v) for name, v in (values | terms).items()})
+    return values | {term.name: _term(term, values) for term in entry.terms}
+
+
+def case_of(entry: SheetFunction, arguments: Sequence[Argument]) -> Case | None:
+    """Return the case that holds; none without cases, or where a value is no single number or word."""
+    return _case(entry, _values(entry, arguments))
+
+
+def _case(entry: SheetFunction, values: dict[str, Any]) -> Case | None:
+    for case in entry.cases:
+        own = [values[name] for name in inspect.signature(case.holds).parameters]
+        if not all(isinstance(value, int | float | str) and value != LEFT_OPEN for value in own):
+            return None
+        if case.holds(*own):
+            return case
+    return None
+
+
+def _put_in(template: str, values: dict[str, Any]) -> str:
+    return template.format_map({name: shown(value) for name, value in values.items()})
 
 
 def numbers_line(entry: SheetFunction, arguments: Sequence[Argument], result: Value) -> str:
@@ -52,7 +89,10 @@ def numbers_line(entry: SheetFunction, arguments: Sequence[Argument], result: Va
     >>> numbers_line(CATALOGUE["ELF_FX"], [286.0, 0.28], 80.08)
     'F_x = 0.28·286 = 80.08'
     """
-    return f"{entry.result.symbol} = {numbers(entry, arguments)} = {shown(result)}"
+    values = _values(entry, arguments)
+    case = _case(entry, values)
+    where = f", where {_put_in(case.where, values)}" if case else ""
+    return f"{entry.result.symbol} = {numbers(entry, arguments)} = {shown(result)}{where}"
 
 
 def shown(value: Any) -> str:
@@ -72,7 +112,7 @@ def _term(term: Term, values: dict[str, Any]) -> Any:
     try:
         return term.compute(**{name: _plain(values[name]) for name in names})
     except EngineError:
-        return "…"
+        return LEFT_OPEN
 
 
 def _plain(value: Any) -> Any:

@@ -4,7 +4,7 @@ from __future__ import annotations
 
 from engine import base_shear
 from xlbridge.catalogue.common import S_1, S_D1, S_DS, T_L, I_e, R, T, edition
-from xlbridge.catalogue.entry import POSITIVE, Argument, Example, Result, SheetFunction, Term
+from xlbridge.catalogue.entry import POSITIVE, Argument, Case, Example, Result, SheetFunction, Term
 
 CAP = "{S_D1}*IF({T}<={T_L},1,{T_L}/{T})/({T}*({R}/{I_e}))"
 PLATEAU = "{S_DS}/({R}/{I_e})"
@@ -51,7 +51,10 @@ FUNCTIONS = (
         arguments=(S_D1, T, T_L, R, I_e),
         result=Result("C_s", "none", "bound of C_s"),
         function=base_shear.coefficient_cap,
-        expression="{S_D1}/({T}·{R}/{I_e}) to T_L = {T_L}; {S_D1}·{T_L}/({T}²·{R}/{I_e}) beyond",
+        cases=(
+            Case("{S_D1}/({T}·{R}/{I_e})", "{T} ≤ {T_L}", lambda T, T_L: T <= T_L),
+            Case("{S_D1}·{T_L}/({T}²·{R}/{I_e})", "{T} > {T_L}", lambda: True),
+        ),
         native=CAP,
         example=Example({"S_D1": 0.6, "T": 1.5, "T_L": 8.0, "R": 8.0, "I_e": 1.0}, "0.05"),
     ),
@@ -75,7 +78,10 @@ FUNCTIONS = (
         arguments=(S_1, R, I_e),
         result=Result("C_s", "none", "bound of C_s"),
         function=base_shear.coefficient_minimum_near_fault,
-        expression="0.5·{S_1}/({R}/{I_e}) where S_1 ≥ 0.6; 0 elsewhere",
+        cases=(
+            Case("0.5·{S_1}/({R}/{I_e})", "{S_1} ≥ 0.6", lambda S_1: S_1 >= 0.6),
+            Case("0", "{S_1} < 0.6", lambda: True),
+        ),
         native=MINIMUM_S1,
         example=Example({"S_1": 0.6, "R": 8.0, "I_e": 1.0}, "0.0375"),
     ),

@@ -9,6 +9,7 @@ from xlbridge.catalogue.entry import (
     NOT_NEGATIVE,
     POSITIVE,
     Argument,
+    Case,
     Example,
     Kind,
     Result,
@@ -172,9 +173,18 @@ FUNCTIONS = (
         ),
         result=Result("C_px", "none", "coefficient of the level"),
         function=diaphragm.coefficient_at_height,
-        expression=(
-            "linear at h_x/h_n = {h_x}/{h_n} from {C_p0} at 0 to {C_pn} at 1; with N = {N} ≥ 3 "
-            "through {C_pi} at 0.8"
+        cases=(
+            Case("{C_p0} + ({C_pn} - {C_p0})·{h_x}/{h_n}", "N = {N} ≤ 2", lambda N: N <= 2),
+            Case(
+                "{C_p0} + ({C_pi} - {C_p0})·{h_x}/{h_n}/0.8",
+                "N = {N} ≥ 3 and {h_x}/{h_n} ≤ 0.8",
+                lambda h_x, h_n: h_x / h_n <= 0.8,
+            ),
+            Case(
+                "{C_pi} + ({C_pn} - {C_pi})·({h_x}/{h_n} - 0.8)/0.2",
+                "N = {N} ≥ 3 and {h_x}/{h_n} > 0.8",
+                lambda: True,
+            ),
         ),
         native=f"IF({{N}}<=2,{_STRAIGHT},IF({{h_x}}/{{h_n}}<=0.8,{_LOWER},{_UPPER}))",
         example=Example({"h_x": 45.0, "h_n": 50.0, "N": 4.0, "C_p0": 0.4, "C_pi": 0.6, "C_pn": 0.8}, "0.7"),

@@ -10,6 +10,7 @@ from xlbridge.catalogue.entry import (
     NOT_NEGATIVE,
     POSITIVE,
     Argument,
+    Case,
     Example,
     Kind,
     Result,
@@ -80,7 +81,14 @@ FUNCTIONS = (
         ),
         result=Result("F", "force", "diaphragm force with transfer"),
         function=diaphragm.total_force,
-        expression="{F_px} + factor·{F_transfer}; factor {rho}, at an offset ({offset}) {Omega_0}",
+        cases=(
+            Case(
+                "{F_px} + {Omega_0}·{F_transfer}",
+                "there is an offset: {offset}",
+                lambda offset: offset == "yes",
+            ),
+            Case("{F_px} + {rho}·{F_transfer}", "there is an offset: {offset}", lambda: True),
+        ),
         native='{F_px}+IF({offset}="yes",{Omega_0},{rho})*{F_transfer}',
         example=Example(
             {"F_px": 80.0, "F_transfer": 40.0, "rho": 1.3, "Omega_0": 2.5, "offset": "no"}, "132"
@@ -165,7 +173,15 @@ FUNCTIONS = (
         ),
         result=Result("k_a", "none", "amplification"),
         function=diaphragm.anchorage_factor,
-        expression="min(1 + {L_f}/(100 ft); 2), 1 for a rigid diaphragm ({diaphragm}; {units})",
+        cases=(
+            Case("1", "the diaphragm is {diaphragm}", lambda diaphragm: diaphragm == "rigid"),
+            Case(
+                "min(1 + {L_f}/100; 2)",
+                "the diaphragm is {diaphragm}, lengths in ft",
+                lambda units: units == "us",
+            ),
+            Case("min(1 + {L_f}/30.48; 2)", "the diaphragm is {diaphragm}, lengths in m", lambda: True),
+        ),
         native='IF({diaphragm}="rigid",1,MIN(1+{L_f}/IF({units}="us",100,30.48),2))',
         example=Example({"L_f": 60.0, "diaphragm": "flexible", "units": "us"}, "1.6"),
     ),

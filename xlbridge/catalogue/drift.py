@@ -7,7 +7,7 @@ from engine.occupancy import RISK_CATEGORIES
 from engine.require import YES_NO
 from engine.tables import table
 from xlbridge.catalogue.common import SDC, TIR, C_d, I_e, h_sx, risk_category
-from xlbridge.catalogue.entry import Argument, Example, Kind, Result, SheetFunction, Span, Term
+from xlbridge.catalogue.entry import Argument, Case, Example, Kind, Result, SheetFunction, Span, Term
 
 
 def _ratio(structure: str, risk_category: str) -> float:
@@ -112,7 +112,10 @@ FUNCTIONS = (
         ),
         result=Result("Delta", "displacement", "drift to check, a magnitude"),
         function=drift.drift_to_check,
-        expression="max(|{Delta_1}|; |{Delta_2}|) along the edges ({edges}), else |{Delta_cm}|",
+        cases=(
+            Case("max(|{Delta_1}|; |{Delta_2}|)", "the edges count: {edges}", lambda edges: edges == "yes"),
+            Case("|{Delta_cm}|", "the edges count: {edges}", lambda: True),
+        ),
         native='IF({edges}="yes",MAX(ABS({Delta_1}),ABS({Delta_2})),ABS({Delta_cm}))',
         example=Example({"Delta_cm": 1.0, "Delta_1": 1.4, "Delta_2": 0.6, "edges": "yes"}, "1.4"),
     ),

@@ -91,6 +91,19 @@ class Term:
 
 
 @dataclass(frozen=True, slots=True)
+class Case:
+    """One branch of an expression: it stands where ``where`` says in symbols what ``holds`` decides.
+
+    ``holds`` takes, by name, those arguments and terms that it names as its own. The cases are asked in
+    their order; the last one holds wherever the others do not.
+    """
+
+    expression: str
+    where: str
+    holds: Callable[..., Any]
+
+
+@dataclass(frozen=True, slots=True)
 class Example:
     """Arguments by name and the result as it would be printed."""
 
@@ -103,9 +116,9 @@ class SheetFunction:
     """One worksheet function.
 
     ``rule`` is the key of its clause in the edition data, ``also`` are those of rules that it applies
-    besides; an edition may lack them. ``expression`` and
-    ``native`` are templates with ``{argument}`` places: the equation in symbols, and the same in built-in
-    functions.
+    besides; an edition may lack them. ``expression`` and ``native`` are templates with ``{argument}``
+    places: the equation in symbols, and the same in built-in functions. An equation with branches has
+    ``cases`` in place of an expression.
     """
 
     name: str
@@ -115,13 +128,19 @@ class SheetFunction:
     arguments: tuple[Argument, ...]
     result: Result
     function: Callable[..., Any]
-    expression: str
     example: Example
+    expression: str = ""
+    cases: tuple[Case, ...] = ()
     native: str = ""
     terms: tuple[Term, ...] = ()
     note: str = ""
     also: tuple[str, ...] = ()
     since: str = "0.1"
+
+    def __post_init__(self) -> None:
+        if self.cases and not self.expression:
+            joined = "; ".join(f"{case.expression} where {case.where}" for case in self.cases)
+            object.__setattr__(self, "expression", joined)
 
     @property
     def usage(self) -> str:

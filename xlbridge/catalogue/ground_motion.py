@@ -4,7 +4,7 @@ from __future__ import annotations
 
 from engine import hazard, occupancy
 from xlbridge.catalogue.common import S_D1, S_DS, T_L, risk_category
-from xlbridge.catalogue.entry import NOT_NEGATIVE, Argument, Example, Result, SheetFunction, Term
+from xlbridge.catalogue.entry import NOT_NEGATIVE, Argument, Case, Example, Result, SheetFunction, Term
 
 T_0 = Term("T_0", "T_0", hazard.corner_period_T0)
 T_S = Term("T_S", "T_S", hazard.corner_period_TS)
@@ -61,9 +61,11 @@ FUNCTIONS = (
         arguments=(Argument("T", "time", "Period, 0 allowed", NOT_NEGATIVE), S_DS, S_D1, T_L),
         result=Result("S_a", "acceleration", "design spectral acceleration"),
         function=hazard.spectral_acceleration,
-        expression=(
-            "{S_DS}·(0.4 + 0.6·{T}/{T_0}) below T_0 = {T_0}; {S_DS} to T_S = {T_S}; "
-            "{S_D1}/{T} to T_L = {T_L}; {S_D1}·{T_L}/{T}² beyond"
+        cases=(
+            Case("{S_DS}·(0.4 + 0.6·{T}/{T_0})", "{T} < {T_0}", lambda T, T_0: T < T_0),
+            Case("{S_DS}", "{T_0} ≤ {T} ≤ {T_S}", lambda T, T_S: T <= T_S),
+            Case("{S_D1}/{T}", "{T_S} < {T} ≤ {T_L}", lambda T, T_L: T <= T_L),
+            Case("{S_D1}·{T_L}/{T}²", "{T} > {T_L}", lambda: True),
         ),
         native=(
             "IF({T}<0.2*{S_D1}/{S_DS},{S_DS}*(0.4+3*{T}*{S_DS}/{S_D1}),"

@@ -9,6 +9,7 @@ from xlbridge.catalogue.entry import (
     NOT_NEGATIVE,
     POSITIVE,
     Argument,
+    Case,
     Example,
     Kind,
     Result,
@@ -89,7 +90,14 @@ FUNCTIONS = (
         ),
         result=Result("E_v", "force", "vertical seismic load effect"),
         function=load_effects.vertical_effect,
-        expression="0.2·{S_DS}·{D}, or 0: {taken}",
+        cases=(
+            Case(
+                "0.2·{S_DS}·{D}",
+                "E_v is {taken}",
+                lambda taken: taken == load_effects.VERTICAL_CASES[0],
+            ),
+            Case("0", "E_v is {taken}", lambda: True),
+        ),
         native=f'IF({{taken}}="{load_effects.VERTICAL_CASES[0]}",0.2*{{S_DS}}*{{D}},0)',
         example=Example({"S_DS": 1.0, "D": 120.0, "taken": "counted"}, "24"),
         note="S_DS capped by 12.8.1.3 may stand in its place where that clause allows it.",

@@ -7,7 +7,17 @@ from itertools import pairwise
 from engine import period
 from engine.tables import table
 from xlbridge.catalogue.common import S_D1, question, units
-from xlbridge.catalogue.entry import POSITIVE, Argument, Example, Kind, Result, SheetFunction, Span, Term
+from xlbridge.catalogue.entry import (
+    POSITIVE,
+    Argument,
+    Case,
+    Example,
+    Kind,
+    Result,
+    SheetFunction,
+    Span,
+    Term,
+)
 
 system = Argument(
     "system", "text", "Row of the approximate period table", kind=Kind.CHOICE, choices=period.PERIOD_SYSTEMS
@@ -149,7 +159,10 @@ FUNCTIONS = (
         ),
         result=Result("T", "time", "period for drift"),
         function=period.drift_period,
-        expression="{T_computed} {cap} {C_u}·{T_a}",
+        cases=(
+            Case("{T_computed}", "it is taken {cap}", lambda cap: cap == "without the cap"),
+            Case("min({T_computed}; {C_u}·{T_a})", "it is taken {cap}", lambda: True),
+        ),
         native='IF({cap}="without the cap",{T_computed},MIN({T_computed},{C_u}*{T_a}))',
         example=Example({"T_a": 1.052, "C_u": 1.4, "T_computed": 2.462, "cap": "without the cap"}, "2.462"),
     ),

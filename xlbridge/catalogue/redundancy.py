@@ -7,7 +7,16 @@ from dataclasses import replace
 from engine import redundancy
 from engine.require import YES_NO
 from xlbridge.catalogue.common import SDC, TIR, edition, rho
-from xlbridge.catalogue.entry import NOT_NEGATIVE, POSITIVE, Argument, Example, Kind, Result, SheetFunction
+from xlbridge.catalogue.entry import (
+    NOT_NEGATIVE,
+    POSITIVE,
+    Argument,
+    Case,
+    Example,
+    Kind,
+    Result,
+    SheetFunction,
+)
 
 _INPUTS = (
     SDC,
@@ -91,7 +100,10 @@ FUNCTIONS = (
         ),
         result=Result("bays", "none", "number of bays"),
         function=redundancy.wall_bays,
-        expression="{L_w}/{h_sx}, twice that for light frame: {light_frame}",
+        cases=(
+            Case("2·{L_w}/{h_sx}", "light frame: {light_frame}", lambda light_frame: light_frame == "yes"),
+            Case("{L_w}/{h_sx}", "light frame: {light_frame}", lambda: True),
+        ),
         native='IF({light_frame}="yes",2,1)*{L_w}/{h_sx}',
         example=Example({"L_w": 24.0, "h_sx": 10.0, "light_frame": "no"}, "2.4"),
     ),

@@ -10,6 +10,7 @@ from xlbridge.catalogue.entry import (
     NOT_NEGATIVE,
     POSITIVE,
     Argument,
+    Case,
     Example,
     Kind,
     Result,
@@ -198,7 +199,14 @@ FUNCTIONS = (
         arguments=(T, T_S, long_exception),
         result=Result("factor", "none", "factor on min(plateau; cap)"),
         function=hazard.coefficient_increase,
-        expression="with exception 2: min(max({T}/{T_S}; 1); 1.5); else 1; {exception}",
+        cases=(
+            Case(
+                "min(max({T}/{T_S}; 1); 1.5)",
+                "the exception is {exception}",
+                lambda exception: exception == _INCREASED,
+            ),
+            Case("1", "the exception is {exception}", lambda: True),
+        ),
         native=f'IF({{exception}}="{_INCREASED}",MIN(MAX({{T}}/{{T_S}},1),1.5),1)',
         example=Example({"T": 0.75, "T_S": 0.6, "exception": _INCREASED}, "1.25"),
         note="Multiplies min(plateau; cap) before the minimums of C_s are applied.",

@@ -5,7 +5,7 @@ from __future__ import annotations
 from engine import systems
 from engine.editions import EDITIONS
 from xlbridge.catalogue.common import SDC, C_d, R, edition, question, units
-from xlbridge.catalogue.entry import POSITIVE, Argument, Example, Kind, Result, SheetFunction, Span
+from xlbridge.catalogue.entry import POSITIVE, Argument, Case, Example, Kind, Result, SheetFunction, Span
 
 _TEXT = "Row of Table 12.2-1, after the letter of its group"
 system = Argument("system", "text", _TEXT, kind=Kind.CHOICE, choices=systems.SYSTEMS[EDITIONS[-1]])
@@ -41,7 +41,7 @@ def _coefficient(name: str, symbol: str, text: str, function: object, result: st
         arguments=(known_system, edition),
         result=Result(symbol, "none", text.lower()),
         function=function,  # type: ignore[arg-type]
-        expression=f"{symbol} of {{system}} in Table 12.2-1 of {{edition}}",
+        expression="that of {system} in Table 12.2-1 of {edition}",
         example=Example(_LISTED, result),
     )
 
@@ -62,7 +62,7 @@ FUNCTIONS = (
         arguments=(system, edition),
         result=Result("source", "text", "source of the row"),
         function=systems.confidence,
-        expression="source of the row {system} in edition {edition}",
+        expression="that of the row {system} in edition {edition}",
         example=Example(
             {"system": "B. Detailed plain concrete shear walls", "edition": "7-22"},
             "coefficients from memory; height limits from memory; row of 7-16, from memory unchanged in 7-22",
@@ -89,7 +89,7 @@ FUNCTIONS = (
         arguments=(system, SDC, increase, edition, units),
         result=Result("limit", "text", "height limit"),
         function=systems.height_limit,
-        expression="limit of {system} in category {SDC}, edition {edition}, {units}, increased: {increase}",
+        expression="that of {system} in category {SDC}, edition {edition}, {units}, increased: {increase}",
         example=Example(_AT, "160 ft (from memory: confirm)"),
     ),
     SheetFunction(
@@ -124,7 +124,16 @@ FUNCTIONS = (
         ),
         result=Result("Omega_0", "none", "overstrength factor used"),
         function=systems.reduced_overstrength,
-        expression="{Omega_0} {reduction} (less 0.5 for flexible diaphragms from 2.5 on)",
+        cases=(
+            Case(
+                "{Omega_0} - 0.5",
+                "{Omega_0} ≥ 2.5 with {reduction}",
+                lambda Omega_0, reduction: reduction == "flexible diaphragms" and Omega_0 >= 2.5,
+            ),
+            Case(
+                "{Omega_0}", "{Omega_0} < 2.5, or the diaphragms are not flexible: {reduction}", lambda: True
+            ),
+        ),
         native='{Omega_0}-IF(AND({reduction}="flexible diaphragms",{Omega_0}>=2.5),0.5,0)',
         example=Example({"Omega_0": 3.0, "reduction": "flexible diaphragms"}, "2.5"),
     ),
@@ -141,7 +150,10 @@ FUNCTIONS = (
         ),
         result=Result("coefficient", "none", "coefficient for the lower part"),
         function=systems.lower_part_coefficient,
-        expression="{lower} where {R_lower} < {R_upper}; {upper} otherwise",
+        cases=(
+            Case("{lower}", "{R_lower} < {R_upper}", lambda R_lower, R_upper: R_lower < R_upper),
+            Case("{upper}", "{R_lower} ≥ {R_upper}", lambda: True),
+        ),
         native="IF({R_lower}<{R_upper},{lower},{upper})",
         example=Example({"upper": 4.0, "lower": 5.0, "R_upper": 6.5, "R_lower": 5.0}, "5.0"),
     ),

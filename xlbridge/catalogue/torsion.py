@@ -8,6 +8,7 @@ from xlbridge.catalogue.entry import (
     NOT_NEGATIVE,
     POSITIVE,
     Argument,
+    Case,
     Example,
     Kind,
     Result,
@@ -167,9 +168,13 @@ FUNCTIONS = (
         arguments=(d_max, d_avg, TIR, SDC),
         result=Result("A_x", "none", "torsional amplification factor that applies"),
         function=torsion.applied_amplification,
-        expression=(
-            "min(max(({d_max}/(1.2·{d_avg}))²; 1); 3) where TIR = {TIR} > 1.2 and Seismic Design Category "
-            "{SDC} is C to F; else 1"
+        cases=(
+            Case(
+                "min(max(({d_max}/(1.2·{d_avg}))²; 1); 3)",
+                "{TIR} > 1.2 and the Seismic Design Category, {SDC}, is C to F",
+                lambda TIR, SDC: TIR > 1.2 * (1 + 1e-12) and SDC in "CDEF",
+            ),
+            Case("1", "{TIR} ≤ 1.2 or the Seismic Design Category, {SDC}, is A or B", lambda: True),
         ),
         native=f"IF(AND({{TIR}}>1.2*(1+1E-12),OR({_CATEGORIES})),{_AX},1)",
         example=Example({"d_max": 1.4, "d_avg": 1.0, "TIR": 1.3, "SDC": "D"}, "1.361"),

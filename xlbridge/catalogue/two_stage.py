@@ -113,7 +113,7 @@ FUNCTIONS = (
         ),
         result=Result("amplification", "text", "amplification at the transition"),
         function=two_stage.transition_amplification,
-        expression="amplification for a discontinuity at the transition: {discontinuity}",
+        expression="what is due for a discontinuity at the transition: {discontinuity}",
         example=Example({"discontinuity": "no"}, "none"),
     ),
 )
