@@ -43,7 +43,7 @@ def call(entry: SheetFunction, arguments: Sequence[Argument]) -> Value:
 
 def _result(entry: SheetFunction, given: Sequence[_Given]) -> Value:
     single = {a.name: (a, v) for a, v in given if a.kind is not Kind.LEVELS and not _left_out(a, v)}
-    whole = _levels([(a, v) for a, v in given if a.kind is Kind.LEVELS])
+    whole = _known_levels(entry, [(a, v) for a, v in given if a.kind is Kind.LEVELS])
     if any(isinstance(v, tuple) for _, v in single.values()):
         return _over_cells(entry, single, whole)
     return _one(entry, single, whole)
@@ -176,6 +176,23 @@ def _not_a_number(where: str, cell: object) -> EngineError:
     return WrongType(where, cell, f"{what}; a number is needed")
 
 
+#: ranges by identity, each kept alive beside its vectors: the cells of a column all take the same ranges
+_known: dict[tuple[object, ...], tuple[list[_Given], dict[str, Any]]] = {}
+_KNOWN_AT_MOST = 512
+
+
+def _known_levels(entry: SheetFunction, ranges: list[_Given]) -> dict[str, Any]:
+    """Return the vectors of level ranges; ranges that are the same objects as before are not read again."""
+    if not all(isinstance(value, tuple) for _, value in ranges):
+        return _levels(ranges)
+    key: tuple[object, ...] = (entry.name, *(id(value) for _, value in ranges))
+    if key not in _known:
+        if len(_known) >= _KNOWN_AT_MOST:
+            _known.clear()
+        _known[key] = (ranges, _levels(ranges))
+    return _known[key][1]
+
+
 def _levels(ranges: list[tuple[Declared, Argument]]) -> dict[str, Any]:
     """Return one float vector a level range, without the rows that are blank in all of them."""
     if not ranges:
@@ -191,6 +208,7 @@ def _levels(ranges: list[tuple[Declared, Argument]]) -> dict[str, Any]:
     if not set(map(type, chain.from_iterable(rows))) <= _NUMBER:
         _refuse_level([a for a, _ in ranges], columns)
     vectors = np.array(rows, dtype=float).T
+    vectors.flags.writeable = False
     return {a.name: vector for (a, _), vector in zip(ranges, vectors, strict=True)}
 
 

@@ -241,3 +241,18 @@ def test_whole_numbers_are_numbers() -> None:
     """A macro or a test may hand over an int; a cell never does."""
     assert adapter.call(CATALOGUE["ELF_V"], [1, 2600]) == 2600.0
     assert adapter.call(CATALOGUE["ELF_VX"], [1, ((1,), (2,)), ((1,), (2,))]) == 3.0
+
+
+def test_ranges_met_again_are_not_read_again_and_changed_ones_are(monkeypatch: pytest.MonkeyPatch) -> None:
+    """Known by identity, each kept alive: a new range can not take the place of an old one."""
+    read = []
+    levels = adapter._levels
+    monkeypatch.setattr(adapter, "_levels", lambda ranges: read.append(ranges) or levels(ranges))
+    entry = CATALOGUE["ELF_VX"]
+    heights = ((24.0,), (12.0,))
+    forces = ((30.0,), (10.0,))
+    assert [adapter.call(entry, [12.0, forces, heights]) for _ in range(3)] == [40.0] * 3
+    assert len(read) == 1
+    assert adapter.call(entry, [12.0, ((30.0,), (11.0,)), heights]) == 41.0
+    assert adapter.call(entry, [12.0, heights, heights]) == 36.0
+    assert len(read) == 3

@@ -6,10 +6,21 @@ A row meets a column as a table, a single row or column repeats, and where shape
 
 from __future__ import annotations
 
-from collections.abc import Callable, Sequence
+from collections.abc import Callable, Iterable, Sequence
+from enum import Enum
+from itertools import chain, repeat
+from typing import Final
 
 from xlbridge.values import CellError, Grid, Scalar
 
+
+class _NoCell(Enum):
+    """Marks a place beyond the end of a grid."""
+
+    NO_CELL = 0
+
+
+NO_CELL: Final = _NoCell.NO_CELL
 NO_PARTNER = CellError("#N/A", "the arrays have different sizes")
 
 
@@ -18,11 +29,22 @@ def broadcast(function: Callable[..., Scalar], values: Sequence[Scalar | Grid]) 
     grids = [value if isinstance(value, tuple) else ((value,),) for value in values]
     height = max(len(grid) for grid in grids)
     width = max(len(grid[0]) for grid in grids)
-    return tuple(tuple(_at(function, grids, row, column) for column in range(width)) for row in range(height))
+    rows = zip(*(_stretched(grid, height, width) for grid in grids), strict=True)
+    return tuple(
+        tuple([NO_PARTNER if NO_CELL in cells else function(*cells) for cells in zip(*row, strict=True)])
+        for row in rows
+    )
 
 
-def _at(function: Callable[..., Scalar], grids: Sequence[Grid], row: int, column: int) -> Scalar:
-    rows = [grid[0] if len(grid) == 1 else grid[row] if row < len(grid) else None for grid in grids]
-    if any(cells is None or 1 < len(cells) <= column for cells in rows):
-        return NO_PARTNER
-    return function(*(cells[0] if len(cells) == 1 else cells[column] for cells in rows if cells is not None))
+def _stretched(grid: Grid, height: int, width: int) -> Iterable[Sequence[Scalar | _NoCell]]:
+    """The rows of a grid at full size: a single row or column repeated, places beyond the rest marked."""
+    rows: Iterable[Sequence[Scalar | _NoCell]] = grid
+    if len(grid[0]) != width:
+        rows = [(*row, *(row if len(row) == 1 else (NO_CELL,)) * (width - len(row))) for row in grid]
+    if len(grid) == height:
+        return rows
+    return (
+        repeat(next(iter(rows)), height)
+        if len(grid) == 1
+        else chain(rows, repeat((NO_CELL,) * width, height - len(grid)))
+    )
