@@ -207,6 +207,8 @@ class Part:
     ``requires`` the keys of the parts that come along, because formulas of this one refer to them.
     ``bands`` widen the story table, ``tables`` are further sheets; ``replaces`` are quantities that take the
     place of those of other parts with the same key; ``editions`` are those that have the procedure.
+    ``brought_by`` are entries of the site that ask for the part; ``excludes`` the keys of parts that give the
+    same quantities another way.
     """
 
     key: str
@@ -222,6 +224,8 @@ class Part:
     needs: tuple[str, ...] = ()
     requires: tuple[str, ...] = ()
     editions: tuple[str, ...] = EDITIONS
+    brought_by: tuple[str, ...] = ()
+    excludes: tuple[str, ...] = ()
 
     @property
     def calls(self) -> list[str]:

@@ -59,11 +59,18 @@ class Inputs:
                 raise NotApplicable("parts", key, f"must be one of {', '.join(PARTS)}")
         found = {key for key, part in PARTS.items() if part.needs and self._has(part.needs)}
         found |= {key for key, part in PARTS.items() if any(t.stored in self.given for t in part.tables)}
+        found |= {key for key, part in PARTS.items() if any(k in self._table(None) for k in part.brought_by)}
         keys = with_required({*asked, *found})
+        self._refuse_misfits(keys)
+        return keys
+
+    def _refuse_misfits(self, keys: frozenset[str]) -> None:
         for key in keys:
             if self.edition not in PARTS[key].editions:
                 raise NotApplicable("parts", key, f"is a part of {' and '.join(PARTS[key].editions)} only")
-        return keys
+            for other in PARTS[key].excludes:
+                if other in keys:
+                    raise NotApplicable("parts", key, f"can not stand beside {other}: both give the same")
 
     def _has(self, needs: tuple[str, ...]) -> bool:
         given = [

@@ -90,8 +90,8 @@ class Reader:
         if layout.table:
             headings = self._headings(STORY_TABLE)
             return any(c.heading in headings for c in layout.table)
-        block = next(block for block in part.criteria if not block.without)
-        return self._defined(layout.name(block.quantities[0].key, DIRECTIONS[0]))
+        q = next(block for block in part.criteria if not block.without).quantities[0]
+        return self._defined(layout.source_name(q.key) if q.is_input else layout.name(q.key, DIRECTIONS[0]))
 
     def _defined(self, name: str) -> bool:
         try:

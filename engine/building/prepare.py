@@ -3,14 +3,37 @@
 from __future__ import annotations
 
 from collections.abc import Callable
-from typing import Final
+from copy import copy
+from dataclasses import replace
+from typing import Any, Final
 
+from engine import hazard
+from engine.building.parts import ground_motion
 from engine.building.records import Building
 
 #: fills an entry from others, or returns the building as it is
 Preparation = Callable[[Building], Building]
 
-PREPARATIONS: Final[tuple[Preparation, ...]] = ()
+
+def mapped_motion(building: Building) -> Building:
+    """Fill S_DS and S_D1 from S_MS and S_M1, those given or those of the site class."""
+    S_MS, S_M1 = ground_motion.mce_parameters(building.site)
+    if S_MS is None or S_M1 is None:
+        return building
+    S_DS = float(hazard.design_parameter_short(S_MS))
+    S_D1 = float(hazard.design_parameter_one_second(S_M1))
+    return filled(building, site=replace(building.site, S_DS=S_DS, S_D1=S_D1, S_MS=S_MS, S_M1=S_M1))
+
+
+def filled(building: Building, **values: Any) -> Building:
+    """Return a copy with other values, without the checks: those speak of entries."""
+    result = copy(building)
+    for key, value in values.items():
+        object.__setattr__(result, key, value)
+    return result
+
+
+PREPARATIONS: Final[tuple[Preparation, ...]] = (mapped_motion,)
 
 
 def prepared(building: Building) -> Building:

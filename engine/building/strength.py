@@ -2,34 +2,51 @@
 
 from __future__ import annotations
 
-from typing import Any
+from typing import Any, Final
 
 from engine import base_shear, period, vertical
+from engine.building.parts.ground_motion import coefficient_increase
 from engine.building.records import Building, Direction
 from engine.building.results import Package
+
+INCREASED: Final = "upper bound increased, exception 2 of 11.4.8"
 
 
 def strength(building: Building, package: Package, given: Direction) -> dict[str, Any]:
     """Return the steps from the period to the base shear and the exponent."""
-    site, I_e, R = building.site, package.I_e, given.R
     T_a = float(period.approximate_period(package.h_n, given.period_system, building.units))
-    C_u = float(period.upper_limit_coefficient(site.S_D1))
+    C_u = float(period.upper_limit_coefficient(building.site.S_D1))
     T = T_a if given.T_computed is None else float(period.design_period(T_a, C_u, given.T_computed))
-    spectrum = (site.S_DS, site.S_D1, site.S_1, T, site.T_L, R, I_e, building.edition)
-    C_s = float(base_shear.response_coefficient(*spectrum))
+    found = response(building, package, given, T)
     return {
         "T_a": T_a,
         "C_u": C_u,
         "T_max": float(period.period_limit(C_u, T_a)),
         "T": T,
-        "C_s_plateau": float(base_shear.coefficient_plateau(site.S_DS, R, I_e)),
-        "C_s_cap": float(base_shear.coefficient_cap(site.S_D1, T, site.T_L, R, I_e)),
-        "C_s_min": float(base_shear.coefficient_minimum(site.S_DS, I_e)),
-        "C_s_min_S1": float(base_shear.coefficient_minimum_near_fault(site.S_1, R, I_e)),
-        "C_s": C_s,
-        "governing_bound": base_shear.governing_bound(*spectrum),
-        "V": float(base_shear.base_shear(C_s, package.W)),
+        **found,
+        "V": float(base_shear.base_shear(found["C_s"], package.W)),
         "k": float(vertical.exponent(T, given.k_rule)),
+    }
+
+
+def response(building: Building, package: Package, given: Direction, T: float) -> dict[str, Any]:
+    """Return the bounds of C_s at a period, C_s, and which bound governs."""
+    site, I_e, R = building.site, package.I_e, given.R
+    plateau = float(base_shear.coefficient_plateau(site.S_DS, R, I_e))
+    cap = float(base_shear.coefficient_cap(site.S_D1, T, site.T_L, R, I_e))
+    least = float(base_shear.coefficient_minimum(site.S_DS, I_e))
+    near_fault = float(base_shear.coefficient_minimum_near_fault(site.S_1, R, I_e))
+    factor = coefficient_increase(site, T)
+    upper = factor * min(plateau, cap)
+    increased = factor > 1 and upper >= max(least, near_fault)
+    spectrum = (site.S_DS, site.S_D1, site.S_1, T, site.T_L, R, I_e, building.edition)
+    return {
+        "C_s_plateau": plateau,
+        "C_s_cap": cap,
+        "C_s_min": least,
+        "C_s_min_S1": near_fault,
+        "C_s": max(upper, least, near_fault),
+        "governing_bound": INCREASED if increased else base_shear.governing_bound(*spectrum),
     }
 
 

@@ -22,14 +22,14 @@ from engine.errors import EngineError
 from tests.support.command import assert_refused, run, unchanged
 from workbook_templates.build import build
 from workbook_templates.demo import building_text
+from workbook_templates.inputs import Inputs
 from workbook_templates.layout import CHECKS, FIRST_LEVEL, LEVELS, Layout
-from workbook_templates.parts import PARTS
 from xlbridge.cli.files import building_text as as_toml
 from xlbridge.headless.compute import Computed, compute
 from xlbridge.values import CellError
 
 COUNT, ROW = 4, 1  # levels of the building, and the one that is changed (from the top, counted from 0)
-LAYOUT = Layout(COUNT, frozenset(PARTS))
+LAYOUT = Layout(COUNT, Inputs(tomllib.loads(building_text()), COUNT).parts)
 HEIGHTS, WEIGHTS = [12.0, 24.0, 36.0], [300.0, 200.0, 100.0]
 C_S = {"S_DS": 1.0, "S_D1": 0.6, "S_1": 0.6, "T": 1.5, "T_L": 8.0, "R": 8.0, "I_e": 1.0, "edition": "7-22"}
 BLANK = object()

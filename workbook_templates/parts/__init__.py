@@ -10,6 +10,7 @@ from workbook_templates.declare import Part
 from workbook_templates.parts import (
     diaphragm,
     drift,
+    ground_motion,
     irregularity,
     redundancy,
     spectrum,
@@ -24,6 +25,8 @@ PARTS: Final = MappingProxyType(
     {
         part.key: part
         for part in (
+            ground_motion.COEFFICIENTS,
+            ground_motion.MAPPED,
             story.PART,
             weights.PART,
             drift.PART,
@@ -50,4 +53,14 @@ def with_required(keys: Iterable[str]) -> frozenset[str]:
     while open_keys:
         found |= open_keys
         open_keys = {key for part in open_keys for key in PARTS[part].requires} - found
+    return frozenset(found)
+
+
+def together(edition: str) -> frozenset[str]:
+    """Return the parts that stand together in an edition: of those that exclude each other the first."""
+    found: list[str] = []
+    for key, part in PARTS.items():
+        excluded = any(key in PARTS[other].excludes or other in part.excludes for other in found)
+        if edition in part.editions and not excluded:
+            found.append(key)
     return frozenset(found)

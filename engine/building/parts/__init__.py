@@ -6,7 +6,15 @@ from collections.abc import Callable, Mapping
 from dataclasses import replace
 from typing import Any, Final
 
-from engine.building.parts import diaphragm, irregularity, redundancy, spectrum, torsion, weights
+from engine.building.parts import (
+    diaphragm,
+    ground_motion,
+    irregularity,
+    redundancy,
+    spectrum,
+    torsion,
+    weights,
+)
 from engine.building.records import Building
 from engine.building.results import DirectionResult, Package
 
@@ -58,6 +66,8 @@ def _joined(rules: tuple[str, ...], more: tuple[str, ...]) -> tuple[str, ...]:
 #: in the order of the standard's flow: a step finds the results of those before it in the package
 STEPS: Final[tuple[Step, ...]] = (
     _whole_building(weights.solve, weights.RULES),
+    _whole_building(ground_motion.solve, ground_motion.RULES),
+    _each_direction(ground_motion.increase, ground_motion.INCREASE_RULES),
     _whole_building(spectrum.solve, spectrum.RULES),
     _each_direction(spectrum.solve_direction, spectrum.RULES),
     _each_direction(torsion.ratios, torsion.RATIO_RULES),

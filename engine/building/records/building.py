@@ -10,6 +10,7 @@ import numpy as np
 from engine.building.records.direction import DIRECTIONS, Direction
 from engine.building.records.fields import check_fields, checked, is_list_of_texts, is_text, word
 from engine.building.records.level import LEVEL_OPTIONS, Level, level_label
+from engine.building.records.motion import check_motion
 from engine.building.records.rows import ROW_TABLES, SpectrumRow, WeightRow, row_label
 from engine.building.records.site import Site
 from engine.editions import EDITIONS
@@ -42,6 +43,7 @@ class Building:
         """Check every field of every record, then what fields say together."""
         check_fields("", self)
         check_fields("site.", self.site)
+        check_motion(self.site, self.edition)
         if not self.direction:
             raise MissingValue("direction", None, "must have a table X or Y or both")
         for name, direction in self.direction.items():

@@ -5,8 +5,28 @@ from __future__ import annotations
 from dataclasses import dataclass
 
 from engine.building.records.fields import ANY, NOT_NEGATIVE, POSITIVE, SHARE, checked, is_flag, number, word
+from engine.hazard import LONG_EXCEPTIONS, SHORT_EXCEPTIONS, TABLE_SITE_CLASSES
 from engine.irregularity import DIAPHRAGMS
 from engine.occupancy import DESIGN_CATEGORIES, RISK_CATEGORIES
+
+
+@dataclass(frozen=True, kw_only=True)
+class MotionEntries:
+    """Ground motion [g]: S_DS and S_D1, or what they are worked out of.
+
+    7-16: ``S_S`` and ``site_class`` with S_1; 7-22: ``S_MS`` and ``S_M1``. Once prepared, S_DS and S_D1 are
+    numbers.
+    """
+
+    S_DS: float = number(POSITIVE, None)
+    S_D1: float = number(POSITIVE, None)
+    S_S: float | None = number(NOT_NEGATIVE, None)
+    site_class: str | None = word(TABLE_SITE_CLASSES, None)
+    isolated: bool = checked(is_flag, False)
+    short_exception: str = word(SHORT_EXCEPTIONS, SHORT_EXCEPTIONS[0])
+    long_exception: str = word(LONG_EXCEPTIONS, LONG_EXCEPTIONS[0])
+    S_MS: float | None = number(POSITIVE, None)
+    S_M1: float | None = number(POSITIVE, None)
 
 
 @dataclass(frozen=True, kw_only=True)
@@ -24,11 +44,9 @@ class PlanEntries:
 
 
 @dataclass(frozen=True, kw_only=True)
-class Site(PlanEntries):
-    """What holds for the building: ground motion [g, s], Risk Category, elevation of the base [ft or m]."""
+class Site(MotionEntries, PlanEntries):
+    """What holds for the building: S_1 [g], T_L [s], Risk Category, elevation of the base [ft or m]."""
 
-    S_DS: float = number(POSITIVE)
-    S_D1: float = number(POSITIVE)
     S_1: float = number(NOT_NEGATIVE)
     T_L: float = number(POSITIVE)
     risk_category: str = word(RISK_CATEGORIES)

@@ -48,4 +48,4 @@ def test_one_part() -> None:
 def test_an_unknown_part_is_refused_with_the_known_ones() -> None:
     done = run("entries", "roof")
     assert done.code == 3
-    assert "roof: no such part; the parts are story, " in done.err
+    assert "roof: no such part; the parts are " in done.err
