@@ -206,7 +206,8 @@ class Part:
     ``needs`` are the level entries of BUILDING.toml without which the part cannot be filled in;
     ``requires`` the keys of the parts that come along, because formulas of this one refer to them.
     ``bands`` widen the story table, ``tables`` are further sheets; ``replaces`` are quantities that take the
-    place of those of other parts with the same key; ``editions`` are those that have the procedure.
+    place of those of other parts with the same key; ``takes`` says which places a formula takes instead of
+    others, by the key of its quantity; ``editions`` are those that have the procedure.
     ``brought_by`` are entries of the site that ask for the part; ``excludes`` the keys of parts that give the
     same quantities another way.
     """
@@ -217,6 +218,7 @@ class Part:
     bands: tuple[Block, ...] = ()
     tables: tuple[Table, ...] = ()
     replaces: tuple[Quantity, ...] = ()
+    takes: Mapping[str, Mapping[str, str]] = field(default_factory=dict)
     checks: tuple[Check, ...] = ()
     headlines: tuple[Headline, ...] = ()
     figures: tuple[Figure, ...] = ()

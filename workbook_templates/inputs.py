@@ -60,7 +60,8 @@ class Inputs:
         found = {key for key, part in PARTS.items() if part.needs and self._has(part.needs)}
         found |= {key for key, part in PARTS.items() if any(t.stored in self.given for t in part.tables)}
         found |= {key for key, part in PARTS.items() if any(k in self._table(None) for k in part.brought_by)}
-        keys = with_required({*asked, *found})
+        fitting = {key for key in found if self.edition in PARTS[key].editions}
+        keys = with_required({*asked, *fitting})
         self._refuse_misfits(keys)
         return keys
 
@@ -85,7 +86,7 @@ class Inputs:
         """Return the value of a criteria entry."""
         value = self._table(direction).get(q.key)
         if value is None:
-            value = q.starter(Start(self.units)) if q.starter else q.default
+            value = q.starter(Start(self.units, 0, self.level_count)) if q.starter else q.default
         return {True: "yes", False: "no"}[value] if q.is_flag else value
 
     def source(self, q: Quantity, per_direction: bool) -> str:

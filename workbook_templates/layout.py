@@ -205,10 +205,19 @@ class Layout:
         """Leave out blocks that another part stands for; put in the quantities that parts replace."""
         instead = {q.key: q for part in self.parts for q in part.replaces}
         return [
-            replace(block, quantities=tuple(instead.get(q.key, q) for q in block.quantities))
+            replace(block, quantities=tuple(self._rewired(instead.get(q.key, q)) for q in block.quantities))
             for block in blocks
             if block.without not in self.part_keys
         ]
+
+    def _rewired(self, q: Quantity) -> Quantity:
+        """Return a quantity whose formula takes the places that parts put instead of others."""
+        places = {old: new for part in self.parts for old, new in part.takes.get(q.key, {}).items()}
+        if not places:
+            return q
+        return replace(
+            q, formula=_PLACE.sub(lambda m: m[0].replace(m[1], places.get(m[1], m[1]), 1), q.formula)
+        )
 
     def _place(self, key: str, part: str | None, sheet: str, direction: str | None, row: int) -> str:
         if key in self.rows:

@@ -57,7 +57,9 @@ class Reader:
 
     @cached_property
     def _layout(self) -> Layout:
-        return Layout(1, frozenset(key for key, part in PARTS.items() if self._has(part)))
+        edition = self._cell("edition")
+        found = (key for key, part in PARTS.items() if edition in part.editions and self._has(part))
+        return Layout(1, frozenset(found))
 
     @cached_property
     def _tables(self) -> dict[str, tuple[Row, ...]]:

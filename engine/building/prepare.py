@@ -8,7 +8,7 @@ from dataclasses import replace
 from typing import Any, Final
 
 from engine import hazard
-from engine.building.parts import ground_motion
+from engine.building.parts import ground_motion, multi_period
 from engine.building.records import Building
 
 #: fills an entry from others, or returns the building as it is
@@ -25,6 +25,14 @@ def mapped_motion(building: Building) -> Building:
     return filled(building, site=replace(building.site, S_DS=S_DS, S_D1=S_D1, S_MS=S_MS, S_M1=S_M1))
 
 
+def spectrum_motion(building: Building) -> Building:
+    """Fill S_DS and S_D1 from the rows of a spectrum."""
+    if not building.multi_period:
+        return building
+    S_DS, S_D1 = multi_period.design_parameters(building)
+    return filled(building, site=replace(building.site, S_DS=S_DS, S_D1=S_D1))
+
+
 def filled(building: Building, **values: Any) -> Building:
     """Return a copy with other values, without the checks: those speak of entries."""
     result = copy(building)
@@ -33,7 +41,7 @@ def filled(building: Building, **values: Any) -> Building:
     return result
 
 
-PREPARATIONS: Final[tuple[Preparation, ...]] = (mapped_motion,)
+PREPARATIONS: Final[tuple[Preparation, ...]] = (mapped_motion, spectrum_motion)
 
 
 def prepared(building: Building) -> Building:

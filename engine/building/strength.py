@@ -6,7 +6,9 @@ from typing import Any, Final
 
 from engine import base_shear, period, vertical
 from engine.building.parts.ground_motion import coefficient_increase
-from engine.building.records import Building, Direction
+from engine.building.parts.multi_period import method_1_ordinate
+from engine.building.parts.short_building import S_DS_in_C_s
+from engine.building.records import METHODS, Building, Direction
 from engine.building.results import Package
 
 INCREASED: Final = "upper bound increased, exception 2 of 11.4.8"
@@ -32,22 +34,41 @@ def strength(building: Building, package: Package, given: Direction) -> dict[str
 def response(building: Building, package: Package, given: Direction, T: float) -> dict[str, Any]:
     """Return the bounds of C_s at a period, C_s, and which bound governs."""
     site, I_e, R = building.site, package.I_e, given.R
-    plateau = float(base_shear.coefficient_plateau(site.S_DS, R, I_e))
-    cap = float(base_shear.coefficient_cap(site.S_D1, T, site.T_L, R, I_e))
-    least = float(base_shear.coefficient_minimum(site.S_DS, I_e))
-    near_fault = float(base_shear.coefficient_minimum_near_fault(site.S_1, R, I_e))
-    factor = coefficient_increase(site, T)
-    upper = factor * min(plateau, cap)
-    increased = factor > 1 and upper >= max(least, near_fault)
-    spectrum = (site.S_DS, site.S_D1, site.S_1, T, site.T_L, R, I_e, building.edition)
+    S_DS = S_DS_in_C_s(building, T)
     return {
-        "C_s_plateau": plateau,
-        "C_s_cap": cap,
-        "C_s_min": least,
-        "C_s_min_S1": near_fault,
-        "C_s": max(upper, least, near_fault),
-        "governing_bound": INCREASED if increased else base_shear.governing_bound(*spectrum),
+        "C_s_plateau": float(base_shear.coefficient_plateau(S_DS, R, I_e)),
+        "C_s_cap": float(base_shear.coefficient_cap(site.S_D1, T, site.T_L, R, I_e)),
+        "C_s_min": float(base_shear.coefficient_minimum(S_DS, I_e)),
+        "C_s_min_S1": float(base_shear.coefficient_minimum_near_fault(site.S_1, R, I_e)),
+        **(_method_1 if given.C_s_method == METHODS[1] else _method_2)(building, package, given, T, S_DS),
     }
+
+
+def _method_1(
+    building: Building, package: Package, given: Direction, T: float, S_DS: float
+) -> dict[str, Any]:
+    S_a = method_1_ordinate(building, T)
+    case = (S_a, S_DS, building.site.S_1, given.R, package.I_e, building.edition)
+    return {
+        "C_s": float(base_shear.response_coefficient_multi(*case)),
+        "governing_bound": base_shear.governing_bound_multi(*case),
+    }
+
+
+def _method_2(
+    building: Building, package: Package, given: Direction, T: float, S_DS: float
+) -> dict[str, Any]:
+    site, R, I_e = building.site, given.R, package.I_e
+    case = (S_DS, site.S_D1, site.S_1, T, site.T_L, R, I_e, building.edition)
+    governs = base_shear.governing_bound(*case)
+    factor = coefficient_increase(site, T)
+    if factor == 1:
+        return {"C_s": float(base_shear.response_coefficient(*case)), "governing_bound": governs}
+    cap = float(base_shear.coefficient_cap(site.S_D1, T, site.T_L, R, I_e))
+    upper = factor * min(float(base_shear.coefficient_plateau(S_DS, R, I_e)), cap)
+    near_fault = float(base_shear.coefficient_minimum_near_fault(site.S_1, R, I_e))
+    lower = max(float(base_shear.coefficient_minimum(S_DS, I_e)), near_fault)
+    return {"C_s": max(upper, lower), "governing_bound": INCREASED if upper >= lower else governs}
 
 
 def forces(package: Package, strength: dict[str, Any]) -> dict[str, Any]:

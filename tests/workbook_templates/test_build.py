@@ -84,10 +84,14 @@ def test_all_parts_together_agree_with_the_model_route(tmp_path: Path, edition: 
 def test_parts_of_another_edition_and_parts_that_exclude_each_other_are_refused(tmp_path: Path) -> None:
     with pytest.raises(NotApplicable, match="parts = 'site_class': is a part of 7-16 only"):
         story_book(tmp_path, {**BLANK, "parts": ["site_class"]})
-    assert all(not (set(PARTS[key].excludes) & together(e)) for e in EDITIONS for key in together(e))
-    assert set(PARTS) == {key for e in EDITIONS for key in together(e)} | {
-        other for part in PARTS.values() for other in part.excludes
-    }
+    for edition in EDITIONS:
+        chosen = together(edition)
+        for key, part in PARTS.items():
+            rivals = {*part.excludes, *(k for k, other in PARTS.items() if key in other.excludes)} & chosen
+            assert (key in chosen) is (edition in part.editions and not rivals)
+    both = {**BLANK, "parts": ["mapped_motion", "multi_period"]}
+    with pytest.raises(NotApplicable, match="parts = 'multi_period': can not stand beside mapped_motion"):
+        story_book(tmp_path, both)
 
 
 def test_parts_come_back_out_of_the_workbook(tmp_path: Path) -> None:
@@ -116,7 +120,7 @@ def test_a_part_brings_those_that_its_required_parts_require(monkeypatch: pytest
 
 
 def test_an_unknown_part_is_refused(tmp_path: Path) -> None:
-    with pytest.raises(NotApplicable, match=r"parts = 'roofs': must be one of .*story, weights, drift"):
+    with pytest.raises(NotApplicable, match=r"parts = 'roofs': must be one of .*story, .*weights, drift"):
         story_book(tmp_path, {**BLANK, "parts": ["roofs"]})
 
 
@@ -226,7 +230,7 @@ def test_the_functions_called_are_listed_with_their_equations(blank: openpyxl.Wo
 
 def test_starter_values_are_marked_and_counted(blank: openpyxl.Workbook) -> None:
     marks = [c.value for s in blank.worksheets for row in s.iter_rows() for c in row if c.value == STARTER]
-    assert len(marks) == 18 + 6 + 6  # criteria, levels, rows of the weight take-off
+    assert len(marks) == 22 + 6 + 6  # criteria, levels, rows of the weight take-off
 
 
 def test_doubtful_clauses_are_marked_where_the_user_meets_them(blank: openpyxl.Workbook) -> None:

@@ -142,10 +142,26 @@ def test_entries_bring_the_part_along_and_come_back(tmp_path: Path) -> None:
         ("7-16", {"S_D1": 0.5}, "site.S_DS = blank: must be given beside S_D1"),
         ("7-16", {"S_S": 1.0}, "site.site_class = blank: must be given beside S_S"),
         ("7-22", {"S_MS": 1.0}, "site.S_M1 = blank: must be given beside S_MS"),
-        ("7-16", {"base_elevation": 0.0}, "site.S_DS = blank: must be given, or S_S and site_class"),
-        ("7-22", {"base_elevation": 0.0}, "site.S_DS = blank: must be given, or S_MS and S_M1"),
-        ("7-22", {"S_S": 1.0, "site_class": "D"}, "site.S_S = 1: is an entry of 7-16; give S_MS and S_M1"),
-        ("7-16", {"S_MS": 1.0, "S_M1": 0.5}, "site.S_MS = 1: is an entry of 7-22; give S_S and site_class"),
+        (
+            "7-16",
+            {"base_elevation": 0.0},
+            "site.S_DS = blank: must be given, or S_S and site_class",
+        ),
+        (
+            "7-22",
+            {"base_elevation": 0.0},
+            "site.S_DS = blank: must be given, or S_MS and S_M1",
+        ),
+        (
+            "7-22",
+            {"S_S": 1.0, "site_class": "D"},
+            "site.S_S = 1: is an entry of 7-16; give S_MS and S_M1",
+        ),
+        (
+            "7-16",
+            {"S_MS": 1.0, "S_M1": 0.5},
+            "site.S_MS = 1: is an entry of 7-22; give S_S and site_class",
+        ),
         (
             "7-22",
             {"S_DS": 1.0, "S_D1": 0.5, "S_MS": 1.0, "S_M1": 0.5},

@@ -11,6 +11,19 @@ CATEGORY = Block(
     (entry("SDC", "ELF_AX_APPLIED.SDC", rule="SDC", starter=always("D")),),
     without="category",
 )
+STORIES = Block(
+    "Stories",
+    (
+        entry(
+            "N",
+            "ELF_SDS_CAP.N",
+            "Number of stories above the base",
+            rule="T_a_stories",
+            decimals=0,
+            starter=lambda start: float(start.count),
+        ),
+    ),
+)
 #: what a row of consequences shows where no irregularity is found
 NO_TYPE: Final = "none"
 

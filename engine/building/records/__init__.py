@@ -6,19 +6,28 @@ Heights and weights in the unit system's length and force units, displacements i
 from __future__ import annotations
 
 from engine.building.records.building import Building, level_values
-from engine.building.records.direction import DIRECTIONS, Direction
+from engine.building.records.direction import DIRECTIONS, METHODS, Direction
 from engine.building.records.fields import may_be_left_out
 from engine.building.records.level import Level, level_label
-from engine.building.records.rows import ROW_TABLES, WEIGHT_KINDS, SpectrumRow, WeightRow, row_label
+from engine.building.records.rows import (
+    ROW_TABLES,
+    WEIGHT_KINDS,
+    MotionRow,
+    SpectrumRow,
+    WeightRow,
+    row_label,
+)
 from engine.building.records.site import Site
 
 __all__ = [
     "DIRECTIONS",
+    "METHODS",
     "ROW_TABLES",
     "WEIGHT_KINDS",
     "Building",
     "Direction",
     "Level",
+    "MotionRow",
     "Site",
     "SpectrumRow",
     "WeightRow",

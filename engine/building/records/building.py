@@ -10,8 +10,8 @@ import numpy as np
 from engine.building.records.direction import DIRECTIONS, Direction
 from engine.building.records.fields import check_fields, checked, is_list_of_texts, is_text, word
 from engine.building.records.level import LEVEL_OPTIONS, Level, level_label
-from engine.building.records.motion import check_motion
-from engine.building.records.rows import ROW_TABLES, SpectrumRow, WeightRow, row_label
+from engine.building.records.motion import check_method, check_motion
+from engine.building.records.rows import ROW_TABLES, MotionRow, SpectrumRow, WeightRow, row_label
 from engine.building.records.site import Site
 from engine.editions import EDITIONS
 from engine.errors import ImpossibleValue, MissingValue, NotApplicable
@@ -35,6 +35,7 @@ class Building:
     level: tuple[Level, ...]
     weight: tuple[WeightRow, ...] = ()
     spectrum: tuple[SpectrumRow, ...] = ()
+    multi_period: tuple[MotionRow, ...] = ()
     job: Mapping[str, object] = field(default_factory=dict)
     sources: Mapping[str, str] = field(default_factory=dict)
     parts: tuple[str, ...] = checked(is_list_of_texts, ())
@@ -43,12 +44,13 @@ class Building:
         """Check every field of every record, then what fields say together."""
         check_fields("", self)
         check_fields("site.", self.site)
-        check_motion(self.site, self.edition)
+        check_motion(self.site, self.edition, bool(self.multi_period))
         if not self.direction:
             raise MissingValue("direction", None, "must have a table X or Y or both")
         for name, direction in self.direction.items():
             choice("direction", name, DIRECTIONS)
             check_fields(f"direction.{name}.", direction)
+            check_method(name, direction.C_s_method, self.edition, bool(self.multi_period))
         _check_levels(self.level, self.site.base_elevation)
         for table in ROW_TABLES:
             for place, row in enumerate(getattr(self, table), start=1):

@@ -14,6 +14,14 @@ from engine.require import above, at_least, within
 from engine.vertical import EXPONENT_RULES
 
 DIRECTIONS: Final = ("X", "Y")
+METHODS: Final = ("method 2", "method 1")
+
+
+@dataclass(frozen=True, kw_only=True)
+class MethodEntries:
+    """The method of the response coefficient, where a multi-period spectrum is given."""
+
+    C_s_method: str = word(METHODS, METHODS[0])
 
 
 @dataclass(frozen=True, kw_only=True)
@@ -31,7 +39,7 @@ class PlanDirectionEntries:
 
 
 @dataclass(frozen=True, kw_only=True)
-class Direction(PlanDirectionEntries):
+class Direction(MethodEntries, PlanDirectionEntries):
     """The seismic force-resisting system of one plan direction.
 
     ``rho`` divides the allowable drift only where ``moment_frames_only`` is true.

@@ -8,7 +8,7 @@ from functools import partial
 from typing import Any, Final
 
 from engine.errors import MissingValue, WrongType
-from engine.require import above, at_least, choice, finite, within
+from engine.require import above, at_least, choice, finite, whole, within
 
 Check = Callable[[str, Any], object]
 
@@ -44,6 +44,11 @@ def is_flag(name: str, value: object) -> object:
     if not isinstance(value, bool):
         raise WrongType(name, value, "must be true or false")
     return value
+
+
+def is_count(name: str, value: Any) -> object:
+    """Refuse anything but a whole number from 1 on."""
+    return whole(name, value)
 
 
 def is_word(words: tuple[str, ...], name: str, value: object) -> object:

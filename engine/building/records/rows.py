@@ -7,7 +7,7 @@ from dataclasses import dataclass
 from types import MappingProxyType
 from typing import Any, ClassVar, Final
 
-from engine.building.records.fields import NOT_NEGATIVE, checked, is_text, number, word
+from engine.building.records.fields import NOT_NEGATIVE, POSITIVE, checked, is_text, number, word
 
 WEIGHT_KINDS: Final = (
     *("dead", "partition", "storage", "garage storage", "snow", "equipment", "landscaping"),
@@ -41,8 +41,20 @@ class SpectrumRow:
     T: float = number(NOT_NEGATIVE)
 
 
+@dataclass(frozen=True, slots=True, kw_only=True)
+class MotionRow:
+    """One pair of a multi-period or site-specific spectrum: period [s] and ordinate [g]."""
+
+    NAMED_BY: ClassVar = ""
+
+    T: float = number(NOT_NEGATIVE)
+    S_a: float = number(POSITIVE)
+
+
 #: the tables of a BUILDING.toml beside the story table, with the record of a row
-ROW_TABLES: Final[Mapping[str, type[Any]]] = MappingProxyType({"weight": WeightRow, "spectrum": SpectrumRow})
+ROW_TABLES: Final[Mapping[str, type[Any]]] = MappingProxyType(
+    {"weight": WeightRow, "spectrum": SpectrumRow, "multi_period": MotionRow}
+)
 
 
 def row_label(table: str, place: int, entry: Mapping[str, Any]) -> str:

@@ -3,19 +3,33 @@
 from __future__ import annotations
 
 from dataclasses import dataclass
+from typing import Final
 
-from engine.building.records.fields import ANY, NOT_NEGATIVE, POSITIVE, SHARE, checked, is_flag, number, word
-from engine.hazard import LONG_EXCEPTIONS, SHORT_EXCEPTIONS, TABLE_SITE_CLASSES
+from engine.building.records.fields import (
+    ANY,
+    NOT_NEGATIVE,
+    POSITIVE,
+    SHARE,
+    checked,
+    is_count,
+    is_flag,
+    number,
+    word,
+)
+from engine.hazard import LONG_EXCEPTIONS, READINGS, SHORT_EXCEPTIONS, TABLE_SITE_CLASSES, TAILS
 from engine.irregularity import DIAPHRAGMS
 from engine.occupancy import DESIGN_CATEGORIES, RISK_CATEGORIES
+
+#: what the rows of a spectrum hold
+ORDINATES_GIVEN: Final = ("MCE_R", "design")
 
 
 @dataclass(frozen=True, kw_only=True)
 class MotionEntries:
     """Ground motion [g]: S_DS and S_D1, or what they are worked out of.
 
-    7-16: ``S_S`` and ``site_class`` with S_1; 7-22: ``S_MS`` and ``S_M1``. Once prepared, S_DS and S_D1 are
-    numbers.
+    7-16: ``S_S`` and ``site_class`` with S_1; 7-22: ``S_MS`` and ``S_M1``; both: rows of a spectrum with the
+    shear wave velocity ``v_s`` [ft/s or m/s]. Once prepared, S_DS and S_D1 are numbers.
     """
 
     S_DS: float = number(POSITIVE, None)
@@ -27,6 +41,22 @@ class MotionEntries:
     long_exception: str = word(LONG_EXCEPTIONS, LONG_EXCEPTIONS[0])
     S_MS: float | None = number(POSITIVE, None)
     S_M1: float | None = number(POSITIVE, None)
+    ordinates_given: str = word(ORDINATES_GIVEN, ORDINATES_GIVEN[0])
+    v_s: float | None = number(POSITIVE, None)
+    reading: str = word(READINGS, READINGS[0])
+    tail: str = word(TAILS, TAILS[0])
+    S_DS_mapped: float | None = number(POSITIVE, None)
+    S_D1_mapped: float | None = number(POSITIVE, None)
+
+
+@dataclass(frozen=True, kw_only=True)
+class ShortBuildingEntries:
+    """Number of stories above the base, and the answers on which the S_DS of C_s may be capped."""
+
+    N: float | None = number(is_count, None)
+    regular: bool | None = checked(is_flag, None)
+    redundant: bool | None = checked(is_flag, None)
+    soft_site: bool | None = checked(is_flag, None)
 
 
 @dataclass(frozen=True, kw_only=True)
@@ -44,7 +74,7 @@ class PlanEntries:
 
 
 @dataclass(frozen=True, kw_only=True)
-class Site(MotionEntries, PlanEntries):
+class Site(MotionEntries, ShortBuildingEntries, PlanEntries):
     """What holds for the building: S_1 [g], T_L [s], Risk Category, elevation of the base [ft or m]."""
 
     S_1: float = number(NOT_NEGATIVE)
