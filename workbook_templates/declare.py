@@ -3,7 +3,8 @@
 A formula is a template. ``{key}`` is the cell of a quantity in the same row (tables) or the same column
 (criteria); ``{key:all}`` is its whole table column, guard rows included; ``{key:wide}`` the same with one
 row more at either end; ``{key:total}`` and ``{key:base}`` are its cells in the totals row and in the base
-row. A criteria quantity met on another sheet is written by its defined name.
+row; ``{direction}`` is the letter of the direction. A criteria quantity met on another sheet is written by
+its defined name.
 """
 
 from __future__ import annotations
@@ -20,6 +21,8 @@ from xlbridge.catalogue import CATALOGUE, SheetFunction
 from xlbridge.catalogue.entry import Argument, Span
 
 DIRECTIONS: Final = ("X", "Y")
+#: the word of a template that stands for the direction itself
+DIRECTION: Final = "direction"
 #: the mark of a value that nobody has entered yet
 STARTER: Final = "starter value"
 _CALL = re.compile(r"\b(ELF_[A-Z0-9_]+)\(")
@@ -208,7 +211,7 @@ class Part:
     ``bands`` widen the story table, ``tables`` are further sheets; ``replaces`` are quantities that take the
     place of those of other parts with the same key; ``takes`` says which places a formula takes instead of
     others, by the key of its quantity; ``editions`` are those that have the procedure.
-    ``brought_by`` are entries of the site that ask for the part; ``excludes`` the keys of parts that give the
+    ``brought_by`` are criteria entries that ask for the part; ``excludes`` the keys of parts that give the
     same quantities another way.
     """
 

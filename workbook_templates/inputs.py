@@ -52,14 +52,15 @@ class Inputs:
 
     @property
     def parts(self) -> frozenset[str]:
-        """The parts that are asked for, those whose level entries are given, and what they require."""
+        """The parts that are asked for, those whose entries are given, and what they require."""
         asked = self.given.get("parts", () if "level" in self.given else BLANK_PARTS)
         for key in asked:
             if key not in PARTS:
                 raise NotApplicable("parts", key, f"must be one of {', '.join(PARTS)}")
         found = {key for key, part in PARTS.items() if part.needs and self._has(part.needs)}
         found |= {key for key, part in PARTS.items() if any(t.stored in self.given for t in part.tables)}
-        found |= {key for key, part in PARTS.items() if any(k in self._table(None) for k in part.brought_by)}
+        entered = {entry for direction in (None, *DIRECTIONS) for entry in self._table(direction)}
+        found |= {key for key, part in PARTS.items() if entered & {*part.brought_by}}
         fitting = {key for key in found if self.edition in PARTS[key].editions}
         keys = with_required({*asked, *fitting})
         self._refuse_misfits(keys)

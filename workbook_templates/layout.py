@@ -10,7 +10,7 @@ from typing import Final
 
 from openpyxl.utils import get_column_letter
 
-from workbook_templates.declare import DIRECTIONS, Block, Part, Quantity, Table
+from workbook_templates.declare import DIRECTION, DIRECTIONS, Block, Part, Quantity, Table
 from workbook_templates.parts import chosen
 
 COVER: Final = "Cover"
@@ -220,6 +220,8 @@ class Layout:
         )
 
     def _place(self, key: str, part: str | None, sheet: str, direction: str | None, row: int) -> str:
+        if key == DIRECTION:
+            return str(direction)
         if key in self.rows:
             return self._criteria_place(key, sheet, direction)
         grid = self.grid(key)

@@ -8,6 +8,7 @@ from dataclasses import replace
 from typing import Any, Final
 
 from engine import hazard
+from engine.building import periods
 from engine.building.parts import ground_motion, multi_period
 from engine.building.records import Building
 
@@ -33,6 +34,15 @@ def spectrum_motion(building: Building) -> Building:
     return filled(building, site=replace(building.site, S_DS=S_DS, S_D1=S_D1))
 
 
+def computed_periods(building: Building) -> Building:
+    """Put in the computed period of each direction that takes it from the levels."""
+    found = {
+        name: replace(given, T_computed=periods.computed(building, name))
+        for name, given in building.direction.items()
+    }
+    return filled(building, direction=found)
+
+
 def filled(building: Building, **values: Any) -> Building:
     """Return a copy with other values, without the checks: those speak of entries."""
     result = copy(building)
@@ -41,7 +51,7 @@ def filled(building: Building, **values: Any) -> Building:
     return result
 
 
-PREPARATIONS: Final[tuple[Preparation, ...]] = (mapped_motion, spectrum_motion)
+PREPARATIONS: Final[tuple[Preparation, ...]] = (mapped_motion, spectrum_motion, computed_periods)
 
 
 def prepared(building: Building) -> Building:

@@ -7,7 +7,7 @@ from dataclasses import replace
 import numpy as np
 
 from engine import hazard, occupancy, stability, vertical
-from engine.building import drifts, strength
+from engine.building import drifts, periods, strength
 from engine.building.parts import with_parts
 from engine.building.prepare import prepared
 from engine.building.records import Building
@@ -48,7 +48,11 @@ def solve(building: Building) -> Package:
         h_x=h,
         h_sx=np.asarray(vertical.story_height(h, h)),
         direction={},
-        warnings=(*_shared_heights(building, h), *_raised_ratios(building)),
+        warnings=(
+            *_shared_heights(building, h),
+            *_raised_ratios(building),
+            *periods.doubts(building, float(h.max())),
+        ),
     )
     package = replace(
         package, direction={name: _direction(building, package, name) for name in building.direction}
@@ -58,7 +62,7 @@ def solve(building: Building) -> Package:
 
 def _direction(building: Building, package: Package, name: str) -> DirectionResult:
     given = building.direction[name]
-    found = strength.strength(building, package, given)
+    found = strength.strength(building, package, name)
     for step in (
         strength.forces(package, found),
         drifts.limits(building, package, given),

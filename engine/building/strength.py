@@ -5,6 +5,7 @@ from __future__ import annotations
 from typing import Any, Final
 
 from engine import base_shear, period, vertical
+from engine.building import periods
 from engine.building.parts.ground_motion import coefficient_increase
 from engine.building.parts.multi_period import method_1_ordinate
 from engine.building.parts.short_building import S_DS_in_C_s
@@ -14,9 +15,10 @@ from engine.building.results import Package
 INCREASED: Final = "upper bound increased, exception 2 of 11.4.8"
 
 
-def strength(building: Building, package: Package, given: Direction) -> dict[str, Any]:
+def strength(building: Building, package: Package, name: str) -> dict[str, Any]:
     """Return the steps from the period to the base shear and the exponent."""
-    T_a = float(period.approximate_period(package.h_n, given.period_system, building.units))
+    given = building.direction[name]
+    T_a = periods.approximate(building, name, package.h_n)
     C_u = float(period.upper_limit_coefficient(building.site.S_D1))
     T = T_a if given.T_computed is None else float(period.design_period(T_a, C_u, given.T_computed))
     found = response(building, package, given, T)

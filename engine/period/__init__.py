@@ -1,6 +1,8 @@
 """Fundamental period (12.8.2): approximate formulas, the C_u T_a cap, computed and design periods."""
 
 from engine.period.approximate import (
+    MOMENT_FRAMES,
+    PERIOD_FORMULAS,
     PERIOD_SYSTEMS,
     approximate_period,
     approximate_period_stories,
@@ -9,6 +11,7 @@ from engine.period.approximate import (
 from engine.period.design import (
     DRIFT_PERIODS,
     PERIOD_BOUNDS,
+    PERIOD_SOURCES,
     design_period,
     drift_period,
     period_bound,
@@ -21,7 +24,10 @@ from engine.period.walls import C_Q, wall_period, wall_ratio
 __all__ = [
     "C_Q",
     "DRIFT_PERIODS",
+    "MOMENT_FRAMES",
     "PERIOD_BOUNDS",
+    "PERIOD_FORMULAS",
+    "PERIOD_SOURCES",
     "PERIOD_SYSTEMS",
     "approximate_period",
     "approximate_period_stories",

@@ -13,6 +13,10 @@ from engine.tables import table
 from engine.units import SI, SYSTEMS, US, symbol
 
 PERIOD_SYSTEMS: Final = table("period_coefficients").keys
+#: rows of the table whose frames resist all of the force, as the formula for stories asks
+MOMENT_FRAMES: Final = ("steel moment frame", "concrete moment frame")
+#: the three formulas of 12.8.2.1, in words
+PERIOD_FORMULAS: Final = ("C_t h_n^x", "0.1 N", "shear walls")
 MAX_STORIES: Final = 12
 LEAST_STORY: Final = MappingProxyType({US: 10.0, SI: 3.0})
 

@@ -11,6 +11,8 @@ from engine.require import Result, Words, above, at_least, choice, exceeds, form
 from engine.tables import table
 
 PERIOD_BOUNDS: Final = ("the computed period", "upper limit C_u T_a")
+#: where a computed period comes from
+PERIOD_SOURCES: Final = ("entered", "Rayleigh", "story stiffness")
 DRIFT_PERIODS: Final = ("without the cap", "with the cap")
 
 

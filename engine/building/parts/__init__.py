@@ -11,6 +11,7 @@ from engine.building.parts import (
     ground_motion,
     irregularity,
     multi_period,
+    periods,
     redundancy,
     short_building,
     spectrum,
@@ -68,6 +69,11 @@ def _joined(rules: tuple[str, ...], more: tuple[str, ...]) -> tuple[str, ...]:
 #: in the order of the standard's flow: a step finds the results of those before it in the package
 STEPS: Final[tuple[Step, ...]] = (
     _whole_building(weights.solve, weights.RULES),
+    _whole_building(periods.walls, periods.WALL_RULES),
+    _each_direction(periods.approximate, periods.APPROXIMATE_RULES),
+    _each_direction(periods.rayleigh, periods.RAYLEIGH_RULES),
+    _each_direction(periods.first_mode, periods.MODE_RULES),
+    _each_direction(periods.governing, periods.GOVERNING_RULES),
     _whole_building(ground_motion.solve, ground_motion.RULES),
     _each_direction(ground_motion.increase, ground_motion.INCREASE_RULES),
     _whole_building(multi_period.solve, multi_period.RULES),

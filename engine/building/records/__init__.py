@@ -14,6 +14,7 @@ from engine.building.records.rows import (
     WEIGHT_KINDS,
     MotionRow,
     SpectrumRow,
+    WallRow,
     WeightRow,
     row_label,
 )
@@ -30,6 +31,7 @@ __all__ = [
     "MotionRow",
     "Site",
     "SpectrumRow",
+    "WallRow",
     "WeightRow",
     "level_label",
     "level_values",

@@ -11,7 +11,7 @@ from engine.building.records.direction import DIRECTIONS, Direction
 from engine.building.records.fields import check_fields, checked, is_list_of_texts, is_text, word
 from engine.building.records.level import LEVEL_OPTIONS, Level, level_label
 from engine.building.records.motion import check_method, check_motion
-from engine.building.records.rows import ROW_TABLES, MotionRow, SpectrumRow, WeightRow, row_label
+from engine.building.records.rows import ROW_TABLES, MotionRow, SpectrumRow, WallRow, WeightRow, row_label
 from engine.building.records.site import Site
 from engine.editions import EDITIONS
 from engine.errors import ImpossibleValue, MissingValue, NotApplicable
@@ -36,6 +36,7 @@ class Building:
     weight: tuple[WeightRow, ...] = ()
     spectrum: tuple[SpectrumRow, ...] = ()
     multi_period: tuple[MotionRow, ...] = ()
+    wall: tuple[WallRow, ...] = ()
     job: Mapping[str, object] = field(default_factory=dict)
     sources: Mapping[str, str] = field(default_factory=dict)
     parts: tuple[str, ...] = checked(is_list_of_texts, ())

@@ -8,7 +8,7 @@ from typing import Final
 
 from engine.building.records.fields import POSITIVE, checked, is_flag, is_text, number, word
 from engine.drift import DRIFT_STRUCTURES
-from engine.period import PERIOD_SYSTEMS
+from engine.period import PERIOD_FORMULAS, PERIOD_SOURCES, PERIOD_SYSTEMS
 from engine.redundancy import CONFIGURATIONS
 from engine.require import above, at_least, within
 from engine.vertical import EXPONENT_RULES
@@ -39,7 +39,15 @@ class PlanDirectionEntries:
 
 
 @dataclass(frozen=True, kw_only=True)
-class Direction(MethodEntries, PlanDirectionEntries):
+class PeriodEntries:
+    """Which formula gives the approximate period, and where a computed period comes from."""
+
+    T_a_rule: str = word(PERIOD_FORMULAS, PERIOD_FORMULAS[0])
+    T_source: str = word(PERIOD_SOURCES, PERIOD_SOURCES[0])
+
+
+@dataclass(frozen=True, kw_only=True)
+class Direction(MethodEntries, PeriodEntries, PlanDirectionEntries):
     """The seismic force-resisting system of one plan direction.
 
     ``rho`` divides the allowable drift only where ``moment_frames_only`` is true.

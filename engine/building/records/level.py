@@ -14,8 +14,9 @@ class Level:
 
     The weight is left out where rows of the take-off give it. ``d_1`` and ``d_2`` are those of opposite
     edges with A_x = 1; ``x_M`` and ``x_R`` the centres of mass and rigidity on one axis. ``K_x``,
-    ``strength`` and ``L_sys`` belong to the story below the level. ``source`` says in words where the
-    numbers come from.
+    ``strength`` and ``L_sys`` belong to the story below the level. ``delta_f`` are the displacements under
+    the lateral forces ``f_x`` [kip or kN], for the period. ``source`` says in words where the numbers come
+    from.
     """
 
     name: str = checked(is_text)
@@ -41,6 +42,10 @@ class Level:
     strength_Y: float | None = number(POSITIVE, None)
     L_sys_X: float | None = number(POSITIVE, None)
     L_sys_Y: float | None = number(POSITIVE, None)
+    f_x_X: float | None = number(NOT_NEGATIVE, None)
+    f_x_Y: float | None = number(NOT_NEGATIVE, None)
+    delta_f_X: float | None = number(NOT_NEGATIVE, None)
+    delta_f_Y: float | None = number(NOT_NEGATIVE, None)
     source: str | None = checked(is_text, None)
 
 

@@ -7,6 +7,7 @@ from dataclasses import dataclass
 from types import MappingProxyType
 from typing import Any, ClassVar, Final
 
+from engine.building.records.direction import DIRECTIONS
 from engine.building.records.fields import NOT_NEGATIVE, POSITIVE, checked, is_text, number, word
 
 WEIGHT_KINDS: Final = (
@@ -51,9 +52,22 @@ class MotionRow:
     S_a: float = number(POSITIVE)
 
 
+@dataclass(frozen=True, slots=True, kw_only=True)
+class WallRow:
+    """One shear wall: the plan direction it resists, its web area [ft2 or m2] and its length [ft or m]."""
+
+    NAMED_BY: ClassVar = "name"
+
+    name: str = checked(is_text)
+    direction: str = word(DIRECTIONS)
+    area: float = number(POSITIVE)
+    length: float = number(POSITIVE)
+    source: str | None = checked(is_text, None)
+
+
 #: the tables of a BUILDING.toml beside the story table, with the record of a row
 ROW_TABLES: Final[Mapping[str, type[Any]]] = MappingProxyType(
-    {"weight": WeightRow, "spectrum": SpectrumRow, "multi_period": MotionRow}
+    {"weight": WeightRow, "spectrum": SpectrumRow, "multi_period": MotionRow, "wall": WallRow}
 )
 
 

@@ -74,7 +74,14 @@ class PlanEntries:
 
 
 @dataclass(frozen=True, kw_only=True)
-class Site(MotionEntries, ShortBuildingEntries, PlanEntries):
+class PeriodSiteEntries:
+    """Area of the base [ft2 or m2], for the period of shear walls."""
+
+    A_B: float | None = number(POSITIVE, None)
+
+
+@dataclass(frozen=True, kw_only=True)
+class Site(MotionEntries, ShortBuildingEntries, PeriodSiteEntries, PlanEntries):
     """What holds for the building: S_1 [g], T_L [s], Risk Category, elevation of the base [ft or m]."""
 
     S_1: float = number(NOT_NEGATIVE)
