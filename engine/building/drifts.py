@@ -42,20 +42,21 @@ def drifts(building: Building, package: Package, name: str) -> dict[str, Any]:
 
 
 def second_order(
-    building: Building, package: Package, given: Direction, known: dict[str, Any]
+    building: Building, package: Package, given: Direction, known: dict[str, Any], V_x: Array
 ) -> dict[str, Any]:
-    """Return the stability coefficients and the drifts that they amplify, where vertical loads are given."""
+    """Return the stability coefficients and the drifts that they amplify, where vertical loads are given.
+
+    V_x are the story shears of the forces under which the displacements are computed.
+    """
     if "Delta" not in known:
         return {}
     if building.level[0].P_x is None:
         return {"drift_over_limit": known["Delta"] / known["Delta_a"]}
     P_x = np.array([level.P_x for level in building.level], dtype=np.float64)
-    _refuse_where(
-        building, "V_x", known["V_x"], known["V_x"] <= 0, "must be above 0 for a stability coefficient"
-    )
+    _refuse_where(building, "V_x", V_x, V_x <= 0, "must be above 0 for a stability coefficient")
     h_sx = package.h_sx * DISPLACEMENT_PER_LENGTH[building.units]
     theta = np.asarray(
-        stability.stability_coefficient(P_x, known["Delta"], package.I_e, known["V_x"], h_sx, given.C_d)
+        stability.stability_coefficient(P_x, known["Delta"], package.I_e, V_x, h_sx, given.C_d)
     )
     _refuse_where(building, "theta", theta, theta >= 1, "must be below 1: the story is unstable")
     factor = stability.second_order_factor(theta)

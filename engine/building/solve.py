@@ -8,6 +8,7 @@ import numpy as np
 
 from engine import hazard, occupancy, stability, vertical
 from engine.building import drifts, periods, strength
+from engine.building.drift_forces import of_displacements
 from engine.building.parts import with_parts
 from engine.building.prepare import prepared
 from engine.building.records import Building
@@ -69,7 +70,8 @@ def _direction(building: Building, package: Package, name: str) -> DirectionResu
         drifts.drifts(building, package, name),
     ):
         found |= step
-    return DirectionResult(**found, **drifts.second_order(building, package, given, found))
+    V_x = of_displacements(building, package, name, found)[1]
+    return DirectionResult(**found, **drifts.second_order(building, package, given, found, V_x))
 
 
 def _shared_heights(building: Building, h: Array) -> list[str]:

@@ -2,17 +2,15 @@
 
 from __future__ import annotations
 
-from typing import Any, Final
+from typing import Any
 
 from engine import base_shear, period, vertical
 from engine.building import periods
-from engine.building.parts.ground_motion import coefficient_increase
+from engine.building.parts.ground_motion import coefficient_increase, increased
 from engine.building.parts.multi_period import method_1_ordinate
 from engine.building.parts.short_building import S_DS_in_C_s
 from engine.building.records import METHODS, Building, Direction
 from engine.building.results import Package
-
-INCREASED: Final = "upper bound increased, exception 2 of 11.4.8"
 
 
 def strength(building: Building, package: Package, name: str) -> dict[str, Any]:
@@ -70,7 +68,8 @@ def _method_2(
     upper = factor * min(float(base_shear.coefficient_plateau(S_DS, R, I_e)), cap)
     near_fault = float(base_shear.coefficient_minimum_near_fault(site.S_1, R, I_e))
     lower = max(float(base_shear.coefficient_minimum(S_DS, I_e)), near_fault)
-    return {"C_s": max(upper, lower), "governing_bound": INCREASED if upper >= lower else governs}
+    C_s, governs = increased(upper, lower, str(governs))
+    return {"C_s": C_s, "governing_bound": governs}
 
 
 def forces(package: Package, strength: dict[str, Any]) -> dict[str, Any]:

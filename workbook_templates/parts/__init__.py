@@ -10,6 +10,7 @@ from workbook_templates.declare import Part
 from workbook_templates.parts import (
     diaphragm,
     drift,
+    drift_forces,
     ground_motion,
     irregularity,
     multi_period,
@@ -40,6 +41,7 @@ PARTS: Final = MappingProxyType(
             period_sources.WALLS,
             period_sources.RAYLEIGH,
             period_sources.STIFFNESS,
+            drift_forces.PART,
             drift.PART,
             torsion.PART,
             torsion.INHERENT,

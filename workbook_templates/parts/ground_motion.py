@@ -113,6 +113,30 @@ RESPONSE = (
         symbol="-",
     ),
 )
+_INCREASE_DRIFT = "ELF_CS_INCREASE({T_drift},{T_S},{long_exception})"
+_UPPER_DRIFT = f"{_INCREASE_DRIFT}*MIN({{C_s_plateau}},{{C_s_cap_drift}})"
+_BOUNDS_DRIFT = "({S_DS},{S_D1},{S_1},{T_drift},{T_L},{R},{I_e},{edition})"
+FOR_DRIFT = (
+    Quantity(
+        "C_s_drift",
+        "Seismic response coefficient, without the minimum 0.044 S_DS I_e",
+        "none",
+        Role.RESULT,
+        f"=MAX({_UPPER_DRIFT},{{C_s_min_S1}})",
+        rule="drift_forces",
+        symbol="C_s, drift",
+        decimals=4,
+    ),
+    Quantity(
+        "drift_bound",
+        "Which bound governs it",
+        "text",
+        CALC,
+        f"=IF(AND({_INCREASE_DRIFT}>1,{_UPPER_DRIFT}>={{C_s_min_S1}}),"
+        f'"upper bound increased, exception 2 of 11.4.8",ELF_CS_DRIFT_GOVERNS{_BOUNDS_DRIFT})',
+        symbol="-",
+    ),
+)
 
 CHECKS = (
     Check(
@@ -126,7 +150,7 @@ COEFFICIENTS = Part(
     "site_class",
     "Ground motion, 7-16",
     criteria=(SITE, INCREASE),
-    replaces=(*DESIGN, *RESPONSE),
+    replaces=(*DESIGN, *RESPONSE, *FOR_DRIFT),
     checks=CHECKS,
     editions=("7-16",),
     brought_by=("S_S", "site_class"),

@@ -170,6 +170,38 @@ RESPONSE = (
         symbol="-",
     ),
 )
+_MULTI_DRIFT = "({S_a_drift},{S_1},{R},{I_e},{edition})"
+_TWO_DRIFT = "({S_DS},{S_D1},{S_1},{T_drift},{T_L},{R},{I_e},{edition})"
+FOR_DRIFT = (
+    Quantity(
+        "S_a_drift",
+        "Ordinate for Method 1 at this period",
+        "acceleration",
+        CALC,
+        f"=ELF_SA_METHOD1({{T_drift}},{_PAIRS},{{T_L}},{{tail}})",
+        symbol="S_a, drift",
+    ),
+    Quantity(
+        "C_s_drift",
+        "Seismic response coefficient, without the minimum 0.044 S_DS I_e",
+        "none",
+        RESULT,
+        f'=IF({{C_s_method}}="{METHODS[1]}",ELF_CS_DRIFT_MULTI{_MULTI_DRIFT},ELF_CS_DRIFT{_TWO_DRIFT})',
+        rule="drift_forces",
+        symbol="C_s, drift",
+        decimals=4,
+    ),
+    Quantity(
+        "drift_bound",
+        "Which bound governs it",
+        "text",
+        CALC,
+        f'=IF({{C_s_method}}="{METHODS[1]}",ELF_CS_DRIFT_MULTI_GOVERNS{_MULTI_DRIFT},'
+        f"ELF_CS_DRIFT_GOVERNS{_TWO_DRIFT})",
+        rule="drift_forces",
+        symbol="-",
+    ),
+)
 
 CHECKS = (
     Check("Every period has an ordinate", "=COUNT({S_a_given:all})", "=COUNT({T_i:all})"),
@@ -195,7 +227,7 @@ PART = Part(
         METHOD,
     ),
     tables=(TABLE,),
-    replaces=(*_design(f"={_SHORT}", f"={_SECOND}"), *RESPONSE),
+    replaces=(*_design(f"={_SHORT}", f"={_SECOND}"), *RESPONSE, *FOR_DRIFT),
     checks=CHECKS,
     curves=(Curve("Multi-period spectrum", "T_i", ("S_ai", "S_aMi"), ("T", "S_a_multi")),),
     editions=("7-22",),

@@ -11,6 +11,9 @@ _QUESTIONS = tuple(
     for key, value in (("regular", False), ("redundant", False), ("soft_site", False))
 )
 
+#: what C_s is made of, for strength and for drift
+_CAPPED = ("C_s_plateau", "C_s_min", "C_s", "governing_bound", "C_s_drift", "drift_bound")
+
 CAP = Block(
     "S_DS in C_s",
     (
@@ -39,6 +42,6 @@ PART = Part(
     "short_building",
     "Short regular buildings",
     criteria=(Block("Conditions of 12.8.1.3", _QUESTIONS), STORIES, CAP),
-    takes={key: {"S_DS": "S_DS_C"} for key in ("C_s_plateau", "C_s_min", "C_s", "governing_bound")},
+    takes={key: {"S_DS": "S_DS_C"} for key in _CAPPED},
     brought_by=("regular", "redundant", "soft_site"),
 )

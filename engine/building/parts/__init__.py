@@ -8,6 +8,7 @@ from typing import Any, Final
 
 from engine.building.parts import (
     diaphragm,
+    drift_forces,
     ground_motion,
     irregularity,
     multi_period,
@@ -79,6 +80,7 @@ STEPS: Final[tuple[Step, ...]] = (
     _whole_building(multi_period.solve, multi_period.RULES),
     _each_direction(multi_period.solve_direction, multi_period.METHOD_RULES),
     _each_direction(short_building.solve, short_building.RULES),
+    _each_direction(drift_forces.solve, drift_forces.RULES),
     _whole_building(spectrum.solve, spectrum.RULES),
     _each_direction(spectrum.solve_direction, spectrum.RULES),
     _each_direction(torsion.ratios, torsion.RATIO_RULES),

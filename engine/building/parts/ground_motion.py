@@ -13,6 +13,7 @@ from engine.building.results import DirectionResult, Package
 RULES: Final = ("F_a", "F_v", "S_MS", "S_M1", "S_DS", "S_D1", "hazard_analysis", "SDC_A")
 INCREASE_RULES: Final = ("C_s_increase",)
 NO_TRIGGER: Final = "none"
+INCREASED: Final = "upper bound increased, exception 2 of 11.4.8"
 
 
 def mce_parameters(site: Site) -> tuple[float | None, float | None]:
@@ -51,6 +52,11 @@ def increase(building: Building, package: Package, name: str, result: DirectionR
     if building.site.S_S is None:
         return {}
     return {"C_s_increase": coefficient_increase(building.site, result.T)}
+
+
+def increased(upper: float, lower: float, governs: str) -> tuple[float, str]:
+    """Return C_s by an upper bound that is increased, and in words which bound governs."""
+    return max(upper, lower), INCREASED if upper >= lower else governs
 
 
 def coefficient_increase(site: Site, T: float) -> float:

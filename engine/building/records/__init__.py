@@ -6,7 +6,7 @@ Heights and weights in the unit system's length and force units, displacements i
 from __future__ import annotations
 
 from engine.building.records.building import Building, level_values
-from engine.building.records.direction import DIRECTIONS, METHODS, Direction
+from engine.building.records.direction import DIRECTIONS, DRIFT_BASES, METHODS, Direction
 from engine.building.records.fields import may_be_left_out
 from engine.building.records.level import Level, level_label
 from engine.building.records.rows import (
@@ -22,6 +22,7 @@ from engine.building.records.site import Site
 
 __all__ = [
     "DIRECTIONS",
+    "DRIFT_BASES",
     "METHODS",
     "ROW_TABLES",
     "WEIGHT_KINDS",

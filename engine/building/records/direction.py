@@ -8,13 +8,15 @@ from typing import Final
 
 from engine.building.records.fields import POSITIVE, checked, is_flag, is_text, number, word
 from engine.drift import DRIFT_STRUCTURES
-from engine.period import PERIOD_FORMULAS, PERIOD_SOURCES, PERIOD_SYSTEMS
+from engine.period import DRIFT_PERIODS, PERIOD_FORMULAS, PERIOD_SOURCES, PERIOD_SYSTEMS
 from engine.redundancy import CONFIGURATIONS
 from engine.require import above, at_least, within
 from engine.vertical import EXPONENT_RULES
 
 DIRECTIONS: Final = ("X", "Y")
 METHODS: Final = ("method 2", "method 1")
+#: the forces under which displacements may be computed
+DRIFT_BASES: Final = ("strength forces", "drift forces")
 
 
 @dataclass(frozen=True, kw_only=True)
@@ -47,7 +49,15 @@ class PeriodEntries:
 
 
 @dataclass(frozen=True, kw_only=True)
-class Direction(MethodEntries, PeriodEntries, PlanDirectionEntries):
+class DriftForceEntries:
+    """Forces under which the displacements are computed; whether the period for drift keeps its cap."""
+
+    drift_basis: str = word(DRIFT_BASES, DRIFT_BASES[0])
+    drift_cap: str = word(DRIFT_PERIODS, DRIFT_PERIODS[0])
+
+
+@dataclass(frozen=True, kw_only=True)
+class Direction(MethodEntries, PeriodEntries, DriftForceEntries, PlanDirectionEntries):
     """The seismic force-resisting system of one plan direction.
 
     ``rho`` divides the allowable drift only where ``moment_frames_only`` is true.
