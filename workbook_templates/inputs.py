@@ -59,12 +59,18 @@ class Inputs:
                 raise NotApplicable("parts", key, f"must be one of {', '.join(PARTS)}")
         found = {key for key, part in PARTS.items() if part.needs and self._has(part.needs)}
         found |= {key for key, part in PARTS.items() if any(t.stored in self.given for t in part.tables)}
-        entered = {entry for direction in (None, *DIRECTIONS) for entry in self._table(direction)}
-        found |= {key for key, part in PARTS.items() if entered & {*part.brought_by}}
+        found |= {key for key, part in PARTS.items() if self._criteria_entered & {*part.brought_by}}
         fitting = {key for key in found if self.edition in PARTS[key].editions}
         keys = with_required({*asked, *fitting})
         self._refuse_misfits(keys)
         return keys
+
+    @property
+    def _criteria_entered(self) -> set[str]:
+        """The criteria entries that are given: each by its key, and with its value."""
+        tables = [self._table(direction) for direction in (None, *DIRECTIONS)]
+        pairs = {pair for table in tables for pair in table.items()}
+        return {word for key, value in pairs for word in (key, f"{key} = {value}")}
 
     def _refuse_misfits(self, keys: frozenset[str]) -> None:
         for key in keys:

@@ -13,6 +13,7 @@ from engine.building.parts.periods import NO_COMPUTED
 from engine.errors import MissingValue
 from tests.support.story_books import assert_routes_agree, story_book
 from workbook_templates.declare import Check
+from workbook_templates.inputs import Inputs
 from workbook_templates.layout import FIRST_LEVEL, LEVELS, Layout
 from workbook_templates.parts import CORE, PARTS, period_sources, periods
 from workbook_templates.read import Reader
@@ -105,11 +106,33 @@ def test_periods_alone_bring_no_sheet_and_no_column() -> None:
     assert len(layout.table) == len(Layout(COUNT, frozenset({CORE})).table)
 
 
-def test_a_choice_without_its_part_shows_no_period(tmp_path: Path) -> None:
+@pytest.mark.parametrize(
+    ("entry", "part", "period"),
+    [
+        ({"T_a_rule": "shear walls"}, "walls", "T_a_walls"),
+        ({"T_source": "Rayleigh"}, "rayleigh", "T_rayleigh"),
+        ({"T_source": "story stiffness"}, "stiffness_period", "T_stiffness"),
+    ],
+)
+def test_a_choice_brings_the_part_that_it_needs(
+    tmp_path: Path, entry: dict[str, str], part: str, period: str
+) -> None:
     given = {"edition": "7-22", "units": "us", "parts": ["periods"]}
-    given["direction"] = {"X": {"T_source": "Rayleigh"}}  # type: ignore[assignment]
-    computed = compute(story_book(tmp_path, given, COUNT))
-    assert str(computed.evaluator.evaluate_text("=T_X")).startswith("#")
+    without = results(compute(story_book(tmp_path, given, COUNT, "without.xlsx")))
+    assert without[period] == "-"
+    chosen = given | {"direction": {"Y": entry}}
+    assert part in Inputs(chosen, COUNT).parts
+    computed = assert_routes_agree(story_book(tmp_path, chosen, COUNT), 80)
+    assert isinstance(results(computed, "Y")[period], float)
+
+
+def test_a_choice_made_in_a_workbook_without_its_part_shows_no_period(tmp_path: Path) -> None:
+    path = story_book(tmp_path, {"edition": "7-22", "units": "us", "parts": ["periods"]}, COUNT)
+    book = openpyxl.load_workbook(path)
+    sheet, _, address = book.defined_names["T_source_X"].attr_text.partition("!")
+    book[sheet][address.replace("$", "")] = "Rayleigh"
+    book.save(path)
+    assert str(compute(path).evaluator.evaluate_text("=T_X")).startswith("#")
 
 
 def test_walls_without_rows_are_refused(tmp_path: Path) -> None:

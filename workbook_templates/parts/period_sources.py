@@ -19,7 +19,7 @@ from workbook_templates.declare import (
     by_units,
     entry,
 )
-from workbook_templates.parts.periods import BY_WALLS, UNUSED
+from workbook_templates.parts.periods import BY_RAYLEIGH, BY_STIFFNESS, BY_WALLS, UNUSED
 
 INPUT, CALC = Role.INPUT, Role.CALCULATION
 _NAMES = "=COUNTA({name:all})"
@@ -147,6 +147,7 @@ WALLS = Part(
             "=0",
         ),
     ),
+    brought_by=(f"T_a_rule = {BY_WALLS}",),
     requires=("periods",),
 )
 
@@ -192,6 +193,7 @@ RAYLEIGH = Part(
         Check("Every level has its displacement", "=COUNT({delta_f:all})", _NAMES, per_direction=True),
     ),
     needs=tuple(f"{key}_{d}" for key in ("f_x", "delta_f") for d in DIRECTIONS),
+    brought_by=(f"T_source = {BY_RAYLEIGH}",),
     requires=("periods",),
 )
 
@@ -225,5 +227,6 @@ STIFFNESS = Part(
             symbol="T, stiffness",
         ),
     ),
+    brought_by=(f"T_source = {BY_STIFFNESS}",),
     requires=("periods", "stiffness"),
 )
