@@ -193,10 +193,17 @@ def _known_levels(entry: SheetFunction, ranges: list[_Given]) -> dict[str, Any]:
     return _known[key][1]
 
 
-def _levels(ranges: list[tuple[Declared, Argument]]) -> dict[str, Any]:
-    """Return one float vector a level range, without the rows that are blank in all of them."""
-    if not ranges:
-        return {}
+def _levels(ranges: list[_Given]) -> dict[str, Any]:
+    """Return one float vector a level range; levels, modes and periods are lists of their own."""
+    lists = dict.fromkeys(a.each for a, _ in ranges)
+    return {k: v for each in lists for k, v in _one_list([r for r in ranges if r[0].each == each]).items()}
+
+
+def _one_list(ranges: list[_Given]) -> dict[str, Any]:
+    """Return the vectors of ranges with one cell for each of the same things.
+
+    Rows that are blank in all of them are left out.
+    """
     columns = [_column(a, v) for a, v in ranges]
     if len({len(c) for c in columns}) > 1:
         sizes = ", ".join(f"{a.symbol} has {len(c)}" for (a, _), c in zip(ranges, columns, strict=True))

@@ -6,7 +6,8 @@ stand on one story. Floors are taken as rigid and torsion is left out, so that t
 analysis until there is one, and serves as a comparison afterwards.
 
 ``stories`` holds the static rules, ``modes`` the modes and what they hold of the weight, ``response`` the
-response in one mode, ``combination`` the sums over modes and the scaling; ``eigen`` solves for the modes.
+response in one mode, ``combination`` the sums over modes and the scaling, ``combined`` both
+in one; ``eigen`` solves for the modes.
 """
 
 from engine.dynamics.combination import (
@@ -17,6 +18,7 @@ from engine.dynamics.combination import (
     force_scale,
     square_root_of_squares,
 )
+from engine.dynamics.combined import COMBINATIONS, combined_drift, combined_shear
 from engine.dynamics.modes import (
     VERDICTS,
     mode_participation,
@@ -37,8 +39,11 @@ from engine.dynamics.response import (
 from engine.dynamics.stories import elastic_displacement, story_stiffness
 
 __all__ = [
+    "COMBINATIONS",
     "VERDICTS",
     "absolute_sum",
+    "combined_drift",
+    "combined_shear",
     "complete_combination",
     "correlation",
     "drift_scale",

@@ -62,11 +62,15 @@ def test_two_axes_broadcast(name):
     assert (grid == row).all()
 
 
+#: whole numbers of modes: another list than that of the levels
+NUMBERS = "mode_numbers"
+
+
 @pytest.mark.parametrize("name", LEVELED)
 def test_stacked_buildings_equal_one_by_one(name):
     call = CALLS[name]
     stacked = {
-        key: np.stack([np.array(value), 1.2 * np.array(value), 1.5 * np.array(value)])
+        key: np.stack([np.array(value) * (1.0 if key == NUMBERS else factor) for factor in (1.0, 1.2, 1.5)])
         for key, value in call.items()
         if isinstance(value, list)
     }
@@ -86,5 +90,6 @@ def test_float_result_is_float64(name):
 @pytest.mark.parametrize("name", LEVELED)
 def test_a_single_level_is_a_building(name):
     one = {key: value[1:2] if isinstance(value, list) else value for key, value in CALLS[name].items()}
+    one |= {NUMBERS: [1.0]} if NUMBERS in one else {}
     result = function(name)(**one)
     assert isinstance(result, str) or np.isfinite(result).all()

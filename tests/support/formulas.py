@@ -54,6 +54,10 @@ COLLECTOR = {"E_story": 30.0, "E_sum": 34.0, "E_low": 40.0, "Omega_0": 2.0, "lig
 LIMITS = {"S_DS": 0.9, "I_e": 1.25}
 
 SPECTRUM = {"T_i": [0.0, 0.1, 0.3, 1.0, 2.0, 5.0, 10.0], "S_ai": [0.4, 1.1, 0.9, 0.5, 0.28, 0.1, 0.03]}
+COMBINED: dict[str, Any] = {
+    **{"mode_numbers": [1.0, 2.0, 3.0], "mode_coefficients": [0.1, 0.15, 0.12]},
+    **{"combination": "CQC", "damping": 0.05},
+}
 
 #: dotted name below ``engine`` -> a valid call, no two arguments alike so that a swap shows
 CALLS: dict[str, dict[str, Any]] = {
@@ -284,6 +288,8 @@ CALLS: dict[str, dict[str, Any]] = {
     "dynamics.modal_shear": {"mode": 1.0, "h_x": 25.0, "C_sm": 0.1, **MODEL},
     "dynamics.modal_displacement": {"mode": 1.0, "h_x": 25.0, "C_sm": 0.1, **MODEL},
     "dynamics.modal_drift": {"mode": 1.0, "h_x": 25.0, "C_sm": 0.1, **MODEL},
+    "dynamics.combined_shear": {"h_x": 25.0, **MODEL, **COMBINED},
+    "dynamics.combined_drift": {"h_x": 25.0, **MODEL, **COMBINED},
     "dynamics.square_root_of_squares": {"values": [3.0, -4.0, 1.0]},
     "dynamics.absolute_sum": {"values": [3.0, -4.0, 1.0]},
     "dynamics.correlation": {"T_i": 0.9, "T_j": 1.2, "damping": 0.05},

@@ -24,6 +24,7 @@ E_PRINTED = {"S_S": 0.75, "S_1": 0.1}
 FAR = 1e6
 #: numbers of modes: whole, and at most as many as there are levels with weight
 ORDINALS = ("mode", "modes")
+NUMBERS_OF_MODES = (*ORDINALS, "mode_numbers")
 #: what a random number of a unit lies between, inside its span
 USUAL = {
     "none": (0.0, 10.0),
@@ -101,7 +102,7 @@ def full(entry: SheetFunction) -> dict[str, Any]:
 def inside(argument: Argument) -> list[float]:
     """Numbers at and just within the ends of a span, and far out where it has no end."""
     span, step = argument.span, _step(argument)
-    if argument.name in ORDINALS:
+    if argument.name in NUMBERS_OF_MODES:
         return [1.0, 2.0]
     low = [-FAR, 0.0] if span.low is None else [span.low, span.low + step]
     high = [FAR] if span.high is None else [span.high - step, span.high]
@@ -182,6 +183,7 @@ def random_levels(random: Random, most: int = 8) -> dict[str, list[float]]:
     values = {height: random.uniform(-9.0, 9.0) for height in heights}
     stiffnesses = {height: random.uniform(5.0, 5000.0) for height in heights}
     power = random.uniform(0.5, 2.0)
+    modes = [n + 1.0 for n in range(len({height for height, weight, _ in rows if weight > 0}))]
     by_story = {height: random.uniform(0.2, 1.0) for height in heights}
     return {
         "heights": [height for height, _, _ in rows],
@@ -203,6 +205,8 @@ def random_levels(random: Random, most: int = 8) -> dict[str, list[float]]:
         "rigidities": [random.uniform(0.5, 9.0) for _ in rows],
         "positions": [random.uniform(0.0, 200.0) for _ in rows],
         "distances": [random.uniform(-90.0, 90.0) for _ in rows],
+        "mode_numbers": modes,
+        "mode_coefficients": [random.uniform(0.01, 0.5) for _ in modes],
         "areas": [random.uniform(0.0, 9000.0) for _ in rows],
         "unit_loads": [random.uniform(0.0, 250.0) for _ in rows],
         **random_spectrum(random),
@@ -259,7 +263,7 @@ def _settle(call: dict[str, Any], levels: Mapping[str, list[float]], at: int, ra
 
 
 def _step(argument: Argument) -> float:
-    return 1.0 if argument.name in ("N", *ORDINALS) else STEP
+    return 1.0 if argument.name in ("N", *NUMBERS_OF_MODES) else STEP
 
 
 def _floats(value: Any) -> Any:

@@ -39,12 +39,11 @@ def refused(found: Any, code: str, *words: str) -> None:
         assert word in found.reason
 
 
-def with_rows(entry: SheetFunction, change: Any) -> list[Any]:
-    """The example with each level range put through ``change``."""
+def with_rows(entry: SheetFunction, change: Any, each: str = "") -> list[Any]:
+    """The example with each level range put through ``change``; with those of one kind of list alone."""
     call = full(entry)
-    return as_cells(
-        entry, {name: change(value) if isinstance(value, list) else value for name, value in call.items()}
-    )
+    ranges = [a.name for a in entry.arguments if a.kind is Kind.LEVELS and each in ("", a.each)]
+    return as_cells(entry, {**call, **{name: change(call[name]) for name in ranges}})
 
 
 @pytest.mark.parametrize(("entry", "argument"), PLACES, ids=ident)
@@ -189,13 +188,15 @@ def test_6_a_result_out_of_reach_of_arithmetic(name: str, cells: list[Any]) -> N
 
 @pytest.mark.parametrize("entry", WITH_LEVELS, ids=ident)
 def test_9_more_than_a_thousand_levels(entry: SheetFunction) -> None:
+    each = [a.each for a in entry.arguments if a.kind is Kind.LEVELS][-1]
+
     def rows(count: int) -> list[Any]:
         return with_rows(
             entry,
             lambda cells: cells + [cells[-1] * (1 + 1e-5 * n) for n in range(1, count - len(cells) + 1)],
+            each,
         )
 
-    each = next(a.each for a in entry.arguments if a.kind is Kind.LEVELS)
     refused(adapter.call(entry, rows(1001)), "#NUM!", f"1001 {each}s", f"1 to 1000 {each}s")
     assert not isinstance(adapter.call(entry, rows(1000)), CellError)
 

@@ -53,7 +53,7 @@ IN_WORDS = {
     # sums along the chain of stories, or over all pairs of modes
     *("ELF_DELTA_XE", "ELF_STORY_STIFFNESS", "ELF_MODE_PERIOD", "ELF_MODE_SHAPE", "ELF_MODE_PARTICIPATION"),
     *("ELF_MODE_MASS", "ELF_MODE_MASS_SUM", "ELF_MODES_NEEDED", "ELF_MODE_SHEAR"),
-    *("ELF_MODE_DISPLACEMENT", "ELF_MODE_DRIFT", "ELF_CQC"),
+    *("ELF_MODE_DISPLACEMENT", "ELF_MODE_DRIFT", "ELF_CQC", "ELF_MODAL_SHEAR", "ELF_MODAL_DRIFT"),
 }
 ARITHMETIC = [entry for entry in ENTRIES if not entry.is_text and entry.name not in IN_WORDS]
 

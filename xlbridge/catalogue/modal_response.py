@@ -35,6 +35,22 @@ PHI_X = Term("phi", "phi_xm", dynamics.mode_shape)
 GAMMA = Term("Gamma", "Gamma_m", dynamics.mode_participation)
 SHEAR = Term("shear", "V_xm", dynamics.modal_shear)
 
+mode_numbers = Argument(
+    "mode_numbers", "none", "Numbers of the modes, whole", Span(1), Kind.LEVELS, symbol="m", each="mode"
+)
+mode_coefficients = Argument(
+    *("mode_coefficients", "none", "Seismic response coefficients of the modes", POSITIVE, Kind.LEVELS),
+    symbol="C_sm",
+    each="mode",
+)
+combination = Argument(
+    "combination", "text", "Rule of combination", kind=Kind.CHOICE, choices=dynamics.COMBINATIONS
+)
+_TWO_MODES = {
+    **{"mode_numbers": [1.0, 2.0], "mode_coefficients": [0.1, 0.2], **FIVE},
+    **{"combination": "SRSS", "damping": 0.05},
+}
+
 FUNCTIONS = (
     SheetFunction(
         name="ELF_MODE_CS",
@@ -101,6 +117,33 @@ FUNCTIONS = (
         example=Example({"mode": 1.0, "h_x": 12.0, "C_sm": 0.1, **FIVE}, "1.394"),
         terms=(SHEAR,),
         note="Combine over the modes, then amplify by C_d/I_e; never take it from combined displacements.",
+    ),
+    SheetFunction(
+        name="ELF_MODAL_SHEAR",
+        summary="Story shear combined over modes by SRSS or CQC; at 0, the base shear.",
+        category=MODAL,
+        rule="modal_combination",
+        also=("modal_correlation",),
+        arguments=(h_at, mode_numbers, mode_coefficients, *MODEL, combination, damping),
+        result=Result("V_x", "force", "combined story shear"),
+        function=dynamics.combined_shear,
+        expression="{combination} of V_xm at {h_x} over the modes {mode_numbers} with C_sm = "
+        "{mode_coefficients}, of {weights} on {stiffnesses} at {heights}, {damping} of critical",
+        example=Example({"h_x": 12.0, **_TWO_MODES}, "44.83"),
+    ),
+    SheetFunction(
+        name="ELF_MODAL_DRIFT",
+        summary="Elastic drift of the story below a level combined over modes by SRSS or CQC.",
+        category=MODAL,
+        rule="modal_combination",
+        also=("modal_correlation",),
+        arguments=(h_x, mode_numbers, mode_coefficients, *MODEL, combination, damping),
+        result=Result("Delta_xe", "displacement", "combined elastic story drift"),
+        function=dynamics.combined_drift,
+        expression="{combination} of Delta_xem at {h_x} over the modes {mode_numbers} with C_sm = "
+        "{mode_coefficients}, of {weights} on {stiffnesses} at {heights}, {damping} of critical",
+        example=Example({"h_x": 12.0, **_TWO_MODES}, "1.421"),
+        note="Amplify it by C_d/I_e; never take a combined drift from combined displacements.",
     ),
     SheetFunction(
         name="ELF_SRSS",
