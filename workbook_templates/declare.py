@@ -141,7 +141,7 @@ class Table:
 
     ``base`` says what the row of the base holds, where the table has one; ``text`` is its line in the
     contents. A table without rows of its own starts with ``start`` rows; where that is 0, one a level, and
-    a building with levels must bring its rows.
+    a building with levels must bring its rows. ``at_most_levels`` starts it with no more rows than levels.
     """
 
     sheet: str
@@ -151,6 +151,13 @@ class Table:
     bands: tuple[Block, ...] = ()
     base: Mapping[str, str | int] = field(default_factory=dict)
     start: int = 0
+    at_most_levels: bool = False
+
+    def rows_at_start(self, level_count: int) -> int:
+        """Return how many rows a table without rows of its own starts with."""
+        if not self.start:
+            return level_count
+        return min(self.start, level_count) if self.at_most_levels else self.start
 
     @property
     def name(self) -> str:
@@ -184,12 +191,16 @@ class Headline:
 
 @dataclass(frozen=True, slots=True)
 class Figure:
-    """A chart of a level column over the height; ``bars`` draws it level by level, ``limit`` adds a line."""
+    """A chart of a level column over the height; ``bars`` draws it level by level, ``limit`` adds a line.
+
+    With ``beside`` it is one chart a direction, in which these columns stand beside it.
+    """
 
     key: str
     title: str
     bars: bool = False
     limit: float | None = None
+    beside: tuple[str, ...] = ()
 
 
 @dataclass(frozen=True, slots=True)

@@ -6,12 +6,12 @@ and keeps the workbook's status at "starter values": it can not be mistaken for 
 
 from __future__ import annotations
 
-from collections.abc import Mapping, Sequence
+from collections.abc import Collection, Mapping, Sequence
 from dataclasses import dataclass
 from typing import Any, Final
 
 from engine.errors import MissingValue, NotApplicable
-from workbook_templates.declare import DIRECTIONS, STARTER, Quantity, Start, Table
+from workbook_templates.declare import DIRECTIONS, STARTER, Part, Quantity, Start, Table
 from workbook_templates.parts import PARTS, with_required
 
 DEFAULT: Final = "default"
@@ -41,8 +41,13 @@ class Inputs:
 
     def rows(self, table: Table) -> Sequence[Entries]:
         """The rows of a table, in the order given; empty ones where none is given."""
-        rows: Sequence[Entries] = self.given.get(table.stored) or [{}] * (table.start or self.level_count)
-        return rows
+        rows: Sequence[Entries] = self.given.get(table.stored, ())
+        return rows or [{}] * table.rows_at_start(self.levels)
+
+    @property
+    def levels(self) -> int:
+        """The number of levels."""
+        return len(self.given.get("level", ())) or self.level_count
 
     @property
     def row_counts(self) -> dict[str, int]:
@@ -57,12 +62,14 @@ class Inputs:
         for key in asked:
             if key not in PARTS:
                 raise NotApplicable("parts", key, f"must be one of {', '.join(PARTS)}")
-        found = {key for key, part in PARTS.items() if part.needs and self._has(part.needs)}
+        found = {key for key, part in PARTS.items() if part.needs and self._has(self._needs(part, asked))}
         found |= {key for key, part in PARTS.items() if any(t.stored in self.given for t in part.tables)}
         found |= {key for key, part in PARTS.items() if self._criteria_entered & {*part.brought_by}}
         fitting = {key for key in found if self.edition in PARTS[key].editions}
         keys = with_required({*asked, *fitting})
         self._refuse_misfits(keys)
+        if "level" in self.given:
+            self._refuse_unfilled(keys)
         return keys
 
     @property
@@ -71,6 +78,18 @@ class Inputs:
         tables = [self._table(direction) for direction in (None, *DIRECTIONS)]
         pairs = {pair for table in tables for pair in table.items()}
         return {word for key, value in pairs for word in (key, f"{key} = {value}")}
+
+    def _needs(self, part: Part, keys: Collection[str]) -> tuple[str, ...]:
+        """The level entries without which a part can not be filled in, save those that others replace."""
+        replaced = [q for key in keys for q in PARTS[key].replaces]
+        given = {q.stored_key(d) for q in replaced for d in (None, *DIRECTIONS)}
+        return tuple(key for key in part.needs if key not in given)
+
+    def _refuse_unfilled(self, keys: frozenset[str]) -> None:
+        for key in keys:
+            needs = self._needs(PARTS[key], keys)
+            if needs and not self._has(needs):
+                raise MissingValue(needs[0], None, f"is needed at every level for the part {key}")
 
     def _refuse_misfits(self, keys: frozenset[str]) -> None:
         for key in keys:
@@ -93,7 +112,7 @@ class Inputs:
         """Return the value of a criteria entry."""
         value = self._table(direction).get(q.key)
         if value is None:
-            value = q.starter(Start(self.units, 0, self.level_count)) if q.starter else q.default
+            value = q.starter(Start(self.units, 0, self.levels)) if q.starter else q.default
         return {True: "yes", False: "no"}[value] if q.is_flag else value
 
     def source(self, q: Quantity, per_direction: bool) -> str:
@@ -108,7 +127,7 @@ class Inputs:
         """Return an entry of a row of a table, counted from the first."""
         if table.stored in self.given or ("level" in self.given and not table.start):
             return self._rows_needed(table)[number].get(q.stored_key(direction))
-        count = table.start or self.level_count
+        count = len(self.rows(table))
         return q.starter(Start(self.units, count - number, count)) if q.starter else q.default
 
     def _rows_needed(self, table: Table) -> Sequence[Entries]:

@@ -129,7 +129,7 @@ class Layout:
         """The parts that are in, in the order of the workbook."""
         return chosen(self.part_keys)
 
-    @property
+    @cached_property
     def criteria(self) -> list[Block]:
         """The criteria blocks of the parts that are in, one that several parts share once."""
         blocks = dict.fromkeys(block for part in self.parts for block in part.criteria)
@@ -143,7 +143,7 @@ class Layout:
         return [
             Grid(
                 replace(t, bands=tuple(self._standing(t.bands))),
-                self.row_counts.get(t.stored, t.start or self.level_count),
+                self.row_counts.get(t.stored, t.rows_at_start(self.level_count)),
             )
             for t in tables
         ]

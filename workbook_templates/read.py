@@ -85,15 +85,26 @@ class Reader:
         return [row for row in rows if any(row[i] is not None for i in inputs)]
 
     def _has(self, part: Part) -> bool:
-        """Whether its table stands, a column of it in the story table, or its first criteria row."""
+        """Whether its table stands, a column of it in the story table, or its first criteria row.
+
+        A part that only replaces an entry is there if that column is no entry any more.
+        """
         layout = Layout(1, frozenset({part.key}))
         if part.tables:
             return any(table.name in self._tables for table in part.tables)
         if layout.table:
             headings = self._headings(STORY_TABLE)
             return any(c.heading in headings for c in layout.table)
+        if not part.criteria:
+            return self._role(part.replaces[0]) == part.replaces[0].role.value[0]
         q = next(block for block in part.criteria if not block.without).quantities[0]
         return self._defined(layout.source_name(q.key) if q.is_input else layout.name(q.key, DIRECTIONS[0]))
+
+    def _role(self, q: Quantity) -> Scalar:
+        """The letter of the role of a column in the story table; blank where there is none."""
+        headings, *rows = self._tables[STORY_TABLE.name]
+        heading = f"{q.shown_symbol} {DIRECTIONS[0]}"
+        return rows[HEADER_ROWS - 2][headings.index(heading)] if heading in headings else None
 
     def _defined(self, name: str) -> bool:
         try:

@@ -6,8 +6,8 @@ from typing import Any
 
 import numpy as np
 
-from engine import drift, stability, vertical
-from engine.building.records import Building, Direction, level_label
+from engine import drift, dynamics, stability, vertical
+from engine.building.records import STIFFNESS_ROUTE, Building, Direction, level_label, level_values
 from engine.building.results import Package, texts
 from engine.errors import ImpossibleValue
 from engine.require import Array
@@ -26,19 +26,29 @@ def limits(building: Building, package: Package, given: Direction) -> dict[str, 
     }
 
 
-def drifts(building: Building, package: Package, name: str) -> dict[str, Any]:
-    """Return the design story drifts, where displacements are given."""
+def drifts(building: Building, package: Package, name: str, F_x: Array) -> dict[str, Any]:
+    """Return the design story drifts, where displacements are given or story stiffness gives them."""
     given, h = building.direction[name], package.h_x
-    elastic = [getattr(level, f"delta_xe_{name}") for level in building.level]
-    if elastic[0] is None:
+    computed = _from_stiffness(building, h, name, F_x)
+    elastic = level_values(building, f"delta_xe_{name}") if computed is None else computed
+    if elastic is None:
         return {}
     lower = vertical.value_below(h, elastic, h)
     Delta = drift.design_story_drift(elastic, lower, given.C_d, package.I_e)
     return {
+        **({} if computed is None else {"delta_xe": computed}),
         "delta_x": drift.amplified_deflection(elastic, given.C_d, package.I_e),
         "Delta": Delta,
         "drift_ratio": Delta / (package.h_sx * DISPLACEMENT_PER_LENGTH[building.units]),
     }
+
+
+def _from_stiffness(building: Building, h: Array, name: str, F_x: Array) -> Array | None:
+    """Return the elastic displacements of the shear building, where its part is asked for."""
+    K_x = level_values(building, f"K_x_{name}")
+    if STIFFNESS_ROUTE not in building.parts or K_x is None:
+        return None
+    return np.asarray(dynamics.elastic_displacement(h, F_x, K_x, h))
 
 
 def second_order(

@@ -26,7 +26,8 @@ class DirectionResult:
     """Every step of one plan direction; arrays hold the levels as listed, ``None`` what had no inputs.
 
     Drifts and their limits are in the displacement unit. ``Delta_amplified`` carries the factor for
-    P-delta, where vertical loads are given. ``more`` holds the results of further parts by their symbols.
+    P-delta, where vertical loads are given. ``delta_xe`` is a result where story stiffness gives it. ``more``
+    holds the results of further parts by their symbols.
     """
 
     T_a: float
@@ -50,6 +51,7 @@ class DirectionResult:
     Delta_a: Array
     beta_used: float
     theta_max: float
+    delta_xe: Array | None = None
     delta_x: Array | None = None
     Delta: Array | None = None
     drift_ratio: Array | None = None

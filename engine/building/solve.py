@@ -64,13 +64,10 @@ def solve(building: Building) -> Package:
 def _direction(building: Building, package: Package, name: str) -> DirectionResult:
     given = building.direction[name]
     found = strength.strength(building, package, name)
-    for step in (
-        strength.forces(package, found),
-        drifts.limits(building, package, given),
-        drifts.drifts(building, package, name),
-    ):
-        found |= step
-    V_x = of_displacements(building, package, name, found)[1]
+    found |= strength.forces(package, found)
+    found |= drifts.limits(building, package, given)
+    F_x, V_x = of_displacements(building, package, name, found)
+    found |= drifts.drifts(building, package, name, F_x)
     return DirectionResult(**found, **drifts.second_order(building, package, given, found, V_x))
 
 

@@ -17,6 +17,12 @@ from workbook_templates.layout import CRITERIA, FIGURES, LEVELS, TOP_GUARD, Layo
 
 #: direction -> colour and dash; they differ in lightness too, so they hold in black and white.
 LINES = {"X": ("1F3A5F", "solid"), "Y": ("B8651B", "sysDash")}
+#: the same for lines in one chart, with a marker; a third one for what stands beside
+STROKES = (
+    (*LINES["X"], "circle"),
+    (*LINES["Y"], "diamond"),
+    ("5B7F3A", "lgDash", "triangle"),
+)
 LIMIT_ROW = 4
 WIDTH, HEIGHT, ROWS = 19.0, 7.6, 16  # cm, cm, sheet rows: three charts on one upright page
 
@@ -26,12 +32,12 @@ def draw(book: Mapping[str, Worksheet], layout: Layout, inputs: Inputs) -> None:
     sheet, levels = book[FIGURES], book[LEVELS]
     sheets.head(sheet, "Figures")
     sheet.column_dimensions["A"].width = 30
-    figures = [figure for part in layout.parts for figure in part.figures]
-    limited = [figure for figure in figures if figure.limit is not None]
+    figures = [one for part in layout.parts for figure in part.figures for one in _split(figure)]
+    limited = [figure for figure, _ in figures if figure.limit is not None]
     top = LIMIT_ROW + len(limited) + 1
-    for number, figure in enumerate(figures):
+    for number, (figure, directions) in enumerate(figures):
         draw_one = _bars if figure.bars else _profile
-        chart = draw_one(levels, layout, inputs, figure)
+        chart = draw_one(levels, layout, inputs, figure, directions)
         if figure in limited:
             chart.series.append(_limit_line(sheet, figure, LIMIT_ROW + limited.index(figure)))
         _place(sheet, chart, top + ROWS * number)
@@ -40,6 +46,11 @@ def draw(book: Mapping[str, Worksheet], layout: Layout, inputs: Inputs) -> None:
         _place(sheet, _curves(book, layout, inputs, curve), top + ROWS * number)
     sheets.page(sheet, inputs.units, "1:2", landscape=False)
     sheet.page_setup.fitToHeight = 1
+
+
+def _split(figure: Figure) -> list[tuple[Figure, tuple[str, ...]]]:
+    """One chart for both directions, or one for each where further columns stand beside it."""
+    return [(figure, (d,)) for d in DIRECTIONS] if figure.beside else [(figure, DIRECTIONS)]
 
 
 def _place(sheet: Worksheet, chart: BarChart | ScatterChart, row: int) -> None:
@@ -94,11 +105,13 @@ def _range(levels: Worksheet, layout: Layout, key: str, direction: str | None) -
     return Reference(levels, min_col=column, min_row=TOP_GUARD, max_row=layout.bottom_guard)
 
 
-def _bars(levels: Worksheet, layout: Layout, inputs: Inputs, figure: Figure) -> BarChart:
+def _bars(
+    levels: Worksheet, layout: Layout, inputs: Inputs, figure: Figure, directions: tuple[str, ...]
+) -> BarChart:
     """A quantity level by level."""
     chart = BarChart()
     chart.type, chart.gapWidth = "bar", 60
-    for direction in DIRECTIONS:
+    for direction in directions:
         series = Series(_range(levels, layout, figure.key, direction), title=f"Direction {direction}")
         series.graphicalProperties = GraphicalProperties(solidFill=LINES[direction][0])
         chart.series.append(series)
@@ -110,18 +123,24 @@ def _bars(levels: Worksheet, layout: Layout, inputs: Inputs, figure: Figure) -> 
     return chart
 
 
-def _profile(levels: Worksheet, layout: Layout, inputs: Inputs, figure: Figure) -> ScatterChart:
+def _profile(
+    levels: Worksheet, layout: Layout, inputs: Inputs, figure: Figure, directions: tuple[str, ...]
+) -> ScatterChart:
     """A quantity over the height above the base."""
     chart = ScatterChart()
     chart.style, chart.scatterStyle = 13, "lineMarker"
-    for direction in DIRECTIONS:
-        x, y = _range(levels, layout, figure.key, direction), _range(levels, layout, "h_x", None)
-        series = Series(y, x, title=f"Direction {direction}")
-        _stroke(series, *LINES[direction])
-        series.marker.symbol, series.marker.size = ("circle" if direction == "X" else "diamond"), 6
+    places = [(key, direction) for key in (figure.key, *figure.beside) for direction in directions]
+    names = {c.quantity.key: c.quantity.shown_symbol for c in layout.table}
+    for (key, direction), (colour, dash, marker) in zip(places, STROKES, strict=False):
+        x, y = _range(levels, layout, key, direction), _range(levels, layout, "h_x", None)
+        series = Series(y, x, title=names[key] if figure.beside else f"Direction {direction}")
+        _stroke(series, colour, dash)
+        series.marker.symbol, series.marker.size = marker, 6
         chart.series.append(series)
     chart.x_axis.scaling.min = chart.y_axis.scaling.min = 0
     title = _title(layout, inputs, figure)
+    if figure.beside:
+        title = f"{title}, direction {directions[0]}"
     _finish(chart, title, title, f"Height above base h_x [{symbol('length', inputs.units)}]")
     return chart
 

@@ -13,12 +13,14 @@ from workbook_templates.parts import (
     drift_forces,
     ground_motion,
     irregularity,
+    modal,
     multi_period,
     period_sources,
     periods,
     redundancy,
     short_building,
     spectrum,
+    stiffness_route,
     story,
     torsion,
     weights,
@@ -46,10 +48,12 @@ PARTS: Final = MappingProxyType(
             torsion.PART,
             torsion.INHERENT,
             irregularity.STIFFNESS_PART,
+            stiffness_route.PART,
             irregularity.PART,
             redundancy.PART,
             diaphragm.PART,
             spectrum.PART,
+            modal.PART,
         )
     }
 )

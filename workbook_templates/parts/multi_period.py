@@ -203,6 +203,16 @@ FOR_DRIFT = (
     ),
 )
 
+#: the modal comparison reads the same spectrum
+MODAL = Quantity(
+    "S_am",
+    "Design spectral acceleration",
+    "acceleration",
+    CALC,
+    f"=ELF_SA_MULTI({{T_m}},{_PAIRS},{{T_L}},{{tail}})",
+    width=12,
+)
+
 CHECKS = (
     Check("Every period has an ordinate", "=COUNT({S_a_given:all})", "=COUNT({T_i:all})"),
     Check(
@@ -227,7 +237,7 @@ PART = Part(
         METHOD,
     ),
     tables=(TABLE,),
-    replaces=(*_design(f"={_SHORT}", f"={_SECOND}"), *RESPONSE, *FOR_DRIFT),
+    replaces=(*_design(f"={_SHORT}", f"={_SECOND}"), *RESPONSE, *FOR_DRIFT, MODAL),
     checks=CHECKS,
     curves=(Curve("Multi-period spectrum", "T_i", ("S_ai", "S_aMi"), ("T", "S_a_multi")),),
     editions=("7-22",),

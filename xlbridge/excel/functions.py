@@ -2473,6 +2473,102 @@ def ELF_MODE_DRIFT(mode: Any, h_x: Any, C_sm: Any, weights: Any, stiffnesses: An
 
 
 @xw.func(category="Storyledger: Modal response")
+@xw.arg("h_x", "raw", doc="Height of level x above the base, or 0 for the base [a length unit], at least 0.")
+@xw.arg("mode_numbers", "raw", doc="Numbers of the modes, whole [no unit], one cell a mode, at least 1.")
+@xw.arg(
+    "mode_coefficients",
+    "raw",
+    doc="Seismic response coefficients of the modes [no unit], one cell a mode, above 0.",
+)
+@xw.arg(
+    "weights",
+    "raw",
+    doc="Effective seismic weights of all levels [a force unit], one cell a level, at least 0.",
+)
+@xw.arg(
+    "stiffnesses",
+    "raw",
+    doc="Stiffness of the story below each level [a stiffness unit], one cell a level, above 0.",
+)
+@xw.arg(
+    "heights", "raw", doc="Heights of all levels above the base [a length unit], one cell a level, above 0."
+)
+@xw.arg("combination", "raw", doc="Rule of combination: SRSS, CQC.")
+@xw.arg("damping", "raw", doc="Damping ratio of the modes, 0.05 for 5 % [no unit], above 0 and at most 1.")
+@xw.ret("raw")
+def ELF_MODAL_SHEAR(
+    h_x: Any,
+    mode_numbers: Any,
+    mode_coefficients: Any,
+    weights: Any,
+    stiffnesses: Any,
+    heights: Any,
+    combination: Any,
+    damping: Any,
+) -> Any:
+    """Story shear combined over modes by SRSS or CQC; at 0, the base shear. ASCE/SEI 7-16: 12.9.1.3; 7-22: 12.9.1.3. Partly from memory: confirm."""
+    return call(
+        "ELF_MODAL_SHEAR",
+        h_x,
+        mode_numbers,
+        mode_coefficients,
+        weights,
+        stiffnesses,
+        heights,
+        combination,
+        damping,
+    )
+
+
+@xw.func(category="Storyledger: Modal response")
+@xw.arg("h_x", "raw", doc="Height of level x above the base [a length unit], above 0.")
+@xw.arg("mode_numbers", "raw", doc="Numbers of the modes, whole [no unit], one cell a mode, at least 1.")
+@xw.arg(
+    "mode_coefficients",
+    "raw",
+    doc="Seismic response coefficients of the modes [no unit], one cell a mode, above 0.",
+)
+@xw.arg(
+    "weights",
+    "raw",
+    doc="Effective seismic weights of all levels [a force unit], one cell a level, at least 0.",
+)
+@xw.arg(
+    "stiffnesses",
+    "raw",
+    doc="Stiffness of the story below each level [a stiffness unit], one cell a level, above 0.",
+)
+@xw.arg(
+    "heights", "raw", doc="Heights of all levels above the base [a length unit], one cell a level, above 0."
+)
+@xw.arg("combination", "raw", doc="Rule of combination: SRSS, CQC.")
+@xw.arg("damping", "raw", doc="Damping ratio of the modes, 0.05 for 5 % [no unit], above 0 and at most 1.")
+@xw.ret("raw")
+def ELF_MODAL_DRIFT(
+    h_x: Any,
+    mode_numbers: Any,
+    mode_coefficients: Any,
+    weights: Any,
+    stiffnesses: Any,
+    heights: Any,
+    combination: Any,
+    damping: Any,
+) -> Any:
+    """Elastic drift of the story below a level combined over modes by SRSS or CQC. ASCE/SEI 7-16: 12.9.1.3; 7-22: 12.9.1.3. Partly from memory: confirm."""
+    return call(
+        "ELF_MODAL_DRIFT",
+        h_x,
+        mode_numbers,
+        mode_coefficients,
+        weights,
+        stiffnesses,
+        heights,
+        combination,
+        damping,
+    )
+
+
+@xw.func(category="Storyledger: Modal response")
 @xw.arg(
     "values", "raw", doc="Response in each mode, with its sign [any one unit], one cell a mode, any number."
 )

@@ -1403,6 +1403,22 @@ failed:
     ELF_MODE_DRIFT = CVErr(2015)
 End Function
 
+Public Function ELF_MODAL_SHEAR(h_x, mode_numbers, mode_coefficients, weights, stiffnesses, heights, combination, damping)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_MODAL_SHEAR = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_MODAL_SHEAR", Array(Contents(h_x), Contents(mode_numbers), Contents(mode_coefficients), Contents(weights), Contents(stiffnesses), Contents(heights), Contents(combination), Contents(damping)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_MODAL_SHEAR = CVErr(2015)
+End Function
+
+Public Function ELF_MODAL_DRIFT(h_x, mode_numbers, mode_coefficients, weights, stiffnesses, heights, combination, damping)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    ELF_MODAL_DRIFT = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_MODAL_DRIFT", Array(Contents(h_x), Contents(mode_numbers), Contents(mode_coefficients), Contents(weights), Contents(stiffnesses), Contents(heights), Contents(combination), Contents(damping)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    ELF_MODAL_DRIFT = CVErr(2015)
+End Function
+
 Public Function ELF_SRSS(values)
     If TypeOf Application.Caller Is Range Then On Error GoTo failed
     ELF_SRSS = WithErrors(XLPy.CallUDF("xlbridge.excel.functions", "ELF_SRSS", Array(Contents(values)), ThisWorkbook, Application.Caller))

@@ -2,7 +2,9 @@
 
 from __future__ import annotations
 
-from collections.abc import Callable, Mapping, Sequence
+import gc
+from collections.abc import Callable, Iterator, Mapping, Sequence
+from contextlib import contextmanager
 from dataclasses import dataclass
 from functools import partial
 from pathlib import Path
@@ -67,8 +69,21 @@ def open_workbook(path: Path) -> Evaluator:
 
 def compute(path: Path) -> Computed:
     """Evaluate every formula cell of a workbook."""
-    evaluator = open_workbook(path)
-    return Computed(evaluator, evaluator.evaluate_all())
+    with _no_collection():
+        evaluator = open_workbook(path)
+        return Computed(evaluator, evaluator.evaluate_all())
+
+
+@contextmanager
+def _no_collection() -> Iterator[None]:
+    """Keep the collector of cycles from walking through all cells again and again: none is garbage yet."""
+    was_enabled = gc.isenabled()
+    gc.disable()
+    try:
+        yield
+    finally:
+        if was_enabled:
+            gc.enable()
 
 
 def compute_into(source: Path, target: Path, force: bool = False) -> Computed:

@@ -64,6 +64,7 @@ class Interpreter:
         self._read = read
         self._read_cell = read_cell
         self._observer = observer
+        self._definitions: dict[tuple[str, str | None, str | None], Node] = {}
         self._rules: dict[type, Callable[[Any, Place, bool], Operand]] = {
             Constant: lambda node, place, array: node.value,
             ArrayConstant: lambda node, place, array: node.rows,
@@ -145,7 +146,10 @@ class Interpreter:
             raise NotEvaluated(f"the name {node.name} is defined by itself")
         sheet = self._sheet(node, place) if node.sheet is not None else place.sheet
         inner = Place(place.cell, place.sheet, (*place.names, key))
-        return self.evaluate(definition(self._book, node, sheet), inner, True)
+        defined = (key, sheet, node.sheet)
+        if defined not in self._definitions:
+            self._definitions[defined] = definition(self._book, node, sheet)
+        return self.evaluate(self._definitions[defined], inner, True)
 
     def _table(self, node: TableReference, place: Place, array: bool) -> Operand:
         table = self._table_at(place) if node.table is None else self._book.tables.get(node.table.casefold())
@@ -203,11 +207,19 @@ class Interpreter:
         return self._builtin(node, builtin, place, array or builtin.array)
 
     def _custom(self, node: Call, function: Function, place: Place, array: bool) -> Value:
-        arguments = tuple(_argument(self.evaluate(part, place, array)) for part in node.arguments)
+        arguments = tuple([self._given(part, place, array) for part in node.arguments])
         result = function(arguments)
         if self._observer is not None:
             self._observer(node, arguments, result)
         return result
+
+    def _given(self, node: Node, place: Place, array: bool) -> Argument:
+        """What a custom function gets for an argument; the short way for a single cell."""
+        if type(node) is Reference:
+            top, left, bottom, right = node.bounds
+            if top == bottom and left == right:
+                return self._read_cell(self._sheet(node, place), top, left)
+        return _argument(self.evaluate(node, place, array))
 
     def _builtin(self, node: Call, builtin: Builtin, place: Place, array: bool) -> Operand:
         kinds = builtin.kinds(len(node.arguments))

@@ -11,6 +11,7 @@ from engine.building.parts import (
     drift_forces,
     ground_motion,
     irregularity,
+    modal,
     multi_period,
     periods,
     redundancy,
@@ -91,4 +92,6 @@ STEPS: Final[tuple[Step, ...]] = (
     _whole_building(irregularity.whole, irregularity.BUILDING_RULES),
     _each_direction(redundancy.solve, redundancy.RULES),
     _each_direction(diaphragm.solve, diaphragm.RULES),
+    _whole_building(modal.whole, modal.RULES),
+    _each_direction(modal.solve, (*modal.RULES, *modal.SCALING_RULES)),
 )

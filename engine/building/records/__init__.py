@@ -5,13 +5,14 @@ Heights and weights in the unit system's length and force units, displacements i
 
 from __future__ import annotations
 
-from engine.building.records.building import Building, level_values
+from engine.building.records.building import STIFFNESS_ROUTE, Building, level_values
 from engine.building.records.direction import DIRECTIONS, DRIFT_BASES, METHODS, Direction
 from engine.building.records.fields import may_be_left_out
 from engine.building.records.level import Level, level_label
 from engine.building.records.rows import (
     ROW_TABLES,
     WEIGHT_KINDS,
+    ModeRow,
     MotionRow,
     SpectrumRow,
     WallRow,
@@ -25,10 +26,12 @@ __all__ = [
     "DRIFT_BASES",
     "METHODS",
     "ROW_TABLES",
+    "STIFFNESS_ROUTE",
     "WEIGHT_KINDS",
     "Building",
     "Direction",
     "Level",
+    "ModeRow",
     "MotionRow",
     "Site",
     "SpectrumRow",

@@ -4,6 +4,7 @@ from __future__ import annotations
 
 from collections.abc import Mapping
 from dataclasses import asdict, dataclass, field
+from typing import Final
 
 import numpy as np
 
@@ -11,13 +12,24 @@ from engine.building.records.direction import DIRECTIONS, Direction
 from engine.building.records.fields import check_fields, checked, is_list_of_texts, is_text, word
 from engine.building.records.level import LEVEL_OPTIONS, Level, level_label
 from engine.building.records.motion import check_method, check_motion
-from engine.building.records.rows import ROW_TABLES, MotionRow, SpectrumRow, WallRow, WeightRow, row_label
+from engine.building.records.rows import (
+    ROW_TABLES,
+    ModeRow,
+    MotionRow,
+    SpectrumRow,
+    WallRow,
+    WeightRow,
+    row_label,
+)
 from engine.building.records.site import Site
 from engine.editions import EDITIONS
 from engine.errors import ImpossibleValue, MissingValue, NotApplicable
 from engine.levels import MAX_LEVELS
 from engine.require import Array, choice
 from engine.units import SYSTEMS
+
+#: the part of the workbook in which story stiffness gives the elastic displacements
+STIFFNESS_ROUTE: Final = "stiffness_route"
 
 
 @dataclass(frozen=True, slots=True, kw_only=True)
@@ -37,6 +49,7 @@ class Building:
     spectrum: tuple[SpectrumRow, ...] = ()
     multi_period: tuple[MotionRow, ...] = ()
     wall: tuple[WallRow, ...] = ()
+    mode: tuple[ModeRow, ...] = ()
     job: Mapping[str, object] = field(default_factory=dict)
     sources: Mapping[str, str] = field(default_factory=dict)
     parts: tuple[str, ...] = checked(is_list_of_texts, ())
@@ -56,6 +69,8 @@ class Building:
         for table in ROW_TABLES:
             for place, row in enumerate(getattr(self, table), start=1):
                 check_fields(f"{row_label(table, place, asdict(row))}: ", row)
+        if STIFFNESS_ROUTE in self.parts:
+            _check_route(self.level)
         if self.weight:
             _check_take_off(self.weight, self.level)
         else:
@@ -82,6 +97,15 @@ def _check_levels(levels: tuple[Level, ...], base: float) -> None:
         for optional in LEVEL_OPTIONS:
             if (getattr(level, optional) is None) != (getattr(levels[0], optional) is None):
                 raise _half_filled(levels, optional)
+
+
+def _check_route(levels: tuple[Level, ...]) -> None:
+    for key in (f"delta_xe_{name}" for name in DIRECTIONS):
+        if (value := getattr(levels[0], key)) is not None:
+            label = f"{level_label(1, levels[0].name)}: {key}"
+            raise NotApplicable(
+                label, value, f"must be left out where the part {STIFFNESS_ROUTE} computes it"
+            )
 
 
 def _check_weights(levels: tuple[Level, ...]) -> None:

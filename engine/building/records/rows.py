@@ -8,7 +8,7 @@ from types import MappingProxyType
 from typing import Any, ClassVar, Final
 
 from engine.building.records.direction import DIRECTIONS
-from engine.building.records.fields import NOT_NEGATIVE, POSITIVE, checked, is_text, number, word
+from engine.building.records.fields import NOT_NEGATIVE, POSITIVE, checked, is_count, is_text, number, word
 
 WEIGHT_KINDS: Final = (
     *("dead", "partition", "storage", "garage storage", "snow", "equipment", "landscaping"),
@@ -65,9 +65,24 @@ class WallRow:
     source: str | None = checked(is_text, None)
 
 
+@dataclass(frozen=True, slots=True, kw_only=True)
+class ModeRow:
+    """One mode of the story model that the modal comparison takes in, 1 for the longest period."""
+
+    NAMED_BY: ClassVar = ""
+
+    number: float = number(is_count)
+
+
 #: the tables of a BUILDING.toml beside the story table, with the record of a row
 ROW_TABLES: Final[Mapping[str, type[Any]]] = MappingProxyType(
-    {"weight": WeightRow, "spectrum": SpectrumRow, "multi_period": MotionRow, "wall": WallRow}
+    {
+        "weight": WeightRow,
+        "spectrum": SpectrumRow,
+        "multi_period": MotionRow,
+        "wall": WallRow,
+        "mode": ModeRow,
+    }
 )
 
 

@@ -16,9 +16,11 @@ from engine.building.records.fields import (
     number,
     word,
 )
+from engine.dynamics import COMBINATIONS
 from engine.hazard import LONG_EXCEPTIONS, READINGS, SHORT_EXCEPTIONS, TABLE_SITE_CLASSES, TAILS
 from engine.irregularity import DIAPHRAGMS
 from engine.occupancy import DESIGN_CATEGORIES, RISK_CATEGORIES
+from engine.require import above, within
 
 #: what the rows of a spectrum hold
 ORDINATES_GIVEN: Final = ("MCE_R", "design")
@@ -81,7 +83,21 @@ class PeriodSiteEntries:
 
 
 @dataclass(frozen=True, kw_only=True)
-class Site(MotionEntries, ShortBuildingEntries, PeriodSiteEntries, PlanEntries):
+class ModalEntries:
+    """How the modal comparison combines modes."""
+
+    combination: str = word(COMBINATIONS, COMBINATIONS[1])
+    damping: float = number(lambda name, value: above(0, name, within(0, 1, name, value)), 0.05)
+
+
+@dataclass(frozen=True, kw_only=True)
+class Site(
+    MotionEntries,
+    ShortBuildingEntries,
+    PeriodSiteEntries,
+    PlanEntries,
+    ModalEntries,
+):
     """What holds for the building: S_1 [g], T_L [s], Risk Category, elevation of the base [ft or m]."""
 
     S_1: float = number(NOT_NEGATIVE)
