@@ -11,7 +11,7 @@ from numpy.typing import ArrayLike
 from engine.dynamics.combination import complete_combination, square_root_of_squares
 from engine.dynamics.modes import mode_period
 from engine.dynamics.response import modal_drift, modal_shear
-from engine.require import Result, above, at_least, choice, finite, formula
+from engine.require import Result, above, at_least, at_most, choice, finite, formula
 
 #: the rules of combination that are computed
 COMBINATIONS: Final = ("SRSS", "CQC")
@@ -105,7 +105,7 @@ def _combined(
     """Combine a response over modes that stand on a last axis of their own."""
     numbers = np.atleast_1d(at_least(1, "mode_numbers", modes[0]))
     C_sm = np.atleast_1d(above(0, "mode_coefficients", modes[1]))
-    zeta = above(0, "damping", damping)
+    zeta = above(0, "damping", at_most(1, "damping", damping))
     w, K, h = (
         np.atleast_1d(finite(name, column))[..., None, :] for name, column in zip(MODEL, model, strict=True)
     )
