@@ -169,6 +169,16 @@ class TestStiffnessRoute:
         assert "stiffness_route" in back["parts"]
         assert not any(key.startswith("delta") for level in back["level"] for key in level)
 
+    def test_the_forces_for_drift_drive_them_where_they_are_chosen(self, tmp_path: Path) -> None:
+        tables = self.route()
+        tables["direction"]["X"] |= {"drift_basis": "drift forces", "T_computed": 2.0}
+        found = x(tables)
+        assert found.delta_xe is not None
+        V = found.more["V_x_drift"]
+        assert V[-1] < found.V_x[-1]
+        assert found.delta_xe[-1] == pytest.approx(V[-1] / 31.54)
+        assert_routes_agree(story_book(tmp_path, tables), 150)
+
     def test_displacements_given_as_well_are_refused(self) -> None:
         tables = self.route()
         for level in tables["level"]:
