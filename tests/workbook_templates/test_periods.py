@@ -11,6 +11,7 @@ import pytest
 from engine import period
 from engine.building.parts.periods import NO_COMPUTED
 from engine.errors import MissingValue
+from tests.support import office as offices
 from tests.support.story_books import assert_routes_agree, story_book
 from workbook_templates.declare import Check
 from workbook_templates.inputs import Inputs
@@ -191,6 +192,35 @@ def test_the_line_sees_its_fault(tmp_path: Path, check: Check) -> None:
     book[sheet][address] = value
     book.save(path)
     assert verdicts(path)[check.text] != "✓ holds"
+
+
+@pytest.mark.parametrize("row", ["top", "bottom"])
+def test_walls_put_in_count(office: offices.Office, tmp_path: Path, row: str) -> None:
+    grid = LAYOUT.grid("wall_name")
+    place = FIRST_LEVEL if row == "top" else grid.bottom_guard
+    last = grid.columns[-1].letter
+    given = BLANK | {"direction": {d: {"T_a_rule": "shear walls"} for d in ("X", "Y")}}
+    path = story_book(tmp_path, given, COUNT)
+    before = results(compute(path))["C_w"] + results(compute(path), "Y")["C_w"]
+    with office.open(path, recalculate=False) as book:
+        book.insert_rows("Walls", place)
+        if row == "top":
+            book.fill_up("Walls", f"A{place}:{last}{place + 1}")
+        else:
+            book.fill_down("Walls", f"A{place - 1}:{last}{place}")
+        edited = book.store(tmp_path / "edited.xlsx")
+    computed = assert_routes_agree(edited, LEAST)
+    after = results(computed)["C_w"] + results(computed, "Y")["C_w"]
+    assert after == pytest.approx(before * (COUNT + 1) / COUNT)
+
+
+def test_levels_in_any_order_and_two_at_one_height(tmp_path: Path) -> None:
+    given = tables(tmp_path)
+    first, second, *rest = given["level"]
+    given["level"] = [second, *rest[::-1], first, {**first, "name": "Penthouse"}]
+    for source in periods.SOURCES[1:]:
+        given["direction"] = {d: entries | {"T_source": source} for d, entries in given["direction"].items()}
+        assert_routes_agree(story_book(tmp_path, given, name=f"{source}.xlsx"), LEAST)
 
 
 def test_doubts_are_marked_at_their_rows(tmp_path: Path) -> None:

@@ -3,7 +3,7 @@
 from __future__ import annotations
 
 import json
-from collections.abc import Iterator, Mapping
+from collections.abc import Iterable, Iterator, Mapping
 from dataclasses import fields
 from types import MappingProxyType
 from typing import Any, Final
@@ -27,7 +27,7 @@ def command(part: str | None, as_json: bool) -> None:
     """List the entries of a BUILDING.toml, or those of one PART of the workbook."""
     if part is not None and part not in PARTS:
         raise Refusal(f"{part}: no such part; the parts are {', '.join(PARTS)}")
-    found = [entry for entry in entries() if part in (None, entry["part"])]
+    found = entries() if part is None else entries([PARTS[part]])
     if as_json:
         click.echo(json.dumps(found, indent=1, ensure_ascii=False))
         return
@@ -38,11 +38,11 @@ def command(part: str | None, as_json: bool) -> None:
         click.echo(f"{key:<{width}}  {entry['text']}{unit}; {entry['allowed']}; {entry['left_out']}")
 
 
-def entries() -> list[dict[str, Any]]:
-    """Return every entry once, in the order of the workbook."""
+def entries(parts: Iterable[Part] = tuple(PARTS.values())) -> list[dict[str, Any]]:
+    """Return every entry of these parts once, in the order of the workbook."""
     found = [
         _entry(part, table, q, block.per_direction)
-        for part in PARTS.values()
+        for part in parts
         for table, block in _blocks(part)
         for q in block.quantities
         if q.is_input

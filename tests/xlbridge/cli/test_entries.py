@@ -49,3 +49,9 @@ def test_an_unknown_part_is_refused_with_the_known_ones() -> None:
     done = run("entries", "roof")
     assert done.code == 3
     assert "roof: no such part; the parts are " in done.err
+
+
+@pytest.mark.parametrize("part", ["short_building", "periods"])
+def test_an_entry_that_parts_share_is_listed_with_each(part: str) -> None:
+    lines = run("entries", part).out.splitlines()
+    assert "site.N" in [line.split()[0] for line in lines]
