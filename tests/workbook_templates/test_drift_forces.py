@@ -112,6 +112,20 @@ def test_the_capped_S_DS_serves_for_drift_too(tmp_path: Path, T_computed: float)
     assert X["C_s_drift"] == pytest.approx(1.12 / 3)
 
 
+@pytest.mark.parametrize("basis", DRIFT_BASES)
+def test_story_stiffness_from_the_period_to_theta(tmp_path: Path, basis: str) -> None:
+    """Of K_x alone: T, both sets of forces, displacements; theta = P_x/(K_x h_sx) by mechanics."""
+    parts = ["drift_forces", "stiffness_period", "stiffness_route"]
+    entries = {"T_source": "story stiffness", "drift_basis": basis}
+    path = story_book(tmp_path, {**BLANK, "parts": parts, "direction": {"X": entries}}, COUNT)
+    computed = assert_routes_agree(path, LEAST)
+    X, levels = results(computed), Reader(computed.evaluator.evaluate_text).inputs()["level"]
+    assert X["T_drift"] == X["T_stiffness"] > X["T"] == X["T_max"]
+    assert X["V_drift"] < X["V"]
+    expected = [level["P_x"] / (level["K_x_X"] * 13 * 12) for level in levels]
+    assert X["theta"] == pytest.approx(expected, rel=1e-12)
+
+
 def verdict(path: Path, text: str) -> str:
     evaluator, sheet = compute(path).evaluator, openpyxl.load_workbook(path)["Checks"]
     rows = [row for row in range(11, sheet.max_row + 1) if sheet[f"B{row}"].value == text]

@@ -170,6 +170,7 @@ def edit_of(check: Check) -> tuple[str, str, object]:
     below = LAYOUT.grid("wall_name").base_row
     edits = {
         periods.PART.checks[0].text: ("Criteria", LAYOUT.criteria_cell("T_a_rule", "X"), "0.1 N"),
+        periods.PART.checks[1].text: ("Criteria", LAYOUT.criteria_cell("T_computed", "Y"), 0.6),
         walls[0].text: ("Walls", cell("wall_direction", direction=None), "N"),
         walls[1].text: ("Walls", cell("wall_area", direction=None), None),
         walls[2].text: ("Walls", cell("wall_name", below, None), "Wall 9"),
@@ -186,12 +187,15 @@ def test_every_line_holds_before_any_edit(tmp_path: Path) -> None:
 
 @pytest.mark.parametrize("check", [c for part in LINES for c in part.checks], ids=lambda check: check.text)
 def test_the_line_sees_its_fault(tmp_path: Path, check: Check) -> None:
-    path = story_book(tmp_path, BLANK, COUNT)
+    given = BLANK | {"direction": {"Y": {"T_source": "Rayleigh"}}}
+    path = story_book(tmp_path, given, COUNT)
+    assert verdicts(path)[check.text] == "✓ holds"
     book = openpyxl.load_workbook(path)
     sheet, address, value = edit_of(check)
     book[sheet][address] = value
     book.save(path)
-    assert verdicts(path)[check.text] != "✓ holds"
+    found = verdicts(path)[check.text]
+    assert found == "! look" if check.warning else found not in ("✓ holds", "! look")
 
 
 @pytest.mark.parametrize("row", ["top", "bottom"])

@@ -165,6 +165,13 @@ PART = Part(
             "=0",
             per_direction=True,
         ),
+        Check(
+            "No period is entered where it is taken from elsewhere",
+            f'=({{T_source}}<>"{ENTERED}")*ISNUMBER({{T_computed}})',
+            "=0",
+            per_direction=True,
+            warning=True,
+        ),
     ),
     brought_by=("T_a_rule", "T_source"),
 )
