@@ -9,10 +9,10 @@ from engine import base_shear, hazard, period, vertical
 from engine.building.parts.ground_motion import coefficient_increase, increased
 from engine.building.parts.multi_period import method_1_ordinate
 from engine.building.parts.short_building import S_DS_in_C_s
-from engine.building.records import DRIFT_BASES, METHODS, Building
+from engine.building.records import DRIFT_BASES, METHODS, Building, Direction
 from engine.building.results import Package
 from engine.editions import EDITIONS
-from engine.require import Array
+from engine.require import Array, Words
 
 
 def drift_forces(building: Building, package: Package, name: str, known: Mapping[str, Any]) -> dict[str, Any]:
@@ -49,22 +49,29 @@ def of_displacements(
 def _response(building: Building, package: Package, name: str, T: float, T_strength: float) -> dict[str, Any]:
     """Return C_s without the minimum of 0.044 S_DS I_e, with what it is made of."""
     site, given, I_e = building.site, building.direction[name], package.I_e
-    S_DS, R = S_DS_in_C_s(building, T_strength), given.R
     S_a = _ordinate(building, T)
-    cap = float(base_shear.coefficient_cap(site.S_D1, T, site.T_L, R, I_e))
-    case: tuple[Any, ...]
     if given.C_s_method == METHODS[1]:
-        case = S_a, site.S_1, R, I_e, building.edition
-        C_s = float(base_shear.drift_coefficient_multi(*case))
-        governs = base_shear.drift_bound_multi(*case)
+        case = S_a, site.S_1, given.R, I_e, building.edition
+        C_s, governs = float(base_shear.drift_coefficient_multi(*case)), base_shear.drift_bound_multi(*case)
     else:
-        case = S_DS, site.S_D1, site.S_1, T, site.T_L, R, I_e, building.edition
-        C_s, governs = float(base_shear.drift_coefficient(*case)), base_shear.drift_bound(*case)
-        if (factor := coefficient_increase(site, T)) > 1:
-            upper = factor * min(float(base_shear.coefficient_plateau(S_DS, R, I_e)), cap)
-            lower = float(base_shear.coefficient_minimum_near_fault(site.S_1, R, I_e))
-            C_s, governs = increased(upper, lower, str(governs))
+        C_s, governs = _two_period(building, given, I_e, T, S_DS_in_C_s(building, T_strength))
+    cap = float(base_shear.coefficient_cap(site.S_D1, T, site.T_L, given.R, I_e))
     return {"S_a_drift": S_a, "C_s_cap_drift": cap, "C_s_drift": C_s, "drift_bound": str(governs)}
+
+
+def _two_period(
+    building: Building, given: Direction, I_e: float, T: float, S_DS: float
+) -> tuple[float, Words]:
+    """Return C_s by the two-period route and which bound governs; exception 2 of 11.4.8 may increase it."""
+    site, R = building.site, given.R
+    case = S_DS, site.S_D1, site.S_1, T, site.T_L, R, I_e, building.edition
+    governs = base_shear.drift_bound(*case)
+    factor = coefficient_increase(site, T)
+    if factor == 1:
+        return float(base_shear.drift_coefficient(*case)), governs
+    cap = float(base_shear.coefficient_cap(site.S_D1, T, site.T_L, R, I_e))
+    upper = factor * min(float(base_shear.coefficient_plateau(S_DS, R, I_e)), cap)
+    return increased(upper, float(base_shear.coefficient_minimum_near_fault(site.S_1, R, I_e)), str(governs))
 
 
 def _ordinate(building: Building, T: float) -> float:
