@@ -230,7 +230,7 @@ def test_the_functions_called_are_listed_with_their_equations(blank: openpyxl.Wo
 
 def test_starter_values_are_marked_and_counted(blank: openpyxl.Workbook) -> None:
     marks = [c.value for s in blank.worksheets for row in s.iter_rows() for c in row if c.value == STARTER]
-    assert len(marks) == 23 + 6 + 6 + 6  # criteria, levels, rows of the weight take-off, shear walls
+    assert len(marks) == 22 + 6 + 6 + 6  # criteria, levels, rows of the weight take-off, shear walls
 
 
 def test_doubtful_clauses_are_marked_where_the_user_meets_them(blank: openpyxl.Workbook) -> None:

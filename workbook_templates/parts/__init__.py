@@ -8,6 +8,7 @@ from typing import Final
 
 from workbook_templates.declare import Part
 from workbook_templates.parts import (
+    category,
     diaphragm,
     drift,
     drift_forces,
@@ -38,6 +39,7 @@ PARTS: Final = MappingProxyType(
             multi_period.SITE_SPECIFIC,
             story.PART,
             short_building.PART,
+            category.PART,
             weights.PART,
             periods.PART,
             period_sources.WALLS,

@@ -161,7 +161,7 @@ PART = Part(
     "Forces for drift",
     criteria=(RESPONSE,),
     bands=(FORCES,),
-    takes={"theta": {"V_x": "V_x_used"}, "delta_xe": {"F_x": "F_x_used"}},
+    takes={"theta": {"V_x": "V_x_used"}, "delta_xe": {"F_x": "F_x_used"}, "T_drift_short": {"T": "T_drift"}},
     checks=(
         Check(
             "Sum of F_x for drift is V for drift",

@@ -7,6 +7,7 @@ from dataclasses import replace
 from typing import Any, Final
 
 from engine.building.parts import (
+    category,
     diaphragm,
     drift_forces,
     ground_motion,
@@ -82,6 +83,8 @@ STEPS: Final[tuple[Step, ...]] = (
     _each_direction(multi_period.solve_direction, multi_period.METHOD_RULES),
     _each_direction(short_building.solve, short_building.RULES),
     _each_direction(drift_forces.solve, drift_forces.RULES),
+    _each_direction(category.conditions, category.RULES),
+    _whole_building(category.solve, category.RULES),
     _whole_building(spectrum.solve, spectrum.RULES),
     _each_direction(spectrum.solve_direction, spectrum.RULES),
     _each_direction(torsion.ratios, torsion.RATIO_RULES),

@@ -5,7 +5,7 @@ Heights and weights in the unit system's length and force units, displacements i
 
 from __future__ import annotations
 
-from engine.building.records.building import STIFFNESS_ROUTE, Building, level_values
+from engine.building.records.building import STIFFNESS_ROUTE, Building, category_asked, level_values
 from engine.building.records.direction import DIRECTIONS, DRIFT_BASES, METHODS, Direction
 from engine.building.records.fields import may_be_left_out
 from engine.building.records.level import Level, level_label
@@ -37,6 +37,7 @@ __all__ = [
     "SpectrumRow",
     "WallRow",
     "WeightRow",
+    "category_asked",
     "level_label",
     "level_values",
     "may_be_left_out",

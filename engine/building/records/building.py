@@ -30,6 +30,8 @@ from engine.units import SYSTEMS
 
 #: the part of the workbook in which story stiffness gives the elastic displacements
 STIFFNESS_ROUTE: Final = "stiffness_route"
+#: the part in which the Seismic Design Category is worked out
+CATEGORY: Final = "category"
 
 
 @dataclass(frozen=True, slots=True, kw_only=True)
@@ -69,12 +71,22 @@ class Building:
         for table in ROW_TABLES:
             for place, row in enumerate(getattr(self, table), start=1):
                 check_fields(f"{row_label(table, place, asdict(row))}: ", row)
+        if self.site.SDC is not None and category_asked(self):
+            words = f"must be left out where the part {CATEGORY} works it out"
+            raise NotApplicable("site.SDC", self.site.SDC, words)
         if STIFFNESS_ROUTE in self.parts:
             _check_route(self.level)
         if self.weight:
             _check_take_off(self.weight, self.level)
         else:
             _check_weights(self.level)
+
+
+def category_asked(building: Building) -> bool:
+    """Tell whether the Seismic Design Category is worked out: the part is asked for, or its entries given."""
+    site = building.site
+    entries = site.short_table_alone, site.rigid_diaphragms
+    return CATEGORY in building.parts or entries != (None, None)
 
 
 def level_values(building: Building, key: str) -> Array | None:

@@ -62,6 +62,14 @@ class ShortBuildingEntries:
 
 
 @dataclass(frozen=True, kw_only=True)
+class CategoryEntries:
+    """What decides on Table 11.6-1 alone, where the Seismic Design Category is worked out."""
+
+    short_table_alone: bool | None = checked(is_flag, None)
+    rigid_diaphragms: bool | None = checked(is_flag, None)
+
+
+@dataclass(frozen=True, kw_only=True)
 class PlanEntries:
     """The Seismic Design Category, and what the plans show of irregularities."""
 
@@ -95,6 +103,7 @@ class Site(
     MotionEntries,
     ShortBuildingEntries,
     PeriodSiteEntries,
+    CategoryEntries,
     PlanEntries,
     ModalEntries,
 ):
