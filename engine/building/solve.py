@@ -8,8 +8,7 @@ import numpy as np
 
 from engine import hazard, occupancy, stability, vertical
 from engine.building import drifts, periods, strength
-from engine.building.drift_forces import of_displacements
-from engine.building.parts import with_parts
+from engine.building.parts import drift_forces, with_parts
 from engine.building.prepare import prepared
 from engine.building.records import Building
 from engine.building.results import DirectionResult, Package
@@ -53,6 +52,7 @@ def solve(building: Building) -> Package:
             *_shared_heights(building, h),
             *_raised_ratios(building),
             *periods.doubts(building, float(h.max())),
+            *drift_forces.said(building),
         ),
     )
     package = replace(
@@ -66,7 +66,7 @@ def _direction(building: Building, package: Package, name: str) -> DirectionResu
     found = strength.strength(building, package, name)
     found |= strength.forces(package, found)
     found |= drifts.limits(building, package, given)
-    F_x, V_x = of_displacements(building, package, name, found)
+    F_x, V_x = drift_forces.of_displacements(building, package, name, found)
     found |= drifts.drifts(building, package, name, F_x)
     return DirectionResult(**found, **drifts.second_order(building, package, given, found, V_x))
 

@@ -102,7 +102,9 @@ def test_displacements_by_drift_forces_bring_the_results_and_the_rules() -> None
     found = solved({"drift_basis": "drift forces"})
     assert "V_drift" in found.direction["X"].more
     assert {"drift_forces", "drift_period"} <= set(found.rules)
+    assert found.warnings[-1].startswith("direction X: drift and theta go by the forces for drift alone")
     plain = solved()
+    assert not any("for drift alone" in text for text in plain.warnings)
     assert "V_drift" not in plain.direction["X"].more
     assert "drift_forces" not in plain.rules
 
