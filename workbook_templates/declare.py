@@ -222,8 +222,8 @@ class Part:
     ``bands`` widen the story table, ``tables`` are further sheets; ``replaces`` are quantities that take the
     place of those of other parts with the same key; ``takes`` says which places a formula takes instead of
     others, by the key of its quantity; ``editions`` are those that have the procedure.
-    ``brought_by`` are criteria entries that ask for the part, by key or as ``key = value``; ``excludes`` the
-    keys of parts that give the same quantities another way.
+    ``brought_by`` are entries that ask for the part, by key or, of criteria, as ``key = value``;
+    ``excludes`` the keys of parts that give the same quantities another way.
     """
 
     key: str

@@ -8,6 +8,7 @@ from __future__ import annotations
 
 from collections.abc import Collection, Mapping, Sequence
 from dataclasses import dataclass
+from functools import cached_property
 from typing import Any, Final
 
 from engine.errors import MissingValue, NotApplicable
@@ -55,7 +56,7 @@ class Inputs:
         tables = (table for key in self.parts for table in PARTS[key].tables)
         return {table.stored: len(self.rows(table)) for table in tables}
 
-    @property
+    @cached_property
     def parts(self) -> frozenset[str]:
         """The parts that are asked for, those whose entries are given, and what they require."""
         asked = self.given.get("parts", () if "level" in self.given else BLANK_PARTS)
@@ -64,7 +65,7 @@ class Inputs:
                 raise NotApplicable("parts", key, f"must be one of {', '.join(PARTS)}")
         found = {key for key, part in PARTS.items() if part.needs and self._has(self._needs(part, asked))}
         found |= {key for key, part in PARTS.items() if any(t.stored in self.given for t in part.tables)}
-        found |= {key for key, part in PARTS.items() if self._criteria_entered & {*part.brought_by}}
+        found |= {key for key, part in PARTS.items() if self._entered & {*part.brought_by}}
         fitting = {key for key in found if self.edition in PARTS[key].editions}
         keys = with_required({*asked, *fitting})
         self._refuse_misfits(keys)
@@ -73,11 +74,14 @@ class Inputs:
         return keys
 
     @property
-    def _criteria_entered(self) -> set[str]:
-        """The criteria entries that are given: each by its key, and with its value."""
+    def _entered(self) -> set[str]:
+        """The entries of criteria and levels that are given; those of the criteria with their value too."""
         tables = [self._table(direction) for direction in (None, *DIRECTIONS)]
         pairs = {pair for table in tables for pair in table.items()}
-        return {word for key, value in pairs for word in (key, f"{key} = {value}")}
+        levels = {
+            key for level in self.given.get("level", ()) for key, value in level.items() if value is not None
+        }
+        return levels | {word for key, value in pairs for word in (key, f"{key} = {value}")}
 
     def _needs(self, part: Part, keys: Collection[str]) -> tuple[str, ...]:
         """The level entries without which a part can not be filled in, save those that others replace."""
@@ -126,7 +130,8 @@ class Inputs:
     def row(self, table: Table, number: int, q: Quantity, direction: str | None) -> Any:
         """Return an entry of a row of a table, counted from the first."""
         if table.stored in self.given or ("level" in self.given and not table.start):
-            return self._rows_needed(table)[number].get(q.stored_key(direction))
+            found = self._rows_needed(table)[number].get(q.stored_key(direction))
+            return q.default if found is None else found
         count = len(self.rows(table))
         return q.starter(Start(self.units, count - number, count)) if q.starter else q.default
 

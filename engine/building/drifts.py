@@ -7,9 +7,8 @@ from typing import Any
 import numpy as np
 
 from engine import drift, dynamics, stability, vertical
-from engine.building.records import STIFFNESS_ROUTE, Building, Direction, level_label, level_values
-from engine.building.results import Package, texts
-from engine.errors import ImpossibleValue
+from engine.building.records import STIFFNESS_ROUTE, Building, Direction, level_values
+from engine.building.results import Package
 from engine.require import Array
 from engine.units import DISPLACEMENT_PER_LENGTH
 
@@ -49,37 +48,3 @@ def _from_stiffness(building: Building, h: Array, name: str, F_x: Array) -> Arra
     if STIFFNESS_ROUTE not in building.parts or K_x is None:
         return None
     return np.asarray(dynamics.elastic_displacement(h, F_x, K_x, h))
-
-
-def second_order(
-    building: Building, package: Package, given: Direction, known: dict[str, Any], V_x: Array
-) -> dict[str, Any]:
-    """Return the stability coefficients and the drifts that they amplify, where vertical loads are given.
-
-    V_x are the story shears of the forces under which the displacements are computed.
-    """
-    if "Delta" not in known:
-        return {}
-    if building.level[0].P_x is None:
-        return {"drift_over_limit": known["Delta"] / known["Delta_a"]}
-    P_x = np.array([level.P_x for level in building.level], dtype=np.float64)
-    _refuse_where(building, "V_x", V_x, V_x <= 0, "must be above 0 for a stability coefficient")
-    h_sx = package.h_sx * DISPLACEMENT_PER_LENGTH[building.units]
-    theta = np.asarray(
-        stability.stability_coefficient(P_x, known["Delta"], package.I_e, V_x, h_sx, given.C_d)
-    )
-    _refuse_where(building, "theta", theta, theta >= 1, "must be below 1: the story is unstable")
-    factor = stability.second_order_factor(theta)
-    return {
-        "theta": theta,
-        "theta_factor": factor,
-        "theta_verdict": texts(stability.stability_verdict(theta, known["theta_max"])),
-        "Delta_amplified": known["Delta"] * factor,
-        "drift_over_limit": known["Delta"] * factor / known["Delta_a"],
-    }
-
-
-def _refuse_where(building: Building, symbol: str, values: Array, bad: Any, allowed: str) -> None:
-    for place in np.flatnonzero(bad):
-        label = level_label(int(place) + 1, building.level[place].name)
-        raise ImpossibleValue(f"{label}: {symbol}", float(values[place]), allowed)

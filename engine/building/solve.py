@@ -66,9 +66,8 @@ def _direction(building: Building, package: Package, name: str) -> DirectionResu
     found = strength.strength(building, package, name)
     found |= strength.forces(package, found)
     found |= drifts.limits(building, package, given)
-    F_x, V_x = drift_forces.of_displacements(building, package, name, found)
-    found |= drifts.drifts(building, package, name, F_x)
-    return DirectionResult(**found, **drifts.second_order(building, package, given, found, V_x))
+    F_x, _ = drift_forces.of_displacements(building, package, name, found)
+    return DirectionResult(**found, **drifts.drifts(building, package, name, F_x))
 
 
 def _shared_heights(building: Building, h: Array) -> list[str]:

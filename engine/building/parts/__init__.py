@@ -16,6 +16,8 @@ from engine.building.parts import (
     multi_period,
     periods,
     redundancy,
+    second_order,
+    separation,
     short_building,
     spectrum,
     torsion,
@@ -50,6 +52,19 @@ def _each_direction(solve: DirectionPart, rules: tuple[str, ...]) -> Step:
             for name, result in package.direction.items()
         }
         return replace(package, direction=results, rules=_joined(package.rules, rules))
+
+    return step
+
+
+def _completing_each_direction(solve: DirectionPart) -> Step:
+    """Make the step that fills in fields of the core which wait for results of parts."""
+
+    def step(building: Building, package: Package) -> Package:
+        results = {
+            name: replace(result, **solve(building, package, name, result))
+            for name, result in package.direction.items()
+        }
+        return replace(package, direction=results)
 
     return step
 
@@ -89,6 +104,10 @@ STEPS: Final[tuple[Step, ...]] = (
     _each_direction(spectrum.solve_direction, spectrum.RULES),
     _each_direction(torsion.ratios, torsion.RATIO_RULES),
     _whole_building(torsion.structure, torsion.STRUCTURE_RULES),
+    _whole_building(second_order.due, second_order.EDGE_RULES),
+    _each_direction(second_order.edges, second_order.EDGE_RULES),
+    _completing_each_direction(second_order.solve),
+    _each_direction(separation.solve, separation.RULES),
     _each_direction(torsion.accidental, torsion.ACCIDENTAL_RULES),
     _each_direction(torsion.inherent, torsion.INHERENT_RULES),
     _each_direction(irregularity.stories, irregularity.STORY_RULES),

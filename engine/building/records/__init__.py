@@ -8,7 +8,7 @@ from __future__ import annotations
 from engine.building.records.building import STIFFNESS_ROUTE, Building, category_asked, level_values
 from engine.building.records.direction import DIRECTIONS, DRIFT_BASES, METHODS, Direction
 from engine.building.records.fields import may_be_left_out
-from engine.building.records.level import Level, level_label
+from engine.building.records.level import SEPARATION_ENTRIES, Level, level_label
 from engine.building.records.rows import (
     ROW_TABLES,
     WEIGHT_KINDS,
@@ -26,6 +26,7 @@ __all__ = [
     "DRIFT_BASES",
     "METHODS",
     "ROW_TABLES",
+    "SEPARATION_ENTRIES",
     "STIFFNESS_ROUTE",
     "WEIGHT_KINDS",
     "Building",

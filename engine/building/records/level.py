@@ -46,12 +46,26 @@ class Level:
     f_x_Y: float | None = number(NOT_NEGATIVE, None)
     delta_f_X: float | None = number(NOT_NEGATIVE, None)
     delta_f_Y: float | None = number(NOT_NEGATIVE, None)
+    delta_max_X: float | None = number(NOT_NEGATIVE, None)
+    delta_max_Y: float | None = number(NOT_NEGATIVE, None)
+    delta_di_X: float | None = number(NOT_NEGATIVE, None)
+    delta_di_Y: float | None = number(NOT_NEGATIVE, None)
+    delta_M2_X: float | None = number(NOT_NEGATIVE, None)
+    delta_M2_Y: float | None = number(NOT_NEGATIVE, None)
+    gap_X: float | None = number(NOT_NEGATIVE, None)
+    gap_Y: float | None = number(NOT_NEGATIVE, None)
     source: str | None = checked(is_text, None)
 
 
+#: entries that bring the separation along
+SEPARATION_ENTRIES: Final = tuple(
+    f"{key}_{direction}" for key in ("delta_max", "delta_di", "delta_M2", "gap") for direction in "XY"
+)
+#: entries that one level may have without the others
+SINGLE: Final = ("weight", "source", *SEPARATION_ENTRIES[-4:])
 #: entries that stand at every level or at none
 LEVEL_OPTIONS: Final = tuple(
-    entry.name for entry in fields(Level) if entry.default is None and entry.name not in ("weight", "source")
+    entry.name for entry in fields(Level) if entry.default is None and entry.name not in SINGLE
 )
 
 
