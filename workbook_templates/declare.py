@@ -142,6 +142,7 @@ class Table:
     ``base`` says what the row of the base holds, where the table has one; ``text`` is its line in the
     contents. A table without rows of its own starts with ``start`` rows; where that is 0, one a level, and
     a building with levels must bring its rows. ``at_most_levels`` starts it with no more rows than levels.
+    ``fixed`` are the words of its first column, one a row, where the rows are no entries.
     """
 
     sheet: str
@@ -152,9 +153,12 @@ class Table:
     base: Mapping[str, str | int] = field(default_factory=dict)
     start: int = 0
     at_most_levels: bool = False
+    fixed: tuple[str, ...] = ()
 
     def rows_at_start(self, level_count: int) -> int:
         """Return how many rows a table without rows of its own starts with."""
+        if self.fixed:
+            return len(self.fixed)
         if not self.start:
             return level_count
         return min(self.start, level_count) if self.at_most_levels else self.start

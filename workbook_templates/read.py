@@ -11,7 +11,7 @@ from dataclasses import dataclass
 from functools import cached_property
 from typing import Any, Final
 
-from workbook_templates.declare import DIRECTIONS, Part, Quantity, Table
+from workbook_templates.declare import DIRECTIONS, Part, Quantity, Role, Table
 from workbook_templates.inputs import JOB_KEYS
 from workbook_templates.layout import ROLE_ROW, STORY_TABLE, SYMBOL_ROW, Column, Grid, Layout
 from workbook_templates.parts import CORE, PARTS
@@ -46,7 +46,7 @@ class Reader:
             "job": _filled({key: self._cell(f"job_{key}") for key in JOB_KEYS}),
             "site": self._entries(None),
             "direction": {d: self._entries(d) for d in DIRECTIONS},
-            **{grid.table.stored: self._entered(grid) for grid in self._layout.grids},
+            **{grid.table.stored: self._entered(grid) for grid in self._layout.grids if not grid.table.fixed},
             "sources": self._sources(),
         }
         return {key: table for key, table in tables.items() if table not in (None, {}, [])}
@@ -80,7 +80,7 @@ class Reader:
 
     def _rows(self, grid: Grid) -> list[Row]:
         """The rows in which any input is filled in; a link filled down an empty row does not count."""
-        inputs = [self._place(grid, c) for c in grid.columns if c.quantity.is_input and not c.quantity.linked]
+        inputs = [self._place(grid, c) for c in grid.columns if _marks_a_row(c.quantity)]
         rows = self._tables[grid.table.name][HEADER_ROWS:]
         return [row for row in rows if any(row[i] is not None for i in inputs)]
 
@@ -182,6 +182,11 @@ class Reader:
         if isinstance(value, tuple):
             raise ReadError(f"{name}: the name covers more than one cell")
         return None if self._value(f"ISBLANK({name})") is True else _sound(name, value)
+
+
+def _marks_a_row(q: Quantity) -> bool:
+    """Whether a filled cell of the column makes its row one: a link filled down an empty row does not."""
+    return q.role is Role.FIXED or (q.is_input and not q.linked)
 
 
 def _sound(field: str, value: Scalar) -> Scalar:

@@ -72,6 +72,8 @@ def _draw_cells(sheet: Worksheet, layout: Layout, grid: Grid, inputs: Inputs, co
     for row in range(FIRST_LEVEL, grid.bottom_guard):
         cell = sheet[f"{column.letter}{row}"]
         entered = inputs.row(grid.table, row - FIRST_LEVEL, q, direction) if q.is_input else None
+        if q.role is Role.FIXED:
+            entered = grid.table.fixed[row - FIRST_LEVEL]
         cell.value = (
             layout.write(q.formula or q.linked, sheet.title, direction, row) if entered is None else entered
         )

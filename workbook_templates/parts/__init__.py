@@ -15,6 +15,7 @@ from workbook_templates.parts import (
     edge_drift,
     ground_motion,
     irregularity,
+    load_effects,
     modal,
     multi_period,
     period_sources,
@@ -58,6 +59,7 @@ PARTS: Final = MappingProxyType(
             redundancy.PART,
             diaphragm.PART,
             separation.PART,
+            load_effects.PART,
             spectrum.PART,
             modal.PART,
         )

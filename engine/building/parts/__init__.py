@@ -12,6 +12,7 @@ from engine.building.parts import (
     drift_forces,
     ground_motion,
     irregularity,
+    load_effects,
     modal,
     multi_period,
     periods,
@@ -114,6 +115,7 @@ STEPS: Final[tuple[Step, ...]] = (
     _whole_building(irregularity.whole, irregularity.BUILDING_RULES),
     _each_direction(redundancy.solve, redundancy.RULES),
     _each_direction(diaphragm.solve, diaphragm.RULES),
+    _whole_building(load_effects.solve, load_effects.RULES),
     _whole_building(modal.whole, modal.RULES),
     _each_direction(modal.solve, (*modal.RULES, *modal.SCALING_RULES)),
 )

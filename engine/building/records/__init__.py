@@ -12,6 +12,7 @@ from engine.building.records.level import SEPARATION_ENTRIES, Level, level_label
 from engine.building.records.rows import (
     ROW_TABLES,
     WEIGHT_KINDS,
+    MemberRow,
     ModeRow,
     MotionRow,
     SpectrumRow,
@@ -32,6 +33,7 @@ __all__ = [
     "Building",
     "Direction",
     "Level",
+    "MemberRow",
     "ModeRow",
     "MotionRow",
     "Site",

@@ -14,6 +14,7 @@ from engine.building.records.level import LEVEL_OPTIONS, Level, level_label
 from engine.building.records.motion import check_method, check_motion
 from engine.building.records.rows import (
     ROW_TABLES,
+    MemberRow,
     ModeRow,
     MotionRow,
     SpectrumRow,
@@ -52,6 +53,7 @@ class Building:
     multi_period: tuple[MotionRow, ...] = ()
     wall: tuple[WallRow, ...] = ()
     mode: tuple[ModeRow, ...] = ()
+    member: tuple[MemberRow, ...] = ()
     job: Mapping[str, object] = field(default_factory=dict)
     sources: Mapping[str, str] = field(default_factory=dict)
     parts: tuple[str, ...] = checked(is_list_of_texts, ())
@@ -71,6 +73,10 @@ class Building:
         for table in ROW_TABLES:
             for place, row in enumerate(getattr(self, table), start=1):
                 check_fields(f"{row_label(table, place, asdict(row))}: ", row)
+        for place, row in enumerate(self.member, start=1):
+            if row.direction not in self.direction:
+                label = row_label("member", place, asdict(row))
+                raise NotApplicable(f"{label}: direction", row.direction, "must be one that is given")
         if self.site.SDC is not None and category_asked(self):
             words = f"must be left out where the part {CATEGORY} works it out"
             raise NotApplicable("site.SDC", self.site.SDC, words)

@@ -8,7 +8,16 @@ from types import MappingProxyType
 from typing import Any, ClassVar, Final
 
 from engine.building.records.direction import DIRECTIONS
-from engine.building.records.fields import NOT_NEGATIVE, POSITIVE, checked, is_count, is_text, number, word
+from engine.building.records.fields import (
+    ANY,
+    NOT_NEGATIVE,
+    POSITIVE,
+    checked,
+    is_count,
+    is_text,
+    number,
+    word,
+)
 
 WEIGHT_KINDS: Final = (
     *("dead", "partition", "storage", "garage storage", "snow", "equipment", "landscaping"),
@@ -74,6 +83,25 @@ class ModeRow:
     number: float = number(is_count)
 
 
+@dataclass(frozen=True, slots=True, kw_only=True)
+class MemberRow:
+    """One effect on one member, any unit: of dead, live and snow load and of the horizontal forces (signed).
+
+    ``E_cl`` is the capacity-limited effect, as a magnitude.
+    """
+
+    NAMED_BY: ClassVar = "name"
+
+    name: str = checked(is_text)
+    direction: str = word(DIRECTIONS)
+    D: float = number(ANY)
+    L: float = number(ANY, 0.0)
+    S: float = number(ANY, 0.0)
+    Q_E: float = number(ANY)
+    E_cl: float | None = number(NOT_NEGATIVE, None)
+    source: str | None = checked(is_text, None)
+
+
 #: the tables of a BUILDING.toml beside the story table, with the record of a row
 ROW_TABLES: Final[Mapping[str, type[Any]]] = MappingProxyType(
     {
@@ -82,6 +110,7 @@ ROW_TABLES: Final[Mapping[str, type[Any]]] = MappingProxyType(
         "multi_period": MotionRow,
         "wall": WallRow,
         "mode": ModeRow,
+        "member": MemberRow,
     }
 )
 

@@ -19,6 +19,7 @@ from engine.building.records.fields import (
 from engine.dynamics import COMBINATIONS
 from engine.hazard import LONG_EXCEPTIONS, READINGS, SHORT_EXCEPTIONS, TABLE_SITE_CLASSES, TAILS
 from engine.irregularity import DIAPHRAGMS
+from engine.load_effects import VERTICAL_CASES
 from engine.occupancy import DESIGN_CATEGORIES, RISK_CATEGORIES
 from engine.require import above, within
 
@@ -91,6 +92,14 @@ class PeriodSiteEntries:
 
 
 @dataclass(frozen=True, kw_only=True)
+class LoadEntries:
+    """How the vertical seismic effect is taken; ``S_av`` [g] is the ordinate of a vertical spectrum."""
+
+    vertical_case: str | None = word(VERTICAL_CASES, None)
+    S_av: float | None = number(POSITIVE, None)
+
+
+@dataclass(frozen=True, kw_only=True)
 class ModalEntries:
     """How the modal comparison combines modes."""
 
@@ -105,6 +114,7 @@ class Site(
     PeriodSiteEntries,
     CategoryEntries,
     PlanEntries,
+    LoadEntries,
     ModalEntries,
 ):
     """What holds for the building: S_1 [g], T_L [s], Risk Category, elevation of the base [ft or m]."""
