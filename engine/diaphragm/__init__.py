@@ -25,7 +25,7 @@ from engine.diaphragm.force import (
     unlimited_force,
 )
 from engine.diaphragm.one_story import one_story_coefficient
-from engine.diaphragm.wall import anchorage_factor, anchorage_force, wall_force
+from engine.diaphragm.wall import WALL_DIAPHRAGMS, anchorage_factor, anchorage_force, wall_force
 
 __all__ = [
     "BOUNDS",
@@ -33,6 +33,7 @@ __all__ = [
     "DIAPHRAGM_TYPES",
     "FLEXIBILITIES",
     "MODE_SHAPES",
+    "WALL_DIAPHRAGMS",
     "alternative_force",
     "anchorage_factor",
     "anchorage_force",

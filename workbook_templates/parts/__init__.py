@@ -8,8 +8,11 @@ from typing import Final
 
 from workbook_templates.declare import Part
 from workbook_templates.parts import (
+    anchorage,
     category,
     diaphragm,
+    diaphragm_forces,
+    diaphragm_procedures,
     drift,
     drift_forces,
     edge_drift,
@@ -58,6 +61,12 @@ PARTS: Final = MappingProxyType(
             irregularity.PART,
             redundancy.PART,
             diaphragm.PART,
+            diaphragm_forces.TRANSFER,
+            diaphragm_forces.COLLECTORS,
+            diaphragm_forces.FLEXIBILITY,
+            diaphragm_procedures.ALTERNATIVE,
+            diaphragm_procedures.ONE_STORY,
+            anchorage.PART,
             separation.PART,
             load_effects.PART,
             spectrum.PART,

@@ -12,6 +12,7 @@ from engine.building.records.level import SEPARATION_ENTRIES, Level, level_label
 from engine.building.records.rows import (
     ROW_TABLES,
     WEIGHT_KINDS,
+    AnchorRow,
     MemberRow,
     ModeRow,
     MotionRow,
@@ -30,6 +31,7 @@ __all__ = [
     "SEPARATION_ENTRIES",
     "STIFFNESS_ROUTE",
     "WEIGHT_KINDS",
+    "AnchorRow",
     "Building",
     "Direction",
     "Level",

@@ -14,6 +14,7 @@ from engine.building.records.level import LEVEL_OPTIONS, Level, level_label
 from engine.building.records.motion import check_method, check_motion
 from engine.building.records.rows import (
     ROW_TABLES,
+    AnchorRow,
     MemberRow,
     ModeRow,
     MotionRow,
@@ -54,6 +55,7 @@ class Building:
     wall: tuple[WallRow, ...] = ()
     mode: tuple[ModeRow, ...] = ()
     member: tuple[MemberRow, ...] = ()
+    anchor: tuple[AnchorRow, ...] = ()
     job: Mapping[str, object] = field(default_factory=dict)
     sources: Mapping[str, str] = field(default_factory=dict)
     parts: tuple[str, ...] = checked(is_list_of_texts, ())

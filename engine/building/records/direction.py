@@ -7,6 +7,7 @@ from functools import partial
 from typing import Final
 
 from engine.building.records.fields import POSITIVE, checked, is_flag, is_text, number, word
+from engine.diaphragm import DIAPHRAGM_TYPES, MODE_SHAPES
 from engine.drift import DRIFT_STRUCTURES
 from engine.period import DRIFT_PERIODS, PERIOD_FORMULAS, PERIOD_SOURCES, PERIOD_SYSTEMS
 from engine.redundancy import CONFIGURATIONS
@@ -24,6 +25,19 @@ class MethodEntries:
     """The method of the response coefficient, where a multi-period spectrum is given."""
 
     C_s_method: str = word(METHODS, METHODS[0])
+
+
+@dataclass(frozen=True, kw_only=True)
+class DiaphragmEntries:
+    """Diaphragms: collectors of light frame; the alternative procedure; flexible ones of one story (7-22)."""
+
+    light_frame: bool = checked(is_flag, False)
+    mode_shape: str | None = word(MODE_SHAPES, None)
+    diaphragm_type: str | None = word(DIAPHRAGM_TYPES, None)
+    R_s_entered: float | None = number(POSITIVE, None)
+    c_m1: float = number(POSITIVE, 0.5)
+    R_diaph: float | None = number(partial(at_least, 1), None)
+    T_diaph: float | None = number(POSITIVE, None)
 
 
 @dataclass(frozen=True, kw_only=True)
@@ -57,7 +71,13 @@ class DriftForceEntries:
 
 
 @dataclass(frozen=True, kw_only=True)
-class Direction(MethodEntries, PeriodEntries, DriftForceEntries, PlanDirectionEntries):
+class Direction(
+    MethodEntries,
+    PeriodEntries,
+    DriftForceEntries,
+    DiaphragmEntries,
+    PlanDirectionEntries,
+):
     """The seismic force-resisting system of one plan direction.
 
     ``rho`` divides the allowable drift only where ``moment_frames_only`` is true.

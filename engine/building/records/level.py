@@ -5,7 +5,8 @@ from __future__ import annotations
 from dataclasses import dataclass, fields
 from typing import Final
 
-from engine.building.records.fields import ANY, NOT_NEGATIVE, POSITIVE, checked, is_text, number
+from engine.building.records.fields import ANY, NOT_NEGATIVE, POSITIVE, checked, is_text, number, word
+from engine.require import YES_NO
 
 
 @dataclass(frozen=True, slots=True, kw_only=True)
@@ -46,6 +47,20 @@ class Level:
     f_x_Y: float | None = number(NOT_NEGATIVE, None)
     delta_f_X: float | None = number(NOT_NEGATIVE, None)
     delta_f_Y: float | None = number(NOT_NEGATIVE, None)
+    F_transfer_X: float | None = number(NOT_NEGATIVE, None)
+    F_transfer_Y: float | None = number(NOT_NEGATIVE, None)
+    offset_X: str | None = word(YES_NO, None)
+    offset_Y: str | None = word(YES_NO, None)
+    E_story_X: float | None = number(NOT_NEGATIVE, None)
+    E_story_Y: float | None = number(NOT_NEGATIVE, None)
+    E_sum_X: float | None = number(NOT_NEGATIVE, None)
+    E_sum_Y: float | None = number(NOT_NEGATIVE, None)
+    E_low_X: float | None = number(NOT_NEGATIVE, None)
+    E_low_Y: float | None = number(NOT_NEGATIVE, None)
+    delta_MDD_X: float | None = number(NOT_NEGATIVE, None)
+    delta_MDD_Y: float | None = number(NOT_NEGATIVE, None)
+    Delta_ADVE_X: float | None = number(POSITIVE, None)
+    Delta_ADVE_Y: float | None = number(POSITIVE, None)
     delta_max_X: float | None = number(NOT_NEGATIVE, None)
     delta_max_Y: float | None = number(NOT_NEGATIVE, None)
     delta_di_X: float | None = number(NOT_NEGATIVE, None)
@@ -62,7 +77,10 @@ SEPARATION_ENTRIES: Final = tuple(
     f"{key}_{direction}" for key in ("delta_max", "delta_di", "delta_M2", "gap") for direction in "XY"
 )
 #: entries that one level may have without the others
-SINGLE: Final = ("weight", "source", *SEPARATION_ENTRIES[-4:])
+SINGLE: Final = (
+    *("weight", "source", *SEPARATION_ENTRIES[-4:]),
+    *("F_transfer_X", "F_transfer_Y", "offset_X", "offset_Y"),
+)
 #: entries that stand at every level or at none
 LEVEL_OPTIONS: Final = tuple(
     entry.name for entry in fields(Level) if entry.default is None and entry.name not in SINGLE

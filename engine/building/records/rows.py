@@ -18,6 +18,7 @@ from engine.building.records.fields import (
     number,
     word,
 )
+from engine.diaphragm import WALL_DIAPHRAGMS
 
 WEIGHT_KINDS: Final = (
     *("dead", "partition", "storage", "garage storage", "snow", "equipment", "landscaping"),
@@ -102,6 +103,20 @@ class MemberRow:
     source: str | None = checked(is_text, None)
 
 
+@dataclass(frozen=True, slots=True, kw_only=True)
+class AnchorRow:
+    """One wall out of plane: its weight, that of an anchor [kip or kN], span of the diaphragm [ft or m]."""
+
+    NAMED_BY: ClassVar = "name"
+
+    name: str = checked(is_text)
+    W_w: float = number(NOT_NEGATIVE)
+    W_p: float = number(NOT_NEGATIVE)
+    diaphragm: str = word(WALL_DIAPHRAGMS)
+    L_f: float = number(NOT_NEGATIVE)
+    source: str | None = checked(is_text, None)
+
+
 #: the tables of a BUILDING.toml beside the story table, with the record of a row
 ROW_TABLES: Final[Mapping[str, type[Any]]] = MappingProxyType(
     {
@@ -111,6 +126,7 @@ ROW_TABLES: Final[Mapping[str, type[Any]]] = MappingProxyType(
         "wall": WallRow,
         "mode": ModeRow,
         "member": MemberRow,
+        "anchor": AnchorRow,
     }
 )
 
