@@ -179,6 +179,8 @@ def test_column_headings_are_unique_in_a_table_and_keys_in_the_workbook() -> Non
         assert len(set(headings)) == len(headings)
     keys = [key for grid in layout.grids for key in {column.quantity.key for column in grid.columns}]
     assert len({*keys, *layout.rows}) == len(keys) + len(layout.rows)
+    names = [layout.name(key, d) for key in layout.rows for d in DIRECTIONS]
+    assert len({name.casefold() for name in names}) == len(set(names))  # names know no case
 
 
 def test_every_number_or_choice_input_has_an_entry_rule(blank: openpyxl.Workbook) -> None:
@@ -230,7 +232,17 @@ def test_the_functions_called_are_listed_with_their_equations(blank: openpyxl.Wo
 
 def test_starter_values_are_marked_and_counted(blank: openpyxl.Workbook) -> None:
     marks = [c.value for s in blank.worksheets for row in s.iter_rows() for c in row if c.value == STARTER]
-    assert len(marks) == 22 + 6 + 6 + 6  # criteria, levels, rows of the weight take-off, shear walls
+    layout = Layout(6, ALL)
+    entries = [q for block in layout.criteria for q in block.quantities if q.is_input and q.starter]
+    sources = [
+        grid.count
+        for grid in layout.grids
+        for column in grid.columns
+        if column.quantity.starter and column.quantity.stored_key(None) == "source"
+    ]
+    assert len(entries) > 20
+    assert len(sources) >= 3
+    assert len(marks) == len(entries) + sum(sources)
 
 
 def test_doubtful_clauses_are_marked_where_the_user_meets_them(blank: openpyxl.Workbook) -> None:

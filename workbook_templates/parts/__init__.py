@@ -30,6 +30,7 @@ from workbook_templates.parts import (
     stiffness_route,
     story,
     torsion,
+    two_stage,
     weights,
 )
 
@@ -68,6 +69,7 @@ PARTS: Final = MappingProxyType(
             diaphragm_procedures.ONE_STORY,
             anchorage.PART,
             separation.PART,
+            two_stage.PART,
             load_effects.PART,
             spectrum.PART,
             modal.PART,

@@ -23,6 +23,7 @@ from engine.building.parts import (
     short_building,
     spectrum,
     torsion,
+    two_stage,
     weights,
 )
 from engine.building.records import Building
@@ -122,6 +123,8 @@ STEPS: Final[tuple[Step, ...]] = (
     _each_direction(diaphragm_procedures.alternative, diaphragm_procedures.ALTERNATIVE_RULES),
     _each_direction(diaphragm_procedures.one_story, diaphragm_procedures.ONE_STORY_RULES),
     _whole_building(diaphragm_procedures.walls, diaphragm_procedures.WALL_RULES),
+    _whole_building(two_stage.whole, two_stage.RULES),
+    _each_direction(two_stage.solve, two_stage.RULES),
     _whole_building(load_effects.solve, load_effects.RULES),
     _whole_building(modal.whole, modal.RULES),
     _each_direction(modal.solve, (*modal.RULES, *modal.SCALING_RULES)),

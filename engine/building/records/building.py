@@ -11,10 +11,12 @@ import numpy as np
 from engine.building.records.direction import DIRECTIONS, Direction
 from engine.building.records.fields import check_fields, checked, is_list_of_texts, is_text, word
 from engine.building.records.level import LEVEL_OPTIONS, Level, level_label
+from engine.building.records.lower import check_lower
 from engine.building.records.motion import check_method, check_motion
 from engine.building.records.rows import (
     ROW_TABLES,
     AnchorRow,
+    LowerRow,
     MemberRow,
     ModeRow,
     MotionRow,
@@ -56,6 +58,7 @@ class Building:
     mode: tuple[ModeRow, ...] = ()
     member: tuple[MemberRow, ...] = ()
     anchor: tuple[AnchorRow, ...] = ()
+    lower: tuple[LowerRow, ...] = ()
     job: Mapping[str, object] = field(default_factory=dict)
     sources: Mapping[str, str] = field(default_factory=dict)
     parts: tuple[str, ...] = checked(is_list_of_texts, ())
@@ -75,6 +78,7 @@ class Building:
         for table in ROW_TABLES:
             for place, row in enumerate(getattr(self, table), start=1):
                 check_fields(f"{row_label(table, place, asdict(row))}: ", row)
+        check_lower(self.lower, self.site.lower_base, self.direction)
         for place, row in enumerate(self.member, start=1):
             if row.direction not in self.direction:
                 label = row_label("member", place, asdict(row))

@@ -7,6 +7,7 @@ from functools import partial
 from typing import Final
 
 from engine.building.records.fields import POSITIVE, checked, is_flag, is_text, number, word
+from engine.building.records.lower import LowerEntries
 from engine.diaphragm import DIAPHRAGM_TYPES, MODE_SHAPES
 from engine.drift import DRIFT_STRUCTURES
 from engine.period import DRIFT_PERIODS, PERIOD_FORMULAS, PERIOD_SOURCES, PERIOD_SYSTEMS
@@ -75,6 +76,7 @@ class Direction(
     MethodEntries,
     PeriodEntries,
     DriftForceEntries,
+    LowerEntries,
     DiaphragmEntries,
     PlanDirectionEntries,
 ):

@@ -117,6 +117,18 @@ class AnchorRow:
     source: str | None = checked(is_text, None)
 
 
+@dataclass(frozen=True, slots=True, kw_only=True)
+class LowerRow:
+    """One level of the lower part of the two-stage procedure: elevation [ft or m], weight [kip or kN]."""
+
+    NAMED_BY: ClassVar = "name"
+
+    name: str = checked(is_text)
+    elevation: float = number(ANY)
+    weight: float = number(NOT_NEGATIVE)
+    source: str | None = checked(is_text, None)
+
+
 #: the tables of a BUILDING.toml beside the story table, with the record of a row
 ROW_TABLES: Final[Mapping[str, type[Any]]] = MappingProxyType(
     {
@@ -127,6 +139,7 @@ ROW_TABLES: Final[Mapping[str, type[Any]]] = MappingProxyType(
         "mode": ModeRow,
         "member": MemberRow,
         "anchor": AnchorRow,
+        "lower": LowerRow,
     }
 )
 

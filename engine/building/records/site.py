@@ -123,3 +123,4 @@ class Site(
     T_L: float = number(POSITIVE)
     risk_category: str = word(RISK_CATEGORIES)
     base_elevation: float = number(ANY, 0.0)
+    lower_base: float | None = number(ANY, None)
