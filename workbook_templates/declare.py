@@ -57,10 +57,10 @@ class Quantity:
     """One criteria row or one table column.
 
     ``unit`` is a key of engine.units; ``rule`` a key of the edition data, taken from the worksheet
-    function in the formula where there is one. An input says what it allows (``span``, ``choices``), what
-    holds if it is left out (``default``, or ``linked``: the formula of a level entry), and what a blank
-    workbook starts with (``starter``); ``stored`` is its key in BUILDING.toml. A criteria row
-    whose formula gives a long text has room for ``lines`` of it, in small print.
+    function in the formula where there is one. An input says what it allows (``span``, ``choices``, or the
+    defined name of a list, ``listed_in``), what holds if it is left out (``default``, or ``linked``: the
+    formula of a level entry), and what a blank workbook starts with (``starter``); ``stored`` is its key in
+    BUILDING.toml. A criteria row whose formula gives a long text has room for ``lines`` of small print.
     """
 
     key: str
@@ -72,6 +72,7 @@ class Quantity:
     symbol: str = ""
     span: Span | None = None
     choices: tuple[str, ...] = ()
+    listed_in: str = ""
     default: Any = None
     starter: Starter | None = None
     linked: str = ""
@@ -142,7 +143,8 @@ class Table:
     ``base`` says what the row of the base holds, where the table has one; ``text`` is its line in the
     contents. A table without rows of its own starts with ``start`` rows; where that is 0, one a level, and
     a building with levels must bring its rows. ``at_most_levels`` starts it with no more rows than levels.
-    ``fixed`` are the words of its first column, one a row, where the rows are no entries.
+    ``fixed`` are the words of its first column by edition, one a row, where the rows are no entries;
+    ``list_name`` is a defined name for them, as a list to choose from.
     """
 
     sheet: str
@@ -153,12 +155,13 @@ class Table:
     base: Mapping[str, str | int] = field(default_factory=dict)
     start: int = 0
     at_most_levels: bool = False
-    fixed: tuple[str, ...] = ()
+    fixed: Mapping[str, tuple[str, ...]] = field(default_factory=dict)
+    list_name: str = ""
 
-    def rows_at_start(self, level_count: int) -> int:
+    def rows_at_start(self, level_count: int, edition: str = "") -> int:
         """Return how many rows a table without rows of its own starts with."""
-        if self.fixed:
-            return len(self.fixed)
+        if edition in self.fixed:
+            return len(self.fixed[edition])
         if not self.start:
             return level_count
         return min(self.start, level_count) if self.at_most_levels else self.start

@@ -43,7 +43,7 @@ class Inputs:
     def rows(self, table: Table) -> Sequence[Entries]:
         """The rows of a table, in the order given; empty ones where none is given."""
         rows: Sequence[Entries] = self.given.get(table.stored, ())
-        return rows or [{}] * table.rows_at_start(self.levels)
+        return rows or [{}] * table.rows_at_start(self.levels, self.edition)
 
     @property
     def levels(self) -> int:

@@ -104,6 +104,9 @@ def validation(q: Quantity) -> DataValidation | None:
     if q.choices:
         rule = DataValidation(type="list", formula1=f'"{",".join(q.choices)}"', allow_blank=q.starter is None)
         allowed = "one of: " + ", ".join(q.choices)
+    elif q.listed_in:
+        rule = DataValidation(type="list", formula1=f"={q.listed_in}", allow_blank=True)
+        allowed = f"one of the list {q.listed_in}"
     elif q.span is not None:
         rule = _number_rule(q)
         allowed = f"a number, {q.span}"

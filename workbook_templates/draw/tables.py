@@ -40,6 +40,9 @@ def draw(sheet: Worksheet, layout: Layout, grid: Grid, inputs: Inputs) -> None:
         sheet.row_dimensions[row].height = 5
     area = f"$A${places.SYMBOL_ROW}:${grid.columns[-1].letter}${grid.bottom_guard}"
     sheets.name(sheet, grid.table.name, area)
+    if grid.table.list_name:
+        first, last = FIRST_LEVEL, grid.bottom_guard - 1
+        sheets.name(sheet, grid.table.list_name, f"$A${first}:$A${last}")
     sheet.freeze_panes = f"B{TOP_GUARD}"
     sheets.page(sheet, inputs.units, f"1:{places.ROLE_ROW}")
     sheet.sheet_properties.pageSetUpPr.fitToPage = False
@@ -73,7 +76,7 @@ def _draw_cells(sheet: Worksheet, layout: Layout, grid: Grid, inputs: Inputs, co
         cell = sheet[f"{column.letter}{row}"]
         entered = inputs.row(grid.table, row - FIRST_LEVEL, q, direction) if q.is_input else None
         if q.role is Role.FIXED:
-            entered = grid.table.fixed[row - FIRST_LEVEL]
+            entered = grid.table.fixed[inputs.edition][row - FIRST_LEVEL]
         cell.value = (
             layout.write(q.formula or q.linked, sheet.title, direction, row) if entered is None else entered
         )

@@ -2,6 +2,7 @@
 
 from __future__ import annotations
 
+from engine.editions import EDITIONS
 from workbook_templates.declare import DIRECTIONS, Block, Part, Quantity, Role, Table, always, entry
 from xlbridge.catalogue import CATALOGUE
 from xlbridge.catalogue.entry import NOT_NEGATIVE, POSITIVE
@@ -175,7 +176,7 @@ PART = Part(
             _FACTORS_TEXT,
             "combination",
             bands=(FACTORS,),
-            fixed=COMBINATIONS,
+            fixed=dict.fromkeys(EDITIONS, COMBINATIONS),
         ),
         Table(
             "Members", _MEMBERS_TEXT.capitalize(), _MEMBERS_TEXT, "member", bands=(MEMBERS, EFFECTS), start=4

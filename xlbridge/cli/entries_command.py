@@ -66,7 +66,9 @@ def _entry(part: Part, table: str, q: Quantity, per_direction: bool) -> dict[str
     return {
         "part": part.key,
         "table": table,
-        "key": f"{key}, {key[:-1]}Y" if key != q.key and per_direction and table == "level" else key,
+        "key": f"{key}, {key[:-1]}Y"
+        if key != q.key and per_direction and table not in ("site", "direction")
+        else key,
         "text": q.text,
         "unit": q.unit,
         "allowed": _allowed(q),

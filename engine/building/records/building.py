@@ -21,6 +21,7 @@ from engine.building.records.rows import (
     ModeRow,
     MotionRow,
     SpectrumRow,
+    SystemRow,
     WallRow,
     WeightRow,
     row_label,
@@ -59,6 +60,7 @@ class Building:
     member: tuple[MemberRow, ...] = ()
     anchor: tuple[AnchorRow, ...] = ()
     lower: tuple[LowerRow, ...] = ()
+    system: tuple[SystemRow, ...] = ()
     job: Mapping[str, object] = field(default_factory=dict)
     sources: Mapping[str, str] = field(default_factory=dict)
     parts: tuple[str, ...] = checked(is_list_of_texts, ())
@@ -78,6 +80,8 @@ class Building:
         for table in ROW_TABLES:
             for place, row in enumerate(getattr(self, table), start=1):
                 check_fields(f"{row_label(table, place, asdict(row))}: ", row)
+        for place, row in enumerate(self.system, start=1):
+            _check_system(row_label("system", place, asdict(row)), row)
         check_lower(self.lower, self.site.lower_base, self.direction)
         for place, row in enumerate(self.member, start=1):
             if row.direction not in self.direction:
@@ -106,6 +110,18 @@ def level_values(building: Building, key: str) -> Array | None:
     if getattr(building.level[0], key) is None:
         return None
     return np.array([getattr(level, key) for level in building.level], dtype=np.float64)
+
+
+def _check_system(label: str, row: SystemRow) -> None:
+    for name in DIRECTIONS:
+        keys = [f"system_{symbol}_{name}" for symbol in ("R", "Omega_0", "C_d")]
+        missing = [key for key in keys if getattr(row, key) is None]
+        if 0 < len(missing) < len(keys):
+            raise MissingValue(
+                f"{label}: {missing[0]}",
+                None,
+                "must be given with the others of its direction",
+            )
 
 
 def _check_levels(levels: tuple[Level, ...], base: float) -> None:

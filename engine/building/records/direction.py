@@ -6,13 +6,14 @@ from dataclasses import dataclass
 from functools import partial
 from typing import Final
 
-from engine.building.records.fields import POSITIVE, checked, is_flag, is_text, number, word
+from engine.building.records.fields import AT_LEAST_1, POSITIVE, checked, is_flag, is_text, number, word
 from engine.building.records.lower import LowerEntries
 from engine.diaphragm import DIAPHRAGM_TYPES, MODE_SHAPES
 from engine.drift import DRIFT_STRUCTURES
 from engine.period import DRIFT_PERIODS, PERIOD_FORMULAS, PERIOD_SOURCES, PERIOD_SYSTEMS
 from engine.redundancy import CONFIGURATIONS
 from engine.require import above, at_least, within
+from engine.systems import OVERSTRENGTH_RULES
 from engine.vertical import EXPONENT_RULES
 
 DIRECTIONS: Final = ("X", "Y")
@@ -26,6 +27,21 @@ class MethodEntries:
     """The method of the response coefficient, where a multi-period spectrum is given."""
 
     C_s_method: str = word(METHODS, METHODS[0])
+
+
+@dataclass(frozen=True, kw_only=True)
+class SystemEntries:
+    """The row of Table 12.2-1, the reliefs taken with it, and coefficients of one system above another."""
+
+    table_system: str | None = checked(is_text, None)
+    omega_reduction: str = word(OVERSTRENGTH_RULES, OVERSTRENGTH_RULES[0])
+    height_increase: bool = checked(is_flag, False)
+    above_R: float = number(AT_LEAST_1, 1.0)
+    above_Omega_0: float = number(AT_LEAST_1, 1.0)
+    above_C_d: float = number(AT_LEAST_1, 1.0)
+    below_R: float = number(AT_LEAST_1, 1.0)
+    below_Omega_0: float = number(AT_LEAST_1, 1.0)
+    below_C_d: float = number(AT_LEAST_1, 1.0)
 
 
 @dataclass(frozen=True, kw_only=True)
@@ -77,6 +93,7 @@ class Direction(
     PeriodEntries,
     DriftForceEntries,
     LowerEntries,
+    SystemEntries,
     DiaphragmEntries,
     PlanDirectionEntries,
 ):

@@ -16,6 +16,7 @@ ANY: Final = finite
 POSITIVE: Final = partial(above, 0)
 NOT_NEGATIVE: Final = partial(at_least, 0)
 SHARE: Final = partial(within, 0, 1)
+AT_LEAST_1: Final = partial(at_least, 1)
 
 
 def checked(check: Check, default: Any = MISSING) -> Any:

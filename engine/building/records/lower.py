@@ -4,16 +4,12 @@ from __future__ import annotations
 
 from collections.abc import Mapping, Sequence
 from dataclasses import dataclass
-from functools import partial
 from typing import Any, Final
 
-from engine.building.records.fields import POSITIVE, checked, is_flag, number, word
+from engine.building.records.fields import AT_LEAST_1, POSITIVE, checked, is_flag, number, word
 from engine.errors import ImpossibleValue, MissingValue
 from engine.period import PERIOD_SYSTEMS
-from engine.require import at_least
 from engine.two_stage import PROCEDURES
-
-FACTOR: Final = partial(at_least, 1)
 
 
 @dataclass(frozen=True, kw_only=True)
@@ -23,8 +19,8 @@ class LowerEntries:
     All but the computed period of the lower part are needed where rows of the lower part are given.
     """
 
-    R_lower: float = number(FACTOR, None)
-    rho_lower: float = number(FACTOR, None)
+    R_lower: float = number(AT_LEAST_1, None)
+    rho_lower: float = number(AT_LEAST_1, None)
     period_system_lower: str = word(PERIOD_SYSTEMS, None)
     T_lower_computed: float | None = number(POSITIVE, None)
     delta_upper: float = number(POSITIVE, None)

@@ -10,6 +10,7 @@ from typing import Any, ClassVar, Final
 from engine.building.records.direction import DIRECTIONS
 from engine.building.records.fields import (
     ANY,
+    AT_LEAST_1,
     NOT_NEGATIVE,
     POSITIVE,
     checked,
@@ -129,6 +130,21 @@ class LowerRow:
     source: str | None = checked(is_text, None)
 
 
+@dataclass(frozen=True, slots=True, kw_only=True)
+class SystemRow:
+    """One of several systems that act together: its coefficients in the directions in which it acts."""
+
+    NAMED_BY: ClassVar = "name"
+
+    name: str = checked(is_text)
+    system_R_X: float | None = number(AT_LEAST_1, None)
+    system_R_Y: float | None = number(AT_LEAST_1, None)
+    system_Omega_0_X: float | None = number(AT_LEAST_1, None)
+    system_Omega_0_Y: float | None = number(AT_LEAST_1, None)
+    system_C_d_X: float | None = number(AT_LEAST_1, None)
+    system_C_d_Y: float | None = number(AT_LEAST_1, None)
+
+
 #: the tables of a BUILDING.toml beside the story table, with the record of a row
 ROW_TABLES: Final[Mapping[str, type[Any]]] = MappingProxyType(
     {
@@ -140,6 +156,7 @@ ROW_TABLES: Final[Mapping[str, type[Any]]] = MappingProxyType(
         "member": MemberRow,
         "anchor": AnchorRow,
         "lower": LowerRow,
+        "system": SystemRow,
     }
 )
 
