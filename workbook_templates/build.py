@@ -15,10 +15,11 @@ from openpyxl import Workbook
 
 from engine.version import __version__
 from workbook_templates import layout as places
+from workbook_templates import native
 from workbook_templates.draw import checks, cover, criteria, figures, functions, tables
 from workbook_templates.inputs import Inputs
 from workbook_templates.layout import Layout
-from xlbridge.headless.compute import Computed, compute_into
+from xlbridge.headless.compute import Computed, compute, compute_into
 
 DEFAULT_LEVELS: Final = 6
 #: written into every package, so that two builds are the same to the byte.
@@ -31,19 +32,30 @@ def build(given: Mapping[str, Any], level_count: int = DEFAULT_LEVELS) -> bytes:
     ``given`` needs ``edition`` and ``units``; what else is missing starts from marked starter values,
     ``level_count`` levels of them if no level is given.
     """
+    return _package(_drawn(Inputs(given, level_count)))
+
+
+def build_native(given: Mapping[str, Any], values: native.Values, level_count: int = DEFAULT_LEVELS) -> bytes:
+    """Return the same workbook in built-in functions; ``values`` are those of the one with functions."""
     inputs = Inputs(given, level_count)
+    workbook = _drawn(inputs, issue=True)
+    native.rewrite(workbook, values, inputs.units)
+    return _package(workbook)
+
+
+def _drawn(inputs: Inputs, issue: bool = False) -> Workbook:
     layout = Layout(len(inputs.rows(places.STORY_TABLE)), inputs.parts, inputs.row_counts)
     workbook = Workbook()
     workbook.remove(workbook.worksheets[0])
     sheets = {name: workbook.create_sheet(name) for name in layout.sheets}
-    cover.draw(sheets[places.COVER], layout, inputs)
+    cover.draw(sheets[places.COVER], layout, inputs, issue)
     criteria.draw(sheets[places.CRITERIA], layout, inputs)
     for grid in layout.grids:
         tables.draw(sheets[grid.table.sheet], layout, grid, inputs)
     checks.draw(sheets[places.CHECKS], layout, inputs)
     figures.draw(sheets, layout, inputs)
     functions.draw(sheets[places.FUNCTIONS], layout, inputs)
-    return _package(workbook)
+    return workbook
 
 
 def write_workbook(
@@ -53,6 +65,20 @@ def write_workbook(
     with TemporaryDirectory() as folder:
         drawn = Path(folder) / f"drawn{target.suffix}"
         drawn.write_bytes(build(given, level_count))
+        return compute_into(drawn, target, force)
+
+
+def write_native(
+    given: Mapping[str, Any], target: Path, level_count: int = DEFAULT_LEVELS, force: bool = False
+) -> Computed:
+    """Write the workbook in built-in functions, once each of its cells gives what the functions give."""
+    with TemporaryDirectory() as folder:
+        called, drawn = (Path(folder) / f"{name}{target.suffix}" for name in ("called", "drawn"))
+        called.write_bytes(build(given, level_count))
+        functions = compute(called)
+        drawn.write_bytes(build_native(given, functions.values, level_count))
+        if wrong := native.differing(functions, compute(drawn)):
+            raise ValueError(f"built-in functions give another value in {', '.join(wrong[:5])}")
         return compute_into(drawn, target, force)
 
 

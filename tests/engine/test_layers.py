@@ -49,7 +49,9 @@ MAY_IMPORT: dict[str, tuple[str, ...]] = {
     "xlbridge.headless": (*GROUND, "xlbridge.values"),
     # the one place where the evaluator, which knows no formula of the standard, is given the functions
     "xlbridge.headless.compute": (*BRIDGE, "xlbridge.headless"),
-    "workbook_templates": (*CATALOGUE, "xlbridge.work", *COMPUTED),
+    # formulas taken apart and put together again without the functions
+    "xlbridge.native": (*CATALOGUE, "xlbridge.headless"),
+    "workbook_templates": (*CATALOGUE, "xlbridge.work", "xlbridge.native", *COMPUTED),
     "xlbridge.audit": (*BRIDGE, "engine.building", "xlbridge.headless"),
     "xlbridge.cli": (*PACKAGES,),
 }

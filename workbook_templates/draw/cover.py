@@ -28,8 +28,14 @@ CAUTIONS = (
     sheets.CAUTION,
     "Rows marked “from memory” could not be read in a public source; rows marked “uncertain” carry a doubt "
     "that their note puts in words. Look both up in the standard before use.",
+)
+ADDIN = (
     "Cells that call ELF_… functions need the Storyledger add-in to be recalculated. The numbers stored in "
-    "a computed copy show without it.",
+    "a computed copy show without it."
+)
+ISSUE = (
+    "An issue copy: its formulas are built-in functions only and compute without the add-in. Cells that "
+    "could not be written so hold fixed values; the sheet Fixed values lists them, the checks count them."
 )
 LEGEND = {
     Role.INPUT: "an entry of yours: value, and its source beside it",
@@ -53,14 +59,14 @@ GUIDE = (
 LOG = ("Revision", "Date", "By", "What was issued, and why")
 
 
-def draw(sheet: Worksheet, layout: Layout, inputs: Inputs) -> None:
-    """Fill the cover."""
+def draw(sheet: Worksheet, layout: Layout, inputs: Inputs, issue: bool = False) -> None:
+    """Fill the cover; ``issue`` says that the workbook is written in built-in functions."""
     sheets.head(sheet, "Seismic story forces")
     for letter, width in zip("ABCDE", (21, 47, 16, 16, 30), strict=True):
         sheet.column_dimensions[letter].width = width
     row = _draw_job(sheet, inputs, 4)
     row = _draw_headlines(sheet, layout, inputs, row + 1)
-    row = _draw_texts(sheet, "Cautions", CAUTIONS, row + 1)
+    row = _draw_texts(sheet, "Cautions", (*CAUTIONS, ISSUE if issue else ADDIN), row + 1)
     row = _draw_legend(sheet, row + 1)
     row = _draw_contents(sheet, layout, row + 1)
     row = _draw_texts(sheet, "Working with the table", GUIDE, row + 1)

@@ -59,6 +59,10 @@ FUNCTIONS = (
         result=Result("status", "text", "flexible or not"),
         function=diaphragm.flexibility,
         expression="{delta_MDD}/{Delta_ADVE} > 2",
+        native=(
+            f'IF({{delta_MDD}}/{{Delta_ADVE}}>2*(1+1E-12),"{diaphragm.FLEXIBILITIES[1]}",'
+            f'"{diaphragm.FLEXIBILITIES[0]}")'
+        ),
         example=Example({"delta_MDD": 0.9, "Delta_ADVE": 0.4}, "flexible"),
     ),
     SheetFunction(

@@ -97,6 +97,7 @@ FUNCTIONS = (
         result=Result("edges", "text", "yes or no"),
         function=drift.edges_due,
         expression="{TIR} > 1.2 and Seismic Design Category {SDC} is C to F",
+        native=('IF(AND({TIR}>1.2*(1+1E-12),OR({SDC}="C",{SDC}="D",{SDC}="E",{SDC}="F")),"yes","no")'),
         example=Example({"TIR": 1.3, "SDC": "D"}, "yes"),
     ),
     SheetFunction(

@@ -64,8 +64,10 @@ FUNCTIONS = (
         function=dynamics.elastic_displacement,
         expression="Σ of V_i/{stiffnesses} up to {h_x}, V_i the sum of {forces} at and above {heights}",
         native=(
-            'SUMPRODUCT(({heights}<={h_x}*(1+1E-9))*SUMIF({heights},">="&{heights}*(1-1E-9),{forces})'
-            '/{stiffnesses}/COUNTIFS({heights},">="&{heights}*(1-1E-9),{heights},"<="&{heights}*(1+1E-9)))'
+            # a blank row counts nothing, and divides by 1
+            "SUMPRODUCT(({heights}>0)*({heights}<={h_x}*(1+1E-9))"
+            '*SUMIF({heights},">="&{heights}*(1-1E-9),{forces})/({stiffnesses}+({heights}=0))/(({heights}=0)'
+            '+COUNTIFS({heights},">="&{heights}*(1-1E-9),{heights},"<="&{heights}*(1+1E-9))))'
         ),
         example=Example(
             {

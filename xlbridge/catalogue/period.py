@@ -140,6 +140,10 @@ FUNCTIONS = (
         result=Result("governs", "text", "what gives the period"),
         function=period.period_bound,
         expression="what sets min({T_computed}; {C_u}·{T_a})",
+        native=(
+            f'IF({{T_computed}}>{{C_u}}*{{T_a}}*(1+1E-12),"{period.PERIOD_BOUNDS[1]}",'
+            f'"{period.PERIOD_BOUNDS[0]}")'
+        ),
         example=Example({"T_a": 1.052, "C_u": 1.4, "T_computed": 2.462}, "upper limit C_u T_a"),
     ),
     SheetFunction(

@@ -68,6 +68,7 @@ FUNCTIONS = (
         result=Result("status", "text", "wide enough or too narrow"),
         function=separation.separation_verdict,
         expression="{gap} against {delta_MT}",
+        native=f'IF({{delta_MT}}>{{gap}}*(1+1E-12),"{separation.GAPS[1]}","{separation.GAPS[0]}")',
         example=Example({"gap": 5.0, "delta_MT": 5.0}, "wide enough"),
     ),
     SheetFunction(

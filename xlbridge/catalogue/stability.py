@@ -105,6 +105,10 @@ FUNCTIONS = (
         result=Result("status", "text", "consequence"),
         function=stability.stability_verdict,
         expression="{theta} against 0.10 and against theta_max = {theta_max}",
+        native=(
+            f'IF({{theta}}>{{theta_max}},IF({{theta}}<=0.1,"{stability.VERDICTS[3]}","{stability.VERDICTS[2]}"),'
+            f'IF({{theta}}<=0.1,"{stability.VERDICTS[0]}","{stability.VERDICTS[1]}"))'
+        ),
         example=Example({"theta": 0.15, "theta_max": 0.2}, "amplify by 1/(1 - theta)"),
     ),
 )

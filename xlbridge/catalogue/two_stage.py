@@ -114,6 +114,7 @@ FUNCTIONS = (
         result=Result("amplification", "text", "amplification at the transition"),
         function=two_stage.transition_amplification,
         expression="what is due for a discontinuity at the transition: {discontinuity}",
+        native=f'IF({{discontinuity}}="yes","{two_stage.TRANSITION[1]}","{two_stage.TRANSITION[0]}")',
         example=Example({"discontinuity": "no"}, "none"),
     ),
 )

@@ -19,6 +19,9 @@ from xlbridge.catalogue.entry import (
 V = Argument("V", "force", "Base shear", POSITIVE)
 values = Argument("values", "displacement", "Values at all levels", kind=Kind.LEVELS, symbol="d_i")
 
+_NEXT_LOWER = "SUMPRODUCT(MAX(({heights}<{h_x}*(1-1E-9))*{heights}))"
+_AT_NEXT = f"({{heights}}>={_NEXT_LOWER}*(1-1E-9))*({{heights}}<{{h_x}}*(1-1E-9))*({{heights}}>0)"
+
 FUNCTIONS = (
     SheetFunction(
         name="ELF_EXPONENT",
@@ -135,7 +138,7 @@ FUNCTIONS = (
         result=Result("h_sx", "length", "story height"),
         function=vertical.story_height,
         expression="{h_x} - the next lower of {heights}, or the base",
-        native="{h_x}-SUMPRODUCT(MAX(({heights}<{h_x}*(1-1E-9))*{heights}))",
+        native=f"{{h_x}}-{_NEXT_LOWER}",
         example=Example({"h_x": 60.0, "heights": [12.0, 24.0, 36.0, 48.0, 60.0]}, "12"),
     ),
     SheetFunction(
@@ -147,6 +150,7 @@ FUNCTIONS = (
         result=Result("d_below", "displacement", "value at the level below, in the unit of the values"),
         function=vertical.value_below,
         expression="the value of {values} at the level of {heights} next below {h_x}; 0 at the base",
+        native=f"IF({_NEXT_LOWER}=0,0,SUMPRODUCT({_AT_NEXT}*{{values}})/SUMPRODUCT({_AT_NEXT}))",
         example=Example({"h_x": 48.0, "values": [0.4, 1.1, 1.5], "heights": [12.0, 48.0, 60.0]}, "0.4"),
     ),
 )

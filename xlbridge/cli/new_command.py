@@ -11,7 +11,7 @@ from engine.building import from_mapping, to_mapping
 from engine.editions import EDITIONS
 from engine.levels import MAX_LEVELS
 from engine.units import SYSTEMS
-from workbook_templates.build import DEFAULT_LEVELS, write_workbook
+from workbook_templates.build import DEFAULT_LEVELS, write_native, write_workbook
 from workbook_templates.parts import CORE, PARTS
 from xlbridge.cli.failure import Refusal
 from xlbridge.cli.files import read_building, refuse_existing, refuse_input
@@ -27,6 +27,7 @@ DEFAULT_EDITION, DEFAULT_UNITS = EDITIONS[-1], SYSTEMS[0]
 @click.option("--units", type=click.Choice(SYSTEMS), help=f"kip, ft, in or kN, m, mm [{DEFAULT_UNITS}].")
 @click.option("--parts", help=f"Parts beside the story forces, by comma: {', '.join(EXTRA)} [drift].")
 @click.option("--from", "building", type=click.Path(path_type=Path), help="A BUILDING.toml to fill it from.")
+@click.option("--native", is_flag=True, help="An issue copy: built-in functions only, no add-in needed.")
 @click.option("--force", is_flag=True, help="Replace an existing BOOK.")
 def command(
     book: Path,
@@ -35,6 +36,7 @@ def command(
     units: str | None,
     parts: str | None,
     building: Path | None,
+    native: bool,
     force: bool,
 ) -> None:
     """Make the story workbook BOOK: criteria, story table, checks, figures, and the parts asked for.
@@ -54,7 +56,8 @@ def command(
         given = {"edition": edition or DEFAULT_EDITION, "units": units or DEFAULT_UNITS}
     if parts is not None:
         given["parts"] = [word.strip() for word in parts.split(",") if word.strip()]
-    write_workbook(given, book, levels or DEFAULT_LEVELS, force)
+    write = write_native if native else write_workbook
+    write(given, book, levels or DEFAULT_LEVELS, force)
     click.echo(f"{book}: made for ASCE/SEI {given['edition']}, units {given['units']}")
 
 

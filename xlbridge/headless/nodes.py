@@ -141,7 +141,7 @@ def render_value(value: object) -> str:
     if isinstance(value, bool):
         return "TRUE" if value else "FALSE"
     if isinstance(value, float):
-        return str(int(value)) if value.is_integer() and abs(value) < 1e15 else repr(value)
+        return str(int(value)) if value.is_integer() and abs(value) < 1e15 else repr(value).upper()
     if isinstance(value, str):
         return '"' + value.replace('"', '""') + '"'
     return str(value)

@@ -19,8 +19,8 @@ from xlbridge.headless.evaluate import Evaluator
 from xlbridge.values import CellError, Scalar
 
 NATIVE = tuple(entry for entry in ENTRIES if entry.native)
-#: a search beside a height, or along the lines between periods: no one-cell formula is declared
-WITHOUT = {"ELF_BELOW", "ELF_SD1_MULTI"} | {
+#: a search along the lines between periods: no one-cell formula is declared
+WITHOUT = {"ELF_SD1_MULTI"} | {
     # compares with the story above or below, which has to be searched for
     *("ELF_SOFT_RATIO", "ELF_SOFT_RATIO_THREE", "ELF_WEAK_RATIO", "ELF_WEIGHT_RATIO", "ELF_GEOMETRY_RATIO"),
     "ELF_DRIFT_RATIO_ABOVE",
