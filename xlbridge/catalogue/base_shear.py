@@ -3,13 +3,24 @@
 from __future__ import annotations
 
 from engine import base_shear
+from engine.base_shear import which
 from xlbridge.catalogue.common import S_1, S_D1, S_DS, T_L, I_e, R, T, edition
 from xlbridge.catalogue.entry import POSITIVE, Argument, Case, Example, Result, SheetFunction, Term
+from xlbridge.catalogue.governing import words
 
 CAP = "{S_D1}*IF({T}<={T_L},1,{T_L}/{T})/({T}*({R}/{I_e}))"
 PLATEAU = "{S_DS}/({R}/{I_e})"
 MINIMUM = "MAX(0.044*{S_DS}*{I_e},0.01)"
 MINIMUM_S1 = "IF({S_1}>=0.6,0.5*{S_1}/({R}/{I_e}),0)"
+
+C_S = f"MAX(MIN({PLATEAU},{CAP}),{MINIMUM},{MINIMUM_S1})"
+UPPER = (
+    (which.PLATEAU, PLATEAU, ""),
+    (which.CAP, CAP, "{T}<={T_L}"),
+    (which.CAP_LONG, CAP, "{T}>{T_L}"),
+)
+LOWER = ((which.MINIMUM, MINIMUM, "0.044*{S_DS}*{I_e}>0.01"), (which.FLOOR, MINIMUM, ""))
+NEAR_FAULT = (which.NEAR_FAULT, MINIMUM_S1, "")
 
 INPUTS = (S_DS, S_D1, S_1, T, T_L, R, I_e, edition)
 BOUNDS = (
@@ -94,7 +105,7 @@ FUNCTIONS = (
         result=Result("C_s", "none", "seismic response coefficient"),
         function=base_shear.response_coefficient,
         expression="max(min({plateau}; {cap}); {minimum}; {minimum_S1})",
-        native=f"MAX(MIN({PLATEAU},{CAP}),{MINIMUM},{MINIMUM_S1})",
+        native=C_S,
         example=Example(_EXAMPLE, "0.050"),
         terms=BOUNDS,
     ),
@@ -107,6 +118,7 @@ FUNCTIONS = (
         result=Result("governs", "text", "governing bound"),
         function=base_shear.governing_bound,
         expression="the bound that sets max(min({plateau}; {cap}); {minimum}; {minimum_S1})",
+        native=words(C_S, *UPPER, *LOWER, NEAR_FAULT),
         example=Example(_EXAMPLE, "cap S_D1/(T R/I_e), Eq. 12.8-4"),
         terms=BOUNDS,
     ),

@@ -3,9 +3,21 @@
 from __future__ import annotations
 
 from engine import base_shear
-from xlbridge.catalogue.base_shear import BOUNDS, CAP, INPUTS, MINIMUM, MINIMUM_S1, PLATEAU
+from engine.base_shear import which
+from xlbridge.catalogue.base_shear import (
+    BOUNDS,
+    CAP,
+    INPUTS,
+    LOWER,
+    MINIMUM,
+    MINIMUM_S1,
+    NEAR_FAULT,
+    PLATEAU,
+    UPPER,
+)
 from xlbridge.catalogue.common import S_1, S_DS, I_e, R, T, question, risk_category
 from xlbridge.catalogue.entry import POSITIVE, Argument, Example, Kind, Result, SheetFunction, Span, Term
+from xlbridge.catalogue.governing import words
 
 S_a = Argument(
     *("S_a", "acceleration", "Multi-period spectrum at T, no less than its peak left of the peak", POSITIVE)
@@ -20,6 +32,10 @@ _GOVERNS = Result("governs", "text", "governing bound")
 _PLATEAU, _CAP, _LEAST, _NEAR_FAULT = BOUNDS
 _SPECTRUM = Term("spectrum", "C_s,spectrum", base_shear.coefficient_multi)
 _MULTI = "{S_a}/({R}/{I_e})"
+_SPECTRUM_BOUND = (which.SPECTRUM, _MULTI, "")
+_C_S_MULTI = f"MAX({_MULTI},{MINIMUM},{MINIMUM_S1})"
+_C_S_DRIFT = f"MAX(MIN({PLATEAU},{CAP}),{MINIMUM_S1})"
+_C_S_DRIFT_MULTI = f"MAX({_MULTI},{MINIMUM_S1})"
 _SITE = {"S_a": 0.6, "S_1": 0.6, "R": 8.0, "I_e": 1.0, "edition": "7-22"}
 _DRIFT = {**_SITE, "S_DS": 1.0, "S_D1": 0.6, "T": 2.0, "T_L": 8.0}
 del _DRIFT["S_a"]
@@ -67,7 +83,7 @@ FUNCTIONS = (
         result=_CS,
         function=base_shear.response_coefficient_multi,
         expression="max({spectrum}; {minimum}; {minimum_S1})",
-        native=f"MAX({_MULTI},{MINIMUM},{MINIMUM_S1})",
+        native=_C_S_MULTI,
         example=Example({**_SITE, "S_DS": 1.0}, "0.075"),
         terms=(_SPECTRUM, _LEAST, _NEAR_FAULT),
     ),
@@ -80,6 +96,7 @@ FUNCTIONS = (
         result=_GOVERNS,
         function=base_shear.governing_bound_multi,
         expression="the bound that sets max({spectrum}; {minimum}; {minimum_S1})",
+        native=words(_C_S_MULTI, _SPECTRUM_BOUND, *LOWER, NEAR_FAULT),
         example=Example({**_SITE, "S_DS": 1.0}, "spectrum S_a/(R/I_e), Eq. 12.8-2"),
         terms=(_SPECTRUM, _LEAST, _NEAR_FAULT),
     ),
@@ -92,7 +109,7 @@ FUNCTIONS = (
         result=_CS,
         function=base_shear.drift_coefficient,
         expression="max(min({plateau}; {cap}); {minimum_S1})",
-        native=f"MAX(MIN({PLATEAU},{CAP}),{MINIMUM_S1})",
+        native=_C_S_DRIFT,
         example=Example(_DRIFT, "0.0375"),
         terms=(_PLATEAU, _CAP, _NEAR_FAULT),
     ),
@@ -105,6 +122,7 @@ FUNCTIONS = (
         result=_GOVERNS,
         function=base_shear.drift_bound,
         expression="the bound that sets max(min({plateau}; {cap}); {minimum_S1})",
+        native=words(_C_S_DRIFT, *UPPER, NEAR_FAULT),
         example=Example(_DRIFT, "cap S_D1/(T R/I_e), Eq. 12.8-4"),
         terms=(_PLATEAU, _CAP, _NEAR_FAULT),
     ),
@@ -117,7 +135,7 @@ FUNCTIONS = (
         result=_CS,
         function=base_shear.drift_coefficient_multi,
         expression="max({spectrum}; {minimum_S1})",
-        native=f"MAX({_MULTI},{MINIMUM_S1})",
+        native=_C_S_DRIFT_MULTI,
         example=Example(_SITE, "0.075"),
         terms=(_SPECTRUM, _NEAR_FAULT),
     ),
@@ -130,6 +148,7 @@ FUNCTIONS = (
         result=_GOVERNS,
         function=base_shear.drift_bound_multi,
         expression="the bound that sets max({spectrum}; {minimum_S1})",
+        native=words(_C_S_DRIFT_MULTI, _SPECTRUM_BOUND, NEAR_FAULT),
         example=Example(_SITE, "spectrum S_a/(R/I_e), Eq. 12.8-2"),
         terms=(_SPECTRUM, _NEAR_FAULT),
     ),

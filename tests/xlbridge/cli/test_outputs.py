@@ -153,6 +153,17 @@ class TestNew:
         assert record["errors"] == record["not_evaluated"] == []
         assert "STARTER VALUES" in record["values"]["Cover"]["A2"]
 
+    def test_an_issue_copy_calls_no_function_of_ours(self, tmp_path: Path, demo: Path) -> None:
+        made = run("new", tmp_path / "a.xlsx", "--native", "--from", demo / "building.toml")
+        assert (made.code, made.err) == (0, "")
+        book = load_workbook(tmp_path / "a.xlsx")
+        formulas = [c.value for s in book for row in s.iter_rows() for c in row if c.data_type == "f"]
+        assert len(formulas) > 300
+        assert not [text for text in formulas if "ELF_" in text]
+        stored = load_workbook(tmp_path / "a.xlsx", data_only=True)
+        called = load_workbook(demo / "story.xlsx", data_only=True)
+        assert stored["Cover"]["C13"].value == pytest.approx(called["Cover"]["C13"].value, rel=1e-12)
+
     def test_two_builds_are_the_same_file(self, tmp_path: Path) -> None:
         for name in ("a.xlsx", "b.xlsx"):
             run("new", tmp_path / name)
