@@ -73,7 +73,7 @@ def _draw_list(sheet: Worksheet, found: list[Fixed], units: str) -> None:
     sheets.table_head(sheet, TOP, HEADERS, WIDTHS)
     for row, fixed in enumerate(found, TOP + 1):
         for column, content in enumerate(fixed, 1):
-            style.write(sheet.cell(row, column), content, style.BODY, style.TOP)
+            style.write(sheet.cell(row, column), content, style.BODY, style.TEXT)
         sheets.fit_row(sheet, row, WIDTHS)
     sheet.freeze_panes = f"A{TOP + 1}"
     sheets.page(sheet, units, f"1:{TOP}")
