@@ -144,7 +144,7 @@ class Table:
     contents. A table without rows of its own starts with ``start`` rows; where that is 0, one a level, and
     a building with levels must bring its rows. ``at_most_levels`` starts it with no more rows than levels.
     ``fixed`` are the words of its first column by edition, one a row, where the rows are no entries;
-    ``list_name`` is a defined name for them, as a list to choose from.
+    ``list_name`` is a defined name for them, as a list to choose from. Rows have room for ``row_lines``.
     """
 
     sheet: str
@@ -157,6 +157,7 @@ class Table:
     at_most_levels: bool = False
     fixed: Mapping[str, tuple[str, ...]] = field(default_factory=dict)
     list_name: str = ""
+    row_lines: int = 1
 
     def rows_at_start(self, level_count: int, edition: str = "") -> int:
         """Return how many rows a table without rows of its own starts with."""

@@ -57,6 +57,7 @@ def _draw_line(
         sheet.cell(row, column).alignment = style.RIGHT
     sheet.cell(row, 7, check.tolerance)
     style.dress(sheet.cell(row, 7), Role.FIXED, "0.0E+00" if check.tolerance else "0")
+    sheets.fit_row(sheet, row, WIDTHS)
     sheet.cell(row, 9, _verdict(check, row))
     style.dress(sheet.cell(row, 9), Role.VERDICT)
 

@@ -56,7 +56,7 @@ GUIDE = (
     "from a neighbour, then enter name, elevation, weight and the rest. Rows may stand in any order.",
     "Replace a starter value: type the value and write where it comes from into its source cell.",
 )
-LOG = ("Revision", "Date", "By", "What was issued, and why")
+LOG = ("Revision", "Date", "By", "What, and why")
 
 
 def draw(sheet: Worksheet, layout: Layout, inputs: Inputs, issue: bool = False) -> None:
@@ -94,8 +94,8 @@ def _draw_headlines(sheet: Worksheet, layout: Layout, inputs: Inputs, row: int) 
         style.write(sheet.cell(row, column), text, style.BOLD, style.RIGHT)
     for line in (line for part in layout.parts for line in part.headlines):
         row += 1
-        style.write(sheet.cell(row, 1), line.text)
-        style.write(sheet.cell(row, 2), symbol(line.unit, inputs.units))
+        unit = "" if line.unit == "none" else f" [{symbol(line.unit, inputs.units)}]"
+        style.write(sheet.cell(row, 1), line.text + unit)
         number_format = style.number_format(Quantity("", "", line.unit, Role.LINK), inputs.units)
         for column, direction in zip((3, 4), DIRECTIONS, strict=True):
             sheet.cell(row, column, layout.write(line.formula, COVER, direction))

@@ -16,6 +16,7 @@ from workbook_templates.layout import CRITERIA, CRITERIA_COLUMN, CRITERIA_TOP, L
 
 HEADERS = ("", "Quantity", "Symbol", "X, or both", "Y", "Unit", "Clause", "Source of the entry", "Note")
 PAGE_HEIGHT = 690.0  # points of rows on one landscape page, fitted to its width
+AS_ABOVE = "as above"  # stands for a note that the row above has
 WIDTHS = (3, 46, 13, 25, 25, 7, 23, 31, 50)
 
 
@@ -27,8 +28,11 @@ def draw(sheet: Worksheet, layout: Layout, inputs: Inputs) -> None:
     used = 0.0
     for block in layout.criteria:
         style.write(sheet.cell(top, 2), block.title, style.HEADING)
+        said = ""
         for q in block.quantities:
-            _draw_row(sheet, layout, inputs, block, q)
+            note = sheets.clause_note(q, inputs.edition)
+            _draw_row(sheet, layout, inputs, block, q, AS_ABOVE if note and note == said else note)
+            said = note
         bottom = top + len(block.quantities) + 2
         high = sum(sheet.row_dimensions[row].height or sheets.LINE for row in range(top, bottom))
         if used and used + high > PAGE_HEIGHT:
@@ -39,7 +43,7 @@ def draw(sheet: Worksheet, layout: Layout, inputs: Inputs) -> None:
     sheets.page(sheet, inputs.units, "1:4")
 
 
-def _draw_row(sheet: Worksheet, layout: Layout, inputs: Inputs, block: Block, q: Quantity) -> None:
+def _draw_row(sheet: Worksheet, layout: Layout, inputs: Inputs, block: Block, q: Quantity, note: str) -> None:
     row = layout.rows[q.key]
     labels = {
         1: style.letter(q.role),
@@ -47,7 +51,7 @@ def _draw_row(sheet: Worksheet, layout: Layout, inputs: Inputs, block: Block, q:
         3: q.shown_symbol,
         6: symbol(q.unit, inputs.units).replace("text", ""),
         7: sheets.clause_text(q, inputs.edition),
-        9: sheets.clause_note(q, inputs.edition),
+        9: note,
     }
     for column, text in labels.items():
         font = style.SMALL if column in (1, 9) else style.BODY

@@ -7,6 +7,7 @@ from collections.abc import Mapping
 from openpyxl.chart import BarChart, Reference, ScatterChart, Series
 from openpyxl.chart.shapes import GraphicalProperties
 from openpyxl.drawing.line import LineProperties
+from openpyxl.worksheet.pagebreak import Break
 from openpyxl.worksheet.worksheet import Worksheet
 
 from engine.units import symbol
@@ -24,7 +25,8 @@ STROKES = (
     ("5B7F3A", "lgDash", "triangle"),
 )
 LIMIT_ROW = 4
-WIDTH, HEIGHT, ROWS = 19.0, 7.6, 16  # cm, cm, sheet rows: three charts on one upright page
+ON_A_PAGE = 2
+WIDTH, HEIGHT, ROWS = 19.0, 9.6, 20  # cm, cm, sheet rows: two charts on one upright page
 
 
 def draw(book: Mapping[str, Worksheet], layout: Layout, inputs: Inputs) -> None:
@@ -41,11 +43,12 @@ def draw(book: Mapping[str, Worksheet], layout: Layout, inputs: Inputs) -> None:
         if figure in limited:
             chart.series.append(_limit_line(sheet, figure, LIMIT_ROW + limited.index(figure)))
         _place(sheet, chart, top + ROWS * number)
-    curves = (curve for part in layout.parts for curve in part.curves)
+    curves = [curve for part in layout.parts for curve in part.curves]
     for number, curve in enumerate(curves, len(figures)):
         _place(sheet, _curves(book, layout, inputs, curve), top + ROWS * number)
     sheets.page(sheet, inputs.units, "1:2", landscape=False)
-    sheet.page_setup.fitToHeight = 1
+    for number in range(ON_A_PAGE, len(figures) + len(curves), ON_A_PAGE):
+        sheet.row_breaks.append(Break(id=top + ROWS * number - 2))
 
 
 def _split(figure: Figure) -> list[tuple[Figure, tuple[str, ...]]]:

@@ -34,8 +34,12 @@ def draw(sheet: Worksheet, layout: Layout, grid: Grid, inputs: Inputs) -> None:
         _draw_cells(sheet, layout, grid, inputs, column)
         _draw_foot(sheet, layout, grid, inputs, column)
         _watch(sheet, grid, column)
-    for row, height in ((places.TEXT_ROW, 36), (places.CLAUSE_ROW, 24), (places.SYMBOL_ROW, 26)):
+    clauses = max(sheets.clause_text(c.quantity, inputs.edition).count(", ") + 1 for c in grid.columns)
+    for row, height in ((places.TEXT_ROW, 36), (places.CLAUSE_ROW, 12 * clauses), (places.SYMBOL_ROW, 26)):
         sheet.row_dimensions[row].height = height
+    if grid.table.row_lines > 1:
+        for row in range(FIRST_LEVEL, grid.bottom_guard):
+            sheet.row_dimensions[row].height = sheets.LINE * grid.table.row_lines
     for row in (TOP_GUARD, grid.bottom_guard):
         sheet.row_dimensions[row].height = 5
     area = f"$A${places.SYMBOL_ROW}:${grid.columns[-1].letter}${grid.bottom_guard}"

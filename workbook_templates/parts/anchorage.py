@@ -78,5 +78,5 @@ _TEXT = "structural walls out of plane and their anchorage"
 PART = Part(
     "anchorage",
     "Walls out of plane",
-    tables=(Table("Anchorage", _TEXT.capitalize(), _TEXT, "anchor", bands=(WALLS, FORCES), start=4),),
+    tables=(Table("Anchorage", "Walls out of plane", _TEXT, "anchor", bands=(WALLS, FORCES), start=4),),
 )

@@ -172,15 +172,13 @@ PART = Part(
     tables=(
         Table(
             "Combinations",
-            _FACTORS_TEXT.capitalize(),
+            "Load combinations",
             _FACTORS_TEXT,
             "combination",
             bands=(FACTORS,),
             fixed=dict.fromkeys(EDITIONS, COMBINATIONS),
         ),
-        Table(
-            "Members", _MEMBERS_TEXT.capitalize(), _MEMBERS_TEXT, "member", bands=(MEMBERS, EFFECTS), start=4
-        ),
+        Table("Members", "Member effects", _MEMBERS_TEXT, "member", bands=(MEMBERS, EFFECTS), start=4),
     ),
     brought_by=("vertical_case", "S_av"),
 )

@@ -81,7 +81,7 @@ ORDINATES = Block(
     ),
 )
 _TEXT = "the spectrum that S_DS and S_D1 are taken from, period by period"
-TABLE = Table("Motion", _TEXT.capitalize(), _TEXT, "multi_period", bands=(ORDINATES,), start=len(PERIODS))
+TABLE = Table("Motion", "Spectrum as given", _TEXT, "multi_period", bands=(ORDINATES,), start=len(PERIODS))
 
 _COMMON = (
     Quantity(

@@ -107,7 +107,7 @@ PART = Part(
     tables=(
         Table(
             "Together",
-            _ACTING.capitalize(),
+            "Systems that act together",
             _ACTING,
             "system",
             bands=(

@@ -168,12 +168,13 @@ PART = Part(
     tables=(
         Table(
             "Systems",
-            _TEXT.capitalize(),
+            "Systems of Table 12.2-1",
             _TEXT,
             "systems_listed",
             bands=(ROWS,),
             fixed=SYSTEMS,
             list_name=LIST,
+            row_lines=3,
         ),
     ),
     checks=(

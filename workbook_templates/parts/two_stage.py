@@ -422,7 +422,7 @@ PART = Part(
     tables=(
         Table(
             "Lower",
-            _TEXT.capitalize(),
+            "Lower part",
             _TEXT,
             "lower",
             bands=(LEVEL, FORCES),
