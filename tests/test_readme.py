@@ -17,8 +17,10 @@ from engine.building import from_mapping, solve
 from engine.building.results import RULES
 from tests.support import readme
 from tests.support.command import ROOT
+from workbook_templates.parts import CORE, PARTS
 from xlbridge.catalogue import CATALOGUE
 from xlbridge.cli import CAUTION, COMMANDS
+from xlbridge.cli.entries_command import entries
 from xlbridge.headless.compute import open_workbook
 from xlbridge.values import CellError
 
@@ -145,6 +147,15 @@ class TestBuildingFile:
         assert package.h_n == 28
         assert package.direction["Y"].theta is not None
         assert package.direction["X"].drift_over_limit.max() < 1  # type: ignore[union-attr]
+
+
+class TestParts:
+    def test_every_part_is_in_the_table_with_entries_that_exist(self) -> None:
+        rows = readme.rows("part", "what it brings", "comes with")
+        assert [part.strip("`") for part, *_ in rows] == [key for key in PARTS if key != CORE]
+        known = {key for entry in entries() for key in (*entry["key"].split(", "), entry["table"])}
+        named = {word for *_, entered in rows for word in re.findall(r"`(\w+)`", entered)}
+        assert [word for word in named if not {word, f"{word}_X"} & known] == []
 
 
 class TestWords:

@@ -12,6 +12,7 @@ import warnings
 from collections.abc import Callable, Iterator, Sequence
 from math import isclose
 from pathlib import Path
+from time import process_time
 from typing import Any
 
 import formulas
@@ -21,7 +22,11 @@ import pytest
 import schedula
 from formulas.functions import Error, wrap_func
 
+from engine.building import from_mapping, solve
+from engine.editions import EDITIONS
 from workbook_templates.build import build
+from workbook_templates.parts import together
+from workbook_templates.read import Reader
 from xlbridge.headless.compute import FUNCTIONS, compute, compute_into
 from xlbridge.values import ERROR_CODES, Argument, CellError, Scalar, Value
 
@@ -102,3 +107,24 @@ def test_recalculating_a_workbook(full: bool, figure: Any, best: Any, tmp_path: 
     figure(f"formulas package over calc, {levels} levels", package / calc, "target at least 10 times")
     figure(f"calc over openpyxl's bare load, {levels} levels", calc / load, "target at most 4 times")
     figure(f"  calc, {levels} levels, {len(ours.results.values)} formula cells [s]", calc, "no target")
+
+
+@pytest.mark.parametrize("edition", EDITIONS)
+def test_all_parts_together(full: bool, figure: Any, best: Any, tmp_path: Path, edition: str) -> None:
+    levels = 60 if full else 4
+    book, out = tmp_path / "book.xlsx", tmp_path / "out.xlsx"
+    given = {"edition": edition, "units": "us", "parts": sorted(together(edition))}
+    book.write_bytes(build(given, levels))
+    ours = compute(book)
+    assert ours.not_evaluated == ours.errors == []
+    building = from_mapping(Reader(ours.evaluator.evaluate_text).inputs())
+    assert solve(building).direction["X"].theta is not None
+
+    calc, load = best(lambda: compute_into(book, out, True), lambda: openpyxl.load_workbook(book))
+    name = f"{levels} levels, all parts, {edition}"
+    figure(f"calc over openpyxl's bare load, {name}", calc / load, "target at most 6 times")
+    figure(f"  calc, {name}, {len(ours.results.values)} formula cells [s]", calc, "no target")
+    start = process_time()
+    for _ in range(5):
+        solve(building)
+    figure(f"solve, {name} [ms of CPU]", (process_time() - start) / 5 * 1e3, "target below 50")

@@ -12,7 +12,7 @@ from engine.editions import EDITIONS
 from engine.levels import MAX_LEVELS
 from engine.units import SYSTEMS
 from workbook_templates.build import DEFAULT_LEVELS, write_native, write_workbook
-from workbook_templates.parts import CORE, PARTS
+from workbook_templates.parts import CORE, PARTS, together
 from xlbridge.cli.failure import Refusal
 from xlbridge.cli.files import read_building, refuse_existing, refuse_input
 
@@ -25,7 +25,7 @@ DEFAULT_EDITION, DEFAULT_UNITS = EDITIONS[-1], SYSTEMS[0]
 @click.option("--levels", type=click.IntRange(1, MAX_LEVELS), help=f"Levels at the start [{DEFAULT_LEVELS}].")
 @click.option("--edition", type=click.Choice(EDITIONS), help=f"Edition of ASCE/SEI 7 [{DEFAULT_EDITION}].")
 @click.option("--units", type=click.Choice(SYSTEMS), help=f"kip, ft, in or kN, m, mm [{DEFAULT_UNITS}].")
-@click.option("--parts", help=f"Parts beside the story forces, by comma: {', '.join(EXTRA)} [drift].")
+@click.option("--parts", help=f"Parts beside the story forces, by comma, or all: {', '.join(EXTRA)} [drift].")
 @click.option("--from", "building", type=click.Path(path_type=Path), help="A BUILDING.toml to fill it from.")
 @click.option("--native", is_flag=True, help="An issue copy: built-in functions only, no add-in needed.")
 @click.option("--force", is_flag=True, help="Replace an existing BOOK.")
@@ -55,7 +55,8 @@ def command(
     else:
         given = {"edition": edition or DEFAULT_EDITION, "units": units or DEFAULT_UNITS}
     if parts is not None:
-        given["parts"] = [word.strip() for word in parts.split(",") if word.strip()]
+        words = [word.strip() for word in parts.split(",") if word.strip()]
+        given["parts"] = sorted(together(given["edition"])) if words == ["all"] else words
     write = write_native if native else write_workbook
     write(given, book, levels or DEFAULT_LEVELS, force)
     click.echo(f"{book}: made for ASCE/SEI {given['edition']}, units {given['units']}")
