@@ -12,7 +12,7 @@ from numpy.typing import ArrayLike
 
 from engine.editions import value
 from engine.errors import ImpossibleValue
-from engine.require import Array, Result, Words, above, at_least, at_most, formula, worded
+from engine.require import Array, Result, Words, above, at_least, at_most, exceeds, formula, worded
 
 THRESHOLD: Final = 0.10
 LARGEST_LIMIT: Final = 0.25
@@ -131,7 +131,7 @@ def second_order_factor(theta: ArrayLike) -> Result:
     theta = at_least(0, "theta", theta)
     if (theta >= 1).any():
         raise ImpossibleValue("theta", float(theta.max()), "must be below 1: the story is unstable")
-    return np.where(theta > THRESHOLD, 1.0 / (1.0 - theta), 1.0)
+    return np.where(exceeds(theta, THRESHOLD), 1.0 / (1.0 - theta), 1.0)
 
 
 @formula
@@ -159,7 +159,7 @@ def stability_verdict(theta: ArrayLike, theta_max: ArrayLike) -> Words:
         rule theta_amplifier: 7-16 12.8.7; 7-22 12.8.7
     """
     theta, theta_max = at_least(0, "theta", theta), above(0, "theta_max", theta_max)
-    small, over = theta <= THRESHOLD, theta > theta_max
+    small, over = ~exceeds(theta, THRESHOLD), exceeds(theta, theta_max)
     return worded(VERDICTS, np.select([small & over, over, ~small], [3, 2, 1], 0))
 
 

@@ -5,6 +5,7 @@ from __future__ import annotations
 import numpy as np
 import pytest
 
+from engine import stability
 from engine.base_shear import (
     base_shear,
     coefficient_cap,
@@ -265,3 +266,14 @@ def test_one_level_equals_its_place_in_the_column():
     assert distribution_factor(
         w_x=levels["weights"], h_x=levels["heights"], **levels, k=1.3
     ) == pytest.approx(column)
+
+
+@pytest.mark.parametrize(("part", "amplified"), [(-1e-9, False), (5e-13, False), (1e-9, True)])
+def test_theta_counts_from_its_thresholds_on_but_for_round_off(part, amplified):
+    """12.8.7: ignored up to 0.10, unstable above theta_max."""
+    theta = 0.10 * (1 + part)
+    assert bool(stability.second_order_factor(theta) > 1) is amplified
+    verdict = stability.stability_verdict(theta, 0.25)
+    assert verdict == stability.VERDICTS[1 if amplified else 0]
+    limit = 0.25 * (1 + part)
+    assert stability.stability_verdict(limit, 0.25) == stability.VERDICTS[2 if amplified else 1]

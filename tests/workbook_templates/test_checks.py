@@ -23,6 +23,7 @@ EDITS: dict[str, tuple[str | tuple[str, int], object]] = {
     "Every level has an elevation": (("elevation", ROW), None),
     "Every level has a seismic weight": (("w_x", ROW), None),
     "Every level lies above the base": (("elevation", ROW), -5.0),
+    "Levels without a name": (("name", ROW), None),
     "Levels with a name that another level has": (("name", ROW), "Roof"),
     "Levels at the elevation of another level": (("elevation", ROW), 52.0),
     "Rows outside the guard rows of the story table": (("name", ROLE_ROW), None),

@@ -14,6 +14,7 @@ from engine.errors import MissingValue
 from tests.support import office as offices
 from tests.support.story_books import assert_routes_agree, story_book
 from workbook_templates.declare import Check
+from workbook_templates.draw.criteria import AS_ABOVE
 from workbook_templates.inputs import Inputs
 from workbook_templates.layout import FIRST_LEVEL, LEVELS, Layout
 from workbook_templates.parts import CORE, PARTS, period_sources, periods
@@ -227,9 +228,16 @@ def test_levels_in_any_order_and_two_at_one_height(tmp_path: Path) -> None:
         assert_routes_agree(story_book(tmp_path, given, name=f"{source}.xlsx"), LEAST)
 
 
+def note_of(sheet: Any, row: int) -> str:
+    """The note of a row, which may stand at a row above it."""
+    while sheet[f"I{row}"].value == AS_ABOVE:
+        row -= 1
+    return str(sheet[f"I{row}"].value)
+
+
 def test_doubts_are_marked_at_their_rows(tmp_path: Path) -> None:
     sheet = openpyxl.load_workbook(story_book(tmp_path, BLANK, COUNT))["Criteria"]
-    notes = {key: sheet[f"I{LAYOUT.rows[key]}"].value for key in ("T_a_stories", "T_a_walls", "C_w")}
+    notes = {key: note_of(sheet, LAYOUT.rows[key]) for key in ("T_a_stories", "T_a_walls", "C_w")}
     assert all("from memory" in note for note in notes.values())
     assert "0.00623" in notes["T_a_walls"]
 

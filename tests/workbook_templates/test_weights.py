@@ -9,6 +9,7 @@ from typing import Any
 import openpyxl
 import pytest
 
+from engine.building import DIRECTIONS, from_mapping, solve
 from engine.building.records import WEIGHT_KINDS
 from engine.errors import MissingValue
 from tests.support import office as offices
@@ -142,3 +143,40 @@ def test_the_doubt_of_the_storage_exceptions_is_marked_at_the_column(tmp_path: P
     sheet = openpyxl.load_workbook(story_book(tmp_path, BLANK, COUNT))[SHEET]
     assert sheet[f"{LAYOUT.column('load_counts', None)}9"].value == "from memory"
     assert not sheet[f"{LAYOUT.column('row_weight', None)}9"].value
+
+
+def stored(storage: float) -> dict[str, Any]:
+    """Tables of one level of 100 kip dead load, with this much storage load [psf] on 1000 ft2."""
+    roof = {"level": "Roof", "source": "invented"}
+    return {
+        **{"title": "Store (invented)", "edition": "7-16", "units": "us"},
+        "site": {"S_DS": 1.0, "S_D1": 0.5, "S_1": 0.4, "T_L": 8.0, "risk_category": "II"},
+        "direction": dict.fromkeys(DIRECTIONS, FRAME),
+        "level": [{"name": "Roof", "elevation": 12.0, "source": "invented"}],
+        "weight": [
+            roof | {"what": "floor", "kind": "dead", "amount": 100.0},
+            roof | {"what": "racks", "kind": "storage", "area": 1000.0, "load": storage},
+            roof | {"what": "cars", "kind": "garage storage", "area": 1000.0, "load": 500.0},
+        ],
+    }
+
+
+FRAME = {
+    **{"system": "invented", "R": 5.0, "Omega_0": 2.5, "C_d": 5.0, "drift_structure": "all other"},
+    "period_system": "all other",
+}
+
+
+@pytest.mark.parametrize(
+    ("load", "storage", "status"), [(0.0, 0.0, "-"), (20.0, 5.0, "may be left out"), (20.1, 5.025, "counts")]
+)
+def test_storage_that_adds_little_may_be_left_out(
+    tmp_path: Path, load: float, storage: float, status: str
+) -> None:
+    """12.7.2 from memory: 25 % of the load, left out where it adds at most 5 %; garages do not count."""
+    tables = stored(load)
+    found = solve(from_mapping(tables))
+    assert found.more["rows_storage"] == pytest.approx([storage])
+    assert found.more["storage_status"] == (status,)
+    assert pytest.approx(100.0 + storage) == found.W
+    assert_routes_agree(story_book(tmp_path, tables), 50)

@@ -177,7 +177,7 @@ STORY_DRIFT = Block(
             "Drift verdict",
             "text",
             VERDICT,
-            '=IF({drift_over_limit}<=1,"✓ within limit","✗ above limit")',
+            '=IF({drift_over_limit}<=1+1E-12,"✓ within limit","✗ above limit")',
             symbol="drift",
             width=14,
         ),

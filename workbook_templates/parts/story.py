@@ -227,6 +227,18 @@ FORCES = Block(
 )
 
 
+def same_words(key: str) -> str:
+    """Return the formula that counts the texts of a level column that another cell has too.
+
+    The words are compared as they stand: what COUNTIF would read as a pattern or an operator is masked.
+    """
+    cells = f"{{{key}:all}}"
+    masked = cells
+    for sign in "~*?":
+        masked = f'SUBSTITUTE({masked},"{sign}","~{sign}")'
+    return f'=SUMPRODUCT(({cells}<>"")*(COUNTIF({cells},"="&{masked})>1))'
+
+
 def repeated(key: str) -> str:
     """Return the formula that counts the cells of a level column whose content another cell has too."""
     return f'=SUMPRODUCT(({{{key}:all}}<>"")*(COUNTIF({{{key}:all}},{{{key}:all}})>1))'
@@ -238,7 +250,8 @@ CHECKS = (
     Check("Every level has an elevation", "=COUNT({elevation:all})", _NAMES),
     Check("Every level has a seismic weight", "=COUNT({w_x:all})", _NAMES),
     Check("Every level lies above the base", '=COUNTIF({h_x:all},">0")', _NAMES),
-    Check("Levels with a name that another level has", repeated("name"), "=0"),
+    Check("Levels without a name", '=SUMPRODUCT(({elevation:all}<>"")*({name:all}=""))', "=0"),
+    Check("Levels with a name that another level has", same_words("name"), "=0"),
     Check(
         "Levels at the elevation of another level (two roofs are legal)",
         repeated("elevation"),

@@ -158,6 +158,27 @@ LEVEL_SUMS = Block(
             total="sum",
             width=13,
         ),
+        Quantity(
+            "rows_storage",
+            "Storage in it",
+            "force",
+            CALC,
+            '=SUMPRODUCT(({weight_level:all}={name})*({weight_kind:all}="storage")*{row_weight:all})',
+            rule="W_storage",
+            symbol="w_storage",
+        ),
+        Quantity(
+            "storage_status",
+            "Storage of at most 5 % of the rest",
+            "text",
+            CALC,
+            '=IF({rows_storage}=0,"-",IF({rows_storage}>={rows_weight},"counts",'
+            "IF(ELF_STORAGE_RATIO({rows_storage},{rows_weight}-{rows_storage})<=0.05*(1+1E-12),"
+            '"may be left out","counts")))',
+            rule="W_storage",
+            symbol="storage",
+            width=16,
+        ),
     ),
 )
 

@@ -19,6 +19,7 @@ from xlbridge.catalogue.entry import (
     Term,
 )
 
+_SMALL = "{theta}<=0.1*(1+1E-12)"
 beta = Argument("beta", "none", "Shear demand over shear capacity of the story", Span(0, 1, low_open=True))
 
 
@@ -87,10 +88,10 @@ FUNCTIONS = (
         result=Result("a_theta", "none", "P-delta amplification"),
         function=stability.second_order_factor,
         cases=(
-            Case("1", "{theta} ≤ 0.10", lambda theta: theta <= 0.10),
+            Case("1", "{theta} ≤ 0.10", lambda theta: theta <= 0.10 * (1 + 1e-12)),
             Case("1/(1 - {theta})", "{theta} > 0.10", lambda: True),
         ),
-        native="IF({theta}<=0.1,1,1/(1-{theta}))",
+        native="IF({theta}<=0.1*(1+1E-12),1,1/(1-{theta}))",
         example=Example({"theta": 0.2}, "1.25"),
     ),
     SheetFunction(
@@ -106,8 +107,9 @@ FUNCTIONS = (
         function=stability.stability_verdict,
         expression="{theta} against 0.10 and against theta_max = {theta_max}",
         native=(
-            f'IF({{theta}}>{{theta_max}},IF({{theta}}<=0.1,"{stability.VERDICTS[3]}","{stability.VERDICTS[2]}"),'
-            f'IF({{theta}}<=0.1,"{stability.VERDICTS[0]}","{stability.VERDICTS[1]}"))'
+            f"IF({{theta}}>{{theta_max}}*(1+1E-12),"
+            f'IF({_SMALL},"{stability.VERDICTS[3]}","{stability.VERDICTS[2]}"),'
+            f'IF({_SMALL},"{stability.VERDICTS[0]}","{stability.VERDICTS[1]}"))'
         ),
         example=Example({"theta": 0.15, "theta_max": 0.2}, "amplify by 1/(1 - theta)"),
     ),
