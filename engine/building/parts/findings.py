@@ -25,6 +25,12 @@ def answer(flag: bool) -> str:
     return "yes" if flag else "no"
 
 
+def excepted(building: Building, package: Package) -> str:
+    """Tell whether the exception by story drift ratios holds: as computed, or as entered."""
+    found: str = package.more.get("drift_exception", answer(building.site.drift_exception))
+    return found
+
+
 def signed(verdicts: Words) -> tuple[str, ...]:
     """Return verdicts behind their sign: ! for a type of irregularity, ✓ for none.
 

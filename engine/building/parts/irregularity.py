@@ -6,7 +6,15 @@ from collections.abc import Mapping
 from typing import Any, Final
 
 from engine import irregularity as rules
-from engine.building.parts.findings import NO_TYPE, answer, design_category, entailed, signed, worst
+from engine.building.parts.findings import (
+    NO_TYPE,
+    answer,
+    design_category,
+    entailed,
+    excepted,
+    signed,
+    worst,
+)
 from engine.building.records import Building, level_values
 from engine.building.results import DirectionResult, Package
 
@@ -49,7 +57,7 @@ def _soft(building: Building, package: Package, name: str) -> dict[str, Any]:
     K, h, SDC = level_values(building, f"K_x_{name}"), package.h_x, design_category(building, package)
     if K is None or SDC is None:
         return {}
-    free = (answer(building.site.drift_exception), SDC, building.edition)
+    free = (excepted(building, package), SDC, building.edition)
     verdicts = rules.soft_story(h, K, h, *free)
     kind = worst(verdicts, *SOFT)
     return {
@@ -93,7 +101,7 @@ def _weight(building: Building, package: Package) -> dict[str, Any]:
     SDC, w, h = design_category(building, package), package.w_x, package.h_x
     if SDC is None:
         return {}
-    free = (answer(building.site.drift_exception), SDC, building.edition)
+    free = (excepted(building, package), SDC, building.edition)
     verdicts = rules.weight_irregularity(h, w, h, *free)
     kind = worst(verdicts, WEIGHT)
     return {
