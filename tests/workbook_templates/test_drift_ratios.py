@@ -19,13 +19,13 @@ EVEN, BENT = (0.10, 0.20, 0.20, 0.25), (0.10, 0.20, 0.20, 0.28)
 
 
 def soft(x: tuple[float, ...] = EVEN, y: tuple[float, ...] = EVEN, **change: Any) -> dict[str, Any]:
-    """Tables of a building whose first story is soft: 60 % of the stiffness above."""
+    """Tables of a building whose first story is soft: below 80 % of the mean of the three above."""
     levels = []
     for n in range(4):
         level = {"name": f"L{4 - n}", "elevation": 12.0 * (4 - n), "weight": 100.0, "P_x": 100.0 * (n + 1)}
         level |= {"delta_xe_X": sum(x[n:]), "delta_xe_Y": sum(y[n:]), "source": "invented"}
         for name in "XY":
-            level |= {f"K_x_{name}": 65.0 if n == 3 else 100.0}
+            level |= {f"K_x_{name}": 75.0 if n == 3 else 100.0}
             level |= {f"strength_{name}": 100.0, f"L_sys_{name}": 60.0}
         levels.append(level)
     return {
