@@ -1,4 +1,4 @@
-"""The lower part of the two-stage procedure: its levels, its base shear, and its forces with the reactions."""
+"""The lower part of the two-stage procedure: its levels, base shear, and forces with the reactions."""
 
 from __future__ import annotations
 
