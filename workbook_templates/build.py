@@ -32,15 +32,27 @@ def build(given: Mapping[str, Any], level_count: int = DEFAULT_LEVELS) -> bytes:
     ``given`` needs ``edition`` and ``units``; what else is missing starts from marked starter values,
     ``level_count`` levels of them if no level is given.
     """
-    return _package(_drawn(Inputs(given, level_count)))
+    return _package(draw(given, level_count))
 
 
 def build_native(given: Mapping[str, Any], values: native.Values, level_count: int = DEFAULT_LEVELS) -> bytes:
     """Return the same workbook in built-in functions; ``values`` are those of the one with functions."""
+    return _package(draw_native(given, values, level_count))
+
+
+def draw(given: Mapping[str, Any], level_count: int = DEFAULT_LEVELS) -> Workbook:
+    """Return the workbook as it is drawn, not yet a package."""
+    return _drawn(Inputs(given, level_count))
+
+
+def draw_native(
+    given: Mapping[str, Any], values: native.Values, level_count: int = DEFAULT_LEVELS
+) -> Workbook:
+    """Return the same in built-in functions."""
     inputs = Inputs(given, level_count)
     workbook = _drawn(inputs, issue=True)
     native.rewrite(workbook, values, inputs.units)
-    return _package(workbook)
+    return workbook
 
 
 def _drawn(inputs: Inputs, issue: bool = False) -> Workbook:

@@ -40,13 +40,13 @@ class Reader:
         """Return the tables of a BUILDING.toml."""
         tables = {
             "title": self._cell("job_title"),
-            "parts": [part.key for part in self._layout.parts if part.key != CORE and not part.needs],
+            "parts": [part.key for part in self.layout.parts if part.key != CORE and not part.needs],
             "edition": self._cell("edition"),
             "units": self._cell("units"),
             "job": _filled({key: self._cell(f"job_{key}") for key in JOB_KEYS}),
             "site": self._entries(None),
             "direction": {d: self._entries(d) for d in DIRECTIONS},
-            **{grid.table.stored: self._entered(grid) for grid in self._layout.grids if not grid.table.fixed},
+            **{grid.table.stored: self._entered(grid) for grid in self.layout.grids if not grid.table.fixed},
             "sources": self._sources(),
         }
         return {key: table for key, table in tables.items() if table not in (None, {}, [])}
@@ -56,7 +56,8 @@ class Reader:
         return {**self._computed(None), "direction": {d: self._computed(d) for d in DIRECTIONS}}
 
     @cached_property
-    def _layout(self) -> Layout:
+    def layout(self) -> Layout:
+        """The layout of its parts; how many rows its tables have is not known from it."""
         edition = self._cell("edition")
         found = (key for key, part in PARTS.items() if edition in part.editions and self._has(part))
         return Layout(1, frozenset(found))
@@ -79,10 +80,17 @@ class Reader:
         return self._tables[table.name][0]
 
     def _rows(self, grid: Grid) -> list[Row]:
-        """The rows in which any input is filled in; a link filled down an empty row does not count."""
-        inputs = [self._place(grid, c) for c in grid.columns if _marks_a_row(c.quantity)]
-        rows = self._tables[grid.table.name][HEADER_ROWS:]
-        return [row for row in rows if any(row[i] is not None for i in inputs)]
+        table = self._tables[grid.table.name]
+        return [table[n] for n in self.row_numbers(grid)]
+
+    def row_numbers(self, grid: Grid) -> list[int]:
+        """Return which rows of a named table count, from 0 at its headings: those with any input filled in.
+
+        A link filled down an empty row does not count.
+        """
+        inputs = [self.column_number(grid, c) for c in grid.columns if _marks_a_row(c.quantity)]
+        rows = list(enumerate(self._tables[grid.table.name]))[HEADER_ROWS:]
+        return [n for n, row in rows if any(row[i] is not None for i in inputs)]
 
     def _has(self, part: Part) -> bool:
         """Whether its table stands, a column of it in the story table, or its first criteria row.
@@ -113,14 +121,15 @@ class Reader:
             return False
         return True
 
-    def _place(self, grid: Grid, column: Column) -> int:
+    def column_number(self, grid: Grid, column: Column) -> int:
+        """Return which column of a named table holds a quantity, from 0; it is found by its heading."""
         headings = self._headings(grid.table)
         if column.heading not in headings:
             raise ReadError(f"the {grid.table.title.lower()} has no column headed {column.heading}")
         return headings.index(column.heading)
 
     def _quantities(self, direction: str | None, wanted: bool) -> Iterator[Quantity]:
-        for block in self._layout.criteria:
+        for block in self.layout.criteria:
             if block.per_direction is (direction is not None):
                 yield from (q for q in block.quantities if q.is_input is wanted)
 
@@ -128,7 +137,7 @@ class Reader:
         """Return the filled criteria entries of the site or of a direction."""
         values = {}
         for q in self._quantities(direction, True):
-            name = self._layout.name(q.key, direction)
+            name = self.layout.name(q.key, direction)
             value = self._cell(name)
             if value in (None, "") and not q.may_be_blank:
                 raise ReadError(f"{name}: the cell is blank")
@@ -138,7 +147,7 @@ class Reader:
     def _entered(self, grid: Grid) -> list[dict[str, Any]]:
         """Return the entries of each row of a table."""
         keys = {
-            c.quantity.stored_key(c.direction): self._place(grid, c)
+            c.quantity.stored_key(c.direction): self.column_number(grid, c)
             for c in grid.columns
             if c.quantity.is_input
         }
@@ -155,18 +164,17 @@ class Reader:
 
     def _sources(self) -> dict[str, Any]:
         keys = [q.key for d in (None, "X") for q in self._quantities(d, True)]
-        return _filled({key: self._cell(self._layout.source_name(key)) for key in keys})
+        return _filled({key: self._cell(self.layout.source_name(key)) for key in keys})
 
     def _computed(self, direction: str | None) -> dict[str, Any]:
         found: dict[str, Any] = {
-            q.key: self._value(self._layout.name(q.key, direction))
-            for q in self._quantities(direction, False)
+            q.key: self._value(self.layout.name(q.key, direction)) for q in self._quantities(direction, False)
         }
-        for grid in self._layout.grids:
+        for grid in self.layout.grids:
             rows = self._rows(grid)
             for c in grid.columns:
                 if c.direction == direction and not c.quantity.is_input:
-                    place = self._place(grid, c)
+                    place = self.column_number(grid, c)
                     found[c.quantity.key] = [row[place] for row in rows]
         return found
 

@@ -24,8 +24,8 @@ DATA = (*DOOR, "engine.tables", "engine.editions")
 #: clauses are printed everywhere from the edition data
 CATALOGUE = (*GROUND, "engine.editions", "xlbridge.values", "xlbridge.catalogue")
 BRIDGE = (*CATALOGUE, "xlbridge.adapter", "xlbridge.work")
-#: a template is computed when it is made; its reader meets cells that were not evaluated
-COMPUTED = ("xlbridge.headless.compute", "xlbridge.headless.operands")
+#: a template is computed when it is made; its reader meets cells that were not evaluated, and finds places
+COMPUTED = tuple(f"xlbridge.headless.{name}" for name in ("compute", "operands", "book", "references"))
 
 #: layer -> what it may import besides itself
 MAY_IMPORT: dict[str, tuple[str, ...]] = {

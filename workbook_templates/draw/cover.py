@@ -11,7 +11,7 @@ from engine.editions import rules
 from engine.units import symbol
 from engine.version import __version__
 from workbook_templates import layout as places
-from workbook_templates.declare import DIRECTIONS, Quantity, Role
+from workbook_templates.declare import DIRECTIONS, Headline, Quantity, Role
 from workbook_templates.draw import sheets, style
 from workbook_templates.inputs import Inputs
 from workbook_templates.layout import COVER, Layout
@@ -37,6 +37,8 @@ ISSUE = (
     "An issue copy: its formulas are built-in functions only and compute without the add-in. Cells that "
     "could not be written so hold fixed values; the sheet Fixed values lists them, the checks count them."
 )
+#: the columns of the headline results
+HEADLINE_COLUMN = dict(zip(DIRECTIONS, (3, 4), strict=True))
 LEGEND = {
     Role.INPUT: "an entry of yours: value, and its source beside it",
     Role.FIXED: "fixed when the workbook is made; make a new one to change it",
@@ -94,13 +96,17 @@ def _draw_headlines(sheet: Worksheet, layout: Layout, inputs: Inputs, row: int) 
         style.write(sheet.cell(row, column), text, style.BOLD, style.RIGHT)
     for line in (line for part in layout.parts for line in part.headlines):
         row += 1
-        unit = "" if line.unit == "none" else f" [{symbol(line.unit, inputs.units)}]"
-        style.write(sheet.cell(row, 1), line.text + unit)
+        style.write(sheet.cell(row, 1), headline_text(line, inputs.units))
         number_format = style.number_format(Quantity("", "", line.unit, Role.LINK), inputs.units)
-        for column, direction in zip((3, 4), DIRECTIONS, strict=True):
+        for direction, column in HEADLINE_COLUMN.items():
             sheet.cell(row, column, layout.write(line.formula, COVER, direction))
             style.dress(sheet.cell(row, column), Role.LINK, number_format)
     return row + 1
+
+
+def headline_text(line: Headline, units: str) -> str:
+    """Return what stands beside a headline result."""
+    return line.text if line.unit == "none" else f"{line.text} [{symbol(line.unit, units)}]"
 
 
 def _draw_texts(sheet: Worksheet, title: str, texts: tuple[str, ...], row: int) -> int:

@@ -19,7 +19,7 @@ import click
 
 from xlbridge.cli.failure import BAD_INPUT, sentence
 
-COMMANDS: Final = ("demo", "new", "calc", "solve", "inputs", "entries", "eval", "functions")
+COMMANDS: Final = ("demo", "new", "calc", "solve", "inputs", "audit", "entries", "eval", "functions")
 CAUTION: Final = (
     "Results are an aid to a licensed engineer's judgement. Confirm every value against the standard adopted "
     "by the authority having jurisdiction, its supplements and local amendments."

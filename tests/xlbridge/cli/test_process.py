@@ -44,6 +44,7 @@ def test_a_pipe_gets_the_text_alone(tmp_path: Path) -> None:
         ["demo", "d"],
         ["calc", "d/story.xlsx"],
         ["inputs", "d/story.xlsx"],
+        ["audit", "d/story.xlsx"],
         ["solve", "d/building.toml"],
     ]
     calls += [["new", "n.xlsx", "--levels", "60"], ["eval", "=1+1", "--work"], ["functions"], ["entries"]]

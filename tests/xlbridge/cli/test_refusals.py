@@ -55,6 +55,8 @@ CALLS = {
     ),
     "inputs: over a folder": (["inputs", "{}/good.xlsx", "-o", "{}/folder.xlsx", "--force"], ["folder"]),
     "inputs: into no folder": (["inputs", "{}/good.xlsx", "-o", "{}/no/b.toml"], ["the folder", "not exist"]),
+    "audit: words": (["audit", "{}/words.xlsx"], ["not a workbook"]),
+    "audit: no such file": (["audit", "{}/none.xlsx"], ["no such file"]),
     "inputs: words": (["inputs", "{}/words.xlsx"], ["not a workbook"]),
     "inputs: no such file": (["inputs", "{}/none.xlsx"], ["no such file"]),
     "new: into no folder": (["new", "{}/no/a.xlsx"], ["the folder", "not exist"]),

@@ -1,0 +1,64 @@
+"""In which cell each entry and each result of a story workbook stands, as the workbook is now."""
+
+from __future__ import annotations
+
+from collections.abc import Iterator
+
+from workbook_templates.declare import DIRECTIONS
+from workbook_templates.layout import Grid
+from workbook_templates.read import Reader
+from xlbridge.headless.book import Book
+from xlbridge.headless.references import Bounds, Cell, parse_bounds
+
+Place = tuple[str, Cell]
+
+
+def entries(reader: Reader, book: Book) -> dict[str, Cell]:
+    """Return the cell of each entry by its path in BUILDING.toml: ``site.S_DS``, ``level[2].weight``."""
+    return {**dict(_criteria(reader, book, True)), **dict(_rows(reader, book, True))}
+
+
+def results(reader: Reader, book: Book) -> dict[str, Cell]:
+    """Return the cell of each result by its path in the package: ``direction.X.F_x[3]``."""
+    return {**dict(_criteria(reader, book, False)), **dict(_rows(reader, book, False))}
+
+
+def cell_of(book: Book, name: str) -> Cell:
+    """Return the first cell of a defined name of the workbook."""
+    sheet, bounds = _area(book, name)
+    return Cell(sheet, bounds.top, bounds.left)
+
+
+def _criteria(reader: Reader, book: Book, inputs: bool) -> Iterator[Place]:
+    for block in reader.layout.criteria:
+        for direction in DIRECTIONS if block.per_direction else (None,):
+            for q in block.quantities:
+                if q.is_input is inputs:
+                    home = _home(direction) or ("site." if inputs else "")
+                    yield f"{home}{q.key}", cell_of(book, reader.layout.name(q.key, direction))
+
+
+def _rows(reader: Reader, book: Book, inputs: bool) -> Iterator[Place]:
+    for grid in reader.layout.grids:
+        sheet, bounds = _area(book, grid.table.name)
+        rows = [bounds.top + n for n in reader.row_numbers(grid)]
+        for path, column in _columns(reader, grid, inputs):
+            for n, row in enumerate(rows, 1):
+                yield path.format(n), Cell(sheet, row, bounds.left + column)
+
+
+def _columns(reader: Reader, grid: Grid, inputs: bool) -> Iterator[tuple[str, int]]:
+    """The path of each column, with a place for the number of the row."""
+    for c in (c for c in grid.columns if c.quantity.is_input is inputs):
+        key = c.quantity.stored_key(c.direction)
+        path = f"{grid.table.stored}[{{}}].{key}" if inputs else f"{_home(c.direction)}{c.quantity.key}[{{}}]"
+        yield path, reader.column_number(grid, c)
+
+
+def _home(direction: str | None) -> str:
+    return f"direction.{direction}." if direction else ""
+
+
+def _area(book: Book, name: str) -> tuple[str, Bounds]:
+    sheet, _, area = book.names[None, name.casefold()].rpartition("!")
+    return sheet.strip("'").replace("''", "'"), parse_bounds(area.replace("$", ""))

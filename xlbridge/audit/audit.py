@@ -1,0 +1,71 @@
+"""The audit of one workbook: every method run, findings grouped, and what was not checked said."""
+
+from __future__ import annotations
+
+from collections.abc import Mapping
+from dataclasses import dataclass
+from enum import StrEnum
+from functools import cached_property
+
+from xlbridge.audit import group
+from xlbridge.audit.finding import Checked, Finding, NotChecked
+from xlbridge.audit.kinds import Severity
+from xlbridge.audit.methods import METHODS
+from xlbridge.audit.subject import Subject
+from xlbridge.headless.references import Cell
+
+
+class State(StrEnum):
+    """What the audit says of one formula cell."""
+
+    VERIFIED = "verified"
+    FINDING = "finding"
+    NOT_CHECKED = "not checked"
+
+
+@dataclass(frozen=True)
+class Audit:
+    """The outcome: what each method reported, and the findings made of it."""
+
+    subject: Subject
+    checks: tuple[Checked, ...]
+    findings: tuple[Finding, ...]
+
+    @property
+    def not_checked(self) -> tuple[NotChecked, ...]:
+        """Everything that could not be checked, with the reason."""
+        return tuple(item for check in self.checks for item in check.not_checked)
+
+    @cached_property
+    def states(self) -> Mapping[Cell, State]:
+        """The state of every formula cell: verified only where its stored value was compared and held."""
+        doubtful = {str(place) for finding in self.findings for place in finding.places}
+        unchecked = set(self.subject.results.not_evaluated)
+        return {
+            cell: State.NOT_CHECKED
+            if cell in unchecked or self.subject.book.stored(cell) is None
+            else State.FINDING
+            if str(cell) in doubtful
+            else State.VERIFIED
+            for cell in self.subject.book.formula_cells()
+        }
+
+    @property
+    def formula_cells(self) -> int:
+        """The number of formula cells: the N of "checked M of N"."""
+        return len(self.states)
+
+    @property
+    def checked_cells(self) -> int:
+        """The number of formula cells whose stored value was compared with the formula."""
+        return sum(state is not State.NOT_CHECKED for state in self.states.values())
+
+    def count(self, severity: Severity) -> int:
+        """Return the number of findings of one severity."""
+        return sum(finding.kind.severity is severity for finding in self.findings)
+
+
+def audit(subject: Subject) -> Audit:
+    """Run every method on a workbook."""
+    checks = tuple(method(subject) for method in METHODS)
+    return Audit(subject, checks, group.findings(o for check in checks for o in check.observations))

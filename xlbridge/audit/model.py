@@ -1,0 +1,47 @@
+"""(b) The model route: the package solved from the inputs alone against the results of the cells."""
+
+from __future__ import annotations
+
+from engine.building import from_mapping, solve
+from engine.errors import EngineError
+from xlbridge.audit.finding import Checked, NotChecked, Observation, Place
+from xlbridge.audit.routes import Difference, compare
+from xlbridge.audit.subject import Subject
+from xlbridge.audit.template import OwnTemplate
+
+
+def check(subject: Subject) -> Checked:
+    """Solve the building of the workbook's inputs, and compare every result that both routes have."""
+    own = subject.own
+    if own is None:
+        why = "the workbook is not laid out as one of ours, so its inputs cannot be told from its results"
+        return Checked("model", 0, not_checked=(NotChecked("model route", why),))
+    if own.unread:
+        return _unreadable(own.unread)
+    try:
+        model = solve(from_mapping(own.inputs)).to_json()
+    except EngineError as error:
+        return _unreadable(str(error))
+    agreement = compare(own.results, model)
+    return Checked("model", agreement.compared, tuple(_observed(own, d) for d in agreement.differences))
+
+
+def _unreadable(why: str) -> Checked:
+    return Checked(
+        "model",
+        0,
+        (Observation("inputs_unreadable", Place(), why),),
+        (NotChecked("model route", f"the inputs cannot be solved: {why}"),),
+    )
+
+
+def _observed(own: OwnTemplate, difference: Difference) -> Observation:
+    cell = own.places.get(difference.path)
+    return Observation(
+        "differs_from_model",
+        Place.of(cell) if cell else Place(),
+        f"{difference.path}: the cell gives {difference.cell}, the inputs give {difference.model}",
+        stored=difference.cell,
+        recomputed=difference.model,
+        cause="model",
+    )

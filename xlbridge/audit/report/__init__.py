@@ -1,0 +1,1 @@
+"""The reports of an audit: pure functions from its outcome to text."""

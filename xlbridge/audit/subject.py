@@ -1,0 +1,48 @@
+"""The workbook under audit."""
+
+from __future__ import annotations
+
+import hashlib
+from collections.abc import Callable
+from dataclasses import dataclass
+from functools import cached_property
+from pathlib import Path
+from typing import TypeAlias
+
+from xlbridge.audit.template import OwnTemplate
+from xlbridge.headless.book import Book
+from xlbridge.headless.compute import FUNCTIONS
+from xlbridge.headless.evaluate import Evaluator, Results
+
+#: says what is known of a workbook of ours, and nothing of any other
+Knows: TypeAlias = Callable[[Evaluator], OwnTemplate | None]
+
+
+@dataclass(frozen=True)
+class Subject:
+    """A workbook file, read once, never changed."""
+
+    path: Path
+    evaluator: Evaluator
+    own: OwnTemplate | None = None
+
+    @classmethod
+    def open(cls, path: Path, knows: Knows) -> Subject:
+        """Open a workbook file; ``knows`` tells whether it is one of ours."""
+        evaluator = Evaluator(Book.open(path), FUNCTIONS)
+        return cls(path, evaluator, knows(evaluator))
+
+    @property
+    def book(self) -> Book:
+        """Its content."""
+        return self.evaluator.book
+
+    @cached_property
+    def results(self) -> Results:
+        """Every formula cell evaluated."""
+        return self.evaluator.evaluate_all()
+
+    @cached_property
+    def sha256(self) -> str:
+        """The hash of the file, in hexadecimal digits."""
+        return hashlib.sha256(self.book.data).hexdigest()

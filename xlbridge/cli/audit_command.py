@@ -1,0 +1,58 @@
+"""``storyledger audit``: go through a workbook cell by cell, and prove it or name what is wrong."""
+
+from __future__ import annotations
+
+import json
+from collections.abc import Iterator
+from pathlib import Path
+
+import click
+
+from xlbridge.audit.audit import Audit, audit
+from xlbridge.audit.kinds import Severity
+from xlbridge.audit.report import as_json
+from xlbridge.audit.subject import Subject
+from xlbridge.cli.failure import CLEAN, FINDINGS, INCOMPLETE
+from xlbridge.cli.own_template import own_template
+
+SHOWN = 6
+
+
+@click.command("audit")
+@click.argument("book", type=click.Path(path_type=Path))
+@click.option("--json", "json_wanted", is_flag=True, help="Print the audit as JSON.")
+def command(book: Path, json_wanted: bool) -> int:
+    """Prove BOOK cell by cell and from its inputs alone, or name what is wrong.
+
+    Exit code 1 says that there are errors or warnings, 2 that something could not be checked.
+    """
+    outcome = audit(Subject.open(book, own_template))
+    if json_wanted:
+        click.echo(json.dumps(as_json.record(outcome), indent=1, ensure_ascii=False))
+    else:
+        click.echo("\n".join(lines(outcome)))
+    return exit_code(outcome)
+
+
+def exit_code(outcome: Audit) -> int:
+    """Return the exit code of one audit."""
+    if outcome.count(Severity.ERROR) or outcome.count(Severity.WARNING):
+        return FINDINGS
+    return INCOMPLETE if outcome.not_checked else CLEAN
+
+
+def lines(outcome: Audit) -> Iterator[str]:
+    """Yield the audit in words."""
+    counts = f"checked {outcome.checked_cells} of {outcome.formula_cells} formula cells"
+    yield f"{outcome.subject.path.name}: {counts}"
+    for finding in outcome.findings:
+        places = [str(place) for place in finding.places]
+        more = f" and {len(places) - SHOWN} more" if len(places) > SHOWN else ""
+        yield f"{finding.number}  {finding.kind.severity}: {finding.kind.title}"
+        yield f"   {', '.join(places[:SHOWN])}{more}"
+        yield f"   {finding.words}"
+    for missing in outcome.not_checked[:SHOWN]:
+        yield f"not checked: {missing.what} {missing.place}, because {missing.because}"
+    if len(outcome.not_checked) > SHOWN:
+        yield f"not checked: {len(outcome.not_checked) - SHOWN} more, see --json"
+    yield ", ".join(f"{outcome.count(severity)} {severity}s" for severity in Severity)
