@@ -4,10 +4,12 @@ from __future__ import annotations
 
 import os
 from collections.abc import Iterator
+from pathlib import Path
 
 import pytest
 
 from tests.support import office as offices
+from xlbridge.calc import extension
 
 #: imports what only LibreOffice's Python has.
 collect_ignore = ["support/office_driver.py"]
@@ -27,4 +29,21 @@ def office() -> Iterator[offices.Office]:
     """One headless LibreOffice for the session."""
     require_office()
     with offices.Office() as running:
+        yield running
+
+
+@pytest.fixture(scope="session")
+def addins(tmp_path_factory: pytest.TempPathFactory) -> Path:
+    """A folder with our extension for Calc, as an office keeps it once it is installed."""
+    folder = tmp_path_factory.mktemp("addins")
+    extension.unpack(folder / "storyledger")
+    return folder
+
+
+@pytest.fixture(scope="session")
+def office_with_addin(addins: Path, tmp_path_factory: pytest.TempPathFactory) -> Iterator[offices.Office]:
+    """One headless LibreOffice with our functions; its log of failures is a file of the session."""
+    require_office()
+    log = tmp_path_factory.mktemp("log") / "calc.log"
+    with offices.Office(addins, STORYLEDGER_CALC_LOG=str(log)) as running:
         yield running

@@ -50,18 +50,26 @@ def _has_uno(python: Path) -> bool:
     return subprocess.run([python, "-c", "import uno"], capture_output=True, check=False).returncode == 0
 
 
-class Office:
-    """A running office; ``with Office() as office: …``. ``addins`` is a folder of unpacked extensions."""
+def _environment() -> dict[str, str]:
+    """What the office may see: its own Python would take a virtual environment on the path for its home."""
+    mine = {name: value for name, value in os.environ.items() if not name.startswith("PYTHON")}
+    return mine | {"PATH": os.defpath}
 
-    def __init__(self, addins: Path | None = None) -> None:
+
+class Office:
+    """A running office; ``with Office() as office: …``.
+
+    ``addins`` is a folder of unpacked extensions; ``variables`` are added to its environment.
+    """
+
+    def __init__(self, addins: Path | None = None, **variables: str) -> None:
         found = installation()
         if found is None:
             raise OfficeError(missing())
         program, python = found
         command = [str(python), str(DRIVER), str(program), *([str(addins)] if addins else [])]
-        environment = {name: value for name, value in os.environ.items() if not name.startswith("PYTHON")}
         self._driver = subprocess.Popen(
-            command, stdin=subprocess.PIPE, stdout=subprocess.PIPE, env=environment, text=True
+            command, stdin=subprocess.PIPE, stdout=subprocess.PIPE, env=_environment() | variables, text=True
         )
         self._office_id = int(self._receive()["office"])
 

@@ -19,7 +19,19 @@ import click
 
 from xlbridge.cli.failure import BAD_INPUT, sentence
 
-COMMANDS: Final = ("demo", "new", "calc", "solve", "inputs", "audit", "entries", "eval", "functions")
+COMMANDS: Final = (
+    "demo",
+    "new",
+    "calc",
+    "solve",
+    "inputs",
+    "audit",
+    "entries",
+    "eval",
+    "functions",
+    "calc-addin",
+    "names",
+)
 CAUTION: Final = (
     "Results are an aid to a licensed engineer's judgement. Confirm every value against the standard adopted "
     "by the authority having jurisdiction, its supplements and local amendments."
@@ -35,7 +47,7 @@ class _Lazy(click.Group):
     def get_command(self, ctx: click.Context, name: str) -> click.Command | None:
         if name not in COMMANDS:
             return None
-        command: click.Command = import_module(f"xlbridge.cli.{name}_command").command
+        command: click.Command = import_module(f"xlbridge.cli.{name.replace('-', '_')}_command").command
         return command
 
 

@@ -21,7 +21,7 @@ def sentence(error: Exception) -> str:
     """Return what a user should read of an error; unexpected ones are named as faults of the tool."""
     if isinstance(error, click.UsageError):
         command = error.ctx.command_path if error.ctx else "storyledger"
-        return f"{error.format_message()} Try '{command} --help'."
+        return f"{' '.join(error.format_message().split())} Try '{command} --help'."
     if isinstance(error, OSError):
         return f"{error.filename}: {error.strerror}" if error.filename else str(error)
     if isinstance(error, tomllib.TOMLDecodeError | UnicodeDecodeError):

@@ -45,6 +45,8 @@ def test_a_pipe_gets_the_text_alone(tmp_path: Path) -> None:
         ["calc", "d/story.xlsx"],
         ["inputs", "d/story.xlsx"],
         ["audit", "d/story.xlsx"],
+        ["calc-addin", "storyledger.oxt"],
+        ["names", "d/story.xlsx", "--for", "calc"],
         ["solve", "d/building.toml"],
     ]
     calls += [["new", "n.xlsx", "--levels", "60"], ["eval", "=1+1", "--work"], ["functions"], ["entries"]]

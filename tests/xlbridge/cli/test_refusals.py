@@ -49,6 +49,14 @@ CALLS = {
         ["calc", "{}/good.xlsx", "-o", "{}/good.xlsx", "--force"],
         ["the input itself", "choose another name"],
     ),
+    "names: words": (["names", "{}/words.xlsx", "--for", "calc"], ["not a workbook"]),
+    "names: over its input": (
+        ["names", "{}/good.xlsx", "--for", "calc", "-o", "{}/good.xlsx", "--force"],
+        ["the input itself", "choose another name"],
+    ),
+    "names: for nobody": (["names", "{}/good.xlsx"], ["--for", "--help"]),
+    "names: another ending": (["names", "{}/good.xlsx", "--for", "calc", "-o", "{}/a.ods"], ["its ending"]),
+    "calc-addin: another ending": (["calc-addin", "{}/a.zip"], [".oxt"]),
     "inputs: over its input": (
         ["inputs", "{}/good.xlsx", "-o", "{}/good.xlsx", "--force"],
         ["the input itself", "choose another name"],
@@ -104,6 +112,8 @@ OUTPUTS = {
     "new": (["new", "{}/taken.xlsx"], "taken.xlsx"),
     "new from a building": (["new", "{}/taken.xlsx", "--from", "{}/good.toml"], "taken.xlsx"),
     "inputs": (["inputs", "{}/good.xlsx", "-o", "{}/taken.toml"], "taken.toml"),
+    "calc-addin": (["calc-addin", "{}/taken.oxt"], "taken.oxt"),
+    "names": (["names", "{}/good.xlsx", "--for", "calc"], "good-calc.xlsx"),
     "demo": (["demo", "{}"], "story.xlsx"),
 }
 

@@ -1,0 +1,1 @@
+"""The functions in LibreOffice Calc: an extension generated from the catalogue."""

@@ -1,0 +1,59 @@
+"""One call from a cell of Calc: its arguments as the adapter takes them, its result as Calc shows it.
+
+Calc hands every required argument over as rows of cells, so that a blank cell (an empty text) is told from
+0; an argument left out arrives as ``None``. Results go back as rows, errors as the numbers by which Calc
+carries them. Calc itself does not call a function with an error value in a range: its cell shows an error.
+"""
+
+from __future__ import annotations
+
+import struct
+from collections.abc import Sequence
+from typing import Any, Final
+
+from xlbridge import adapter
+from xlbridge.calc.log import note
+from xlbridge.catalogue import CATALOGUE
+from xlbridge.values import OMITTED, Argument, CellError, Scalar
+
+#: Calc's number of each error
+CODES: Final = {"#N/A": 0x7FFF, "#VALUE!": 519, "#NUM!": 503, "#DIV/0!": 532, "#REF!": 524, "#NAME?": 525}
+
+Rows = tuple[tuple[float | str, ...], ...]
+
+
+def call(name: str, arguments: Sequence[Any]) -> Rows:
+    """Return the value of a worksheet function as rows of cells; a reason for a failure goes into the log."""
+    found = adapter.call(CATALOGUE[name], [_argument(value) for value in arguments])
+    rows = found if isinstance(found, tuple) else ((found,),)
+    return tuple(tuple(_cell(name, value) for value in row) for row in rows)
+
+
+def error_number(code: str) -> float:
+    """Return the number by which Calc carries an error: a NaN with the error's number in its low half."""
+    number = 0x7FF8_0000_0000_0000 | CODES[code]
+    return float(struct.unpack("<d", struct.pack("<Q", number))[0])
+
+
+def _argument(value: Any) -> Argument:
+    if value is None:
+        return OMITTED
+    if not isinstance(value, tuple):
+        return _given(value)
+    rows = tuple(tuple(map(_given, row)) for row in value)
+    return rows[0][0] if len(rows) == len(rows[0]) == 1 else rows
+
+
+def _given(value: Any) -> Scalar:
+    """A cell as handed over: numbers as floats, a blank as nothing."""
+    if isinstance(value, str):
+        return value or None
+    return None if value is None else float(value)
+
+
+def _cell(name: str, value: Scalar) -> float | str:
+    """A result as a cell: never an integer or a flag, which Calc would misread."""
+    if isinstance(value, CellError):
+        note(name, value)
+        return error_number(value.code)
+    return value if isinstance(value, str) else error_number("#N/A") if value is None else float(value)
