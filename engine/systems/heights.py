@@ -108,4 +108,4 @@ def _shown(limit: float, units: str) -> str:
     metric = choice("units", units, SYSTEMS) == SI
     if limit in (0.0, inf):
         return "no limit (NL)" if limit else "not permitted (NP)"
-    return f"{limit * FOOT:.1f} m" if metric else f"{limit:g} ft"
+    return f"{round(limit * FOOT, 3):g} m" if metric else f"{limit:g} ft"

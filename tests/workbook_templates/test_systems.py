@@ -112,6 +112,13 @@ def test_systems_whose_numbers_are_uncertain_are_not_listed_and_give_none() -> N
         x(tower(x={"table_system": min(added)}, edition="7-22"))
 
 
+def test_a_named_system_without_a_design_category_is_refused() -> None:
+    tables = tower(x={"table_system": SYSTEMS["7-16"][0]})
+    del tables["site"]["SDC"]
+    with pytest.raises(EngineError, match=r"site\.SDC.*table_system"):
+        x(tables)
+
+
 def test_a_word_that_is_not_listed_is_an_error_cell_and_a_refusal(tmp_path: Path) -> None:
     tables = tower(x={"table_system": "B. Bamboo frames"})
     with pytest.raises(EngineError, match="Bamboo"):
@@ -140,11 +147,20 @@ class TestCombinations:
         computed = assert_routes_agree(story_book(tmp_path, tables), 70)
         assert Reader(computed.evaluator.evaluate_text).inputs()["system"] == tables["system"]
 
-    def test_an_R_above_the_least_fails_a_check(self, tmp_path: Path) -> None:
+    def test_the_coefficients_of_the_least_R_fail_no_check(self, tmp_path: Path) -> None:
+        assert self.status(tmp_path).startswith("! no check fails")
+
+    @pytest.mark.parametrize("entry", [{"R": 6.0}, {"Omega_0": 2.0}, {"C_d": 4.0}])
+    def test_a_coefficient_on_the_unsafe_side_of_them_fails_a_check(
+        self, tmp_path: Path, entry: dict[str, float]
+    ) -> None:
+        assert self.status(tmp_path, **entry).startswith("✗")
+
+    def status(self, tmp_path: Path, **entries: float) -> str:
         tables = self.together()
-        tables["direction"]["X"]["R"] = 6.0
+        tables["direction"]["X"] |= entries
         computed = assert_routes_agree(story_book(tmp_path, tables), 70)
-        assert str(computed.evaluator.evaluate_text("=workbook_status")).startswith("✗")
+        return str(computed.evaluator.evaluate_text("=workbook_status"))
 
     @pytest.mark.parametrize(
         ("above", "below", "lower", "factor"),

@@ -2,6 +2,7 @@
 
 from __future__ import annotations
 
+import textwrap
 from collections.abc import Iterable
 from math import ceil
 from typing import Final, cast
@@ -58,7 +59,8 @@ def page(sheet: Worksheet, units: str, title_rows: str, landscape: bool = True) 
     sheet.page_setup.fitToWidth, sheet.page_setup.fitToHeight = 1, 0
     sheet.sheet_properties.pageSetUpPr.fitToPage = True
     sheet.print_title_rows = title_rows
-    sheet.oddHeader.left.text, sheet.oddHeader.right.text = f"&8{CAUTION}", "&A"
+    caution = "\n".join(textwrap.wrap(CAUTION, 190 if landscape else 95))
+    sheet.oddHeader.left.text, sheet.oddHeader.right.text = f"&8{caution}", "&A"
     sheet.oddFooter.left.text, sheet.oddFooter.right.text = "&F", "&D   page &P of &N"
     sheet.page_margins.left = sheet.page_margins.right = 0.5
     sheet.page_margins.top, sheet.page_margins.bottom = 0.7, 0.85

@@ -17,6 +17,8 @@ from xlbridge.catalogue.entry import ANY, NOT_NEGATIVE
 
 INPUT, FIXED, CALC = Role.INPUT, Role.FIXED, Role.CALCULATION
 RESULT, VERDICT = Role.RESULT, Role.VERDICT
+#: what the verdicts allow for round-off
+ROUND_OFF = 1e-12
 
 LIMITS = Block(
     "Drift and stability limits",
@@ -194,6 +196,7 @@ CHECKS = (
         "={drift_over_limit:total}",
         "=1",
         "at most",
+        ROUND_OFF,
         per_direction=True,
         decimals=3,
     ),
@@ -202,6 +205,7 @@ CHECKS = (
         "={theta:total}",
         "={theta_max}",
         "at most",
+        ROUND_OFF,
         per_direction=True,
         decimals=4,
     ),

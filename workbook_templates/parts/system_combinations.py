@@ -142,6 +142,15 @@ PART = Part(
             "=0",
             per_direction=True,
         ),
+        *(
+            Check(
+                f"{symbol} entered is below that of the system with the least R",
+                f"=IF(ISNUMBER({{{symbol}_of_least}}),IF({{{symbol}}}<{{{symbol}_of_least}}*(1-1E-12),1,0),0)",
+                "=0",
+                per_direction=True,
+            )
+            for symbol in _SYMBOLS[1:]
+        ),
     ),
     brought_by=tuple(f"{which}_{symbol}" for which in ("above", "below") for symbol in _SYMBOLS),
 )

@@ -9,6 +9,7 @@ from engine import systems
 from engine.building.parts.findings import answer, design_category
 from engine.building.records import Building
 from engine.building.results import DirectionResult, Package
+from engine.errors import MissingValue
 
 RULES: Final = ("system", "Omega_0_reduced", "height_limit", "height_increase")
 COMBINATION_RULES: Final = ("combination_horizontal", "combination_vertical")
@@ -24,8 +25,10 @@ def solve(building: Building, package: Package, name: str, result: DirectionResu
     """Return what the table says of the system, where the part is asked for or a row is named."""
     named = [given.table_system for given in building.direction.values()]
     SDC = design_category(building, package)
-    if SDC is None or not ("systems" in building.parts or any(named)):
+    if not ("systems" in building.parts or any(named)):
         return {}
+    if SDC is None:
+        raise MissingValue("site.SDC", None, "must be given beside table_system, or the part category")
     given = building.direction[name]
     if given.table_system is None:
         return dict.fromkeys(SUGGESTIONS, NOT_IN_TABLE)

@@ -53,8 +53,8 @@ def test_who_may_be_increased(row):
     [
         (160.0, "us", "within the limit: 160 ft"),
         (160.001, "us", "above the limit: 160 ft"),
-        (160 * 0.3048, "si", "within the limit: 48.8 m"),
-        (48.77, "si", "above the limit: 48.8 m"),
+        (160 * 0.3048, "si", "within the limit: 48.768 m"),
+        (48.77, "si", "above the limit: 48.768 m"),
     ],
 )
 def test_both_sides_of_the_limit(h_n, units, words):
