@@ -9,7 +9,7 @@ from __future__ import annotations
 from collections.abc import Callable, Iterable, Sequence
 from functools import wraps
 from math import inf
-from typing import Final, ParamSpec, TypeAlias, TypeVar, cast
+from typing import Any, Final, ParamSpec, TypeAlias, TypeVar, cast
 
 import numpy as np
 from numpy.typing import ArrayLike, NDArray
@@ -163,6 +163,13 @@ def _numbers(name: str, value: ArrayLike) -> Array:
         array = np.asarray(value)
     except ValueError:
         raise WrongType(name, value, "must be rows of one length") from None
-    if array.dtype.kind not in "fiu":
+    if array.dtype.kind not in "fiu" or (isinstance(value, list | tuple) and _has_a_flag(value)):
         raise (MissingValue if value is None else WrongType)(name, value, "must be a number")
     return array.astype(np.float64, copy=False)
+
+
+def _has_a_flag(rows: Sequence[Any]) -> bool:
+    """Whether True or False stands among numbers, where an array would make 1 or 0 of it."""
+    return any(
+        _has_a_flag(v) if isinstance(v, list | tuple) else isinstance(v, bool | np.bool_) for v in rows
+    )

@@ -3,11 +3,13 @@
 from __future__ import annotations
 
 import os
+import sys
 from collections.abc import Iterator
 from pathlib import Path
 
 import pytest
 
+from tests.support import conformance
 from tests.support import office as offices
 from xlbridge.calc import extension
 
@@ -47,3 +49,12 @@ def office_with_addin(addins: Path, tmp_path_factory: pytest.TempPathFactory) ->
     log = tmp_path_factory.mktemp("log") / "calc.log"
     with offices.Office(addins, STORYLEDGER_CALC_LOG=str(log)) as running:
         yield running
+
+
+def pytest_terminal_summary(terminalreporter: pytest.TerminalReporter) -> None:
+    """Print the conformance matrix, where its tests ran."""
+    ran = sys.modules.get("tests.xlbridge.test_conformance")
+    if ran and ran.RESULTS:
+        terminalreporter.section("conformance matrix")
+        for line in conformance.table(ran.RESULTS):
+            terminalreporter.line(line)

@@ -15,7 +15,7 @@ from openpyxl import Workbook
 
 from engine.building import from_mapping, solve
 from engine.building.results import RULES
-from tests.support import readme
+from tests.support import conformance, readme
 from tests.support.command import ROOT
 from workbook_templates.parts import CORE, PARTS
 from xlbridge.catalogue import CATALOGUE
@@ -184,3 +184,9 @@ class TestWords:
         assert len(named) >= 10
         assert [n for n in named if n not in package and n not in package["direction"]["X"]] == []
         assert set(RULES) < set(package["clauses"])
+
+
+def test_the_conformance_matrix_is_the_one_that_the_tests_run() -> None:
+    assert conformance.summary() in readme.text()
+    for (front, kind), departure in conformance.DEPARTURES.items():
+        assert f"- {front}, {kind}: {departure.why}." in readme.text()

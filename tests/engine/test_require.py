@@ -7,7 +7,7 @@ from functools import partial
 import numpy as np
 import pytest
 
-from engine.errors import ImpossibleValue, NotApplicable, listed
+from engine.errors import ImpossibleValue, NotApplicable, listed, WrongType
 from engine.require import above, agree, at_least, at_most, choice, finite, reasons, within
 
 NAN, INF = float("nan"), float("inf")
@@ -51,6 +51,13 @@ def test_values_inside_come_back_as_floats(name):
 @pytest.mark.parametrize("name", CHECKS)
 def test_nothing_is_nothing(name):
     assert CHECKS[name]("x", []).size == 0
+
+
+@pytest.mark.parametrize("flag", [True, False, np.True_])
+def test_a_flag_among_numbers_is_no_number(flag):
+    for values in ([1.0, flag], (flag, 1.0), [[1.0], [flag]]):
+        with pytest.raises(WrongType, match=r"x = .*: must be a number"):
+            finite("x", values)
 
 
 def test_large_numbers_are_finite():

@@ -44,13 +44,16 @@ def run_apart(*arguments: object, cwd: Path, **environment: str) -> Outcome:
     return Outcome(done.returncode, done.stdout, done.stderr)
 
 
-def python(*arguments: object, cwd: Path, **environment: str) -> subprocess.CompletedProcess[str]:
+def python(
+    *arguments: object, cwd: Path, stdin: str | None = None, **environment: str
+) -> subprocess.CompletedProcess[str]:
     """Run this Python, with the project importable from any folder."""
     return subprocess.run(
         [sys.executable, *map(str, arguments)],
         cwd=cwd,
         env={**os.environ, "PYTHONPATH": str(ROOT), **environment},
         capture_output=True,
+        input=stdin,
         encoding="utf-8",
         check=False,
     )

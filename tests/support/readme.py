@@ -14,8 +14,10 @@ from pathlib import Path
 from tempfile import TemporaryDirectory
 
 from tests.support.command import ROOT
+from tests.support.conformance import summary
 
 PAGE = ROOT / "README.md"
+_MATRIX = re.compile(r"^\| kind of call \|.*?\n(?=\n)", re.DOTALL | re.MULTILINE)
 _CONSOLE = re.compile(r"(?<=```console\n).*?(?=```)", re.DOTALL)
 
 
@@ -90,7 +92,8 @@ def main() -> None:
         def again(block: re.Match[str]) -> str:
             return "".join(f"$ {command}\n{shell.run(command)}" for command, _ in _calls(block[0]))
 
-        PAGE.write_text(_CONSOLE.sub(again, text()), encoding="utf-8")
+        with_table = _MATRIX.sub(lambda match: summary(), text())
+        PAGE.write_text(_CONSOLE.sub(again, with_table), encoding="utf-8")
 
 
 if __name__ == "__main__":
