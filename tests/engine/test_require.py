@@ -7,7 +7,7 @@ from functools import partial
 import numpy as np
 import pytest
 
-from engine.errors import ImpossibleValue, NotApplicable, listed, WrongType
+from engine.errors import ImpossibleValue, NotApplicable, WrongType, listed
 from engine.require import above, agree, at_least, at_most, choice, finite, reasons, within
 
 NAN, INF = float("nan"), float("inf")

@@ -9,12 +9,13 @@ from __future__ import annotations
 
 import struct
 from collections.abc import Sequence
+from itertools import chain
 from typing import Any, Final
 
 from xlbridge import adapter
 from xlbridge.calc.log import note
 from xlbridge.catalogue import CATALOGUE
-from xlbridge.values import OMITTED, Argument, CellError, Scalar
+from xlbridge.values import OMITTED, Argument, CellError, Grid, Scalar
 
 #: Calc's number of each error
 CODES: Final = {"#N/A": 0x7FFF, "#VALUE!": 519, "#NUM!": 503, "#DIV/0!": 532, "#REF!": 524, "#NAME?": 525}
@@ -35,13 +36,29 @@ def error_number(code: str) -> float:
     return float(struct.unpack("<d", struct.pack("<Q", number))[0])
 
 
+#: ranges by content: the cells of a column take equal ranges, and the adapter reads one object once
+_known: dict[Grid, Grid] = {}
+_KNOWN_AT_MOST: Final = 256
+
+
 def _argument(value: Any) -> Argument:
     if value is None:
         return OMITTED
     if not isinstance(value, tuple):
         return _given(value)
-    rows = tuple(tuple(map(_given, row)) for row in value)
-    return rows[0][0] if len(rows) == len(rows[0]) == 1 else rows
+    if len(value) == len(value[0]) == 1:
+        return _given(value[0][0])
+    if len(_known) >= _KNOWN_AT_MOST:
+        _known.clear()
+    rows = _rows(value)
+    return _known.setdefault(rows, rows)
+
+
+def _rows(value: Grid) -> Grid:
+    """The rows with blanks as nothing; rows of floats as they are."""
+    if set(map(type, chain.from_iterable(value))) == {float}:
+        return value
+    return tuple(tuple(map(_given, row)) for row in value)
 
 
 def _given(value: Any) -> Scalar:
