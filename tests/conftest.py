@@ -14,7 +14,7 @@ from tests.support import office as offices
 from xlbridge.calc import extension
 
 #: imports what only LibreOffice's Python has.
-collect_ignore = ["support/office_driver.py"]
+collect_ignore = ["support/office_jobs.py"]
 
 
 def require_office() -> None:

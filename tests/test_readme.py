@@ -17,6 +17,7 @@ from engine.building import from_mapping, solve
 from engine.building.results import RULES
 from tests.support import conformance, readme
 from tests.support.command import ROOT
+from tests.support.office import missing
 from workbook_templates.parts import CORE, PARTS
 from xlbridge.catalogue import CATALOGUE
 from xlbridge.cli import CAUTION, COMMANDS
@@ -32,6 +33,8 @@ class TestCommands:
     def test_every_command_prints_what_the_page_shows(self, tmp_path: Path) -> None:
         shell = readme.Shell(tmp_path)
         calls = [call for session in readme.sessions() for call in session]
+        if missing():
+            calls = [call for call in calls if not call[0].startswith("storyledger print")]
         assert len(calls) >= 15
         different = {
             command: (printed, real) for command, printed in calls if (real := shell.run(command)) != printed

@@ -104,13 +104,15 @@ def _package(workbook: Workbook) -> bytes:
         for name in source.namelist():
             part = zipfile.ZipInfo(name, EPOCH.timetuple()[:6])
             part.compress_type = zipfile.ZIP_DEFLATED
-            target.writestr(part, _undated(name, source.read(name)))
+            target.writestr(part, _settled(name, source.read(name)))
     return fixed.getvalue()
 
 
-def _undated(name: str, data: bytes) -> bytes:
-    """Put the fixed date into the document properties, where the library writes the clock."""
-    if name != "docProps/core.xml":
-        return data
-    stamp = f"{EPOCH:%Y-%m-%dT%H:%M:%SZ}".encode()
-    return re.sub(rb"(<dcterms:modified[^>]*>)[^<]*", rb"\g<1>" + stamp, data)
+def _settled(name: str, data: bytes) -> bytes:
+    """Mend what the library writes: the clock in the document properties, escaped line breaks in headers."""
+    if name == "docProps/core.xml":
+        stamp = f"{EPOCH:%Y-%m-%dT%H:%M:%SZ}".encode()
+        return re.sub(rb"(<dcterms:modified[^>]*>)[^<]*", rb"\g<1>" + stamp, data)
+    if name.startswith("xl/worksheets/"):
+        return re.sub(rb"<oddHeader>[^<]*", lambda found: found[0].replace(b"_x000a_", b"\n"), data)
+    return data

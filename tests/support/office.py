@@ -1,166 +1,42 @@
-"""A headless LibreOffice of the tests' own, asked from any Python through ``office_driver.py``."""
+"""The product's own headless LibreOffice with further jobs: reading and editing as a user does."""
 
 from __future__ import annotations
 
 import contextlib
-import functools
-import json
-import os
-import select
-import shutil
-import signal
-import subprocess
 from collections.abc import Iterator
 from pathlib import Path
 from typing import Any
 
-from xlbridge.values import CellError
+from xlbridge.calc import office
+from xlbridge.calc.office import OfficeError, installation, missing, value_of
 
-DRIVER = Path(__file__).with_name("office_driver.py")
+__all__ = ["REQUIRED", "Book", "Office", "OfficeError", "installation", "missing"]
+
 REQUIRED = "STORYLEDGER_REQUIRE_OFFICE"
-_PROGRAMS = ("/usr/lib/libreoffice/program", "/usr/lib64/libreoffice/program", "/opt/libreoffice/program")
-_PYTHONS = ("/usr/bin/python3", "/usr/local/bin/python3")
-_PATIENCE = 180.0
 
 
-class OfficeError(RuntimeError):
-    """The office refused a job, or is gone."""
+class Office(office.Office):
+    """A running office."""
 
-
-@functools.cache
-def installation() -> tuple[Path, Path] | None:
-    """The office's program and a Python that can talk to it, or None."""
-    found = shutil.which("soffice")
-    folders = ([Path(found).resolve().parent] if found else []) + [Path(folder) for folder in _PROGRAMS]
-    folder = next((folder for folder in folders if (folder / "soffice.bin").exists()), None)
-    if folder is None:
-        return None
-    pythons = [Path(python) for python in _PYTHONS] + [folder / "python"]
-    return next(((folder / "soffice.bin", python) for python in pythons if _has_uno(python)), None)
-
-
-def missing() -> str:
-    """Why there is no office to test with; empty if there is one."""
-    return "" if installation() else "LibreOffice Calc with its Python bridge (python3-uno) is not installed"
-
-
-def _has_uno(python: Path) -> bool:
-    if not python.exists():
-        return False
-    return subprocess.run([python, "-c", "import uno"], capture_output=True, check=False).returncode == 0
-
-
-def _environment() -> dict[str, str]:
-    """What the office may see: its own Python would take a virtual environment on the path for its home."""
-    mine = {name: value for name, value in os.environ.items() if not name.startswith("PYTHON")}
-    return mine | {"PATH": os.defpath}
-
-
-class Office:
-    """A running office; ``with Office() as office: …``.
-
-    ``addins`` is a folder of unpacked extensions; ``variables`` are added to its environment.
-    """
-
-    def __init__(self, addins: Path | None = None, **variables: str) -> None:
-        found = installation()
-        if found is None:
-            raise OfficeError(missing())
-        program, python = found
-        command = [str(python), str(DRIVER), str(program), *([str(addins)] if addins else [])]
-        self._driver = subprocess.Popen(
-            command, stdin=subprocess.PIPE, stdout=subprocess.PIPE, env=_environment() | variables, text=True
-        )
-        self._office_id = int(self._receive()["office"])
-
-    def __enter__(self) -> Office:
-        return self
-
-    def __exit__(self, *_: object) -> None:
-        self.end()
-
-    def end(self) -> None:
-        """End the office and its driver; both by process id if they do not leave by themselves."""
-        with contextlib.suppress(BrokenPipeError):
-            self._driver.stdin.close()  # type: ignore[union-attr]
-        try:
-            self._driver.wait(40)
-        except subprocess.TimeoutExpired:
-            self._kill()
-        self._driver.stdout.close()  # type: ignore[union-attr]
-
-    def job(self, name: str, *arguments: Any, **options: Any) -> Any:
-        """Have one job of the driver done and return its result."""
-        request = {"job": name, "arguments": arguments, "options": options}
-        self._driver.stdin.write(json.dumps(request, default=str) + "\n")  # type: ignore[union-attr]
-        self._driver.stdin.flush()  # type: ignore[union-attr]
-        answer = self._receive()
-        if "failed" in answer:
-            raise OfficeError(f"{name}: {answer['failed']}")
-        return answer["result"]
-
-    @property
-    def version(self) -> str:
-        """The office's version number."""
-        return str(self.job("version"))
+    driver = Path(__file__).with_name("office_jobs.py")
 
     @contextlib.contextmanager
     def open(self, path: Path, recalculate: bool = True) -> Iterator[Book]:
         """Load a workbook (a copy of it) and recalculate everything in it."""
-        book = Book(self, self.job("open", path))
-        try:
-            if recalculate:
-                book.recalculate()
-            yield book
-        finally:
-            self.job("close", book.number)
-
-    def values(self, path: Path) -> dict[tuple[str, str], Any]:
-        """The recalculated values of all formula cells of a workbook, by (sheet, address)."""
-        with self.open(path) as book:
-            return book.formulas()
-
-    def _receive(self) -> dict[str, Any]:
-        ready, _, _ = select.select([self._driver.stdout], [], [], _PATIENCE)
-        line = self._driver.stdout.readline() if ready else ""  # type: ignore[union-attr]
-        if not line:
-            self._kill()
-            raise OfficeError("the office did not answer")
-        return dict(json.loads(line))
-
-    def _kill(self) -> None:
-        self._driver.kill()
-        self._driver.wait()
-        with contextlib.suppress(AttributeError, ProcessLookupError):
-            os.kill(self._office_id, signal.SIGKILL)
+        with super().open(path, recalculate) as book:
+            yield Book(self, book.number)
 
 
-class Book:
-    """A workbook open in the office. Addresses are A1 style, formulas as written in an .xlsx file.
-
-    Values are floats, texts, booleans, None for an empty cell and :class:`CellError`, whose reason is
-    Calc's own error number.
-    """
-
-    def __init__(self, office: Office, number: int) -> None:
-        self.office, self.number = office, number
-
-    def recalculate(self) -> None:
-        """Recalculate every cell, also those with stored values."""
-        self._job("recalculate")
+class Book(office.Book):
+    """A workbook open in the office."""
 
     def sheets(self) -> list[str]:
         """The sheets' names in order."""
         return list(self._job("sheets"))
 
-    def formulas(self) -> dict[tuple[str, str], Any]:
-        """The values of all formula cells by (sheet, address)."""
-        found = self._job("formulas")
-        return {(sheet, cell): _value(v) for sheet, cells in found.items() for cell, v in cells.items()}
-
     def read(self, sheet: str, cells: str) -> list[list[Any]]:
         """The values of a range, row by row."""
-        return [[_value(value) for value in row] for row in self._job("read", sheet, cells)]
+        return [[value_of(value) for value in row] for row in self._job("read", sheet, cells)]
 
     def value(self, sheet: str, cell: str) -> Any:
         """The value of one cell."""
@@ -193,20 +69,3 @@ class Book:
     def fill_up(self, sheet: str, cells: str) -> None:
         """Copy the last row of a range into the rows above it."""
         self._job("fill_up", sheet, cells)
-
-    def store(self, path: Path) -> Path:
-        """Store as .xlsx."""
-        self._job("store", path)
-        return path
-
-    def pdf(self, path: Path) -> Path:
-        """Print to a PDF file."""
-        self._job("pdf", path)
-        return path
-
-    def _job(self, name: str, *arguments: Any) -> Any:
-        return self.office.job(name, self.number, *arguments)
-
-
-def _value(value: Any) -> Any:
-    return CellError(value["error"], f"Err:{value['code']}") if isinstance(value, dict) else value

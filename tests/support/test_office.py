@@ -76,7 +76,7 @@ def test_ending_leaves_no_process(office: Office) -> None:
 
 
 def test_without_an_office_tests_are_skipped_or_fail(monkeypatch: pytest.MonkeyPatch) -> None:
-    monkeypatch.setattr(offices, "installation", lambda: None)
+    monkeypatch.setattr("xlbridge.calc.office.installation", lambda: None)
     monkeypatch.delenv(offices.REQUIRED, raising=False)
     with pytest.raises(pytest.skip.Exception, match="LibreOffice"):
         require_office()

@@ -1,9 +1,9 @@
-"""``storyledger calc``: recalculate a workbook headless and store the values in a copy."""
+"""``storyledger calc``: recalculate a workbook and store the values in a copy."""
 
 from __future__ import annotations
 
 import json
-from collections.abc import Callable
+from collections.abc import Callable, Mapping
 from pathlib import Path
 from typing import Any
 
@@ -11,7 +11,8 @@ import click
 
 from xlbridge.cli.failure import CLEAN, FINDINGS, INCOMPLETE, Refusal
 from xlbridge.cli.files import refuse_existing
-from xlbridge.headless.compute import Computed, compute_into
+from xlbridge.cli.in_calc import in_calc
+from xlbridge.headless.compute import compute_into
 from xlbridge.values import CellError, Scalar
 
 SHOWN = 20
@@ -26,20 +27,28 @@ SHOWN = 20
     help="The computed copy [BOOK-computed.xlsx].",
 )
 @click.option("--json", "as_json", is_flag=True, help="Print counts, errors and every value as JSON.")
+@click.option(
+    "--with",
+    "engine",
+    type=click.Choice(("headless", "calc")),
+    default="headless",
+    help="Who computes: no spreadsheet program, or LibreOffice Calc with our functions [headless].",
+)
 @click.option("--force", is_flag=True, help="Replace an existing output.")
-def command(book: Path, output: Path | None, as_json: bool, force: bool) -> int:
-    """Recalculate BOOK with no spreadsheet program and store the values in a copy.
+def command(book: Path, output: Path | None, as_json: bool, engine: str, force: bool) -> int:
+    """Recalculate BOOK and store the values in a copy.
 
-    The copy shows its numbers on a machine without the add-in. Exit code 1 says that cells hold error
-    values, 2 that some could not be evaluated (they are stored as #N/A).
+    The copy shows its numbers on a machine without the add-in; formulas and everything else in it are what
+    they were. Exit code 1 says that cells hold error values, 2 that some could not be evaluated (they are
+    stored as #N/A).
     """
     target = output or book.with_name(f"{book.stem}-computed{book.suffix}")
     if target.suffix.lower() != book.suffix.lower():
         raise Refusal(f"{target}: the copy of a workbook keeps its ending, {book.suffix or 'none'}")
     refuse_existing(target, force)
-    computed = compute_into(book, target, force)
+    computed = in_calc(book, target, force) if engine == "calc" else compute_into(book, target, force)
     if as_json:
-        record = {"output": str(target), **computed.summary(), "values": _values(computed)}
+        record = {"output": str(target), **computed.summary(), "values": _values(computed.values)}
         click.echo(json.dumps(record, indent=1, ensure_ascii=False))
     else:
         click.echo(_report(computed.summary(), target))
@@ -48,9 +57,9 @@ def command(book: Path, output: Path | None, as_json: bool, force: bool) -> int:
     return FINDINGS if computed.errors else CLEAN
 
 
-def _values(computed: Computed) -> dict[str, dict[str, Any]]:
+def _values(values: Mapping[tuple[str, str], Scalar]) -> dict[str, dict[str, Any]]:
     sheets: dict[str, dict[str, Any]] = {}
-    for (sheet, address), value in computed.values.items():
+    for (sheet, address), value in values.items():
         sheets.setdefault(sheet, {})[address] = _plain(value)
     return sheets
 

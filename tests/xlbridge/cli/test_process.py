@@ -50,7 +50,7 @@ def test_a_pipe_gets_the_text_alone(tmp_path: Path) -> None:
         ["solve", "d/building.toml"],
     ]
     calls += [["new", "n.xlsx", "--levels", "60"], ["eval", "=1+1", "--work"], ["functions"], ["entries"]]
-    assert {call[0] for call in calls} == set(COMMANDS)
+    assert {call[0] for call in calls} == set(COMMANDS) - {"print"}  # needs an office: test_in_calc.py
     for call in calls:
         outcome = run_apart(*call, cwd=tmp_path)
         assert (outcome.code, outcome.err) == (0, ""), call

@@ -49,6 +49,8 @@ CALLS = {
         ["calc", "{}/good.xlsx", "-o", "{}/good.xlsx", "--force"],
         ["the input itself", "choose another name"],
     ),
+    "print: words": (["print", "{}/words.xlsx"], ["not a workbook"]),
+    "print: another ending": (["print", "{}/good.xlsx", "-o", "{}/a.ps"], ["ends in .pdf"]),
     "names: words": (["names", "{}/words.xlsx", "--for", "calc"], ["not a workbook"]),
     "names: over its input": (
         ["names", "{}/good.xlsx", "--for", "calc", "-o", "{}/good.xlsx", "--force"],
@@ -114,6 +116,7 @@ OUTPUTS = {
     "inputs": (["inputs", "{}/good.xlsx", "-o", "{}/taken.toml"], "taken.toml"),
     "calc-addin": (["calc-addin", "{}/taken.oxt"], "taken.oxt"),
     "names": (["names", "{}/good.xlsx", "--for", "calc"], "good-calc.xlsx"),
+    "print": (["print", "{}/good.xlsx"], "good.pdf"),
     "demo": (["demo", "{}"], "story.xlsx"),
 }
 

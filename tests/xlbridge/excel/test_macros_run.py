@@ -16,6 +16,7 @@ import pytest
 
 from tests.support import office as offices
 from tests.support.office import Office
+from xlbridge.calc.office import Office as Product
 from xlbridge.excel.cells import ERROR_NUMBERS
 from xlbridge.excel.generate import FOLDER, MACRO_FILE
 
@@ -97,7 +98,7 @@ def results(office: Office) -> dict[str, str]:
     program, python = offices.installation() or pytest.fail("LibreOffice is gone")
     environment = {name: value for name, value in os.environ.items() if not name.startswith("PYTHON")}
     done = subprocess.run(
-        [python, DRIVER, program, offices.DRIVER.parent],
+        [python, DRIVER, program, Product.driver.parent],
         input=json.dumps({"module": module_text(), "calls": [call for call, _ in CALLS.values()]}),
         env=environment,
         capture_output=True,

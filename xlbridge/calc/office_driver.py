@@ -1,6 +1,6 @@
-"""Serves one private LibreOffice to the tests: JSON jobs on stdin, JSON answers on stdout, one a line.
+"""Serves one private LibreOffice: JSON jobs on stdin, JSON answers on stdout, one a line.
 
-Run by a Python that has ``uno`` (Debian: /usr/bin/python3), not by the tests' own:
+Run by a Python that has ``uno`` (Debian: /usr/bin/python3), not by the one that asks:
 ``office_driver.py SOFFICE_BIN [ADDINS_FOLDER]``. The office has a profile of its own in a temporary
 folder, listens on a pipe of its own, and is ended by its process id. When stdin ends, all is cleaned up.
 """
@@ -17,13 +17,9 @@ import uuid
 import uno
 from com.sun.star.beans import PropertyValue
 from com.sun.star.connection import NoConnectException
-from com.sun.star.sheet.FillDateMode import FILL_DATE_DAY
-from com.sun.star.sheet.FillDirection import TO_BOTTOM, TO_TOP
-from com.sun.star.sheet.FillMode import SIMPLE
 
 START_AGAIN = 81  # how the first start on a fresh profile ends
 FORMULA_CELLS = 16  # com.sun.star.sheet.CellFlags.FORMULA
-EXCEL_ADDRESSES = 3  # com.sun.star.sheet.AddressConvention.XL_OOX
 ERRORS = {
     502: "#VALUE!",
     503: "#NUM!",
@@ -114,7 +110,7 @@ class Office:
 
 
 class Jobs:
-    """What a test can ask for; each public method is one job."""
+    """What can be asked for; each public method is one job."""
 
     def __init__(self, office):
         self.office, self.books, self.count = office, {}, 0
@@ -137,48 +133,9 @@ class Jobs:
     def recalculate(self, book):
         self.books[book].calculateAll()
 
-    def sheets(self, book):
-        return list(self.books[book].Sheets.ElementNames)
-
     def formulas(self, book):
         """Values of all formula cells by sheet and address."""
         return {sheet.Name: dict(formula_cells(sheet)) for sheet in self.books[book].Sheets}
-
-    def read(self, book, sheet, cells):
-        """Values of a range, row by row."""
-        return values(self._range(book, sheet, cells))
-
-    def formula(self, book, sheet, cell):
-        return self._range(book, sheet, cell).getCellByPosition(0, 0).Formula
-
-    def set_formula(self, book, sheet, cell, formula):
-        """Enter a formula written as in an .xlsx file."""
-        target = self._range(book, sheet, cell).getCellByPosition(0, 0)
-        parser = self.books[book].createInstance("com.sun.star.sheet.FormulaParser")
-        parser.FormulaConvention, parser.CompileEnglish = EXCEL_ADDRESSES, True
-        target.setTokens(parser.parseFormula(formula.removeprefix("="), target.CellAddress))
-
-    def set_value(self, book, sheet, cell, value):
-        """Enter a number or a text; None clears the cell."""
-        target = self._range(book, sheet, cell).getCellByPosition(0, 0)
-        if isinstance(value, (int, float)):
-            target.Value = float(value)
-        else:
-            target.String = value or ""
-
-    def insert_rows(self, book, sheet, row, count=1):
-        self._sheet(book, sheet).Rows.insertByIndex(row - 1, count)
-
-    def delete_rows(self, book, sheet, row, count=1):
-        self._sheet(book, sheet).Rows.removeByIndex(row - 1, count)
-
-    def fill_down(self, book, sheet, cells):
-        """Copy the first row of a range into the rows below it."""
-        self._range(book, sheet, cells).fillSeries(TO_BOTTOM, SIMPLE, FILL_DATE_DAY, 1.0, 1e300)
-
-    def fill_up(self, book, sheet, cells):
-        """Copy the last row of a range into the rows above it."""
-        self._range(book, sheet, cells).fillSeries(TO_TOP, SIMPLE, FILL_DATE_DAY, 1.0, 1e300)
 
     def store(self, book, path, filter="Calc MS Excel 2007 XML"):
         self.books[book].storeToURL(url(path), properties(FilterName=filter, Overwrite=True))
@@ -193,12 +150,6 @@ class Jobs:
             "com.sun.star.configuration.ConfigurationAccess", arguments
         )
         return product.getByName("ooSetupVersionAboutBox")
-
-    def _sheet(self, book, sheet):
-        return self.books[book].Sheets.getByName(sheet)
-
-    def _range(self, book, sheet, cells):
-        return self._sheet(book, sheet).getCellRangeByName(cells)
 
 
 def formula_cells(sheet):
@@ -242,13 +193,13 @@ def answer(jobs, line):
         return {"failed": f"{type(error).__name__}: {error}"}
 
 
-def main():
+def main(kind=Jobs):
     program, addins = sys.argv[1], sys.argv[2] if len(sys.argv) > 2 else None
     with (
         tempfile.TemporaryDirectory(prefix="storyledger-office-") as folder,
         Office(program, addins, folder) as office,
     ):
-        jobs = Jobs(office)
+        jobs = kind(office)
         print(json.dumps({"office": office.process.pid}), flush=True)
         for line in sys.stdin:
             print(json.dumps(answer(jobs, line)), flush=True)
