@@ -5,11 +5,11 @@ from __future__ import annotations
 import io
 import re
 import zipfile
-from collections.abc import Mapping
+from collections.abc import Callable, Mapping
 from datetime import datetime
 from pathlib import Path
 from tempfile import TemporaryDirectory
-from typing import Any, Final
+from typing import Any, Final, TypeAlias
 
 from openpyxl import Workbook
 
@@ -21,23 +21,30 @@ from workbook_templates.inputs import Inputs
 from workbook_templates.layout import Layout
 from xlbridge.headless.compute import Computed, compute, compute_into
 
+FitOut: TypeAlias = Callable[[Workbook], object]
+
 DEFAULT_LEVELS: Final = 6
 #: written into every package, so that two builds are the same to the byte.
 EPOCH = datetime(2020, 1, 1)
 
 
-def build(given: Mapping[str, Any], level_count: int = DEFAULT_LEVELS) -> bytes:
+def build(
+    given: Mapping[str, Any], level_count: int = DEFAULT_LEVELS, fit_out: FitOut | None = None
+) -> bytes:
     """Return the package of the workbook for the tables of a BUILDING.toml.
 
     ``given`` needs ``edition`` and ``units``; what else is missing starts from marked starter values,
-    ``level_count`` levels of them if no level is given.
+    ``level_count`` levels of them if no level is given. ``fit_out`` adds what a front end needs.
     """
-    return _package(draw(given, level_count))
+    workbook = draw(given, level_count)
+    if fit_out:
+        fit_out(workbook)
+    return package(workbook)
 
 
 def build_native(given: Mapping[str, Any], values: native.Values, level_count: int = DEFAULT_LEVELS) -> bytes:
     """Return the same workbook in built-in functions; ``values`` are those of the one with functions."""
-    return _package(draw_native(given, values, level_count))
+    return package(draw_native(given, values, level_count))
 
 
 def draw(given: Mapping[str, Any], level_count: int = DEFAULT_LEVELS) -> Workbook:
@@ -71,12 +78,16 @@ def _drawn(inputs: Inputs, issue: bool = False) -> Workbook:
 
 
 def write_workbook(
-    given: Mapping[str, Any], target: Path, level_count: int = DEFAULT_LEVELS, force: bool = False
+    given: Mapping[str, Any],
+    target: Path,
+    level_count: int = DEFAULT_LEVELS,
+    force: bool = False,
+    fit_out: FitOut | None = None,
 ) -> Computed:
     """Build a workbook, compute it headless, and write it with its values stored: numbers show anywhere."""
     with TemporaryDirectory() as folder:
         drawn = Path(folder) / f"drawn{target.suffix}"
-        drawn.write_bytes(build(given, level_count))
+        drawn.write_bytes(build(given, level_count, fit_out))
         return compute_into(drawn, target, force)
 
 
@@ -94,7 +105,8 @@ def write_native(
         return compute_into(drawn, target, force)
 
 
-def _package(workbook: Workbook) -> bytes:
+def package(workbook: Workbook) -> bytes:
+    """Return the file of a drawn workbook: the same bytes for the same drawing."""
     workbook.properties.creator = f"Storyledger {__version__}"
     workbook.properties.created = EPOCH
     drawn = io.BytesIO()

@@ -122,11 +122,20 @@ def _everywhere(code: str, call: Call) -> Value:
     return CellError(code)
 
 
+def _one_text_at_a_time(call: Call) -> Value:
+    return _everywhere("#VALUE!", call) if call.entry.is_text else call.expected
+
+
 DEPARTURES: Final[Mapping[tuple[str, str], Departure]] = {
     ("Calc", ERROR): Departure(
         "Calc does not call a function of an extension with an error value in a range: the cell shows "
         "Err:504, stored in an .xlsx as #VALUE!",
         partial(_everywhere, "#VALUE!"),
+    ),
+    ("Calc", COLUMN): Departure(
+        "a function whose result is a text gives one text at a time, and over a range an error: to Calc a "
+        "text in rows is equal to no other text, so that a comparison would go wrong without a sign",
+        _one_text_at_a_time,
     ),
     ("Calc", TRUE): Departure(
         "Calc hands TRUE over as the number 1: its truth values are numbers with a format",

@@ -31,7 +31,9 @@ CAUTIONS = (
 )
 ADDIN = (
     "Cells that call ELF_… functions need the Storyledger add-in to be recalculated. The numbers stored in "
-    "a computed copy show without it."
+    "a computed copy show without it. #NAME? in such cells means that the add-in is not loaded: the README "
+    "says how to load it in Excel and in LibreOffice Calc, and `storyledger bridge-check` makes a workbook "
+    "that shows whether it works. On a machine without it use an issue copy (`storyledger new --native`)."
 )
 ISSUE = (
     "An issue copy: its formulas are built-in functions only and compute without the add-in. Cells that "

@@ -23,11 +23,20 @@ CODES: Final = {"#N/A": 0x7FFF, "#VALUE!": 519, "#NUM!": 503, "#DIV/0!": 532, "#
 Rows = tuple[tuple[float | str, ...], ...]
 
 
-def call(name: str, arguments: Sequence[Any]) -> Rows:
-    """Return the value of a worksheet function as rows of cells; a reason for a failure goes into the log."""
-    found = adapter.call(CATALOGUE[name], [_argument(value) for value in arguments])
+def call(name: str, arguments: Sequence[Any]) -> Rows | float | str:
+    """Return the value of a worksheet function as rows of cells; a reason for a failure goes into the log.
+
+    A function whose result is a text gives that alone, and no rows: see ``extension.interface``.
+    """
+    entry = CATALOGUE[name]
+    found = adapter.call(entry, [_argument(value) for value in arguments])
+    if entry.is_text:
+        return _cell(name, _ONE_TEXT if isinstance(found, tuple) else found)
     rows = found if isinstance(found, tuple) else ((found,),)
     return tuple(tuple(_cell(name, value) for value in row) for row in rows)
+
+
+_ONE_TEXT: Final = CellError("#VALUE!", "Calc takes one text at a time: fill the formula down, cell by cell")
 
 
 def error_number(code: str) -> float:

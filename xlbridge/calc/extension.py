@@ -25,6 +25,7 @@ CARRIED: Final = (
 )
 EPOCH: Final = (1980, 1, 1, 0, 0, 0)
 HEAD: Final = '<?xml version="1.0" encoding="UTF-8"?>\n'
+ANY: Final = "any"
 ROWS: Final = "sequence< sequence< any > >"
 
 
@@ -60,9 +61,14 @@ def files() -> dict[str, bytes]:
 
 
 def interface() -> str:
-    """Return the interface in UNO's IDL, which Calc reads as text: rows of cells in, rows of cells out."""
+    """Return the interface in UNO's IDL, which Calc reads as text: rows of cells in, rows of cells out.
+
+    A text comes out alone: Calc compares texts by their place in a pool, and those in rows are not put there,
+    so that ``="no"`` would be FALSE for the text no.
+    """
     methods = "\n".join(
-        f"    {ROWS} {identity.METHODS[e.name]}( {_parameters(e)} );" for e in CATALOGUE.values()
+        f"    {ANY if e.is_text else ROWS} {identity.METHODS[e.name]}( {_parameters(e)} );"
+        for e in CATALOGUE.values()
     )
     opening = " ".join(f"module {name} {{" for name in identity.MODULES)
     closing = "}; " * len(identity.MODULES)
@@ -71,7 +77,7 @@ def interface() -> str:
 
 def _parameters(entry: SheetFunction) -> str:
     """An argument that may be left out is an ``any``: the only kind that Calc lets a user leave out."""
-    kinds = enumerate("any" if a.optional else ROWS for a in entry.arguments)
+    kinds = enumerate(ANY if a.optional else ROWS for a in entry.arguments)
     return ", ".join(f"[in] {kind} {_parameter(place)}" for place, kind in kinds)
 
 
@@ -88,6 +94,7 @@ def component() -> str:
         "MODULE": ".".join(identity.MODULES),
         "INTERFACE": identity.INTERFACE,
         "METHODS": repr(dict(identity.METHODS)),
+        "TEXTS": repr(tuple(name for name, entry in CATALOGUE.items() if entry.is_text)),
     }
     text = TEMPLATE.read_text(encoding="utf-8")
     for name, value in places.items():

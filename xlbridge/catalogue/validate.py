@@ -130,7 +130,11 @@ def describe(a: Argument) -> str:
     if a.kind is Kind.CHOICE:
         return f"{a.text}: {listed(a.choices)}."
     unit = {"none": "no unit", "any": "any one unit", "time": "s", "acceleration": "g"}.get(
-        a.unit, f"a {a.unit} unit"
+        a.unit, f"{_a(a.unit)} unit"
     )
-    each = f"one cell a {a.each}, " if a.kind is Kind.LEVELS else ""
+    each = f"one cell {_a(a.each)}, " if a.kind is Kind.LEVELS else ""
     return f"{a.text} [{unit}], {each}{a.span}."
+
+
+def _a(word: str) -> str:
+    return f"an {word}" if word[0] in "aeio" else f"a {word}"

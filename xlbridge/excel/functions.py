@@ -14,7 +14,7 @@ from xlbridge.excel.cells import OMITTED, call
 
 
 @xw.func(category="Storyledger: Seismic weight")
-@xw.arg("area", "raw", doc="Area on plan, or of a wall [a area unit], at least 0.")
+@xw.arg("area", "raw", doc="Area on plan, or of a wall [an area unit], at least 0.")
 @xw.arg("unit_load", "raw", doc="Load that counts, on each unit of area [a unit load unit], at least 0.")
 @xw.arg("units", "raw", doc="Unit system: us (kip, ft, in) or si (kN, m, mm): us, si.")
 @xw.ret("raw")
@@ -77,8 +77,10 @@ def ELF_SNOW_SHARE(p_f: Any, edition: Any, units: Any) -> Any:
 
 
 @xw.func(category="Storyledger: Seismic weight")
-@xw.arg("areas", "raw", doc="Areas of the items [a area unit], one cell a item, at least 0.")
-@xw.arg("unit_loads", "raw", doc="Loads that count, by item [a unit load unit], one cell a item, at least 0.")
+@xw.arg("areas", "raw", doc="Areas of the items [an area unit], one cell an item, at least 0.")
+@xw.arg(
+    "unit_loads", "raw", doc="Loads that count, by item [a unit load unit], one cell an item, at least 0."
+)
 @xw.arg("units", "raw", doc="Unit system: us (kip, ft, in) or si (kN, m, mm): us, si.")
 @xw.arg(
     "equipment",
@@ -638,12 +640,12 @@ def ELF_PERIOD_DRIFT(T_a: Any, C_u: Any, T_computed: Any, cap: Any) -> Any:
 
 
 @xw.func(category="Storyledger: Period")
-@xw.arg("A_B", "raw", doc="Area of the base [a area unit], above 0.")
+@xw.arg("A_B", "raw", doc="Area of the base [an area unit], above 0.")
 @xw.arg("h_n", "raw", doc="Structural height [a length unit], above 0.")
 @xw.arg(
     "wall_areas",
     "raw",
-    doc="Web areas of the shear walls in the direction [a area unit], one cell a wall, above 0.",
+    doc="Web areas of the shear walls in the direction [an area unit], one cell a wall, above 0.",
 )
 @xw.arg("wall_lengths", "raw", doc="Lengths of the same walls [a length unit], one cell a wall, above 0.")
 @xw.ret("raw")

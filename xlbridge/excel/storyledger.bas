@@ -1467,6 +1467,2126 @@ failed:
     ELF_MODAL_DRIFT_SCALE = CVErr(2015)
 End Function
 
+Public Function STORYLEDGER_VERSION(part)
+    If TypeOf Application.Caller Is Range Then On Error GoTo failed
+    STORYLEDGER_VERSION = WithErrors(XLPy.CallUDF("xlbridge.excel.versions", "STORYLEDGER_VERSION", Array(Contents(part)), ThisWorkbook, Application.Caller))
+    Exit Function
+failed:
+    STORYLEDGER_VERSION = CVErr(2015)
+End Function
+
+Private Sub Help_ELF_AREA_WEIGHT()
+    Dim help(2) As String
+    help(0) = "Area on plan, or of a wall [an area unit], at least 0."
+    help(1) = "Load that counts, on each unit of area [a unit load unit], at least 0."
+    help(2) = "Unit system: us (kip, ft, in) or si (kN, m, mm): us, si."
+    Describe "ELF_AREA_WEIGHT", _
+        "Weight of a surface under a uniform load. ASCE/SEI 7-16: 12.7.2; 7-22: 12.7.2.", _
+        "Storyledger: Seismic weight", help
+End Sub
+
+Private Sub Help_ELF_STORAGE_SHARE()
+    Dim help(1) As String
+    help(0) = "Floor live load of the storage area [a unit load unit], at least 0."
+    help(1) = "Counted, or the exception used: counted, at most 5 % of the level, public garage or open parking."
+    Describe "ELF_STORAGE_SHARE", _
+        "Part of a storage floor's live load that counts as seismic weight. ASCE/SEI 7-16: 12.7.2, item 1; 7-22: 12.7.2, item 1. Partly from memory: confirm.", _
+        "Storyledger: Seismic weight", help
+End Sub
+
+Private Sub Help_ELF_STORAGE_RATIO()
+    Dim help(1) As String
+    help(0) = "Weight of storage at the level, 25 % of its live load [a force unit], at least 0."
+    help(1) = "Effective seismic weight of the level without storage [a force unit], above 0."
+    Describe "ELF_STORAGE_RATIO", _
+        "What a level's storage adds, in parts of its other weight: at most 0.05 need not count. ASCE/SEI 7-16: 12.7.2, item 1; 7-22: 12.7.2, item 1. Partly from memory: confirm.", _
+        "Storyledger: Seismic weight", help
+End Sub
+
+Private Sub Help_ELF_PARTITION_SHARE()
+    Dim help(1) As String
+    help(0) = "Actual weight of partitions over the floor area [a unit load unit], at least 0."
+    help(1) = "Unit system: us (kip, ft, in) or si (kN, m, mm): us, si."
+    Describe "ELF_PARTITION_SHARE", _
+        "Partition load that counts as seismic weight: the actual one, at least 10 psf (0.48 kN/m2). ASCE/SEI 7-16: 12.7.2, item 2; 7-22: 12.7.2, item 2.", _
+        "Storyledger: Seismic weight", help
+End Sub
+
+Private Sub Help_ELF_SNOW_SHARE()
+    Dim help(2) As String
+    help(0) = "Flat roof snow load [a unit load unit], at least 0."
+    help(1) = "Edition of ASCE/SEI 7, as text (in a cell: format the cell as Text, or it turns into a date): 7-16, 7-22."
+    help(2) = "Unit system: us (kip, ft, in) or si (kN, m, mm): us, si."
+    Describe "ELF_SNOW_SHARE", _
+        "Part of the flat roof snow load that counts as seismic weight. ASCE/SEI 7-16: 12.7.2, item 4; 7-22: 12.7.2, item 4.", _
+        "Storyledger: Seismic weight", help
+End Sub
+
+Private Sub Help_ELF_LEVEL_WEIGHT()
+    Dim help(3) As String
+    help(0) = "Areas of the items [an area unit], one cell an item, at least 0."
+    help(1) = "Loads that count, by item [a unit load unit], one cell an item, at least 0."
+    help(2) = "Unit system: us (kip, ft, in) or si (kN, m, mm): us, si."
+    help(3) = "Permanent equipment, landscaping and whatever else counts in full; 0 if left out [a force unit], at least 0."
+    Describe "ELF_LEVEL_WEIGHT", _
+        "Effective seismic weight of one level from its list of areas and unit loads. ASCE/SEI 7-16: 12.7.2; 7-22: 12.7.2.", _
+        "Storyledger: Seismic weight", help
+End Sub
+
+Private Sub Help_ELF_FA()
+    Dim help(2) As String
+    help(0) = "Mapped MCE_R spectral acceleration at short periods [g], at least 0."
+    help(1) = "Site class; F has no row: A, B, B not measured, C, D, D default, E."
+    help(2) = "Exception of 11.4.8 used: none, exception 1: F_a of class C."
+    Describe "ELF_FA", _
+        "Site coefficient at short periods, by class and mapped acceleration. ASCE/SEI 7-16: 11.4.4, Table 11.4-1. Partly from memory: confirm.", _
+        "Storyledger: Ground motion", help
+End Sub
+
+Private Sub Help_ELF_FV()
+    Dim help(1) As String
+    help(0) = "Mapped MCE_R spectral acceleration at 1 s [g], at least 0."
+    help(1) = "Site class; F has no row: A, B, B not measured, C, D, D default, E."
+    Describe "ELF_FV", _
+        "Site coefficient at long periods, by class and mapped acceleration. ASCE/SEI 7-16: 11.4.4, Table 11.4-2.", _
+        "Storyledger: Ground motion", help
+End Sub
+
+Private Sub Help_ELF_SITE_TRIGGER()
+    Dim help(7) As String
+    help(0) = "Mapped MCE_R spectral acceleration at short periods [g], at least 0."
+    help(1) = "Mapped MCE_R spectral acceleration at 1 s [g], at least 0."
+    help(2) = "Site class: A, B, B not measured, C, D, D default, E, F."
+    help(3) = "Isolated or with damping systems: yes, no."
+    help(4) = "Exception of 11.4.8 used: none, exception 1: F_a of class C."
+    help(5) = "Exception of 11.4.8 used: none, exception 2: C_s increased, exception 2 of Supplement 3: S_M1 up 50 %, exception 3: T at most T_S."
+    help(6) = "Longest period used in design, either direction [s], above 0."
+    help(7) = "Period at which the plateau of the design spectrum ends [s], above 0."
+    Describe "ELF_SITE_TRIGGER", _
+        "What still demands a site-specific analysis after the exceptions used, or none. ASCE/SEI 7-16: 11.4.8. Partly from memory: confirm.", _
+        "Storyledger: Ground motion", help
+End Sub
+
+Private Sub Help_ELF_SMS()
+    Dim help(1) As String
+    help(0) = "Mapped MCE_R spectral acceleration at short periods [g], at least 0."
+    help(1) = "Site coefficient at short periods [no unit], above 0."
+    Describe "ELF_SMS", _
+        "MCE_R spectral acceleration at short periods for the site class. ASCE/SEI 7-16: 11.4.4, Eq. 11.4-1.", _
+        "Storyledger: Ground motion", help
+End Sub
+
+Private Sub Help_ELF_SM1()
+    Dim help(2) As String
+    help(0) = "Mapped MCE_R spectral acceleration at 1 s [g], at least 0."
+    help(1) = "Site coefficient at long periods [no unit], above 0."
+    help(2) = "Exception of 11.4.8 used: none, exception 2: C_s increased, exception 2 of Supplement 3: S_M1 up 50 %, exception 3: T at most T_S."
+    Describe "ELF_SM1", _
+        "MCE_R spectral acceleration at 1 s for the site class. ASCE/SEI 7-16: 11.4.4, Eq. 11.4-2.", _
+        "Storyledger: Ground motion", help
+End Sub
+
+Private Sub Help_ELF_SDS()
+    Dim help(0) As String
+    help(0) = "MCE_R spectral acceleration at short periods [g], above 0."
+    Describe "ELF_SDS", _
+        "Design spectral acceleration at short periods. ASCE/SEI 7-16: 11.4.5, Eq. 11.4-3; 7-22: 11.4.4, Eq. 11.4-1. Partly from memory: confirm.", _
+        "Storyledger: Ground motion", help
+End Sub
+
+Private Sub Help_ELF_SD1()
+    Dim help(0) As String
+    help(0) = "MCE_R spectral acceleration at 1 s [g], above 0."
+    Describe "ELF_SD1", _
+        "Design spectral acceleration at 1 s. ASCE/SEI 7-16: 11.4.5, Eq. 11.4-4; 7-22: 11.4.4, Eq. 11.4-2. Partly from memory: confirm.", _
+        "Storyledger: Ground motion", help
+End Sub
+
+Private Sub Help_ELF_CS_INCREASE()
+    Dim help(2) As String
+    help(0) = "Fundamental period [s], above 0."
+    help(1) = "Period at which the plateau of the design spectrum ends [s], above 0."
+    help(2) = "Exception of 11.4.8 used: none, exception 2: C_s increased, exception 2 of Supplement 3: S_M1 up 50 %, exception 3: T at most T_S."
+    Describe "ELF_CS_INCREASE", _
+        "Factor on the upper bound of C_s where exception 2 is used as first printed; 1 otherwise. ASCE/SEI 7-16: 11.4.8, exception 2. Partly from memory: confirm.", _
+        "Storyledger: Ground motion", help
+End Sub
+
+Private Sub Help_ELF_IE()
+    Dim help(0) As String
+    help(0) = "Risk category: I, II, III, IV."
+    Describe "ELF_IE", _
+        "Importance factor of a risk category. ASCE/SEI 7-16: 11.5.1, Table 1.5-2; 7-22: 11.5.1, Table 1.5-2.", _
+        "Storyledger: Ground motion", help
+End Sub
+
+Private Sub Help_ELF_T0()
+    Dim help(1) As String
+    help(0) = "Design spectral acceleration at short periods [g], above 0."
+    help(1) = "Design spectral acceleration at 1 s [g], above 0."
+    Describe "ELF_T0", _
+        "Period at which the plateau of the design spectrum begins. ASCE/SEI 7-16: 11.4.6; 7-22: 11.4.5.2. Partly from memory: confirm.", _
+        "Storyledger: Ground motion", help
+End Sub
+
+Private Sub Help_ELF_TS()
+    Dim help(1) As String
+    help(0) = "Design spectral acceleration at short periods [g], above 0."
+    help(1) = "Design spectral acceleration at 1 s [g], above 0."
+    Describe "ELF_TS", _
+        "Period at which the plateau of the design spectrum ends. ASCE/SEI 7-16: 11.4.6; 7-22: 11.4.5.2. Partly from memory: confirm.", _
+        "Storyledger: Ground motion", help
+End Sub
+
+Private Sub Help_ELF_SA()
+    Dim help(3) As String
+    help(0) = "Period, 0 allowed [s], at least 0."
+    help(1) = "Design spectral acceleration at short periods [g], above 0."
+    help(2) = "Design spectral acceleration at 1 s [g], above 0."
+    help(3) = "Long-period transition period [s], above 0."
+    Describe "ELF_SA", _
+        "Design spectral acceleration of the two-period spectrum at a period. ASCE/SEI 7-16: 11.4.6, Eq. 11.4-5 to 11.4-7; 7-22: 11.4.5.2, Eq. 11.4-3 to 11.4-5. Partly from memory: confirm.", _
+        "Storyledger: Ground motion", help
+End Sub
+
+Private Sub Help_ELF_SYSTEM_R()
+    Dim help(1) As String
+    help(0) = "Row of Table 12.2-1, after the letter of its group: 85 texts from 'A. Special reinforced concrete shear walls' to 'H. Steel systems not specifically detailed for seismic resistance, excluding cantilever column systems'."
+    help(1) = "Edition of ASCE/SEI 7, as text (in a cell: format the cell as Text, or it turns into a date): 7-16, 7-22."
+    Describe "ELF_SYSTEM_R", _
+        "Response modification coefficient of a system. ASCE/SEI 7-16: 12.2.1, Table 12.2-1; 7-22: 12.2.1, Table 12.2-1. Partly from memory: confirm.", _
+        "Storyledger: Systems", help
+End Sub
+
+Private Sub Help_ELF_SYSTEM_OMEGA()
+    Dim help(1) As String
+    help(0) = "Row of Table 12.2-1, after the letter of its group: 85 texts from 'A. Special reinforced concrete shear walls' to 'H. Steel systems not specifically detailed for seismic resistance, excluding cantilever column systems'."
+    help(1) = "Edition of ASCE/SEI 7, as text (in a cell: format the cell as Text, or it turns into a date): 7-16, 7-22."
+    Describe "ELF_SYSTEM_OMEGA", _
+        "Overstrength factor of a system. ASCE/SEI 7-16: 12.2.1, Table 12.2-1; 7-22: 12.2.1, Table 12.2-1. Partly from memory: confirm.", _
+        "Storyledger: Systems", help
+End Sub
+
+Private Sub Help_ELF_SYSTEM_CD()
+    Dim help(1) As String
+    help(0) = "Row of Table 12.2-1, after the letter of its group: 85 texts from 'A. Special reinforced concrete shear walls' to 'H. Steel systems not specifically detailed for seismic resistance, excluding cantilever column systems'."
+    help(1) = "Edition of ASCE/SEI 7, as text (in a cell: format the cell as Text, or it turns into a date): 7-16, 7-22."
+    Describe "ELF_SYSTEM_CD", _
+        "Deflection amplification factor of a system. ASCE/SEI 7-16: 12.2.1, Table 12.2-1; 7-22: 12.2.1, Table 12.2-1. Partly from memory: confirm.", _
+        "Storyledger: Systems", help
+End Sub
+
+Private Sub Help_ELF_SYSTEM_SOURCE()
+    Dim help(1) As String
+    help(0) = "Row of Table 12.2-1, after the letter of its group: 92 texts from 'A. Special reinforced concrete shear walls' to 'H. Steel systems not specifically detailed for seismic resistance, excluding cantilever column systems'."
+    help(1) = "Edition of ASCE/SEI 7, as text (in a cell: format the cell as Text, or it turns into a date): 7-16, 7-22."
+    Describe "ELF_SYSTEM_SOURCE", _
+        "What the row of a system in Table 12.2-1 rests on: seen, from memory or uncertain. ASCE/SEI 7-16: 12.2.1, Table 12.2-1; 7-22: 12.2.1, Table 12.2-1. Partly from memory: confirm.", _
+        "Storyledger: Systems", help
+End Sub
+
+Private Sub Help_ELF_SYSTEM_STATUS()
+    Dim help(4) As String
+    help(0) = "Row of Table 12.2-1, after the letter of its group: 92 texts from 'A. Special reinforced concrete shear walls' to 'H. Steel systems not specifically detailed for seismic resistance, excluding cantilever column systems'."
+    help(1) = "Response modification coefficient [no unit], at least 1."
+    help(2) = "Overstrength factor as tabulated [no unit], at least 1."
+    help(3) = "Deflection amplification factor [no unit], at least 1."
+    help(4) = "Edition of ASCE/SEI 7, as text (in a cell: format the cell as Text, or it turns into a date): 7-16, 7-22."
+    Describe "ELF_SYSTEM_STATUS", _
+        "Whether R, Omega_0 and C_d as entered are those of Table 12.2-1, and what differs. ASCE/SEI 7-16: 12.2.1, Table 12.2-1; 7-22: 12.2.1, Table 12.2-1. Partly from memory: confirm.", _
+        "Storyledger: Systems", help
+End Sub
+
+Private Sub Help_ELF_HEIGHT_LIMIT()
+    Dim help(4) As String
+    help(0) = "Row of Table 12.2-1, after the letter of its group: 92 texts from 'A. Special reinforced concrete shear walls' to 'H. Steel systems not specifically detailed for seismic resistance, excluding cantilever column systems'."
+    help(1) = "Seismic Design Category: A, B, C, D, E, F."
+    help(2) = "Whether 12.2.5.4 is used: no extreme torsion, at most 60 % of the force in one plane: yes, no."
+    help(3) = "Edition of ASCE/SEI 7, as text (in a cell: format the cell as Text, or it turns into a date): 7-16, 7-22."
+    help(4) = "Unit system: us (kip, ft, in) or si (kN, m, mm): us, si."
+    Describe "ELF_HEIGHT_LIMIT", _
+        "Limit on the structural height of a system, in words: a height, NL or NP. ASCE/SEI 7-16: 12.2.1, Table 12.2-1; 7-22: 12.2.1, Table 12.2-1. Partly from memory: confirm.", _
+        "Storyledger: Systems", help
+End Sub
+
+Private Sub Help_ELF_HEIGHT_STATUS()
+    Dim help(5) As String
+    help(0) = "Structural height, in ft (us) or m (si) [a length unit], above 0."
+    help(1) = "Row of Table 12.2-1, after the letter of its group: 92 texts from 'A. Special reinforced concrete shear walls' to 'H. Steel systems not specifically detailed for seismic resistance, excluding cantilever column systems'."
+    help(2) = "Seismic Design Category: A, B, C, D, E, F."
+    help(3) = "Whether 12.2.5.4 is used: no extreme torsion, at most 60 % of the force in one plane: yes, no."
+    help(4) = "Edition of ASCE/SEI 7, as text (in a cell: format the cell as Text, or it turns into a date): 7-16, 7-22."
+    help(5) = "Unit system: us (kip, ft, in) or si (kN, m, mm): us, si."
+    Describe "ELF_HEIGHT_STATUS", _
+        "Whether the structural height keeps the limit of the system. ASCE/SEI 7-16: 12.2.1, Table 12.2-1; 7-22: 12.2.1, Table 12.2-1. Partly from memory: confirm.", _
+        "Storyledger: Systems", help
+End Sub
+
+Private Sub Help_ELF_OMEGA()
+    Dim help(1) As String
+    help(0) = "Overstrength factor as tabulated [no unit], at least 1."
+    help(1) = "Whether the reduction is taken: as tabulated, flexible diaphragms."
+    Describe "ELF_OMEGA", _
+        "Overstrength factor, less 0.5 where diaphragms are flexible and it is at least 2.5. ASCE/SEI 7-16: 12.2.1, Table 12.2-1; 7-22: 12.2.1, Table 12.2-1. Partly from memory: confirm.", _
+        "Storyledger: Systems", help
+End Sub
+
+Private Sub Help_ELF_LOWER_PART()
+    Dim help(3) As String
+    help(0) = "The coefficient of the upper system [no unit], at least 1."
+    help(1) = "The same coefficient of the lower system [no unit], at least 1."
+    help(2) = "Response modification coefficient of the upper part [no unit], at least 1."
+    help(3) = "Response modification coefficient of the lower part [no unit], at least 1."
+    Describe "ELF_LOWER_PART", _
+        "R, Omega_0 or C_d for the lower part where one system stands on another. ASCE/SEI 7-16: 12.2.3.1; 7-22: 12.2.3.1. Partly from memory: confirm.", _
+        "Storyledger: Systems", help
+End Sub
+
+Private Sub Help_ELF_TRANSFER_FACTOR()
+    Dim help(1) As String
+    help(0) = "Response modification coefficient of the upper part [no unit], at least 1."
+    help(1) = "Response modification coefficient of the lower part [no unit], at least 1."
+    Describe "ELF_TRANSFER_FACTOR", _
+        "Factor on the forces that an upper system hands down to a lower one with a lower R. ASCE/SEI 7-16: 12.2.3.1; 7-22: 12.2.3.1. Partly from memory: confirm.", _
+        "Storyledger: Systems", help
+End Sub
+
+Private Sub Help_ELF_R_LEAST()
+    Dim help(0) As String
+    help(0) = "Response modification coefficients of the systems in one direction [no unit], one cell a system, at least 1."
+    Describe "ELF_R_LEAST", _
+        "R of several systems that act in one direction: the least. ASCE/SEI 7-16: 12.2.3.3; 7-22: 12.2.3.3. Partly from memory: confirm.", _
+        "Storyledger: Systems", help
+End Sub
+
+Private Sub Help_ELF_LEAST_R_VALUE()
+    Dim help(1) As String
+    help(0) = "Omega_0 or C_d of the same systems [no unit], one cell a system, at least 1."
+    help(1) = "Response modification coefficients of the systems in one direction [no unit], one cell a system, at least 1."
+    Describe "ELF_LEAST_R_VALUE", _
+        "Omega_0 or C_d of several systems in one direction: that of the system with the least R. ASCE/SEI 7-16: 12.2.3.3; 7-22: 12.2.3.3. Partly from memory: confirm.", _
+        "Storyledger: Systems", help
+End Sub
+
+Private Sub Help_ELF_SA_MULTI()
+    Dim help(4) As String
+    help(0) = "Period, 0 allowed [s], at least 0."
+    help(1) = "Periods of the spectrum [s], one cell a period, at least 0."
+    help(2) = "Ordinates of the design spectrum [g], one cell a period, above 0."
+    help(3) = "Long-period transition period [s], above 0."
+    help(4) = "Beyond 10 s where T_L is below 10 s: as printed, continuous at 10 s."
+    Describe "ELF_SA_MULTI", _
+        "Design spectral acceleration of the multi-period spectrum at a period. ASCE/SEI 7-22: 11.4.5.1. Partly from memory: confirm.", _
+        "Storyledger: Ground motion", help
+End Sub
+
+Private Sub Help_ELF_SA_METHOD1()
+    Dim help(4) As String
+    help(0) = "Period, 0 allowed [s], at least 0."
+    help(1) = "Periods of the spectrum [s], one cell a period, at least 0."
+    help(2) = "Ordinates of the design spectrum [g], one cell a period, above 0."
+    help(3) = "Long-period transition period [s], above 0."
+    help(4) = "Beyond 10 s where T_L is below 10 s: as printed, continuous at 10 s."
+    Describe "ELF_SA_METHOD1", _
+        "Ordinate of the multi-period spectrum for Method 1: left of the peak, the peak. ASCE/SEI 7-22: 12.8.1.1, Eq. 12.8-2. Partly from memory: confirm.", _
+        "Storyledger: Ground motion", help
+End Sub
+
+Private Sub Help_ELF_SAM()
+    Dim help(0) As String
+    help(0) = "Design spectral acceleration [g], at least 0."
+    Describe "ELF_SAM", _
+        "Ordinate or parameter of the MCE_R spectrum from that of the design spectrum. ASCE/SEI 7-16: 11.4.7; 7-22: 11.4.6. Partly from memory: confirm.", _
+        "Storyledger: Ground motion", help
+End Sub
+
+Private Sub Help_ELF_SA_DESIGN()
+    Dim help(0) As String
+    help(0) = "MCE_R spectral acceleration [g], at least 0."
+    Describe "ELF_SA_DESIGN", _
+        "Ordinate of the design spectrum from that of the MCE_R spectrum. ASCE/SEI 7-16: 21.3; 7-22: 11.4.5.1. Partly from memory: confirm.", _
+        "Storyledger: Ground motion", help
+End Sub
+
+Private Sub Help_ELF_SDS_MULTI()
+    Dim help(1) As String
+    help(0) = "Periods of the spectrum [s], one cell a period, at least 0."
+    help(1) = "Ordinates of the design spectrum [g], one cell a period, above 0."
+    Describe "ELF_SDS_MULTI", _
+        "Design spectral acceleration at short periods, taken from a spectrum. ASCE/SEI 7-16: 21.4; 7-22: 21.4. Partly from memory: confirm.", _
+        "Storyledger: Ground motion", help
+End Sub
+
+Private Sub Help_ELF_SD1_MULTI()
+    Dim help(5) As String
+    help(0) = "Periods of the spectrum [s], one cell a period, at least 0."
+    help(1) = "Ordinates of the design spectrum [g], one cell a period, above 0."
+    help(2) = "Average shear wave velocity of the site [a velocity unit], above 0."
+    help(3) = "Unit system: us (kip, ft, in) or si (kN, m, mm): us, si."
+    help(4) = "Edition of ASCE/SEI 7, as text (in a cell: format the cell as Text, or it turns into a date): 7-16, 7-22."
+    help(5) = "Where T S_a is read: listed periods, every period."
+    Describe "ELF_SD1_MULTI", _
+        "Design spectral acceleration at 1 s, taken from a spectrum. ASCE/SEI 7-16: 21.4; 7-22: 21.4. Partly from memory: confirm.", _
+        "Storyledger: Ground motion", help
+End Sub
+
+Private Sub Help_ELF_SITE_FLOOR()
+    Dim help(1) As String
+    help(0) = "Parameter from the site-specific spectrum [g], above 0."
+    help(1) = "The same parameter by the mapped procedure [g], above 0."
+    Describe "ELF_SITE_FLOOR", _
+        "A parameter from a site-specific spectrum, at least 80 % of the mapped procedure's. ASCE/SEI 7-16: 21.4. Partly from memory: confirm.", _
+        "Storyledger: Ground motion", help
+End Sub
+
+Private Sub Help_ELF_SDC_SDS()
+    Dim help(1) As String
+    help(0) = "Design spectral acceleration at short periods [g], above 0."
+    help(1) = "Risk category: I, II, III, IV."
+    Describe "ELF_SDC_SDS", _
+        "Seismic Design Category by the acceleration at short periods alone. ASCE/SEI 7-16: 11.6, Table 11.6-1; 7-22: 11.6, Table 11.6-1.", _
+        "Storyledger: Seismic design category", help
+End Sub
+
+Private Sub Help_ELF_SDC_SD1()
+    Dim help(1) As String
+    help(0) = "Design spectral acceleration at 1 s [g], above 0."
+    help(1) = "Risk category: I, II, III, IV."
+    Describe "ELF_SDC_SD1", _
+        "Seismic Design Category by the acceleration at 1 s alone. ASCE/SEI 7-16: 11.6, Table 11.6-2; 7-22: 11.6, Table 11.6-2.", _
+        "Storyledger: Seismic design category", help
+End Sub
+
+Private Sub Help_ELF_SDC_ALONE()
+    Dim help(4) As String
+    help(0) = "Mapped MCE_R spectral acceleration at 1 s [g], at least 0."
+    help(1) = "T_a below 0.8 T_S in both directions: yes, no."
+    help(2) = "Period used for drift below T_S in both directions: yes, no."
+    help(3) = "C_s taken as S_DS/(R/I_e): yes, no."
+    help(4) = "Diaphragms rigid, or vertical elements at most 40 ft (12.2 m) apart: yes, no."
+    Describe "ELF_SDC_ALONE", _
+        "Whether the table at short periods may decide alone on the Seismic Design Category. ASCE/SEI 7-16: 11.6; 7-22: 11.6. Partly from memory: confirm.", _
+        "Storyledger: Seismic design category", help
+End Sub
+
+Private Sub Help_ELF_SDC()
+    Dim help(4) As String
+    help(0) = "Design spectral acceleration at short periods [g], above 0."
+    help(1) = "Design spectral acceleration at 1 s [g], above 0."
+    help(2) = "Mapped MCE_R spectral acceleration at 1 s [g], at least 0."
+    help(3) = "Risk category: I, II, III, IV."
+    help(4) = "Whether Table 11.6-1 decides alone; no if left out: yes, no."
+    Describe "ELF_SDC", _
+        "Seismic Design Category. ASCE/SEI 7-16: 11.6; 7-22: 11.6.", _
+        "Storyledger: Seismic design category", help
+End Sub
+
+Private Sub Help_ELF_SDC_REASON()
+    Dim help(4) As String
+    help(0) = "Design spectral acceleration at short periods [g], above 0."
+    help(1) = "Design spectral acceleration at 1 s [g], above 0."
+    help(2) = "Mapped MCE_R spectral acceleration at 1 s [g], at least 0."
+    help(3) = "Risk category: I, II, III, IV."
+    help(4) = "Whether Table 11.6-1 decides alone; no if left out: yes, no."
+    Describe "ELF_SDC_REASON", _
+        "The rule or table that gives the Seismic Design Category. ASCE/SEI 7-16: 11.6; 7-22: 11.6.", _
+        "Storyledger: Seismic design category", help
+End Sub
+
+Private Sub Help_ELF_SDC_A_PERMITTED()
+    Dim help(1) As String
+    help(0) = "Mapped MCE_R spectral acceleration at short periods [g], at least 0."
+    help(1) = "Mapped MCE_R spectral acceleration at 1 s [g], at least 0."
+    Describe "ELF_SDC_A_PERMITTED", _
+        "Whether Seismic Design Category A is permitted by the mapped accelerations alone. ASCE/SEI 7-16: 11.4.2. Partly from memory: confirm.", _
+        "Storyledger: Seismic design category", help
+End Sub
+
+Private Sub Help_ELF_TA()
+    Dim help(2) As String
+    help(0) = "Structural height, in ft (us) or m (si) [a length unit], above 0."
+    help(1) = "Row of the approximate period table: steel moment frame, concrete moment frame, steel eccentrically braced frame, steel buckling-restrained braced frame, all other."
+    help(2) = "Unit system: us (kip, ft, in) or si (kN, m, mm): us, si."
+    Describe "ELF_TA", _
+        "Approximate fundamental period from the height of the structure. ASCE/SEI 7-16: 12.8.2.1, Eq. 12.8-7; 7-22: 12.8.2.1, Eq. 12.8-8.", _
+        "Storyledger: Period", help
+End Sub
+
+Private Sub Help_ELF_TA_STORIES()
+    Dim help(0) As String
+    help(0) = "Number of stories above the base [no unit], at least 1 and at most 12."
+    Describe "ELF_TA_STORIES", _
+        "Approximate period 0.1 N of moment frames: at most 12 stories of 10 ft (3 m) on average. ASCE/SEI 7-16: 12.8.2.1, Eq. 12.8-8; 7-22: 12.8.2.1, Eq. 12.8-9. Partly from memory: confirm.", _
+        "Storyledger: Period", help
+End Sub
+
+Private Sub Help_ELF_CU()
+    Dim help(0) As String
+    help(0) = "Design spectral acceleration at 1 s [g], above 0."
+    Describe "ELF_CU", _
+        "Coefficient for the upper limit on the calculated period. ASCE/SEI 7-16: 12.8.2, Table 12.8-1; 7-22: 12.8.2, Table 12.8-1. Partly from memory: confirm.", _
+        "Storyledger: Period", help
+End Sub
+
+Private Sub Help_ELF_PERIOD()
+    Dim help(2) As String
+    help(0) = "Approximate fundamental period [s], above 0."
+    help(1) = "Coefficient for the upper limit on the period [no unit], at least 1."
+    help(2) = "Period from a structural analysis [s], above 0."
+    Describe "ELF_PERIOD", _
+        "Period used for strength: the computed period, at most C_u T_a. ASCE/SEI 7-16: 12.8.2; 7-22: 12.8.2.", _
+        "Storyledger: Period", help
+End Sub
+
+Private Sub Help_ELF_TA_STORIES_STATUS()
+    Dim help(3) As String
+    help(0) = "Number of stories above the base [no unit], at least 1."
+    help(1) = "Structural height, in ft (us) or m (si) [a length unit], above 0."
+    help(2) = "Whether moment frames of concrete or steel alone resist the force: yes, no."
+    help(3) = "Unit system: us (kip, ft, in) or si (kN, m, mm): us, si."
+    Describe "ELF_TA_STORIES_STATUS", _
+        "Whether the approximate period may be taken as 0.1 N. ASCE/SEI 7-16: 12.8.2.1, Eq. 12.8-8; 7-22: 12.8.2.1, Eq. 12.8-9. Partly from memory: confirm.", _
+        "Storyledger: Period", help
+End Sub
+
+Private Sub Help_ELF_PERIOD_GOVERNS()
+    Dim help(2) As String
+    help(0) = "Approximate fundamental period [s], above 0."
+    help(1) = "Coefficient for the upper limit on the period [no unit], at least 1."
+    help(2) = "Period from a structural analysis [s], above 0."
+    Describe "ELF_PERIOD_GOVERNS", _
+        "Whether the computed period or its upper limit C_u T_a is used for strength. ASCE/SEI 7-16: 12.8.2; 7-22: 12.8.2.", _
+        "Storyledger: Period", help
+End Sub
+
+Private Sub Help_ELF_PERIOD_DRIFT()
+    Dim help(3) As String
+    help(0) = "Approximate fundamental period [s], above 0."
+    help(1) = "Coefficient for the upper limit on the period [no unit], at least 1."
+    help(2) = "Period from a structural analysis [s], above 0."
+    help(3) = "Whether the relief for drift is used: without the cap, with the cap."
+    Describe "ELF_PERIOD_DRIFT", _
+        "Period for drift alone: the computed one, with or without its upper limit C_u T_a. ASCE/SEI 7-16: 12.8.6.2; 7-22: 12.8.6.2. Partly from memory: confirm.", _
+        "Storyledger: Period", help
+End Sub
+
+Private Sub Help_ELF_CW()
+    Dim help(3) As String
+    help(0) = "Area of the base [an area unit], above 0."
+    help(1) = "Structural height [a length unit], above 0."
+    help(2) = "Web areas of the shear walls in the direction [an area unit], one cell a wall, above 0."
+    help(3) = "Lengths of the same walls [a length unit], one cell a wall, above 0."
+    Describe "ELF_CW", _
+        "Effective ratio of shear wall area to base area, in per cent, for the approximate period. ASCE/SEI 7-16: 12.8.2.1, Eq. 12.8-10; 7-22: 12.8.2.1, Eq. 12.8-11. Partly from memory: confirm.", _
+        "Storyledger: Period", help
+End Sub
+
+Private Sub Help_ELF_TA_WALLS()
+    Dim help(2) As String
+    help(0) = "Structural height, in ft (us) or m (si, at most 36.6) [a length unit], above 0 and at most 120."
+    help(1) = "Effective wall area ratio in per cent [no unit], above 0."
+    help(2) = "Unit system: us (kip, ft, in) or si (kN, m, mm): us, si."
+    Describe "ELF_TA_WALLS", _
+        "Approximate period of structures with masonry or concrete shear walls, to 120 ft (36.6 m). ASCE/SEI 7-16: 12.8.2.1, Eq. 12.8-9; 7-22: 12.8.2.1, Eq. 12.8-10. Partly from memory: confirm.", _
+        "Storyledger: Period", help
+End Sub
+
+Private Sub Help_ELF_RAYLEIGH()
+    Dim help(3) As String
+    help(0) = "Effective seismic weights of all levels [a force unit], one cell a level, at least 0."
+    help(1) = "Lateral forces on all levels [a force unit], one cell a level, at least 0."
+    help(2) = "Elastic displacements under these forces, in in (us) or mm (si) [a displacement unit], one cell a level, at least 0."
+    help(3) = "Unit system: us (kip, ft, in) or si (kN, m, mm): us, si."
+    Describe "ELF_RAYLEIGH", _
+        "Computed period from the displacements of all levels under lateral forces. ASCE/SEI 7-16: 12.8.2; 7-22: 12.8.2.", _
+        "Storyledger: Period", help
+End Sub
+
+Private Sub Help_ELF_CS_PLATEAU()
+    Dim help(2) As String
+    help(0) = "Design spectral acceleration at short periods [g], above 0."
+    help(1) = "Response modification coefficient [no unit], at least 1."
+    help(2) = "Importance factor [no unit], at least 1."
+    Describe "ELF_CS_PLATEAU", _
+        "Seismic response coefficient on the plateau of the spectrum. ASCE/SEI 7-16: 12.8.1.1, Eq. 12.8-2; 7-22: 12.8.1.1, Eq. 12.8-3. Partly from memory: confirm.", _
+        "Storyledger: Base shear", help
+End Sub
+
+Private Sub Help_ELF_CS_CAP()
+    Dim help(4) As String
+    help(0) = "Design spectral acceleration at 1 s [g], above 0."
+    help(1) = "Fundamental period [s], above 0."
+    help(2) = "Long-period transition period [s], above 0."
+    help(3) = "Response modification coefficient [no unit], at least 1."
+    help(4) = "Importance factor [no unit], at least 1."
+    Describe "ELF_CS_CAP", _
+        "Upper bound of the seismic response coefficient from the period, on either side of T_L. ASCE/SEI 7-16: 12.8.1.1, Eq. 12.8-3, 12.8-4; 7-22: 12.8.1.1, Eq. 12.8-4, 12.8-5. Partly from memory: confirm.", _
+        "Storyledger: Base shear", help
+End Sub
+
+Private Sub Help_ELF_CS_MIN()
+    Dim help(1) As String
+    help(0) = "Design spectral acceleration at short periods [g], above 0."
+    help(1) = "Importance factor [no unit], at least 1."
+    Describe "ELF_CS_MIN", _
+        "Lower bound of the seismic response coefficient, at least 0.01. ASCE/SEI 7-16: 12.8.1.1, Eq. 12.8-5; 7-22: 12.8.1.1, Eq. 12.8-6. Partly from memory: confirm.", _
+        "Storyledger: Base shear", help
+End Sub
+
+Private Sub Help_ELF_CS_MIN_S1()
+    Dim help(2) As String
+    help(0) = "Mapped MCE_R spectral acceleration at 1 s [g], at least 0."
+    help(1) = "Response modification coefficient [no unit], at least 1."
+    help(2) = "Importance factor [no unit], at least 1."
+    Describe "ELF_CS_MIN_S1", _
+        "Lower bound of the seismic response coefficient where S_1 is at least 0.6 g; 0 elsewhere. ASCE/SEI 7-16: 12.8.1.1, Eq. 12.8-6; 7-22: 12.8.1.1, Eq. 12.8-7. Partly from memory: confirm.", _
+        "Storyledger: Base shear", help
+End Sub
+
+Private Sub Help_ELF_CS()
+    Dim help(7) As String
+    help(0) = "Design spectral acceleration at short periods [g], above 0."
+    help(1) = "Design spectral acceleration at 1 s [g], above 0."
+    help(2) = "Mapped MCE_R spectral acceleration at 1 s [g], at least 0."
+    help(3) = "Fundamental period [s], above 0."
+    help(4) = "Long-period transition period [s], above 0."
+    help(5) = "Response modification coefficient [no unit], at least 1."
+    help(6) = "Importance factor [no unit], at least 1."
+    help(7) = "Edition of ASCE/SEI 7, as text (in a cell: format the cell as Text, or it turns into a date): 7-16, 7-22."
+    Describe "ELF_CS", _
+        "Governing seismic response coefficient of the two-period spectrum. ASCE/SEI 7-16: 12.8.1.1; 7-22: 12.8.1.1. Partly from memory: confirm.", _
+        "Storyledger: Base shear", help
+End Sub
+
+Private Sub Help_ELF_CS_GOVERNS()
+    Dim help(7) As String
+    help(0) = "Design spectral acceleration at short periods [g], above 0."
+    help(1) = "Design spectral acceleration at 1 s [g], above 0."
+    help(2) = "Mapped MCE_R spectral acceleration at 1 s [g], at least 0."
+    help(3) = "Fundamental period [s], above 0."
+    help(4) = "Long-period transition period [s], above 0."
+    help(5) = "Response modification coefficient [no unit], at least 1."
+    help(6) = "Importance factor [no unit], at least 1."
+    help(7) = "Edition of ASCE/SEI 7, as text (in a cell: format the cell as Text, or it turns into a date): 7-16, 7-22."
+    Describe "ELF_CS_GOVERNS", _
+        "The bound that governs the seismic response coefficient, with its equation number. ASCE/SEI 7-16: 12.8.1.1; 7-22: 12.8.1.1. Partly from memory: confirm.", _
+        "Storyledger: Base shear", help
+End Sub
+
+Private Sub Help_ELF_V()
+    Dim help(1) As String
+    help(0) = "Seismic response coefficient [no unit], above 0."
+    help(1) = "Effective seismic weight of the building [a force unit], above 0."
+    Describe "ELF_V", _
+        "Seismic base shear. ASCE/SEI 7-16: 12.8.1, Eq. 12.8-1; 7-22: 12.8.1, Eq. 12.8-1.", _
+        "Storyledger: Base shear", help
+End Sub
+
+Private Sub Help_ELF_CS_MULTI_BOUND()
+    Dim help(2) As String
+    help(0) = "Multi-period spectrum at T, no less than its peak left of the peak [g], above 0."
+    help(1) = "Response modification coefficient [no unit], at least 1."
+    help(2) = "Importance factor [no unit], at least 1."
+    Describe "ELF_CS_MULTI_BOUND", _
+        "Seismic response coefficient of the multi-period spectrum, before the minimums. ASCE/SEI 7-22: 12.8.1.1, Eq. 12.8-2. Partly from memory: confirm.", _
+        "Storyledger: Base shear", help
+End Sub
+
+Private Sub Help_ELF_CS_MULTI()
+    Dim help(5) As String
+    help(0) = "Multi-period spectrum at T, no less than its peak left of the peak [g], above 0."
+    help(1) = "Design spectral acceleration at short periods [g], above 0."
+    help(2) = "Mapped MCE_R spectral acceleration at 1 s [g], at least 0."
+    help(3) = "Response modification coefficient [no unit], at least 1."
+    help(4) = "Importance factor [no unit], at least 1."
+    help(5) = "Edition of ASCE/SEI 7 that has the method, as text: 7-22."
+    Describe "ELF_CS_MULTI", _
+        "Governing seismic response coefficient of the multi-period spectrum. ASCE/SEI 7-22: 12.8.1.1, Eq. 12.8-2. Partly from memory: confirm.", _
+        "Storyledger: Base shear", help
+End Sub
+
+Private Sub Help_ELF_CS_MULTI_GOVERNS()
+    Dim help(5) As String
+    help(0) = "Multi-period spectrum at T, no less than its peak left of the peak [g], above 0."
+    help(1) = "Design spectral acceleration at short periods [g], above 0."
+    help(2) = "Mapped MCE_R spectral acceleration at 1 s [g], at least 0."
+    help(3) = "Response modification coefficient [no unit], at least 1."
+    help(4) = "Importance factor [no unit], at least 1."
+    help(5) = "Edition of ASCE/SEI 7 that has the method, as text: 7-22."
+    Describe "ELF_CS_MULTI_GOVERNS", _
+        "The bound that governs C_s of the multi-period spectrum, with its equation number. ASCE/SEI 7-22: 12.8.1.1, Eq. 12.8-2. Partly from memory: confirm.", _
+        "Storyledger: Base shear", help
+End Sub
+
+Private Sub Help_ELF_CS_DRIFT()
+    Dim help(7) As String
+    help(0) = "Design spectral acceleration at short periods [g], above 0."
+    help(1) = "Design spectral acceleration at 1 s [g], above 0."
+    help(2) = "Mapped MCE_R spectral acceleration at 1 s [g], at least 0."
+    help(3) = "Fundamental period [s], above 0."
+    help(4) = "Long-period transition period [s], above 0."
+    help(5) = "Response modification coefficient [no unit], at least 1."
+    help(6) = "Importance factor [no unit], at least 1."
+    help(7) = "Edition of ASCE/SEI 7, as text (in a cell: format the cell as Text, or it turns into a date): 7-16, 7-22."
+    Describe "ELF_CS_DRIFT", _
+        "C_s for drift alone, two-period spectrum: without the minimum 0.044 S_DS I_e. ASCE/SEI 7-16: 12.8.6.1; 7-22: 12.8.6.1. Partly from memory: confirm.", _
+        "Storyledger: Base shear", help
+End Sub
+
+Private Sub Help_ELF_CS_DRIFT_GOVERNS()
+    Dim help(7) As String
+    help(0) = "Design spectral acceleration at short periods [g], above 0."
+    help(1) = "Design spectral acceleration at 1 s [g], above 0."
+    help(2) = "Mapped MCE_R spectral acceleration at 1 s [g], at least 0."
+    help(3) = "Fundamental period [s], above 0."
+    help(4) = "Long-period transition period [s], above 0."
+    help(5) = "Response modification coefficient [no unit], at least 1."
+    help(6) = "Importance factor [no unit], at least 1."
+    help(7) = "Edition of ASCE/SEI 7, as text (in a cell: format the cell as Text, or it turns into a date): 7-16, 7-22."
+    Describe "ELF_CS_DRIFT_GOVERNS", _
+        "The bound that governs C_s for drift alone, two-period spectrum. ASCE/SEI 7-16: 12.8.6.1; 7-22: 12.8.6.1. Partly from memory: confirm.", _
+        "Storyledger: Base shear", help
+End Sub
+
+Private Sub Help_ELF_CS_DRIFT_MULTI()
+    Dim help(4) As String
+    help(0) = "Multi-period spectrum at T, no less than its peak left of the peak [g], above 0."
+    help(1) = "Mapped MCE_R spectral acceleration at 1 s [g], at least 0."
+    help(2) = "Response modification coefficient [no unit], at least 1."
+    help(3) = "Importance factor [no unit], at least 1."
+    help(4) = "Edition of ASCE/SEI 7 that has the method, as text: 7-22."
+    Describe "ELF_CS_DRIFT_MULTI", _
+        "C_s for drift alone, multi-period spectrum: without the minimum 0.044 S_DS I_e. ASCE/SEI 7-22: 12.8.1.1, Eq. 12.8-2. Partly from memory: confirm.", _
+        "Storyledger: Base shear", help
+End Sub
+
+Private Sub Help_ELF_CS_DRIFT_MULTI_GOVERNS()
+    Dim help(4) As String
+    help(0) = "Multi-period spectrum at T, no less than its peak left of the peak [g], above 0."
+    help(1) = "Mapped MCE_R spectral acceleration at 1 s [g], at least 0."
+    help(2) = "Response modification coefficient [no unit], at least 1."
+    help(3) = "Importance factor [no unit], at least 1."
+    help(4) = "Edition of ASCE/SEI 7 that has the method, as text: 7-22."
+    Describe "ELF_CS_DRIFT_MULTI_GOVERNS", _
+        "The bound that governs C_s for drift alone, multi-period spectrum. ASCE/SEI 7-22: 12.8.1.1, Eq. 12.8-2. Partly from memory: confirm.", _
+        "Storyledger: Base shear", help
+End Sub
+
+Private Sub Help_ELF_SDS_CAP()
+    Dim help(6) As String
+    help(0) = "Design spectral acceleration at short periods [g], above 0."
+    help(1) = "Stories above the lower of base and grade plane, with mezzanines [no unit], at least 1."
+    help(2) = "Fundamental period [s], above 0."
+    help(3) = "Whether the structure is free of the irregularities of 12.3.2: yes, no."
+    help(4) = "Whether it qualifies for rho = 1.0: yes, no."
+    help(5) = "Whether the site class is E or F (DE in 7-22: uncertain): yes, no."
+    help(6) = "Risk category: I, II, III, IV."
+    Describe "ELF_SDS_CAP", _
+        "S_DS for C_s and E_v: max(1.0, 0.7 S_DS) for a short regular building, where that is less. ASCE/SEI 7-16: 12.8.1.3; 7-22: 12.8.1.3. Partly from memory: confirm.", _
+        "Storyledger: Base shear", help
+End Sub
+
+Private Sub Help_ELF_SDS_CAP_STATUS()
+    Dim help(5) As String
+    help(0) = "Stories above the lower of base and grade plane, with mezzanines [no unit], at least 1."
+    help(1) = "Fundamental period [s], above 0."
+    help(2) = "Whether the structure is free of the irregularities of 12.3.2: yes, no."
+    help(3) = "Whether it qualifies for rho = 1.0: yes, no."
+    help(4) = "Whether the site class is E or F (DE in 7-22: uncertain): yes, no."
+    help(5) = "Risk category: I, II, III, IV."
+    Describe "ELF_SDS_CAP_STATUS", _
+        "Whether S_DS may be capped for a short regular building, and what fails. ASCE/SEI 7-16: 12.8.1.3; 7-22: 12.8.1.3. Partly from memory: confirm.", _
+        "Storyledger: Base shear", help
+End Sub
+
+Private Sub Help_ELF_SSI_MIN()
+    Dim help(1) As String
+    help(0) = "Base shear without interaction [a force unit], above 0."
+    help(1) = "Response modification coefficient [no unit], at least 1."
+    Describe "ELF_SSI_MIN", _
+        "Least base shear when it is reduced for soil-structure interaction. ASCE/SEI 7-16: 19.2; 7-22: 19.2. Partly from memory: confirm.", _
+        "Storyledger: Base shear", help
+End Sub
+
+Private Sub Help_ELF_EXPONENT()
+    Dim help(1) As String
+    help(0) = "Fundamental period [s], above 0."
+    help(1) = "Between 0.5 s and 2.5 s: interpolate, or the permitted two: interpolate, two."
+    Describe "ELF_EXPONENT", _
+        "Exponent k of the vertical distribution. ASCE/SEI 7-16: 12.8.3; 7-22: 12.8.3. Partly from memory: confirm.", _
+        "Storyledger: Vertical distribution", help
+End Sub
+
+Private Sub Help_ELF_CVX()
+    Dim help(4) As String
+    help(0) = "Effective seismic weight of level x [a force unit], at least 0."
+    help(1) = "Height of level x above the base [a length unit], above 0."
+    help(2) = "Effective seismic weights of all levels [a force unit], one cell a level, at least 0."
+    help(3) = "Heights of all levels above the base [a length unit], one cell a level, above 0."
+    help(4) = "Distribution exponent [no unit], at least 1 and at most 2."
+    Describe "ELF_CVX", _
+        "Vertical distribution factor of a level. ASCE/SEI 7-16: 12.8.3, Eq. 12.8-12; 7-22: 12.8.3, Eq. 12.8-13. Partly from memory: confirm.", _
+        "Storyledger: Vertical distribution", help
+End Sub
+
+Private Sub Help_ELF_FX()
+    Dim help(1) As String
+    help(0) = "Base shear [a force unit], above 0."
+    help(1) = "Vertical distribution factor [no unit], at least 0 and at most 1."
+    Describe "ELF_FX", _
+        "Lateral seismic force of a level. ASCE/SEI 7-16: 12.8.3, Eq. 12.8-11; 7-22: 12.8.3, Eq. 12.8-12. Partly from memory: confirm.", _
+        "Storyledger: Vertical distribution", help
+End Sub
+
+Private Sub Help_ELF_VX()
+    Dim help(2) As String
+    help(0) = "Height of level x above the base, or 0 for the base [a length unit], at least 0."
+    help(1) = "Story forces of all levels [a force unit], one cell a level, any number."
+    help(2) = "Heights of all levels above the base [a length unit], one cell a level, above 0."
+    Describe "ELF_VX", _
+        "Story shear below a level: the forces at and above it; at height 0 the base shear. ASCE/SEI 7-16: 12.8.4, Eq. 12.8-13; 7-22: 12.8.4, Eq. 12.8-14. Partly from memory: confirm.", _
+        "Storyledger: Vertical distribution", help
+End Sub
+
+Private Sub Help_ELF_MX()
+    Dim help(2) As String
+    help(0) = "Height of level x above the base, or 0 for the base [a length unit], at least 0."
+    help(1) = "Story forces of all levels [a force unit], one cell a level, any number."
+    help(2) = "Heights of all levels above the base [a length unit], one cell a level, above 0."
+    Describe "ELF_MX", _
+        "Overturning moment at a level, or at the base at height 0. ASCE/SEI 7-16: 12.8.5; 7-22: 12.8.5. Partly from memory: confirm.", _
+        "Storyledger: Vertical distribution", help
+End Sub
+
+Private Sub Help_ELF_HX()
+    Dim help(1) As String
+    help(0) = "Elevation of level x [a length unit], any number."
+    help(1) = "Elevation of the base [a length unit], any number."
+    Describe "ELF_HX", _
+        "Height of a level above the base, from elevations; a level must lie above the base. ASCE/SEI 7-16: 12.8.3; 7-22: 12.8.3. Partly from memory: confirm.", _
+        "Storyledger: Vertical distribution", help
+End Sub
+
+Private Sub Help_ELF_HSX()
+    Dim help(1) As String
+    help(0) = "Height of level x above the base [a length unit], above 0."
+    help(1) = "Heights of all levels above the base [a length unit], one cell a level, above 0."
+    Describe "ELF_HSX", _
+        "Story height below a level: down to the next lower level, or to the base. ASCE/SEI 7-16: 11.3; 7-22: 11.3. Partly from memory: confirm.", _
+        "Storyledger: Vertical distribution", help
+End Sub
+
+Private Sub Help_ELF_BELOW()
+    Dim help(2) As String
+    help(0) = "Height of level x above the base [a length unit], above 0."
+    help(1) = "Values at all levels [a displacement unit], one cell a level, any number."
+    help(2) = "Heights of all levels above the base [a length unit], one cell a level, above 0."
+    Describe "ELF_BELOW", _
+        "The value at the next lower level (a displacement, say), 0 at the base. ASCE/SEI 7-16: 11.3; 7-22: 11.3. Partly from memory: confirm.", _
+        "Storyledger: Vertical distribution", help
+End Sub
+
+Private Sub Help_ELF_ECC()
+    Dim help(1) As String
+    help(0) = "Place of the centre of mass [a length unit], any number."
+    help(1) = "Place of the centre of rigidity on the same axis [a length unit], any number."
+    Describe "ELF_ECC", _
+        "Eccentricity between the centre of mass and the centre of rigidity, signed. ASCE/SEI 7-16: 12.8.4.1; 7-22: 12.8.4.1.", _
+        "Storyledger: Torsion", help
+End Sub
+
+Private Sub Help_ELF_ECC_ACC()
+    Dim help(0) As String
+    help(0) = "Plan dimension perpendicular to the force [a length unit], above 0."
+    Describe "ELF_ECC_ACC", _
+        "Accidental offset of the centre of mass, to either side. ASCE/SEI 7-16: 12.8.4.2; 7-22: 12.8.4.2.", _
+        "Storyledger: Torsion", help
+End Sub
+
+Private Sub Help_ELF_MT()
+    Dim help(4) As String
+    help(0) = "Height of level x above the base [a length unit], above 0."
+    help(1) = "Place of the centre of rigidity of the story [a length unit], any number."
+    help(2) = "Story forces of all levels [a force unit], one cell a level, any number."
+    help(3) = "Places of the centres of mass of all levels, or eccentricities with x_R = 0 [a length unit], one cell a level, any number."
+    help(4) = "Heights of all levels above the base [a length unit], one cell a level, above 0."
+    Describe "ELF_MT", _
+        "Inherent torsion of the story below a level, about the story's centre of rigidity. ASCE/SEI 7-16: 12.8.4.1; 7-22: 12.8.4.1.", _
+        "Storyledger: Torsion", help
+End Sub
+
+Private Sub Help_ELF_MTA()
+    Dim help(4) As String
+    help(0) = "Height of level x above the base [a length unit], above 0."
+    help(1) = "Story forces of all levels [a force unit], one cell a level, any number."
+    help(2) = "Plan dimensions of all levels perpendicular to the force [a length unit], one cell a level, above 0."
+    help(3) = "Factors A_x of all levels, 1 where none applies [no unit], one cell a level, at least 1 and at most 3."
+    help(4) = "Heights of all levels above the base [a length unit], one cell a level, above 0."
+    Describe "ELF_MTA", _
+        "Accidental torsion of the story below a level, to be taken with either sign. ASCE/SEI 7-16: 12.8.4.2; 7-22: 12.8.4.2.", _
+        "Storyledger: Torsion", help
+End Sub
+
+Private Sub Help_ELF_MTA_SCOPE()
+    Dim help(2) As String
+    help(0) = "Torsional irregularity ratio [no unit], at least 1."
+    help(1) = "Seismic Design Category: A, B, C, D, E, F."
+    help(2) = "Edition of ASCE/SEI 7, as text (in a cell: format the cell as Text, or it turns into a date): 7-16, 7-22."
+    Describe "ELF_MTA_SCOPE", _
+        "Where accidental torsion counts: in the test of irregularity alone, or in forces too. ASCE/SEI 7-16: 12.8.4.2; 7-22: 12.8.4.2. Partly from memory: confirm.", _
+        "Storyledger: Torsion", help
+End Sub
+
+Private Sub Help_ELF_TIR()
+    Dim help(1) As String
+    help(0) = "Story drift at one edge, found with A_x = 1 [a displacement unit], any number."
+    help(1) = "Story drift at the opposite edge, same sign convention [a displacement unit], any number."
+    Describe "ELF_TIR", _
+        "Torsional irregularity ratio of a story from the drifts at two opposite edges. ASCE/SEI 7-16: 12.3.2.1, Table 12.3-1; 7-22: 12.3.2.1, Table 12.3-1. Partly from memory: confirm.", _
+        "Storyledger: Torsion", help
+End Sub
+
+Private Sub Help_ELF_AX()
+    Dim help(1) As String
+    help(0) = "Largest displacement at level x, found with A_x = 1 [a displacement unit], above 0."
+    help(1) = "Average of the extreme points at level x [a displacement unit], above 0."
+    Describe "ELF_AX", _
+        "Torsional amplification factor of a level, between 1 and 3. ASCE/SEI 7-16: 12.8.4.3, Eq. 12.8-14; 7-22: 12.8.4.3, Eq. 12.8-15. Partly from memory: confirm.", _
+        "Storyledger: Torsion", help
+End Sub
+
+Private Sub Help_ELF_AX_APPLIED()
+    Dim help(3) As String
+    help(0) = "Largest displacement at level x, found with A_x = 1 [a displacement unit], above 0."
+    help(1) = "Average of the extreme points at level x [a displacement unit], above 0."
+    help(2) = "Torsional irregularity ratio [no unit], at least 1."
+    help(3) = "Seismic Design Category: A, B, C, D, E, F."
+    Describe "ELF_AX_APPLIED", _
+        "Torsional amplification factor where it applies, else 1. ASCE/SEI 7-16: 12.8.4.3, Eq. 12.8-14; 7-22: 12.8.4.3, Eq. 12.8-15. Partly from memory: confirm.", _
+        "Storyledger: Torsion", help
+End Sub
+
+Private Sub Help_ELF_RIGIDITY_CENTER()
+    Dim help(1) As String
+    help(0) = "Relative rigidities of the walls [no unit], one cell a wall, above 0."
+    help(1) = "Places of the walls across the direction [a length unit], one cell a wall, any number."
+    Describe "ELF_RIGIDITY_CENTER", _
+        "Centre of rigidity of the walls that resist one direction. ASCE/SEI 7-16: 12.8.4; 7-22: 12.8.4.", _
+        "Storyledger: Torsion", help
+End Sub
+
+Private Sub Help_ELF_RIGIDITY_POLAR()
+    Dim help(1) As String
+    help(0) = "Relative rigidities of the walls [no unit], one cell a wall, above 0."
+    help(1) = "Distances of the walls from the centre of rigidity [a length unit], one cell a wall, any number."
+    Describe "ELF_RIGIDITY_POLAR", _
+        "Polar rigidity of the walls of both directions about the centre of rigidity. ASCE/SEI 7-16: 12.8.4; 7-22: 12.8.4.", _
+        "Storyledger: Torsion", help
+End Sub
+
+Private Sub Help_ELF_WALL_DIRECT()
+    Dim help(2) As String
+    help(0) = "Story shear of the direction [a force unit], at least 0."
+    help(1) = "Relative rigidity of the wall [no unit], above 0."
+    help(2) = "Relative rigidities of the walls [no unit], one cell a wall, above 0."
+    Describe "ELF_WALL_DIRECT", _
+        "Share of a wall in the story shear, without torsion. ASCE/SEI 7-16: 12.8.4; 7-22: 12.8.4.", _
+        "Storyledger: Torsion", help
+End Sub
+
+Private Sub Help_ELF_WALL_TORSION()
+    Dim help(3) As String
+    help(0) = "Torsion of the story [a moment unit], any number."
+    help(1) = "Relative rigidity of the wall [no unit], above 0."
+    help(2) = "Distance of the wall from the centre of rigidity [a length unit], any number."
+    help(3) = "Polar rigidity of all walls [no unit], above 0."
+    Describe "ELF_WALL_TORSION", _
+        "Shear of a wall from torsion about the centre of rigidity, signed. ASCE/SEI 7-16: 12.8.4; 7-22: 12.8.4.", _
+        "Storyledger: Torsion", help
+End Sub
+
+Private Sub Help_ELF_SOFT_RATIO()
+    Dim help(2) As String
+    help(0) = "Height of the level on top of the story, above the base [a length unit], above 0."
+    help(1) = "Lateral stiffnesses of all stories [a stiffness unit], one cell a level, above 0."
+    help(2) = "Heights of all levels above the base [a length unit], one cell a level, above 0."
+    Describe "ELF_SOFT_RATIO", _
+        "Stiffness of a story over that of the story above; 1 at the top. ASCE/SEI 7-16: 12.3.2.2, Table 12.3-2; 7-22: 12.3.2.2, Table 12.3-2. Partly from memory: confirm.", _
+        "Storyledger: Irregularity", help
+End Sub
+
+Private Sub Help_ELF_SOFT_RATIO_THREE()
+    Dim help(2) As String
+    help(0) = "Height of the level on top of the story, above the base [a length unit], above 0."
+    help(1) = "Lateral stiffnesses of all stories [a stiffness unit], one cell a level, above 0."
+    help(2) = "Heights of all levels above the base [a length unit], one cell a level, above 0."
+    Describe "ELF_SOFT_RATIO_THREE", _
+        "Stiffness of a story over the mean of three stories above; 1 where fewer stand above. ASCE/SEI 7-16: 12.3.2.2, Table 12.3-2; 7-22: 12.3.2.2, Table 12.3-2. Partly from memory: confirm.", _
+        "Storyledger: Irregularity", help
+End Sub
+
+Private Sub Help_ELF_WEAK_RATIO()
+    Dim help(2) As String
+    help(0) = "Height of the level on top of the story, above the base [a length unit], above 0."
+    help(1) = "Lateral strengths of all stories [a force unit], one cell a level, above 0."
+    help(2) = "Heights of all levels above the base [a length unit], one cell a level, above 0."
+    Describe "ELF_WEAK_RATIO", _
+        "Strength of a story over that of the story above; 1 at the top. ASCE/SEI 7-16: 12.3.2.2, Table 12.3-2; 7-22: 12.3.2.2, Table 12.3-2. Partly from memory: confirm.", _
+        "Storyledger: Irregularity", help
+End Sub
+
+Private Sub Help_ELF_WEIGHT_RATIO()
+    Dim help(2) As String
+    help(0) = "Height of level x above the base [a length unit], above 0."
+    help(1) = "Effective seismic weights of all levels [a force unit], one cell a level, at least 0."
+    help(2) = "Heights of all levels above the base [a length unit], one cell a level, above 0."
+    Describe "ELF_WEIGHT_RATIO", _
+        "Weight of a level over the lighter one of its neighbours; a lighter roof is left out. ASCE/SEI 7-16: 12.3.2.2, Table 12.3-2.", _
+        "Storyledger: Irregularity", help
+End Sub
+
+Private Sub Help_ELF_GEOMETRY_RATIO()
+    Dim help(2) As String
+    help(0) = "Height of the level on top of the story, above the base [a length unit], above 0."
+    help(1) = "Dimensions of the force-resisting system, by story [a length unit], one cell a level, above 0."
+    help(2) = "Heights of all levels above the base [a length unit], one cell a level, above 0."
+    Describe "ELF_GEOMETRY_RATIO", _
+        "Dimension of the force-resisting system in a story over the smaller one of its neighbours. ASCE/SEI 7-16: 12.3.2.2, Table 12.3-2; 7-22: 12.3.2.2, Table 12.3-2. Partly from memory: confirm.", _
+        "Storyledger: Irregularity", help
+End Sub
+
+Private Sub Help_ELF_DRIFT_RATIO_ABOVE()
+    Dim help(2) As String
+    help(0) = "Height of the level on top of the story, above the base [a length unit], above 0."
+    help(1) = "Story drift ratios, torsion left out [no unit], one cell a level, above 0."
+    help(2) = "Heights of all levels above the base [a length unit], one cell a level, above 0."
+    Describe "ELF_DRIFT_RATIO_ABOVE", _
+        "Story drift ratio over that of the story above; 1 for the top two stories. ASCE/SEI 7-16: 12.3.2.2; 7-22: 12.3.2.2. Partly from memory: confirm.", _
+        "Storyledger: Irregularity", help
+End Sub
+
+Private Sub Help_ELF_DRIFT_EXCEPTION()
+    Dim help(1) As String
+    help(0) = "Story drift ratios, torsion left out [no unit], one cell a level, above 0."
+    help(1) = "Heights of all levels above the base [a length unit], one cell a level, above 0."
+    Describe "ELF_DRIFT_EXCEPTION", _
+        "Whether the exception by story drift ratios holds for the building: yes or no. ASCE/SEI 7-16: 12.3.2.2; 7-22: 12.3.2.2. Partly from memory: confirm.", _
+        "Storyledger: Irregularity", help
+End Sub
+
+Private Sub Help_ELF_REENTRANT_RATIO()
+    Dim help(3) As String
+    help(0) = "Projection beyond the corner along x [a length unit], at least 0."
+    help(1) = "Projection beyond the corner along y [a length unit], at least 0."
+    help(2) = "Plan dimension along x [a length unit], above 0."
+    help(3) = "Plan dimension along y [a length unit], above 0."
+    Describe "ELF_REENTRANT_RATIO", _
+        "Smaller one of both projections beyond a re-entrant corner, in parts of the plan dimension. ASCE/SEI 7-16: 12.3.2.1, Table 12.3-1; 7-22: 12.3.2.1, Table 12.3-1. Partly from memory: confirm.", _
+        "Storyledger: Irregularity", help
+End Sub
+
+Private Sub Help_ELF_TORSION_STATUS()
+    Dim help(3) As String
+    help(0) = "Torsional irregularity ratio [no unit], at least 1."
+    help(1) = "Diaphragm, by 12.3.1: rigid or semirigid, flexible."
+    help(2) = "More than 75 % of a story's strength at or on one side of the centre of mass (7-22 alone): yes, no."
+    help(3) = "Edition of ASCE/SEI 7, as text (in a cell: format the cell as Text, or it turns into a date): 7-16, 7-22."
+    Describe "ELF_TORSION_STATUS", _
+        "Torsional irregularity of a story, with the type of the edition. ASCE/SEI 7-16: 12.3.2.1, Table 12.3-1; 7-22: 12.3.2.1, Table 12.3-1. Partly from memory: confirm.", _
+        "Storyledger: Irregularity", help
+End Sub
+
+Private Sub Help_ELF_REENTRANT_STATUS()
+    Dim help(1) As String
+    help(0) = "Smaller projection in parts of the plan dimension [no unit], at least 0."
+    help(1) = "Edition of ASCE/SEI 7, as text (in a cell: format the cell as Text, or it turns into a date): 7-16, 7-22."
+    Describe "ELF_REENTRANT_STATUS", _
+        "Re-entrant corner irregularity, with its type and limit. ASCE/SEI 7-16: 12.3.2.1, Table 12.3-1; 7-22: 12.3.2.1, Table 12.3-1. Partly from memory: confirm.", _
+        "Storyledger: Irregularity", help
+End Sub
+
+Private Sub Help_ELF_DIAPHRAGM_STATUS()
+    Dim help(2) As String
+    help(0) = "Open area over gross enclosed area of the diaphragm [no unit], at least 0 and at most 1."
+    help(1) = "Change of diaphragm stiffness from story to story, in parts [no unit], at least 0."
+    help(2) = "Edition of ASCE/SEI 7, as text (in a cell: format the cell as Text, or it turns into a date): 7-16, 7-22."
+    Describe "ELF_DIAPHRAGM_STATUS", _
+        "Diaphragm discontinuity by openings or a change of stiffness, with its type. ASCE/SEI 7-16: 12.3.2.1, Table 12.3-1; 7-22: 12.3.2.1, Table 12.3-1.", _
+        "Storyledger: Irregularity", help
+End Sub
+
+Private Sub Help_ELF_SOFT_STATUS()
+    Dim help(5) As String
+    help(0) = "Height of the level on top of the story, above the base [a length unit], above 0."
+    help(1) = "Lateral stiffnesses of all stories [a stiffness unit], one cell a level, above 0."
+    help(2) = "Heights of all levels above the base [a length unit], one cell a level, above 0."
+    help(3) = "No story drift ratio above 1.3 times that of the story above (12.3.2.2): yes, no."
+    help(4) = "Seismic Design Category: A, B, C, D, E, F."
+    help(5) = "Edition of ASCE/SEI 7, as text (in a cell: format the cell as Text, or it turns into a date): 7-16, 7-22."
+    Describe "ELF_SOFT_STATUS", _
+        "Soft story irregularity, with its type and the exception that frees it. ASCE/SEI 7-16: 12.3.2.2, Table 12.3-2; 7-22: 12.3.2.2, Table 12.3-2. Partly from memory: confirm.", _
+        "Storyledger: Irregularity", help
+End Sub
+
+Private Sub Help_ELF_WEIGHT_STATUS()
+    Dim help(5) As String
+    help(0) = "Height of level x above the base [a length unit], above 0."
+    help(1) = "Effective seismic weights of all levels [a force unit], one cell a level, at least 0."
+    help(2) = "Heights of all levels above the base [a length unit], one cell a level, above 0."
+    help(3) = "No story drift ratio above 1.3 times that of the story above (12.3.2.2): yes, no."
+    help(4) = "Seismic Design Category: A, B, C, D, E, F."
+    help(5) = "Edition of ASCE/SEI 7, as text (in a cell: format the cell as Text, or it turns into a date): 7-16, 7-22."
+    Describe "ELF_WEIGHT_STATUS", _
+        "Weight irregularity, with its type and the exception that frees it; no type of 7-22. ASCE/SEI 7-16: 12.3.2.2, Table 12.3-2.", _
+        "Storyledger: Irregularity", help
+End Sub
+
+Private Sub Help_ELF_GEOMETRY_STATUS()
+    Dim help(3) As String
+    help(0) = "Height of the level on top of the story, above the base [a length unit], above 0."
+    help(1) = "Dimensions of the force-resisting system, by story [a length unit], one cell a level, above 0."
+    help(2) = "Heights of all levels above the base [a length unit], one cell a level, above 0."
+    help(3) = "Edition of ASCE/SEI 7, as text (in a cell: format the cell as Text, or it turns into a date): 7-16, 7-22."
+    Describe "ELF_GEOMETRY_STATUS", _
+        "Vertical geometric irregularity, with its type. ASCE/SEI 7-16: 12.3.2.2, Table 12.3-2; 7-22: 12.3.2.2, Table 12.3-2. Partly from memory: confirm.", _
+        "Storyledger: Irregularity", help
+End Sub
+
+Private Sub Help_ELF_WEAK_STATUS()
+    Dim help(3) As String
+    help(0) = "Height of the level on top of the story, above the base [a length unit], above 0."
+    help(1) = "Lateral strengths of all stories [a force unit], one cell a level, above 0."
+    help(2) = "Heights of all levels above the base [a length unit], one cell a level, above 0."
+    help(3) = "Edition of ASCE/SEI 7, as text (in a cell: format the cell as Text, or it turns into a date): 7-16, 7-22."
+    Describe "ELF_WEAK_STATUS", _
+        "Weak story irregularity, with its type. ASCE/SEI 7-16: 12.3.2.2, Table 12.3-2; 7-22: 12.3.2.2, Table 12.3-2. Partly from memory: confirm.", _
+        "Storyledger: Irregularity", help
+End Sub
+
+Private Sub Help_ELF_IRREGULARITY()
+    Dim help(2) As String
+    help(0) = "Irregularity: out-of-plane offset, nonparallel system, in-plane discontinuity."
+    help(1) = "Whether it exists: yes, no."
+    help(2) = "Edition of ASCE/SEI 7, as text (in a cell: format the cell as Text, or it turns into a date): 7-16, 7-22."
+    Describe "ELF_IRREGULARITY", _
+        "An irregularity that is read off the plans, with its type. ASCE/SEI 7-16: 12.3.2; 7-22: 12.3.2.", _
+        "Storyledger: Irregularity", help
+End Sub
+
+Private Sub Help_ELF_CONSEQUENCE()
+    Dim help(2) As String
+    help(0) = "Irregularity: 13 texts from 'torsional' to 'extreme weak story'."
+    help(1) = "Seismic Design Category: A, B, C, D, E, F."
+    help(2) = "Edition of ASCE/SEI 7, as text (in a cell: format the cell as Text, or it turns into a date): 7-16, 7-22."
+    Describe "ELF_CONSEQUENCE", _
+        "What an irregularity entails in a Seismic Design Category, clause by clause. ASCE/SEI 7-16: 12.3.3; 7-22: 12.3.3. Partly from memory: confirm.", _
+        "Storyledger: Irregularity", help
+End Sub
+
+Private Sub Help_ELF_RHO()
+    Dim help(4) As String
+    help(0) = "Seismic Design Category: A, B, C, D, E, F."
+    help(1) = "Condition of 12.3.4.2 that the direction meets: none, a: loss of one element, b: regular plan with two bays a side."
+    help(2) = "Largest torsional irregularity ratio, forces along X [no unit], at least 1."
+    help(3) = "Largest torsional irregularity ratio, forces along Y [no unit], at least 1."
+    help(4) = "Edition of ASCE/SEI 7, as text (in a cell: format the cell as Text, or it turns into a date): 7-16, 7-22."
+    Describe "ELF_RHO", _
+        "Redundancy factor of one direction. ASCE/SEI 7-16: 12.3.4.2; 7-22: 12.3.4.2. Partly from memory: confirm.", _
+        "Storyledger: Redundancy", help
+End Sub
+
+Private Sub Help_ELF_RHO_REASON()
+    Dim help(4) As String
+    help(0) = "Seismic Design Category: A, B, C, D, E, F."
+    help(1) = "Condition of 12.3.4.2 that the direction meets: none, a: loss of one element, b: regular plan with two bays a side."
+    help(2) = "Largest torsional irregularity ratio, forces along X [no unit], at least 1."
+    help(3) = "Largest torsional irregularity ratio, forces along Y [no unit], at least 1."
+    help(4) = "Edition of ASCE/SEI 7, as text (in a cell: format the cell as Text, or it turns into a date): 7-16, 7-22."
+    Describe "ELF_RHO_REASON", _
+        "Why the redundancy factor is what it is. ASCE/SEI 7-16: 12.3.4.2; 7-22: 12.3.4.2. Partly from memory: confirm.", _
+        "Storyledger: Redundancy", help
+End Sub
+
+Private Sub Help_ELF_RHO_USE()
+    Dim help(1) As String
+    help(0) = "What it is used for: strength, transfer forces, drift and P-delta, inertial diaphragm forces, overstrength, nonstructural components, nonbuilding structures, walls out of plane, damped structures."
+    help(1) = "Redundancy factor [no unit], at least 1 and at most 1.3."
+    Describe "ELF_RHO_USE", _
+        "Redundancy factor that counts in a use: rho for strength and transfer forces, else 1.0. ASCE/SEI 7-16: 12.3.4.1; 7-22: 12.3.4.1.", _
+        "Storyledger: Redundancy", help
+End Sub
+
+Private Sub Help_ELF_WALL_BAYS()
+    Dim help(2) As String
+    help(0) = "Length of the shear wall [a length unit], above 0."
+    help(1) = "Story height [a length unit], above 0."
+    help(2) = "Light-frame wall: yes, no."
+    Describe "ELF_WALL_BAYS", _
+        "Bays that a shear wall counts for in condition b of the redundancy factor. ASCE/SEI 7-16: 12.3.4.2; 7-22: 12.3.4.2.", _
+        "Storyledger: Redundancy", help
+End Sub
+
+Private Sub Help_ELF_RHO_STORY()
+    Dim help(1) As String
+    help(0) = "Story shear [a force unit], at least 0."
+    help(1) = "Base shear [a force unit], above 0."
+    Describe "ELF_RHO_STORY", _
+        "Whether a story counts for the conditions of the redundancy factor: yes or no. ASCE/SEI 7-16: 12.3.4.2; 7-22: 12.3.4.2. Partly from memory: confirm.", _
+        "Storyledger: Redundancy", help
+End Sub
+
+Private Sub Help_ELF_EH()
+    Dim help(1) As String
+    help(0) = "Redundancy factor [no unit], at least 1 and at most 1.3."
+    help(1) = "Effect of the horizontal seismic forces, in any unit of an effect [a force unit], any number."
+    Describe "ELF_EH", _
+        "Horizontal seismic load effect. ASCE/SEI 7-16: 12.4.2.1, Eq. 12.4-3; 7-22: 12.4.2.1, Eq. 12.4-3.", _
+        "Storyledger: Load effects", help
+End Sub
+
+Private Sub Help_ELF_EV()
+    Dim help(2) As String
+    help(0) = "Design spectral acceleration at short periods [g], above 0."
+    help(1) = "Effect of dead load, in any unit of an effect [a force unit], any number."
+    help(2) = "How it is taken: counted, zero in Seismic Design Category B, zero at the foundation-soil interface."
+    Describe "ELF_EV", _
+        "Vertical seismic load effect, or zero by one of the two cases of the clause. ASCE/SEI 7-16: 12.4.2.2, Eq. 12.4-4a; 7-22: 12.4.2.2, Eq. 12.4-4a. Partly from memory: confirm.", _
+        "Storyledger: Load effects", help
+End Sub
+
+Private Sub Help_ELF_EV_SPECTRUM()
+    Dim help(1) As String
+    help(0) = "Design vertical spectral acceleration by 11.9 [g], above 0."
+    help(1) = "Effect of dead load, in any unit of an effect [a force unit], any number."
+    Describe "ELF_EV_SPECTRUM", _
+        "Vertical seismic load effect from the vertical response spectrum. ASCE/SEI 7-16: 12.4.2.2, Eq. 12.4-4b; 7-22: 12.4.2.2, Eq. 12.4-4b. Partly from memory: confirm.", _
+        "Storyledger: Load effects", help
+End Sub
+
+Private Sub Help_ELF_EMH()
+    Dim help(1) As String
+    help(0) = "Overstrength factor [no unit], at least 1."
+    help(1) = "Effect of the horizontal seismic forces, in any unit of an effect [a force unit], any number."
+    Describe "ELF_EMH", _
+        "Horizontal seismic load effect with overstrength. ASCE/SEI 7-16: 12.4.3.1, Eq. 12.4-7; 7-22: 12.4.3.1, Eq. 12.4-7. Partly from memory: confirm.", _
+        "Storyledger: Load effects", help
+End Sub
+
+Private Sub Help_ELF_EMH_LIMITED()
+    Dim help(2) As String
+    help(0) = "Overstrength factor [no unit], at least 1."
+    help(1) = "Effect of the horizontal seismic forces, in any unit of an effect [a force unit], any number."
+    help(2) = "Capacity-limited effect, a magnitude in the unit of Q_E [a force unit], at least 0."
+    Describe "ELF_EMH_LIMITED", _
+        "Horizontal seismic load effect with overstrength, at most the capacity-limited effect. ASCE/SEI 7-16: 12.4.3.2; 7-22: 12.4.3.2.", _
+        "Storyledger: Load effects", help
+End Sub
+
+Private Sub Help_ELF_COMBINATION_FACTOR()
+    Dim help(2) As String
+    help(0) = "Load combination: 2.3.6 strength, 2.4.5 allowable stress: 2.3.6-6, 2.3.6-7, 2.4.5-8, 2.4.5-9, 2.4.5-10."
+    help(1) = "Term: D, E_v, E_h, L, S."
+    help(2) = "Edition of ASCE/SEI 7, as text (in a cell: format the cell as Text, or it turns into a date): 7-16, 7-22."
+    Describe "ELF_COMBINATION_FACTOR", _
+        "Factor on one term in a load combination; E_h stands for E_mh as well. ASCE/SEI 7-16: 2.3.6 and 2.4.5; 7-22: 2.3.6 and 2.4.5. Partly from memory: confirm.", _
+        "Storyledger: Load effects", help
+End Sub
+
+Private Sub Help_ELF_COMBINE()
+    Dim help(6) As String
+    help(0) = "Load combination: 2.3.6 strength, 2.4.5 allowable stress: 2.3.6-6, 2.3.6-7, 2.4.5-8, 2.4.5-9, 2.4.5-10."
+    help(1) = "Effect of dead load, in any unit of an effect [a force unit], any number."
+    help(2) = "Vertical seismic effect, in the unit of D [a force unit], any number."
+    help(3) = "Horizontal seismic effect, or E_mh, in the unit of D [a force unit], any number."
+    help(4) = "Effect of live load, in the unit of D [a force unit], any number."
+    help(5) = "Effect of snow load, in the unit of D [a force unit], any number."
+    help(6) = "Edition of ASCE/SEI 7, as text (in a cell: format the cell as Text, or it turns into a date): 7-16, 7-22."
+    Describe "ELF_COMBINE", _
+        "Sum of a load combination; E_h acts both ways, so work it out with either sign. ASCE/SEI 7-16: 2.3.6 and 2.4.5; 7-22: 2.3.6 and 2.4.5. Partly from memory: confirm.", _
+        "Storyledger: Load effects", help
+End Sub
+
+Private Sub Help_ELF_DEAD_FACTOR()
+    Dim help(2) As String
+    help(0) = "Load combination: 2.3.6 strength, 2.4.5 allowable stress: 2.3.6-6, 2.3.6-7, 2.4.5-8, 2.4.5-9, 2.4.5-10."
+    help(1) = "Design spectral acceleration at short periods [g], above 0."
+    help(2) = "Edition of ASCE/SEI 7, as text (in a cell: format the cell as Text, or it turns into a date): 7-16, 7-22."
+    Describe "ELF_DEAD_FACTOR", _
+        "Factor on dead load in a combination, with the vertical seismic effect taken in. ASCE/SEI 7-16: 2.3.6 and 2.4.5; 7-22: 2.3.6 and 2.4.5. Partly from memory: confirm.", _
+        "Storyledger: Load effects", help
+End Sub
+
+Private Sub Help_ELF_DEFLECTION()
+    Dim help(2) As String
+    help(0) = "Elastic displacement under the design forces [a displacement unit], any number."
+    help(1) = "Deflection amplification factor [no unit], at least 1."
+    help(2) = "Importance factor [no unit], at least 1."
+    Describe "ELF_DEFLECTION", _
+        "Amplified deflection of a level from its elastic displacement. ASCE/SEI 7-16: 12.8.6, Eq. 12.8-15; 7-22: 12.8.6, Eq. 12.8-16. Partly from memory: confirm.", _
+        "Storyledger: Drift", help
+End Sub
+
+Private Sub Help_ELF_DRIFT()
+    Dim help(3) As String
+    help(0) = "Elastic displacement at the top of the story [a displacement unit], any number."
+    help(1) = "Elastic displacement at the bottom of the story [a displacement unit], any number."
+    help(2) = "Deflection amplification factor [no unit], at least 1."
+    help(3) = "Importance factor [no unit], at least 1."
+    Describe "ELF_DRIFT", _
+        "Design story drift from the elastic displacements above and below the story. ASCE/SEI 7-16: 12.8.6; 7-22: 12.8.6.", _
+        "Storyledger: Drift", help
+End Sub
+
+Private Sub Help_ELF_DRIFT_LIMIT()
+    Dim help(3) As String
+    help(0) = "Story height below level x, in the unit of the drift [a displacement unit], above 0."
+    help(1) = "Row of the allowable drift table: low-rise with detailed finishes, masonry cantilever wall, masonry wall, all other."
+    help(2) = "Risk category: I, II, III, IV."
+    help(3) = "Redundancy factor, for moment-frame systems in SDC D to F; 1 if left out [no unit], at least 1 and at most 1.3."
+    Describe "ELF_DRIFT_LIMIT", _
+        "Allowable story drift; divided by rho where the clause on moment frames asks for it. ASCE/SEI 7-16: 12.12.1, Table 12.12-1; 12.12.1.1; 7-22: 12.12.1, Table 12.12-1; 12.12.1.1. Partly from memory: confirm.", _
+        "Storyledger: Drift", help
+End Sub
+
+Private Sub Help_ELF_DRIFT_EDGES()
+    Dim help(1) As String
+    help(0) = "Torsional irregularity ratio [no unit], at least 1."
+    help(1) = "Seismic Design Category: A, B, C, D, E, F."
+    Describe "ELF_DRIFT_EDGES", _
+        "Whether the design story drift is taken along the edges: yes or no. ASCE/SEI 7-16: 12.8.6; 7-22: 12.8.6.", _
+        "Storyledger: Drift", help
+End Sub
+
+Private Sub Help_ELF_DRIFT_CHECKED()
+    Dim help(3) As String
+    help(0) = "Design story drift between the centres of mass [a displacement unit], any number."
+    help(1) = "Design story drift along one edge [a displacement unit], any number."
+    help(2) = "Design story drift along the opposite edge [a displacement unit], any number."
+    help(3) = "Along the edges: yes, no."
+    Describe "ELF_DRIFT_CHECKED", _
+        "Design story drift that is compared with the allowable one: along the edges where due. ASCE/SEI 7-16: 12.8.6; 7-22: 12.8.6.", _
+        "Storyledger: Drift", help
+End Sub
+
+Private Sub Help_ELF_THETA()
+    Dim help(5) As String
+    help(0) = "Vertical design load at and above level x [a force unit], at least 0."
+    help(1) = "Design story drift [a displacement unit], at least 0."
+    help(2) = "Importance factor [no unit], at least 1."
+    help(3) = "Story shear [a force unit], above 0."
+    help(4) = "Story height below level x, in the unit of the drift [a displacement unit], above 0."
+    help(5) = "Deflection amplification factor [no unit], at least 1."
+    Describe "ELF_THETA", _
+        "Stability coefficient of a story. ASCE/SEI 7-16: 12.8.7, Eq. 12.8-16; 7-22: 12.8.7, Eq. 12.8-18. Partly from memory: confirm.", _
+        "Storyledger: Stability", help
+End Sub
+
+Private Sub Help_ELF_BETA()
+    Dim help(2) As String
+    help(0) = "Shear demand over shear capacity of the story [no unit], above 0 and at most 1."
+    help(1) = "Overstrength factor [no unit], at least 1."
+    help(2) = "Edition of ASCE/SEI 7, as text (in a cell: format the cell as Text, or it turns into a date): 7-16, 7-22."
+    Describe "ELF_BETA", _
+        "Ratio of shear demand to capacity that the stability limit may use. ASCE/SEI 7-16: 12.8.7; 7-22: 12.8.7. Partly from memory: confirm.", _
+        "Storyledger: Stability", help
+End Sub
+
+Private Sub Help_ELF_THETA_MAX()
+    Dim help(1) As String
+    help(0) = "Deflection amplification factor [no unit], at least 1."
+    help(1) = "Shear demand over shear capacity of the story; 1 if left out [no unit], above 0 and at most 1."
+    Describe "ELF_THETA_MAX", _
+        "Upper limit of the stability coefficient. ASCE/SEI 7-16: 12.8.7, Eq. 12.8-17; 7-22: 12.8.7, Eq. 12.8-19. Partly from memory: confirm.", _
+        "Storyledger: Stability", help
+End Sub
+
+Private Sub Help_ELF_PDELTA_FACTOR()
+    Dim help(0) As String
+    help(0) = "Stability coefficient [no unit], at least 0 and below 1."
+    Describe "ELF_PDELTA_FACTOR", _
+        "Amplification of drifts and forces for P-delta: 1/(1 - theta) above 0.10, else 1. ASCE/SEI 7-16: 12.8.7; 7-22: 12.8.7. Partly from memory: confirm.", _
+        "Storyledger: Stability", help
+End Sub
+
+Private Sub Help_ELF_PDELTA_STATUS()
+    Dim help(1) As String
+    help(0) = "Stability coefficient [no unit], at least 0."
+    help(1) = "Upper limit of the stability coefficient [no unit], above 0."
+    Describe "ELF_PDELTA_STATUS", _
+        "What the stability coefficient asks for, in words; both limits when they collide. ASCE/SEI 7-16: 12.8.7, Eq. 12.8-17; 7-22: 12.8.7, Eq. 12.8-19. Partly from memory: confirm.", _
+        "Storyledger: Stability", help
+End Sub
+
+Private Sub Help_ELF_FPX()
+    Dim help(6) As String
+    help(0) = "Weight tributary to the diaphragm at level x [a force unit], at least 0."
+    help(1) = "Height of level x above the base [a length unit], above 0."
+    help(2) = "Story forces of all levels [a force unit], one cell a level, any number."
+    help(3) = "Effective seismic weights of all levels [a force unit], one cell a level, at least 0."
+    help(4) = "Heights of all levels above the base [a length unit], one cell a level, above 0."
+    help(5) = "Design spectral acceleration at short periods [g], above 0."
+    help(6) = "Importance factor [no unit], at least 1."
+    Describe "ELF_FPX", _
+        "Diaphragm design force of a level, with its lower and upper limits. ASCE/SEI 7-16: 12.10.1.1, Eq. 12.10-1, 12.10-2, 12.10-3; 7-22: 12.10.1.1, Eq. 12.10-1, 12.10-2, 12.10-3.", _
+        "Storyledger: Diaphragm", help
+End Sub
+
+Private Sub Help_ELF_FPX_GOVERNS()
+    Dim help(6) As String
+    help(0) = "Weight tributary to the diaphragm at level x [a force unit], at least 0."
+    help(1) = "Height of level x above the base [a length unit], above 0."
+    help(2) = "Story forces of all levels [a force unit], one cell a level, any number."
+    help(3) = "Effective seismic weights of all levels [a force unit], one cell a level, at least 0."
+    help(4) = "Heights of all levels above the base [a length unit], one cell a level, above 0."
+    help(5) = "Design spectral acceleration at short periods [g], above 0."
+    help(6) = "Importance factor [no unit], at least 1."
+    Describe "ELF_FPX_GOVERNS", _
+        "Which of the three diaphragm force equations governs at a level. ASCE/SEI 7-16: 12.10.1.1, Eq. 12.10-1, 12.10-2, 12.10-3; 7-22: 12.10.1.1, Eq. 12.10-1, 12.10-2, 12.10-3.", _
+        "Storyledger: Diaphragm", help
+End Sub
+
+Private Sub Help_ELF_FLEX_RATIO()
+    Dim help(1) As String
+    help(0) = "Largest in-plane deflection of the diaphragm [a displacement unit], at least 0."
+    help(1) = "Mean drift of adjoining vertical elements [a displacement unit], above 0."
+    Describe "ELF_FLEX_RATIO", _
+        "Deflection of a diaphragm over the drift of the vertical elements beside it. ASCE/SEI 7-16: 12.3.1.3, Eq. 12.3-1; 7-22: 12.3.1.3, Eq. 12.3-1. Partly from memory: confirm.", _
+        "Storyledger: Diaphragm", help
+End Sub
+
+Private Sub Help_ELF_FLEX_STATUS()
+    Dim help(1) As String
+    help(0) = "Largest in-plane deflection of the diaphragm [a displacement unit], at least 0."
+    help(1) = "Mean drift of adjoining vertical elements [a displacement unit], above 0."
+    Describe "ELF_FLEX_STATUS", _
+        "Whether a diaphragm is flexible by calculation. ASCE/SEI 7-16: 12.3.1.3, Eq. 12.3-1; 7-22: 12.3.1.3, Eq. 12.3-1. Partly from memory: confirm.", _
+        "Storyledger: Diaphragm", help
+End Sub
+
+Private Sub Help_ELF_FPX_TRANSFER()
+    Dim help(4) As String
+    help(0) = "Diaphragm design force of the level [a force unit], at least 0."
+    help(1) = "Force transferred between vertical elements [a force unit], at least 0."
+    help(2) = "Redundancy factor [no unit], at least 1 and at most 1.3."
+    help(3) = "Overstrength factor [no unit], at least 1."
+    help(4) = "Transfer by an out-of-plane offset (horizontal Type 4): yes, no."
+    Describe "ELF_FPX_TRANSFER", _
+        "Diaphragm force with the forces transferred through it. ASCE/SEI 7-16: 12.10.1.1; 7-22: 12.10.1.1. Partly from memory: confirm.", _
+        "Storyledger: Diaphragm", help
+End Sub
+
+Private Sub Help_ELF_COLLECTOR()
+    Dim help(4) As String
+    help(0) = "Collector force under the story forces of 12.8 or 12.9 [a force unit], at least 0."
+    help(1) = "Collector force under the forces of Eq. 12.10-1 [a force unit], at least 0."
+    help(2) = "Collector force under the forces of Eq. 12.10-2 [a force unit], at least 0."
+    help(3) = "Overstrength factor [no unit], at least 1."
+    help(4) = "Braced by light-frame shear walls alone: yes, no."
+    Describe "ELF_COLLECTOR", _
+        "Governing force of a collector, Seismic Design Category C to F. ASCE/SEI 7-16: 12.10.2.1; 7-22: 12.10.2.1. Partly from memory: confirm.", _
+        "Storyledger: Diaphragm", help
+End Sub
+
+Private Sub Help_ELF_COLLECTOR_GOVERNS()
+    Dim help(4) As String
+    help(0) = "Collector force under the story forces of 12.8 or 12.9 [a force unit], at least 0."
+    help(1) = "Collector force under the forces of Eq. 12.10-1 [a force unit], at least 0."
+    help(2) = "Collector force under the forces of Eq. 12.10-2 [a force unit], at least 0."
+    help(3) = "Overstrength factor [no unit], at least 1."
+    help(4) = "Braced by light-frame shear walls alone: yes, no."
+    Describe "ELF_COLLECTOR_GOVERNS", _
+        "Which force governs a collector. ASCE/SEI 7-16: 12.10.2.1; 7-22: 12.10.2.1. Partly from memory: confirm.", _
+        "Storyledger: Diaphragm", help
+End Sub
+
+Private Sub Help_ELF_CS_DIAPH()
+    Dim help(4) As String
+    help(0) = "Design spectral acceleration at short periods [g], above 0."
+    help(1) = "Design spectral acceleration at 1 s [g], above 0."
+    help(2) = "Importance factor [no unit], at least 1."
+    help(3) = "Response modification coefficient of the diaphragm: confirm; recalled as 4.5 or 1.5 [no unit], at least 1."
+    help(4) = "Period of the diaphragm: confirm; recalled as 0.002 L_f (wood), 0.001 L_f (deck), L_f in ft [s], above 0."
+    Describe "ELF_CS_DIAPH", _
+        "Response coefficient of a flexible diaphragm, one-story method: all of it uncertain. ASCE/SEI 7-22: 12.10.4. Partly from memory: confirm.", _
+        "Storyledger: Diaphragm", help
+End Sub
+
+Private Sub Help_ELF_FP_WALL()
+    Dim help(2) As String
+    help(0) = "Design spectral acceleration at short periods [g], above 0."
+    help(1) = "Importance factor [no unit], at least 1."
+    help(2) = "Weight of the wall [a force unit], at least 0."
+    Describe "ELF_FP_WALL", _
+        "Force on a structural wall out of its plane. ASCE/SEI 7-16: 12.11.1; 7-22: 12.11.1. Partly from memory: confirm.", _
+        "Storyledger: Diaphragm", help
+End Sub
+
+Private Sub Help_ELF_KA()
+    Dim help(2) As String
+    help(0) = "Span of the flexible diaphragm [a length unit], at least 0."
+    help(1) = "Diaphragm: rigid, flexible."
+    help(2) = "Unit system: us (kip, ft, in) or si (kN, m, mm): us, si."
+    Describe "ELF_KA", _
+        "Amplification of the anchorage force by a flexible diaphragm. ASCE/SEI 7-16: 12.11.2.1, Eq. 12.11-2; 7-22: 12.11.2.1, Eq. 12.11-2. Partly from memory: confirm.", _
+        "Storyledger: Diaphragm", help
+End Sub
+
+Private Sub Help_ELF_FP_ANCHOR()
+    Dim help(3) As String
+    help(0) = "Design spectral acceleration at short periods [g], above 0."
+    help(1) = "Amplification by a flexible diaphragm [no unit], at least 1 and at most 2."
+    help(2) = "Importance factor [no unit], at least 1."
+    help(3) = "Weight of the wall tributary to the anchor [a force unit], at least 0."
+    Describe "ELF_FP_ANCHOR", _
+        "Anchorage force of a structural wall. ASCE/SEI 7-16: 12.11.2.1, Eq. 12.11-1; 7-22: 12.11.2.1, Eq. 12.11-1. Partly from memory: confirm.", _
+        "Storyledger: Diaphragm", help
+End Sub
+
+Private Sub Help_ELF_ZS()
+    Dim help(0) As String
+    help(0) = "Seismic force-resisting system: buckling-restrained braced frame, moment frame, dual system with moment frame, all other."
+    Describe "ELF_ZS", _
+        "Mode shape factor of a seismic force-resisting system, for diaphragms. ASCE/SEI 7-16: 12.10.3.2; 7-22: 12.10.3.2. Partly from memory: confirm.", _
+        "Storyledger: Alternative diaphragm procedure", help
+End Sub
+
+Private Sub Help_ELF_RS()
+    Dim help(0) As String
+    help(0) = "Diaphragm: cast-in-place concrete flexure, cast-in-place concrete shear, precast concrete elastic design, precast concrete basic design, precast concrete reduced design, wood sheathed."
+    Describe "ELF_RS", _
+        "Design force reduction factor of a diaphragm; steel deck of 7-22 is your own entry. ASCE/SEI 7-16: 12.10.3.5, Table 12.10-1; 7-22: 12.10.3.5, Table 12.10-1. Partly from memory: confirm.", _
+        "Storyledger: Alternative diaphragm procedure", help
+End Sub
+
+Private Sub Help_ELF_CP0()
+    Dim help(1) As String
+    help(0) = "Design spectral acceleration at short periods [g], above 0."
+    help(1) = "Importance factor [no unit], at least 1."
+    Describe "ELF_CP0", _
+        "Diaphragm acceleration coefficient at the base. ASCE/SEI 7-16: 12.10.3.2; 7-22: 12.10.3.2. Partly from memory: confirm.", _
+        "Storyledger: Alternative diaphragm procedure", help
+End Sub
+
+Private Sub Help_ELF_GM1()
+    Dim help(2) As String
+    help(0) = "Mode shape factor [no unit], above 0."
+    help(1) = "Stories above the base, a whole number [no unit], at least 1."
+    help(2) = "Coefficient, recalled as 0.5: confirm before you enter it [no unit], at least 0."
+    Describe "ELF_GM1", _
+        "First mode contribution factor; its coefficient is uncertain and an entry. ASCE/SEI 7-16: 12.10.3.2; 7-22: 12.10.3.2. Partly from memory: confirm.", _
+        "Storyledger: Alternative diaphragm procedure", help
+End Sub
+
+Private Sub Help_ELF_GM2()
+    Dim help(1) As String
+    help(0) = "Mode shape factor [no unit], above 0."
+    help(1) = "Stories above the base, a whole number [no unit], at least 1."
+    Describe "ELF_GM2", _
+        "Higher mode contribution factor. ASCE/SEI 7-16: 12.10.3.2; 7-22: 12.10.3.2. Partly from memory: confirm.", _
+        "Storyledger: Alternative diaphragm procedure", help
+End Sub
+
+Private Sub Help_ELF_CS_HIGHER()
+    Dim help(3) As String
+    help(0) = "Stories above the base, a whole number [no unit], at least 1."
+    help(1) = "Design spectral acceleration at short periods [g], above 0."
+    help(2) = "Design spectral acceleration at 1 s [g], above 0."
+    help(3) = "Importance factor [no unit], at least 1."
+    Describe "ELF_CS_HIGHER", _
+        "Higher mode seismic response coefficient; 0 for one story. ASCE/SEI 7-16: 12.10.3.2; 7-22: 12.10.3.2. Partly from memory: confirm.", _
+        "Storyledger: Alternative diaphragm procedure", help
+End Sub
+
+Private Sub Help_ELF_CPI()
+    Dim help(3) As String
+    help(0) = "Acceleration coefficient at the base [no unit], above 0."
+    help(1) = "First mode contribution factor [no unit], at least 1."
+    help(2) = "Overstrength factor [no unit], at least 1."
+    help(3) = "Seismic response coefficient of 12.8 or 12.9 [no unit], above 0."
+    Describe "ELF_CPI", _
+        "Diaphragm acceleration coefficient at 0.8 h_n, and the least at the top. ASCE/SEI 7-16: 12.10.3.2; 7-22: 12.10.3.2. Partly from memory: confirm.", _
+        "Storyledger: Alternative diaphragm procedure", help
+End Sub
+
+Private Sub Help_ELF_CPN()
+    Dim help(5) As String
+    help(0) = "Acceleration coefficient at 0.8 h_n [no unit], above 0."
+    help(1) = "First mode contribution factor [no unit], at least 1."
+    help(2) = "Overstrength factor [no unit], at least 1."
+    help(3) = "Seismic response coefficient of 12.8 or 12.9 [no unit], above 0."
+    help(4) = "Higher mode contribution factor [no unit], at least 0."
+    help(5) = "Higher mode seismic response coefficient [no unit], at least 0."
+    Describe "ELF_CPN", _
+        "Diaphragm acceleration coefficient at the top. ASCE/SEI 7-16: 12.10.3.2; 7-22: 12.10.3.2. Partly from memory: confirm.", _
+        "Storyledger: Alternative diaphragm procedure", help
+End Sub
+
+Private Sub Help_ELF_CPX()
+    Dim help(5) As String
+    help(0) = "Height of level x above the base, at most h_n [a length unit], at least 0."
+    help(1) = "Structural height [a length unit], above 0."
+    help(2) = "Stories above the base, a whole number [no unit], at least 1."
+    help(3) = "Acceleration coefficient at the base [no unit], above 0."
+    help(4) = "Acceleration coefficient at 0.8 h_n [no unit], above 0."
+    help(5) = "Acceleration coefficient at the top [no unit], above 0."
+    Describe "ELF_CPX", _
+        "Diaphragm acceleration coefficient of a level. ASCE/SEI 7-16: 12.10.3.2; 7-22: 12.10.3.2. Partly from memory: confirm.", _
+        "Storyledger: Alternative diaphragm procedure", help
+End Sub
+
+Private Sub Help_ELF_FPX_ALT()
+    Dim help(4) As String
+    help(0) = "Acceleration coefficient of the level [no unit], above 0."
+    help(1) = "Weight tributary to the diaphragm at level x [a force unit], at least 0."
+    help(2) = "Design force reduction factor of the diaphragm [no unit], above 0."
+    help(3) = "Design spectral acceleration at short periods [g], above 0."
+    help(4) = "Importance factor [no unit], at least 1."
+    Describe "ELF_FPX_ALT", _
+        "Diaphragm design force of a level by the alternative procedure. ASCE/SEI 7-16: 12.10.3.2, Eq. 12.10-4; 7-22: 12.10.3.2, Eq. 12.10-4. Partly from memory: confirm.", _
+        "Storyledger: Alternative diaphragm procedure", help
+End Sub
+
+Private Sub Help_ELF_DELTA_M()
+    Dim help(4) As String
+    help(0) = "Largest elastic displacement, torsion included [a displacement unit], at least 0."
+    help(1) = "Diaphragm deflection at the design earthquake; 0 where none [a displacement unit], at least 0."
+    help(2) = "Deflection amplification factor [no unit], at least 1."
+    help(3) = "Importance factor [no unit], at least 1."
+    help(4) = "Edition of ASCE/SEI 7, as text (in a cell: format the cell as Text, or it turns into a date): 7-16, 7-22."
+    Describe "ELF_DELTA_M", _
+        "Displacement that a separation has to take in; the set-back from a property line. ASCE/SEI 7-16: 12.12.3, Eq. 12.12-1; 7-22: 12.12.3, Eq. 12.12-1. Partly from memory: confirm.", _
+        "Storyledger: Separation", help
+End Sub
+
+Private Sub Help_ELF_DELTA_MT()
+    Dim help(1) As String
+    help(0) = "Displacement of one structure at the place [a displacement unit], at least 0."
+    help(1) = "Displacement of the other at that height [a displacement unit], at least 0."
+    Describe "ELF_DELTA_MT", _
+        "Least gap between two structures on one property. ASCE/SEI 7-16: 12.12.3, Eq. 12.12-2; 7-22: 12.12.3, Eq. 12.12-2. Partly from memory: confirm.", _
+        "Storyledger: Separation", help
+End Sub
+
+Private Sub Help_ELF_GAP_STATUS()
+    Dim help(1) As String
+    help(0) = "Clear distance [a displacement unit], at least 0."
+    help(1) = "Least distance [a displacement unit], at least 0."
+    Describe "ELF_GAP_STATUS", _
+        "Whether a gap is wide enough; to a property line, give delta_M as the least distance. ASCE/SEI 7-16: 12.12.3, Eq. 12.12-2; 7-22: 12.12.3, Eq. 12.12-2. Partly from memory: confirm.", _
+        "Storyledger: Separation", help
+End Sub
+
+Private Sub Help_ELF_DELTA_MCE()
+    Dim help(3) As String
+    help(0) = "Elastic displacement under the strength-level forces [a displacement unit], any number."
+    help(1) = "Diaphragm deflection at the design earthquake; 0 where none [a displacement unit], at least 0."
+    help(2) = "Response modification coefficient [no unit], at least 1."
+    help(3) = "Importance factor [no unit], at least 1."
+    Describe "ELF_DELTA_MCE", _
+        "Displacement at the maximum considered earthquake, for members between structures. ASCE/SEI 7-16: 12.12.4; 7-22: 12.8.6, Eq. 12.8-17. Partly from memory: confirm.", _
+        "Storyledger: Separation", help
+End Sub
+
+Private Sub Help_ELF_PART_STIFFNESS()
+    Dim help(1) As String
+    help(0) = "Base shear of the part (lower: with the upper reactions) [a force unit], above 0."
+    help(1) = "Elastic displacement at its top, base fixed [a displacement unit], above 0."
+    Describe "ELF_PART_STIFFNESS", _
+        "Stiffness of the upper or lower part: its base shear over the displacement at its own top. ASCE/SEI 7-16: 12.2.3.2, item a; 7-22: 12.2.3.2, item a. Partly from memory: confirm.", _
+        "Storyledger: Two-stage procedure", help
+End Sub
+
+Private Sub Help_ELF_STIFFNESS_RATIO()
+    Dim help(1) As String
+    help(0) = "Stiffness of the lower part [a stiffness unit], above 0."
+    help(1) = "Stiffness of the upper part [a stiffness unit], above 0."
+    Describe "ELF_STIFFNESS_RATIO", _
+        "Stiffness of the lower part over that of the upper part: at least 10. ASCE/SEI 7-16: 12.2.3.2, item a; 7-22: 12.2.3.2, item a. Partly from memory: confirm.", _
+        "Storyledger: Two-stage procedure", help
+End Sub
+
+Private Sub Help_ELF_PERIOD_RATIO()
+    Dim help(1) As String
+    help(0) = "Period of the whole structure [s], above 0."
+    help(1) = "Period of the upper part on a fixed base [s], above 0."
+    Describe "ELF_PERIOD_RATIO", _
+        "Period of the whole over that of the upper part on a fixed base: at most 1.1. ASCE/SEI 7-16: 12.2.3.2, item b; 7-22: 12.2.3.2, item b. Partly from memory: confirm.", _
+        "Storyledger: Two-stage procedure", help
+End Sub
+
+Private Sub Help_ELF_REACTION_FACTOR()
+    Dim help(3) As String
+    help(0) = "Response modification coefficient of the upper part [no unit], at least 1."
+    help(1) = "Redundancy factor of the upper part [no unit], at least 1."
+    help(2) = "Response modification coefficient of the lower part [no unit], at least 1."
+    help(3) = "Redundancy factor of the lower part [no unit], at least 1."
+    Describe "ELF_REACTION_FACTOR", _
+        "Factor on the reactions of the upper part as they act on the lower part, at least 1. ASCE/SEI 7-16: 12.2.3.2, item d; 7-22: 12.2.3.2, item d. Partly from memory: confirm.", _
+        "Storyledger: Two-stage procedure", help
+End Sub
+
+Private Sub Help_ELF_TWO_STAGE()
+    Dim help(3) As String
+    help(0) = "Stiffness ratio, lower to upper [no unit], above 0."
+    help(1) = "Period ratio, whole to upper [no unit], above 0."
+    help(2) = "Procedure by which the upper part is analysed: equivalent lateral force, modal, another."
+    help(3) = "Procedure by which the lower part is analysed: equivalent lateral force, modal, another."
+    Describe "ELF_TWO_STAGE", _
+        "Whether the two-stage procedure may be used, and what fails. ASCE/SEI 7-16: 12.2.3.2; 7-22: 12.2.3.2. Partly from memory: confirm.", _
+        "Storyledger: Two-stage procedure", help
+End Sub
+
+Private Sub Help_ELF_TWO_STAGE_TRANSITION()
+    Dim help(0) As String
+    help(0) = "Whether there is an out-of-plane or in-plane offset at the transition: yes, no."
+    Describe "ELF_TWO_STAGE_TRANSITION", _
+        "What a discontinuity at the transition between the parts brings. ASCE/SEI 7-16: 12.2.3.2; 7-22: 12.2.3.2. Partly from memory: confirm.", _
+        "Storyledger: Two-stage procedure", help
+End Sub
+
+Private Sub Help_ELF_DELTA_XE()
+    Dim help(3) As String
+    help(0) = "Height of level x above the base, or 0 for the base [a length unit], at least 0."
+    help(1) = "Story forces of all levels [a force unit], one cell a level, any number."
+    help(2) = "Stiffness of the story below each level [a stiffness unit], one cell a level, above 0."
+    help(3) = "Heights of all levels above the base [a length unit], one cell a level, above 0."
+    Describe "ELF_DELTA_XE", _
+        "Elastic displacement of a level of a shear building, from its story forces and stiffnesses. ASCE/SEI 7-16: 12.8.6; 7-22: 12.8.6. Partly from memory: confirm.", _
+        "Storyledger: Story stiffness", help
+End Sub
+
+Private Sub Help_ELF_STORY_STIFFNESS()
+    Dim help(3) As String
+    help(0) = "Height of level x above the base [a length unit], above 0."
+    help(1) = "Story forces of all levels [a force unit], one cell a level, any number."
+    help(2) = "Elastic displacements of all levels under the forces [a displacement unit], one cell a level, any number."
+    help(3) = "Heights of all levels above the base [a length unit], one cell a level, above 0."
+    Describe "ELF_STORY_STIFFNESS", _
+        "Stiffness of the story below a level, from story forces and the displacements they cause. ASCE/SEI 7-16: 12.8.6; 7-22: 12.8.6. Partly from memory: confirm.", _
+        "Storyledger: Story stiffness", help
+End Sub
+
+Private Sub Help_ELF_MODE_PERIOD()
+    Dim help(4) As String
+    help(0) = "Number of the mode, whole, 1 for the longest period [no unit], at least 1."
+    help(1) = "Effective seismic weights of all levels [a force unit], one cell a level, at least 0."
+    help(2) = "Stiffness of the story below each level [a stiffness unit], one cell a level, above 0."
+    help(3) = "Heights of all levels above the base [a length unit], one cell a level, above 0."
+    help(4) = "Unit system: us (kip, ft, in) or si (kN, m, mm): us, si."
+    Describe "ELF_MODE_PERIOD", _
+        "Period of a mode of the shear building. ASCE/SEI 7-16: 12.9.1.1; 7-22: 12.9.1.1. Partly from memory: confirm.", _
+        "Storyledger: Modal response", help
+End Sub
+
+Private Sub Help_ELF_MODE_SHAPE()
+    Dim help(4) As String
+    help(0) = "Number of the mode, whole, 1 for the longest period [no unit], at least 1."
+    help(1) = "Height of level x above the base [a length unit], above 0."
+    help(2) = "Effective seismic weights of all levels [a force unit], one cell a level, at least 0."
+    help(3) = "Stiffness of the story below each level [a stiffness unit], one cell a level, above 0."
+    help(4) = "Heights of all levels above the base [a length unit], one cell a level, above 0."
+    Describe "ELF_MODE_SHAPE", _
+        "Ordinate of a mode's shape at a level; the largest ordinate of the mode is 1. ASCE/SEI 7-16: 12.9.1.1; 7-22: 12.9.1.1. Partly from memory: confirm.", _
+        "Storyledger: Modal response", help
+End Sub
+
+Private Sub Help_ELF_MODE_PARTICIPATION()
+    Dim help(3) As String
+    help(0) = "Number of the mode, whole, 1 for the longest period [no unit], at least 1."
+    help(1) = "Effective seismic weights of all levels [a force unit], one cell a level, at least 0."
+    help(2) = "Stiffness of the story below each level [a stiffness unit], one cell a level, above 0."
+    help(3) = "Heights of all levels above the base [a length unit], one cell a level, above 0."
+    Describe "ELF_MODE_PARTICIPATION", _
+        "Participation factor of a mode, for its shape with 1 as the largest ordinate. ASCE/SEI 7-16: 12.9.1.1; 7-22: 12.9.1.1. Partly from memory: confirm.", _
+        "Storyledger: Modal response", help
+End Sub
+
+Private Sub Help_ELF_MODE_MASS()
+    Dim help(3) As String
+    help(0) = "Number of the mode, whole, 1 for the longest period [no unit], at least 1."
+    help(1) = "Effective seismic weights of all levels [a force unit], one cell a level, at least 0."
+    help(2) = "Stiffness of the story below each level [a stiffness unit], one cell a level, above 0."
+    help(3) = "Heights of all levels above the base [a length unit], one cell a level, above 0."
+    Describe "ELF_MODE_MASS", _
+        "Part of the total mass that moves in a mode (effective modal mass). ASCE/SEI 7-16: 12.9.1.1; 7-22: 12.9.1.1. Partly from memory: confirm.", _
+        "Storyledger: Modal response", help
+End Sub
+
+Private Sub Help_ELF_MODE_MASS_SUM()
+    Dim help(3) As String
+    help(0) = "How many modes, from the first on, whole [no unit], at least 1."
+    help(1) = "Effective seismic weights of all levels [a force unit], one cell a level, at least 0."
+    help(2) = "Stiffness of the story below each level [a stiffness unit], one cell a level, above 0."
+    help(3) = "Heights of all levels above the base [a length unit], one cell a level, above 0."
+    Describe "ELF_MODE_MASS_SUM", _
+        "Part of the total mass that moves in the first modes together. ASCE/SEI 7-16: 12.9.1.1; 7-22: 12.9.1.1. Partly from memory: confirm.", _
+        "Storyledger: Modal response", help
+End Sub
+
+Private Sub Help_ELF_MODES_NEEDED()
+    Dim help(3) As String
+    help(0) = "Part of the mass, 0.9 for 90 % [no unit], above 0 and at most 1."
+    help(1) = "Effective seismic weights of all levels [a force unit], one cell a level, at least 0."
+    help(2) = "Stiffness of the story below each level [a stiffness unit], one cell a level, above 0."
+    help(3) = "Heights of all levels above the base [a length unit], one cell a level, above 0."
+    Describe "ELF_MODES_NEEDED", _
+        "How many modes, from the first on, hold a given part of the mass. ASCE/SEI 7-16: 12.9.1.1; 7-22: 12.9.1.1. Partly from memory: confirm.", _
+        "Storyledger: Modal response", help
+End Sub
+
+Private Sub Help_ELF_MODES_STATUS()
+    Dim help(4) As String
+    help(0) = "How many modes, from the first on, whole [no unit], at least 1."
+    help(1) = "Effective seismic weights of all levels [a force unit], one cell a level, at least 0."
+    help(2) = "Stiffness of the story below each level [a stiffness unit], one cell a level, above 0."
+    help(3) = "Heights of all levels above the base [a length unit], one cell a level, above 0."
+    help(4) = "Unit system: us (kip, ft, in) or si (kN, m, mm): us, si."
+    Describe "ELF_MODES_STATUS", _
+        "Whether the first modes hold enough of the mass, in words. ASCE/SEI 7-16: 12.9.1.1; 7-22: 12.9.1.1. Partly from memory: confirm.", _
+        "Storyledger: Modal response", help
+End Sub
+
+Private Sub Help_ELF_MODE_CS()
+    Dim help(2) As String
+    help(0) = "Design spectral acceleration at the mode's period [g], above 0."
+    help(1) = "Response modification coefficient [no unit], at least 1."
+    help(2) = "Importance factor [no unit], at least 1."
+    Describe "ELF_MODE_CS", _
+        "Seismic response coefficient of a mode: the spectrum at its period over R/I_e. ASCE/SEI 7-16: 12.9.1.2; 7-22: 12.9.1.2. Partly from memory: confirm.", _
+        "Storyledger: Modal response", help
+End Sub
+
+Private Sub Help_ELF_MODE_FORCE()
+    Dim help(6) As String
+    help(0) = "Number of the mode, whole, 1 for the longest period [no unit], at least 1."
+    help(1) = "Effective seismic weight of level x [a force unit], at least 0."
+    help(2) = "Height of level x above the base [a length unit], above 0."
+    help(3) = "Seismic response coefficient of the mode [no unit], above 0."
+    help(4) = "Effective seismic weights of all levels [a force unit], one cell a level, at least 0."
+    help(5) = "Stiffness of the story below each level [a stiffness unit], one cell a level, above 0."
+    help(6) = "Heights of all levels above the base [a length unit], one cell a level, above 0."
+    Describe "ELF_MODE_FORCE", _
+        "Force at a level in a mode, with its sign. ASCE/SEI 7-16: 12.9.1.2; 7-22: 12.9.1.2. Partly from memory: confirm.", _
+        "Storyledger: Modal response", help
+End Sub
+
+Private Sub Help_ELF_MODE_SHEAR()
+    Dim help(5) As String
+    help(0) = "Number of the mode, whole, 1 for the longest period [no unit], at least 1."
+    help(1) = "Height of level x above the base, or 0 for the base [a length unit], at least 0."
+    help(2) = "Seismic response coefficient of the mode [no unit], above 0."
+    help(3) = "Effective seismic weights of all levels [a force unit], one cell a level, at least 0."
+    help(4) = "Stiffness of the story below each level [a stiffness unit], one cell a level, above 0."
+    help(5) = "Heights of all levels above the base [a length unit], one cell a level, above 0."
+    Describe "ELF_MODE_SHEAR", _
+        "Story shear below a level in a mode, with its sign; at height 0 the base shear of the mode. ASCE/SEI 7-16: 12.9.1.2; 7-22: 12.9.1.2. Partly from memory: confirm.", _
+        "Storyledger: Modal response", help
+End Sub
+
+Private Sub Help_ELF_MODE_DISPLACEMENT()
+    Dim help(5) As String
+    help(0) = "Number of the mode, whole, 1 for the longest period [no unit], at least 1."
+    help(1) = "Height of level x above the base [a length unit], above 0."
+    help(2) = "Seismic response coefficient of the mode [no unit], above 0."
+    help(3) = "Effective seismic weights of all levels [a force unit], one cell a level, at least 0."
+    help(4) = "Stiffness of the story below each level [a stiffness unit], one cell a level, above 0."
+    help(5) = "Heights of all levels above the base [a length unit], one cell a level, above 0."
+    Describe "ELF_MODE_DISPLACEMENT", _
+        "Elastic displacement of a level in a mode, with its sign. ASCE/SEI 7-16: 12.9.1.2; 7-22: 12.9.1.2. Partly from memory: confirm.", _
+        "Storyledger: Modal response", help
+End Sub
+
+Private Sub Help_ELF_MODE_DRIFT()
+    Dim help(5) As String
+    help(0) = "Number of the mode, whole, 1 for the longest period [no unit], at least 1."
+    help(1) = "Height of level x above the base [a length unit], above 0."
+    help(2) = "Seismic response coefficient of the mode [no unit], above 0."
+    help(3) = "Effective seismic weights of all levels [a force unit], one cell a level, at least 0."
+    help(4) = "Stiffness of the story below each level [a stiffness unit], one cell a level, above 0."
+    help(5) = "Heights of all levels above the base [a length unit], one cell a level, above 0."
+    Describe "ELF_MODE_DRIFT", _
+        "Elastic drift of the story below a level in a mode, with its sign. ASCE/SEI 7-16: 12.9.1.2; 7-22: 12.9.1.2. Partly from memory: confirm.", _
+        "Storyledger: Modal response", help
+End Sub
+
+Private Sub Help_ELF_MODAL_SHEAR()
+    Dim help(7) As String
+    help(0) = "Height of level x above the base, or 0 for the base [a length unit], at least 0."
+    help(1) = "Numbers of the modes, whole [no unit], one cell a mode, at least 1."
+    help(2) = "Seismic response coefficients of the modes [no unit], one cell a mode, above 0."
+    help(3) = "Effective seismic weights of all levels [a force unit], one cell a level, at least 0."
+    help(4) = "Stiffness of the story below each level [a stiffness unit], one cell a level, above 0."
+    help(5) = "Heights of all levels above the base [a length unit], one cell a level, above 0."
+    help(6) = "Rule of combination: SRSS, CQC."
+    help(7) = "Damping ratio of the modes, 0.05 for 5 % [no unit], above 0 and at most 1."
+    Describe "ELF_MODAL_SHEAR", _
+        "Story shear combined over modes by SRSS or CQC; at 0, the base shear. ASCE/SEI 7-16: 12.9.1.3; 7-22: 12.9.1.3. Partly from memory: confirm.", _
+        "Storyledger: Modal response", help
+End Sub
+
+Private Sub Help_ELF_MODAL_DRIFT()
+    Dim help(7) As String
+    help(0) = "Height of level x above the base [a length unit], above 0."
+    help(1) = "Numbers of the modes, whole [no unit], one cell a mode, at least 1."
+    help(2) = "Seismic response coefficients of the modes [no unit], one cell a mode, above 0."
+    help(3) = "Effective seismic weights of all levels [a force unit], one cell a level, at least 0."
+    help(4) = "Stiffness of the story below each level [a stiffness unit], one cell a level, above 0."
+    help(5) = "Heights of all levels above the base [a length unit], one cell a level, above 0."
+    help(6) = "Rule of combination: SRSS, CQC."
+    help(7) = "Damping ratio of the modes, 0.05 for 5 % [no unit], above 0 and at most 1."
+    Describe "ELF_MODAL_DRIFT", _
+        "Elastic drift of the story below a level combined over modes by SRSS or CQC. ASCE/SEI 7-16: 12.9.1.3; 7-22: 12.9.1.3. Partly from memory: confirm.", _
+        "Storyledger: Modal response", help
+End Sub
+
+Private Sub Help_ELF_SRSS()
+    Dim help(0) As String
+    help(0) = "Response in each mode, with its sign [any one unit], one cell a mode, any number."
+    Describe "ELF_SRSS", _
+        "Response combined over the modes: square root of the sum of the squares. ASCE/SEI 7-16: 12.9.1.3; 7-22: 12.9.1.3. Partly from memory: confirm.", _
+        "Storyledger: Modal response", help
+End Sub
+
+Private Sub Help_ELF_ABSSUM()
+    Dim help(0) As String
+    help(0) = "Response in each mode, with its sign [any one unit], one cell a mode, any number."
+    Describe "ELF_ABSSUM", _
+        "Absolute sum of the responses in the modes, a bound on every combination. ASCE/SEI 7-16: 12.9.1.3; 7-22: 12.9.1.3. Partly from memory: confirm.", _
+        "Storyledger: Modal response", help
+End Sub
+
+Private Sub Help_ELF_CQC()
+    Dim help(2) As String
+    help(0) = "Response in each mode, with its sign [any one unit], one cell a mode, any number."
+    help(1) = "Periods of the modes [s], one cell a mode, above 0."
+    help(2) = "Damping ratio of the modes, 0.05 for 5 % [no unit], above 0 and at most 1."
+    Describe "ELF_CQC", _
+        "Response combined over the modes: complete quadratic combination, with signs and periods. ASCE/SEI 7-16: 12.9.1.3; 7-22: 12.9.1.3. Partly from memory: confirm.", _
+        "Storyledger: Modal response", help
+End Sub
+
+Private Sub Help_ELF_MODE_CORRELATION()
+    Dim help(2) As String
+    help(0) = "Period of one mode [s], above 0."
+    help(1) = "Period of the other mode [s], above 0."
+    help(2) = "Damping ratio of the modes, 0.05 for 5 % [no unit], above 0 and at most 1."
+    Describe "ELF_MODE_CORRELATION", _
+        "Correlation coefficient of two modes of equal damping, as the complete combination uses it. ASCE/SEI 7-16: 12.9.1.3; 7-22: 12.9.1.3. Partly from memory: confirm.", _
+        "Storyledger: Modal response", help
+End Sub
+
+Private Sub Help_ELF_MODAL_SCALE()
+    Dim help(1) As String
+    help(0) = "Base shear of 12.8, its period at most C_u T_a [a force unit], above 0."
+    help(1) = "Combined base shear of the modes [a force unit], above 0."
+    Describe "ELF_MODAL_SCALE", _
+        "Factor on combined forces: up to the equivalent lateral force base shear, at least 1. ASCE/SEI 7-16: 12.9.1.4.1; 7-22: 12.9.1.4.1. Partly from memory: confirm.", _
+        "Storyledger: Modal response", help
+End Sub
+
+Private Sub Help_ELF_MODAL_DRIFT_SCALE()
+    Dim help(4) As String
+    help(0) = "Combined base shear of the modes [a force unit], above 0."
+    help(1) = "Effective seismic weight [a force unit], above 0."
+    help(2) = "Mapped MCE_R spectral acceleration at 1 s [g], at least 0."
+    help(3) = "Response modification coefficient [no unit], at least 1."
+    help(4) = "Importance factor [no unit], at least 1."
+    Describe "ELF_MODAL_DRIFT_SCALE", _
+        "Factor on combined drifts: up to the shear by the minimum for S_1 from 0.6 on, at least 1. ASCE/SEI 7-16: 12.9.1.4.2; 7-22: 12.9.1.4.2. Partly from memory: confirm.", _
+        "Storyledger: Modal response", help
+End Sub
+
+'Start it once (Alt+F8), then save: the function wizard shows what each function and each argument is.
+Public Sub StoryledgerHelp()
+    Help_ELF_AREA_WEIGHT
+    Help_ELF_STORAGE_SHARE
+    Help_ELF_STORAGE_RATIO
+    Help_ELF_PARTITION_SHARE
+    Help_ELF_SNOW_SHARE
+    Help_ELF_LEVEL_WEIGHT
+    Help_ELF_FA
+    Help_ELF_FV
+    Help_ELF_SITE_TRIGGER
+    Help_ELF_SMS
+    Help_ELF_SM1
+    Help_ELF_SDS
+    Help_ELF_SD1
+    Help_ELF_CS_INCREASE
+    Help_ELF_IE
+    Help_ELF_T0
+    Help_ELF_TS
+    Help_ELF_SA
+    Help_ELF_SYSTEM_R
+    Help_ELF_SYSTEM_OMEGA
+    Help_ELF_SYSTEM_CD
+    Help_ELF_SYSTEM_SOURCE
+    Help_ELF_SYSTEM_STATUS
+    Help_ELF_HEIGHT_LIMIT
+    Help_ELF_HEIGHT_STATUS
+    Help_ELF_OMEGA
+    Help_ELF_LOWER_PART
+    Help_ELF_TRANSFER_FACTOR
+    Help_ELF_R_LEAST
+    Help_ELF_LEAST_R_VALUE
+    Help_ELF_SA_MULTI
+    Help_ELF_SA_METHOD1
+    Help_ELF_SAM
+    Help_ELF_SA_DESIGN
+    Help_ELF_SDS_MULTI
+    Help_ELF_SD1_MULTI
+    Help_ELF_SITE_FLOOR
+    Help_ELF_SDC_SDS
+    Help_ELF_SDC_SD1
+    Help_ELF_SDC_ALONE
+    Help_ELF_SDC
+    Help_ELF_SDC_REASON
+    Help_ELF_SDC_A_PERMITTED
+    Help_ELF_TA
+    Help_ELF_TA_STORIES
+    Help_ELF_CU
+    Help_ELF_PERIOD
+    Help_ELF_TA_STORIES_STATUS
+    Help_ELF_PERIOD_GOVERNS
+    Help_ELF_PERIOD_DRIFT
+    Help_ELF_CW
+    Help_ELF_TA_WALLS
+    Help_ELF_RAYLEIGH
+    Help_ELF_CS_PLATEAU
+    Help_ELF_CS_CAP
+    Help_ELF_CS_MIN
+    Help_ELF_CS_MIN_S1
+    Help_ELF_CS
+    Help_ELF_CS_GOVERNS
+    Help_ELF_V
+    Help_ELF_CS_MULTI_BOUND
+    Help_ELF_CS_MULTI
+    Help_ELF_CS_MULTI_GOVERNS
+    Help_ELF_CS_DRIFT
+    Help_ELF_CS_DRIFT_GOVERNS
+    Help_ELF_CS_DRIFT_MULTI
+    Help_ELF_CS_DRIFT_MULTI_GOVERNS
+    Help_ELF_SDS_CAP
+    Help_ELF_SDS_CAP_STATUS
+    Help_ELF_SSI_MIN
+    Help_ELF_EXPONENT
+    Help_ELF_CVX
+    Help_ELF_FX
+    Help_ELF_VX
+    Help_ELF_MX
+    Help_ELF_HX
+    Help_ELF_HSX
+    Help_ELF_BELOW
+    Help_ELF_ECC
+    Help_ELF_ECC_ACC
+    Help_ELF_MT
+    Help_ELF_MTA
+    Help_ELF_MTA_SCOPE
+    Help_ELF_TIR
+    Help_ELF_AX
+    Help_ELF_AX_APPLIED
+    Help_ELF_RIGIDITY_CENTER
+    Help_ELF_RIGIDITY_POLAR
+    Help_ELF_WALL_DIRECT
+    Help_ELF_WALL_TORSION
+    Help_ELF_SOFT_RATIO
+    Help_ELF_SOFT_RATIO_THREE
+    Help_ELF_WEAK_RATIO
+    Help_ELF_WEIGHT_RATIO
+    Help_ELF_GEOMETRY_RATIO
+    Help_ELF_DRIFT_RATIO_ABOVE
+    Help_ELF_DRIFT_EXCEPTION
+    Help_ELF_REENTRANT_RATIO
+    Help_ELF_TORSION_STATUS
+    Help_ELF_REENTRANT_STATUS
+    Help_ELF_DIAPHRAGM_STATUS
+    Help_ELF_SOFT_STATUS
+    Help_ELF_WEIGHT_STATUS
+    Help_ELF_GEOMETRY_STATUS
+    Help_ELF_WEAK_STATUS
+    Help_ELF_IRREGULARITY
+    Help_ELF_CONSEQUENCE
+    Help_ELF_RHO
+    Help_ELF_RHO_REASON
+    Help_ELF_RHO_USE
+    Help_ELF_WALL_BAYS
+    Help_ELF_RHO_STORY
+    Help_ELF_EH
+    Help_ELF_EV
+    Help_ELF_EV_SPECTRUM
+    Help_ELF_EMH
+    Help_ELF_EMH_LIMITED
+    Help_ELF_COMBINATION_FACTOR
+    Help_ELF_COMBINE
+    Help_ELF_DEAD_FACTOR
+    Help_ELF_DEFLECTION
+    Help_ELF_DRIFT
+    Help_ELF_DRIFT_LIMIT
+    Help_ELF_DRIFT_EDGES
+    Help_ELF_DRIFT_CHECKED
+    Help_ELF_THETA
+    Help_ELF_BETA
+    Help_ELF_THETA_MAX
+    Help_ELF_PDELTA_FACTOR
+    Help_ELF_PDELTA_STATUS
+    Help_ELF_FPX
+    Help_ELF_FPX_GOVERNS
+    Help_ELF_FLEX_RATIO
+    Help_ELF_FLEX_STATUS
+    Help_ELF_FPX_TRANSFER
+    Help_ELF_COLLECTOR
+    Help_ELF_COLLECTOR_GOVERNS
+    Help_ELF_CS_DIAPH
+    Help_ELF_FP_WALL
+    Help_ELF_KA
+    Help_ELF_FP_ANCHOR
+    Help_ELF_ZS
+    Help_ELF_RS
+    Help_ELF_CP0
+    Help_ELF_GM1
+    Help_ELF_GM2
+    Help_ELF_CS_HIGHER
+    Help_ELF_CPI
+    Help_ELF_CPN
+    Help_ELF_CPX
+    Help_ELF_FPX_ALT
+    Help_ELF_DELTA_M
+    Help_ELF_DELTA_MT
+    Help_ELF_GAP_STATUS
+    Help_ELF_DELTA_MCE
+    Help_ELF_PART_STIFFNESS
+    Help_ELF_STIFFNESS_RATIO
+    Help_ELF_PERIOD_RATIO
+    Help_ELF_REACTION_FACTOR
+    Help_ELF_TWO_STAGE
+    Help_ELF_TWO_STAGE_TRANSITION
+    Help_ELF_DELTA_XE
+    Help_ELF_STORY_STIFFNESS
+    Help_ELF_MODE_PERIOD
+    Help_ELF_MODE_SHAPE
+    Help_ELF_MODE_PARTICIPATION
+    Help_ELF_MODE_MASS
+    Help_ELF_MODE_MASS_SUM
+    Help_ELF_MODES_NEEDED
+    Help_ELF_MODES_STATUS
+    Help_ELF_MODE_CS
+    Help_ELF_MODE_FORCE
+    Help_ELF_MODE_SHEAR
+    Help_ELF_MODE_DISPLACEMENT
+    Help_ELF_MODE_DRIFT
+    Help_ELF_MODAL_SHEAR
+    Help_ELF_MODAL_DRIFT
+    Help_ELF_SRSS
+    Help_ELF_ABSSUM
+    Help_ELF_CQC
+    Help_ELF_MODE_CORRELATION
+    Help_ELF_MODAL_SCALE
+    Help_ELF_MODAL_DRIFT_SCALE
+End Sub
+
+Private Sub Describe(ByVal named As String, ByVal text As String, ByVal heading As String, help() As String)
+    Application.MacroOptions Macro:=named, Description:=text, Category:=heading, ArgumentDescriptions:=help
+End Sub
+
 'What the cells hold, dates and currencies as plain numbers: cheaper for Python than asking the range itself.
 Private Function Contents(Optional ByVal argument As Variant) As Variant
     If IsObject(argument) Then

@@ -99,6 +99,10 @@ class TestBridge:
         assert call("ELF_EXPONENT", [((0.4,),), None]) == ((1.0,),)
         assert call("ELF_EXPONENT", [((1.0,), (2.0,)), "two"]) == ((2.0,), (2.0,))
 
+    def test_a_text_goes_alone_and_never_in_rows(self) -> None:
+        assert call("ELF_GAP_STATUS", [((5.0,),), ((5.0,),)]) == "wide enough"
+        assert number(call("ELF_GAP_STATUS", [((5.0,), (6.0,)), ((5.0,),)])) == CODES["#VALUE!"]
+
     def test_a_blank_is_not_zero(self) -> None:
         ((blank,),) = call("ELF_DRIFT", [(("",),), ((0.1,),), ((5.5,),), ((1.0,),)])
         ((zero,),) = call("ELF_DRIFT", [((0.0,),), ((0.1,),), ((5.5,),), ((1.0,),)])

@@ -13,8 +13,10 @@ from engine.editions import EDITIONS
 from engine.units import SYSTEMS
 from tests.support.office import Office
 from tests.support.story_books import story_book
+from workbook_templates.bridge import call_text
 from workbook_templates.parts import together
 from xlbridge.calc.names import for_calc, for_excel
+from xlbridge.catalogue import CATALOGUE
 from xlbridge.headless.book import Book
 from xlbridge.headless.compute import compute
 from xlbridge.values import CellError, Scalar
@@ -48,6 +50,25 @@ def test_every_cell_of_every_template_is_the_same(
     assert set(calc) == set(headless)
     assert {key: (calc[key], value) for key, value in headless.items() if not same(calc[key], value)} == {}
     assert len(calc) > (2000 if parts == "all" else 150)
+
+
+def test_a_text_of_a_function_is_equal_to_that_text(office_with_addin: Office, tmp_path: Path) -> None:
+    """Calc compares texts by their place in a pool: one that is not in it is equal to none."""
+    book = Workbook()
+    sheet = book.active
+    texts = [entry for entry in CATALOGUE.values() if entry.is_text]
+    for row, entry in enumerate(texts, 1):
+        sheet.cell(row, 1, call_text(entry))
+        sheet.cell(row, 2, entry.function(**entry.example.arguments))
+        sheet.cell(row, 3, f'=A{row}&""')
+        for column, formula in enumerate(("=A{0}=B{0}", "=COUNTIF(A{0},C{0})=1", "=A{0}=A{1}"), 4):
+            sheet.cell(row, column, formula.format(row, row % len(texts) + 1))
+    book.save(tmp_path / "texts.xlsx")
+    headless = compute(tmp_path / "texts.xlsx").values
+    calc = office_with_addin.values(for_calc_copy(tmp_path / "texts.xlsx"))
+    assert len(texts) >= 40
+    assert all(headless["Sheet", f"D{row}"] is True for row in range(1, len(texts) + 1))
+    assert calc == headless
 
 
 def test_what_calc_stores_opens_in_excel_with_the_worksheet_names(

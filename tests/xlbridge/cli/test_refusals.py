@@ -114,11 +114,17 @@ OUTPUTS = {
     "new": (["new", "{}/taken.xlsx"], "taken.xlsx"),
     "new from a building": (["new", "{}/taken.xlsx", "--from", "{}/good.toml"], "taken.xlsx"),
     "inputs": (["inputs", "{}/good.xlsx", "-o", "{}/taken.toml"], "taken.toml"),
+    "new with macros": (["new", "{}/taken.xlsm", "--macro"], "taken.xlsm"),
+    "bridge-check": (["bridge-check", "{}/check.xlsx"], "check.xlsx"),
     "calc-addin": (["calc-addin", "{}/taken.oxt"], "taken.oxt"),
     "names": (["names", "{}/good.xlsx", "--for", "calc"], "good-calc.xlsx"),
     "print": (["print", "{}/good.xlsx"], "good.pdf"),
     "demo": (["demo", "{}"], "story.xlsx"),
 }
+
+
+#: what a command writes besides
+BESIDE = {"demo": ("building.toml", "results.json"), "new with macros": ("storyledger.bas",)}
 
 
 @pytest.mark.parametrize("case", OUTPUTS)
@@ -130,12 +136,12 @@ def test_an_existing_file_is_replaced_only_by_force(folder: Path, case: str) -> 
     try:
         with unchanged(folder):
             assert_refused(run(*arguments), name, "exists already", "--force")
-        new = ("building.toml", "results.json") if case == "demo" else ()
+        new = BESIDE.get(case, ())
         with unchanged(folder, but=(name, *new)):
             assert run(*arguments, "--force").code == 0
         assert b"somebody's work" not in taken.read_bytes()
     finally:
-        for made in (name, "building.toml", "results.json"):
+        for made in (name, *BESIDE.get(case, ())):
             (folder / made).unlink(missing_ok=True)
 
 

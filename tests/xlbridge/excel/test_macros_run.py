@@ -17,9 +17,15 @@ import pytest
 from tests.support import office as offices
 from tests.support.office import Office
 from xlbridge.calc.office import Office as Product
+from xlbridge.catalogue import CATALOGUE
+from xlbridge.catalogue.validate import describe
 from xlbridge.excel.cells import ERROR_NUMBERS
 from xlbridge.excel.generate import FOLDER, MACRO_FILE
+from xlbridge.excel.module import category, description
 
+MACRO_OPTIONS = (
+    "Application.MacroOptions Macro:=named, Description:=text, Category:=heading, ArgumentDescriptions:=help"
+)
 DRIVER = Path(__file__).with_name("basic_driver.py")
 PROBES = """
 Function HandBack(moduleName, functionName, arguments, book, caller)
@@ -45,6 +51,23 @@ End Function
 
 Function ProbeFailure()
     ProbeFailure = Described(ELF_IE(ThisComponent))
+End Function
+
+Dim recorded
+
+Sub Record(named, text, heading, help)
+    Dim i
+    recorded = recorded & named & "|" & text & "|" & heading
+    For i = LBound(help) To UBound(help)
+        recorded = recorded & "|" & help(i)
+    Next i
+    recorded = recorded & Chr(10)
+End Sub
+
+Function ProbeHelp()
+    recorded = ""
+    StoryledgerHelp
+    ProbeHelp = recorded
 End Function
 
 Function Described(value)
@@ -77,6 +100,14 @@ CALLS: dict[str, tuple[list[Any], str]] = {
     "failed call": (["ProbeFailure"], "Error Error 2015"),
     **{code: (["Probe", f"{code} why"], f"Error Error {number}") for number, code in ERROR_NUMBERS.items()},
     "error without a reason": (["Probe", "#N/A"], "Error Error 2042"),
+    "help": (
+        ["ProbeHelp"],
+        "".join(
+            "|".join((entry.name, description(entry), category(entry), *map(describe, entry.arguments)))
+            + "\n"
+            for entry in CATALOGUE.values()
+        ),
+    ),
 }
 
 
@@ -87,6 +118,7 @@ def module_text() -> str:
         ("XLPy.CallUDF(", "HandBack("),
         ("ThisWorkbook, Application.Caller)", "0, 0)"),
         ("If TypeOf Application.Caller Is Range Then ", ""),
+        (MACRO_OPTIONS, "Record named, text, heading, help"),
     ):
         assert ours in text
         text = text.replace(ours, stand_in)

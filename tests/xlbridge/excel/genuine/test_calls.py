@@ -9,6 +9,7 @@ from typing import Any
 import pytest
 import xlwings as xw
 
+from engine.version import __version__
 from tests.support.windows_stubs import ERRORS, MISSING, ComRange, ComTime, column, excel_call, row
 from xlbridge import adapter
 from xlbridge.catalogue import CATALOGUE
@@ -184,3 +185,10 @@ def test_an_error_value_of_tomorrow_is_an_error() -> None:
 
 def test_a_kind_of_value_that_no_cell_has_is_an_error() -> None:
     assert excel_call(MODULE, "ELF_EXPONENT", object()).startswith("#VALUE!")
+
+
+def test_the_versions_are_those_that_run_here() -> None:
+    module = "xlbridge.excel.versions"
+    assert excel_call(module, "STORYLEDGER_VERSION", "storyledger") == __version__
+    assert excel_call(module, "STORYLEDGER_VERSION", as_com("xlwings")) == xw.__version__
+    assert excel_call(module, "STORYLEDGER_VERSION", "numpy").startswith("#N/A ")

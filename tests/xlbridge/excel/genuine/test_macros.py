@@ -17,7 +17,9 @@ from xlbridge.excel.generate import FOLDER, MACRO_FILE
 from xlbridge.excel.module import category, description
 
 SIGNATURE = re.compile(r"^(?:Public )?Function (ELF_\w+\(.*\))\r?$", re.MULTILINE)
-EXCEL_CALL = re.compile(r'XLPy\.CallUDF\("[\w.]+", "\w+", Array\(.*\), ThisWorkbook, Application\.Caller\)')
+EXCEL_CALL = re.compile(
+    r'XLPy\.CallUDF\("[\w.]+", "ELF_\w+", Array\(.*\), ThisWorkbook, Application\.Caller\)'
+)
 
 
 class Components:
@@ -83,3 +85,13 @@ def test_the_import_passes_on_the_help_texts_uncut(imported: Workbook) -> None:
         assert shown[name]["Description"] == description(entry)
         assert shown[name]["Category"] == category(entry)
         assert len(shown[name]["ArgumentDescriptions"]) == len(entry.arguments)
+
+
+def test_the_check_of_versions_is_the_imports_too() -> None:
+    workbook = Workbook()
+    xw.import_udfs(macros.VERSION_MODULE, workbook)
+    ours = (FOLDER / MACRO_FILE).read_bytes().decode("ascii")
+    (call,) = set(re.findall(r'CallUDF\("[\w.]+", "STORYLEDGER_VERSION"', workbook.components.text))
+    assert call in ours
+    assert "Function STORYLEDGER_VERSION(part)" in workbook.components.text
+    assert "Function STORYLEDGER_VERSION(part)" in ours
