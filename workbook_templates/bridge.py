@@ -2,6 +2,7 @@
 
 from __future__ import annotations
 
+import textwrap
 from collections.abc import Iterator, Sequence
 from typing import Any, Final, NamedTuple
 
@@ -17,7 +18,7 @@ from xlbridge.catalogue.entry import SheetFunction
 
 SHEET: Final = "Bridge check"
 HEADERS: Final = ("What is asked", "Expected", "Actual", "Verdict", "Formula")
-WIDTHS: Final = (52, 20, 20, 24, 110)
+WIDTHS: Final = (52, 24, 24, 18, 70)
 STATUS, HEADER = 3, 8
 OK, WRONG, SILENT = "✓ ok", "✗ another value", "✗ no answer"
 ADVICE: Final = (
@@ -42,8 +43,8 @@ def draw(versions: Sequence[Line] = ()) -> Workbook:
     sheet.title = SHEET
     style.write(sheet["A1"], f"Check of the bridge   |   Storyledger {__version__}", style.TITLE)
     style.write(sheet["A2"], sheets.CAUTION, style.SMALL)
-    style.write(sheet["A4"], ADVICE, style.BODY, style.TOP)
-    sheet.row_dimensions[4].height = 5 * sheets.LINE
+    for row, text in enumerate(textwrap.wrap(ADVICE, 150), 4):
+        style.write(sheet.cell(row, 1), text)
     sheets.table_head(sheet, HEADER, HEADERS, WIDTHS)
     last = HEADER
     for last, line in enumerate((*versions, *_errors(), *_examples()), HEADER + 1):

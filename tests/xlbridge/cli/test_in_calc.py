@@ -65,9 +65,7 @@ def test_printed_pages_are_recalculated_numbered_and_stamped(tmp_path: Path) -> 
     with unchanged(tmp_path, but=("story.pdf",)):
         outcome = run("print", path)
     assert (outcome.code, outcome.out) == (0, f"{tmp_path / 'story.pdf'}: printed\n")
-    text = subprocess.run(
-        ["pdftotext", "-layout", tmp_path / "story.pdf", "-"], capture_output=True, text=True, check=True
-    ).stdout
+    text = printed_text(tmp_path / "story.pdf")
     pages = text.split("\f")[:-1]
     assert len(pages) > 5
     digest = hashlib.sha256(path.read_bytes()).hexdigest()[:12]
@@ -77,9 +75,24 @@ def test_printed_pages_are_recalculated_numbered_and_stamped(tmp_path: Path) -> 
         assert "authority having jurisdiction" in page
         assert "Untitled building" in page
         assert "Rev." in page
-    assert "#NAME?" not in text
+    assert text.count("#NAME?") == 1  # what the cover says of it
     values = compute(path).evaluator
     assert f"{values.evaluate_text('=V_X'):,.1f}" in pages[0]
+
+
+@needs_office
+@pytest.mark.skipif(not shutil.which("pdftotext"), reason="pdftotext (poppler-utils) is not installed")
+def test_an_error_is_printed_as_the_error_it_is(tmp_path: Path) -> None:
+    assert run("bridge-check", tmp_path / "check.xlsx").code == 0
+    assert run("print", tmp_path / "check.xlsx").code == 0
+    text = printed_text(tmp_path / "check.pdf")
+    assert text.count("#NUM!") == 2  # expected and actual
+    assert "#NAME?" not in text
+
+
+def printed_text(path: Path) -> str:
+    command = ["pdftotext", "-layout", path, "-"]
+    return subprocess.run(command, capture_output=True, text=True, check=True).stdout
 
 
 @pytest.mark.parametrize("call", [["calc", "--with", "calc"], ["print"]])
