@@ -60,7 +60,8 @@ class Quantity:
     function in the formula where there is one. An input says what it allows (``span``, ``choices``, or the
     defined name of a list, ``listed_in``), what holds if it is left out (``default``, or ``linked``: the
     formula of a level entry), and what a blank workbook starts with (``starter``); ``stored`` is its key in
-    BUILDING.toml. A criteria row whose formula gives a long text has room for ``lines`` of small print.
+    BUILDING.toml. ``builtin`` is the key of a quantity whose formula this one has, in built-in functions
+    alone. A criteria row whose formula gives a long text has room for ``lines`` of small print.
     """
 
     key: str
@@ -82,6 +83,7 @@ class Quantity:
     base: str = ""
     width: float = 11
     lines: int = 1
+    builtin: str = ""
 
     @property
     def calls(self) -> list[str]:

@@ -12,6 +12,7 @@ from openpyxl.utils import get_column_letter
 
 from workbook_templates.declare import DIRECTION, DIRECTIONS, Block, Part, Quantity, Table
 from workbook_templates.parts import chosen
+from xlbridge.native import in_builtin_functions
 
 COVER: Final = "Cover"
 CRITERIA: Final = "Criteria"
@@ -201,6 +202,11 @@ class Layout:
         """Return the formula of a template for one cell."""
         return _PLACE.sub(lambda m: self._place(m[1], m[2], sheet, direction, row), template)
 
+    def content(self, q: Quantity, sheet: str, direction: str | None, row: int = 0) -> str:
+        """Return the formula of a quantity for one cell."""
+        formula = self.write(q.formula or q.linked, sheet, direction, row)
+        return in_builtin_functions(formula) if q.builtin else formula
+
     def _standing(self, blocks: Iterable[Block]) -> list[Block]:
         """Leave out blocks that another part stands for; put in the quantities that parts replace."""
         instead = {q.key: q for part in self.parts for q in part.replaces}
@@ -212,12 +218,22 @@ class Layout:
 
     def _rewired(self, q: Quantity) -> Quantity:
         """Return a quantity whose formula takes the places that parts put instead of others."""
+        if q.builtin:
+            return replace(q, formula=self._formula(q.builtin, q.formula))
         places = {old: new for part in self.parts for old, new in part.takes.get(q.key, {}).items()}
         if not places:
             return q
         return replace(
             q, formula=_PLACE.sub(lambda m: m[0].replace(m[1], places.get(m[1], m[1]), 1), q.formula)
         )
+
+    def _formula(self, key: str, otherwise: str) -> str:
+        """Return the formula that a quantity has in this workbook, if it stands in it."""
+        blocks = (block for part in self.parts for block in (*part.criteria, *part.bands))
+        own = {q.key: q for block in blocks if block.without not in self.part_keys for q in block.quantities}
+        instead = {q.key: q for part in self.parts for q in part.replaces}
+        found = instead.get(key) or own.get(key)
+        return self._rewired(found).formula if found else otherwise
 
     def _place(self, key: str, part: str | None, sheet: str, direction: str | None, row: int) -> str:
         if key == DIRECTION:

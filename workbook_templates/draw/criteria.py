@@ -86,4 +86,4 @@ def _content(layout: Layout, inputs: Inputs, q: Quantity, direction: str | None)
             "displacement_per_length": DISPLACEMENT_PER_LENGTH[inputs.units],
         }
         return fixed[q.key]
-    return layout.write(q.formula, CRITERIA, direction)
+    return layout.content(q, CRITERIA, direction)

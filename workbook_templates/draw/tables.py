@@ -81,9 +81,7 @@ def _draw_cells(sheet: Worksheet, layout: Layout, grid: Grid, inputs: Inputs, co
         entered = inputs.row(grid.table, row - FIRST_LEVEL, q, direction) if q.is_input else None
         if q.role is Role.FIXED:
             entered = grid.table.fixed[inputs.edition][row - FIRST_LEVEL]
-        cell.value = (
-            layout.write(q.formula or q.linked, sheet.title, direction, row) if entered is None else entered
-        )
+        cell.value = layout.content(q, sheet.title, direction, row) if entered is None else entered
         style.dress(cell, q.role, number_format)
     for row in (TOP_GUARD, grid.bottom_guard):
         sheet[f"{column.letter}{row}"].fill = style.GUARD_FILL

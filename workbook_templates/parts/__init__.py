@@ -10,6 +10,7 @@ from workbook_templates.declare import Part
 from workbook_templates.parts import (
     anchorage,
     category,
+    cross_check,
     diaphragm,
     diaphragm_forces,
     diaphragm_procedures,
@@ -79,6 +80,8 @@ PARTS: Final = MappingProxyType(
             load_effects.PART,
             spectrum.PART,
             modal.PART,
+            cross_check.PART,
+            cross_check.DRIFT,
         )
     }
 )
