@@ -22,7 +22,7 @@ def _block(title: str, sources: tuple[Block, ...], keys: tuple[str, ...], differ
     terms = ",".join(f"ABS({{{key}}}-{{{key}_builtin}})/MAX(1,ABS({{{key}}}))" for key in keys)
     largest = Quantity(
         difference, "Largest difference, of 1 or of the value", "none", CALC, f"=MAX({terms})",
-        symbol="difference", decimals=12, total="max", width=15,
+        symbol=difference.replace("_", ", "), decimals=12, total="max", width=15,
     )  # fmt: skip
     return Block(title, (*(_in_builtin_functions(known[key]) for key in keys), largest), per_direction=True)
 
