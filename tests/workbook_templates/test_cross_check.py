@@ -57,7 +57,7 @@ def test_functions_and_built_in_formulas_agree(tmp_path: Path, edition: str, uni
     assert set(verdicts(path, computed)) == {"✓ holds"}
     assert len(verdicts(path, computed)) == 2 * len(LINES)
     formulas = built_in(path)
-    assert len(formulas) == 5 + 2 * 4 + 2 * 4
+    assert len(formulas) == 5 + 2 * 4 + 2 * 3
     assert all(f.startswith("=") and "ELF_" not in f for column in formulas.values() for f in column)
 
 

@@ -11,20 +11,21 @@ from dataclasses import replace
 from workbook_templates.declare import Block, Check, Part, Quantity, Role
 from workbook_templates.parts import drift, story
 
-CALC = Role.CALCULATION
 #: both are the same expression in double precision; what is left is the order of a sum
-ROUND_OFF = 1e-12
+ROUND_OFF = "1E-12"
 
 
-def _block(title: str, sources: tuple[Block, ...], keys: tuple[str, ...], difference: str) -> Block:
-    """The quantities of these keys in built-in functions, and the largest difference over them."""
-    known = {q.key: q for block in sources for q in block.quantities}
-    terms = ",".join(f"ABS({{{key}}}-{{{key}_builtin}})/MAX(1,ABS({{{key}}}))" for key in keys)
-    largest = Quantity(
-        difference, "Largest difference, of 1 or of the value", "none", CALC, f"=MAX({terms})",
-        symbol=difference.replace("_", ", "), decimals=12, total="max", width=15,
-    )  # fmt: skip
-    return Block(title, (*(_in_builtin_functions(known[key]) for key in keys), largest), per_direction=True)
+def _known(*blocks: Block) -> dict[str, Quantity]:
+    return {q.key: q for block in blocks for q in block.quantities}
+
+
+CRITERIA = [_known(story.PERIOD, story.BASE_SHEAR)[key] for key in ("T_a", "C_u", "C_s", "V", "k")]
+FORCES = [_known(story.FORCES)[key] for key in ("C_vx", "F_x", "V_x", "M_x")]
+STORIES = [_known(drift.STORY_DRIFT)[key] for key in ("Delta", "theta", "theta_factor")]
+
+
+def _block(title: str, quantities: list[Quantity]) -> Block:
+    return Block(title, tuple(map(_in_builtin_functions, quantities)), per_direction=True)
 
 
 def _in_builtin_functions(q: Quantity) -> Quantity:
@@ -32,7 +33,7 @@ def _in_builtin_functions(q: Quantity) -> Quantity:
         q,
         key=f"{q.key}_builtin",
         text=f"{q.text}, in built-in functions",
-        role=CALC,
+        role=Role.CALCULATION,
         symbol=f"{q.shown_symbol}, built-in",
         builtin=q.key,
         total="",
@@ -41,47 +42,33 @@ def _in_builtin_functions(q: Quantity) -> Quantity:
     )
 
 
-def _agree(text: str, difference: str) -> Check:
-    return Check(text, f"={{{difference}}}", "=0", "at most", ROUND_OFF, per_direction=True, decimals=12)
+def _agree(q: Quantity, rows: str = "") -> Check:
+    """The line that compares a quantity with its twin: a criteria value, or all rows of a column."""
+    ours, builtin = f"{{{q.key}{rows}}}", f"{{{q.key}_builtin{rows}}}"
+    return Check(
+        f"{q.text}: functions against built-in formulas, sum of differences",
+        f"=SUMPRODUCT(ABS({ours}-{builtin}))",
+        f"={ROUND_OFF}*SUMPRODUCT(ABS({ours}))",
+        "at most",
+        unit=q.unit,
+        per_direction=True,
+        decimals=12,
+    )
 
 
 PART = Part(
     "cross_check",
     "Cross-check in built-in functions",
-    criteria=(
-        _block(
-            "Cross-check in built-in functions",
-            (story.PERIOD, story.BASE_SHEAR),
-            ("T_a", "C_u", "C_s", "V", "k"),
-            "difference_criteria",
-        ),
-    ),
-    bands=(
-        _block(
-            "Cross-check of the story forces",
-            (story.FORCES,),
-            ("C_vx", "F_x", "V_x", "M_x"),
-            "difference_forces",
-        ),
-    ),
-    checks=(
-        _agree("Criteria: functions against built-in formulas", "difference_criteria"),
-        _agree("Story forces: functions against built-in formulas", "difference_forces:total"),
-    ),
+    criteria=(_block("Cross-check in built-in functions", CRITERIA),),
+    bands=(_block("Cross-check of the story forces", FORCES),),
+    checks=(*map(_agree, CRITERIA), *(_agree(q, ":all") for q in FORCES)),
 )
 
 DRIFT = Part(
     "drift_cross_check",
     "Cross-check of drift and stability in built-in functions",
-    bands=(
-        _block(
-            "Cross-check of drift and stability",
-            (drift.STORY_DRIFT,),
-            ("Delta", "theta", "theta_factor", "Delta_a"),
-            "difference_drift",
-        ),
-    ),
-    checks=(_agree("Drift and stability: functions against built-in formulas", "difference_drift:total"),),
+    bands=(_block("Cross-check of drift and stability", STORIES),),
+    checks=tuple(_agree(q, ":all") for q in STORIES),
     requires=("cross_check", "drift"),
 )
 

@@ -30,6 +30,8 @@ def broadcast(function: Callable[..., Scalar], values: Sequence[Scalar | Grid]) 
     height = max(len(grid) for grid in grids)
     width = max(len(grid[0]) for grid in grids)
     rows = zip(*(_stretched(grid, height, width) for grid in grids), strict=True)
+    if all(len(grid) in (1, height) and len(grid[0]) in (1, width) for grid in grids):
+        return tuple(tuple(map(function, *row)) for row in rows)
     return tuple(
         tuple([NO_PARTNER if NO_CELL in cells else function(*cells) for cells in zip(*row, strict=True)])
         for row in rows
