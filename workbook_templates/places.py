@@ -5,7 +5,7 @@ from __future__ import annotations
 from collections.abc import Iterator
 
 from workbook_templates.declare import DIRECTIONS
-from workbook_templates.layout import Grid
+from workbook_templates.layout import Column, Grid
 from workbook_templates.read import Reader
 from xlbridge.headless.book import Book
 from xlbridge.headless.references import Bounds, Cell, parse_bounds
@@ -29,6 +29,18 @@ def cell_of(book: Book, name: str) -> Cell:
     return Cell(sheet, bounds.top, bounds.left)
 
 
+def rows(reader: Reader, grid: Grid, book: Book) -> list[int]:
+    """Return the rows of a table that count, by their numbers on the sheet."""
+    _, bounds = _area(book, grid.table.name)
+    return [bounds.top + n for n in reader.row_numbers(grid)]
+
+
+def column(reader: Reader, grid: Grid, book: Book, wanted: Column) -> Cell:
+    """Return the heading of a column of a table."""
+    sheet, bounds = _area(book, grid.table.name)
+    return Cell(sheet, bounds.top, bounds.left + reader.column_number(grid, wanted))
+
+
 def _criteria(reader: Reader, book: Book, inputs: bool) -> Iterator[Place]:
     for block in reader.layout.criteria:
         for direction in DIRECTIONS if block.per_direction else (None,):
@@ -41,10 +53,10 @@ def _criteria(reader: Reader, book: Book, inputs: bool) -> Iterator[Place]:
 def _rows(reader: Reader, book: Book, inputs: bool) -> Iterator[Place]:
     for grid in reader.layout.grids:
         sheet, bounds = _area(book, grid.table.name)
-        rows = [bounds.top + n for n in reader.row_numbers(grid)]
-        for path, column in _columns(reader, grid, inputs):
-            for n, row in enumerate(rows, 1):
-                yield path.format(n), Cell(sheet, row, bounds.left + column)
+        numbers = rows(reader, grid, book)
+        for path, place in _columns(reader, grid, inputs):
+            for n, row in enumerate(numbers, 1):
+                yield path.format(n), Cell(sheet, row, bounds.left + place)
 
 
 def _columns(reader: Reader, grid: Grid, inputs: bool) -> Iterator[tuple[str, int]]:

@@ -86,10 +86,10 @@ class Reader:
     def row_numbers(self, grid: Grid) -> list[int]:
         """Return which rows of a named table count, from 0 at its headings: those with any input filled in.
 
-        A link filled down an empty row does not count.
+        A link filled down an empty row does not count, nor does anything in a guard row.
         """
         inputs = [self.column_number(grid, c) for c in grid.columns if _marks_a_row(c.quantity)]
-        rows = list(enumerate(self._tables[grid.table.name]))[HEADER_ROWS:]
+        rows = list(enumerate(self._tables[grid.table.name]))[HEADER_ROWS + 1 : -1]
         return [n for n, row in rows if any(row[i] is not None for i in inputs)]
 
     def _has(self, part: Part) -> bool:

@@ -58,6 +58,7 @@ def clause(edition: str, key: str) -> Clause:
     return found
 
 
+@cache
 def rules(edition: str) -> Mapping[str, Clause]:
     """Return every rule of an edition by its key, in the order of the data file."""
     standard, entries, *_ = _edition(choice("edition", edition, EDITIONS))

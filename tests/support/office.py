@@ -62,6 +62,22 @@ class Book(office.Book):
         """Delete rows from ``row`` on."""
         self._job("delete_rows", sheet, row, count)
 
+    def insert_columns(self, sheet: str, column: int, count: int = 1) -> None:
+        """Insert columns before ``column`` (counted from 1)."""
+        self._job("insert_columns", sheet, column, count)
+
+    def insert_sheet(self, sheet: str, place: int) -> None:
+        """Insert an empty sheet before the one at ``place`` (counted from 0)."""
+        self._job("insert_sheet", sheet, place)
+
+    def rename_sheet(self, sheet: str, name: str) -> None:
+        """Give a sheet another name; formulas follow."""
+        self._job("rename_sheet", sheet, name)
+
+    def move_sheet(self, sheet: str, place: int) -> None:
+        """Move a sheet before the one at ``place`` (counted from 0)."""
+        self._job("move_sheet", sheet, place)
+
     def fill_down(self, sheet: str, cells: str) -> None:
         """Copy the first row of a range into the rows below it."""
         self._job("fill_down", sheet, cells)

@@ -53,6 +53,18 @@ class EditingJobs(Jobs):
     def delete_rows(self, book, sheet, row, count=1):
         self._sheet(book, sheet).Rows.removeByIndex(row - 1, count)
 
+    def insert_columns(self, book, sheet, column, count=1):
+        self._sheet(book, sheet).Columns.insertByIndex(column - 1, count)
+
+    def insert_sheet(self, book, sheet, place):
+        self.books[book].Sheets.insertNewByName(sheet, place)
+
+    def rename_sheet(self, book, sheet, name):
+        self._sheet(book, sheet).Name = name
+
+    def move_sheet(self, book, sheet, place):
+        self.books[book].Sheets.moveByName(sheet, place)
+
     def fill_down(self, book, sheet, cells):
         """Copy the first row of a range into the rows below it."""
         self._range(book, sheet, cells).fillSeries(TO_BOTTOM, SIMPLE, FILL_DATE_DAY, 1.0, 1e300)

@@ -114,11 +114,15 @@ def headline_text(line: Headline, units: str) -> str:
 def _draw_texts(sheet: Worksheet, title: str, texts: tuple[str, ...], row: int) -> int:
     """Write each text into one cell, broken over lines that fit the width of the page."""
     style.write(sheet.cell(row, 1), title, style.HEADING)
-    for text in texts:
-        for line in textwrap.wrap(text, 125):
-            row += 1
-            style.write(sheet.cell(row, 1), line)
+    for line in (line for text in texts for line in lines(text)):
+        row += 1
+        style.write(sheet.cell(row, 1), line)
     return row + 1
+
+
+def lines(text: str) -> list[str]:
+    """Return a text broken over the lines of the page."""
+    return textwrap.wrap(text, 125)
 
 
 def _draw_legend(sheet: Worksheet, row: int) -> int:

@@ -5,7 +5,7 @@ from __future__ import annotations
 from collections.abc import Callable
 from typing import Final, TypeAlias
 
-from xlbridge.audit import cells, model
+from xlbridge.audit import cells, map, model
 from xlbridge.audit.finding import Checked
 from xlbridge.audit.subject import Subject
 
@@ -14,4 +14,5 @@ Method: TypeAlias = Callable[[Subject], Checked]
 METHODS: Final[tuple[Method, ...]] = (
     cells.check,
     model.check,
+    map.check,
 )

@@ -9,6 +9,7 @@ from functools import cached_property
 from pathlib import Path
 from typing import TypeAlias
 
+from xlbridge.audit.align import Alignment, align
 from xlbridge.audit.template import OwnTemplate
 from xlbridge.headless.book import Book
 from xlbridge.headless.compute import FUNCTIONS
@@ -41,6 +42,11 @@ class Subject:
     def results(self) -> Results:
         """Every formula cell evaluated."""
         return self.evaluator.evaluate_all()
+
+    @cached_property
+    def alignment(self) -> Alignment:
+        """Which of its cells is which of its twin's; empty for a workbook of another make."""
+        return align(self.book, self.own) if self.own else Alignment(())
 
     @cached_property
     def sha256(self) -> str:

@@ -19,6 +19,22 @@ class Headline:
     cell: Cell
 
 
+@dataclass(frozen=True, slots=True)
+class TableRows:
+    """The rows of a table that count: on ``sheet`` of the twin they follow each other from ``first`` on."""
+
+    sheet: str
+    name: str
+    first: int
+    rows: tuple[int, ...]
+    """The same rows in the workbook under audit."""
+
+    @property
+    def guards(self) -> tuple[int, int]:
+        """The guard rows of the twin, above and below: ranges run from one to the other."""
+        return self.first - 1, self.first + len(self.rows)
+
+
 @dataclass(frozen=True)
 class OwnTemplate:
     """A workbook of ours read back.
@@ -26,7 +42,9 @@ class OwnTemplate:
     ``inputs`` are the tables of its BUILDING.toml, ``results`` the results of its cells by symbol;
     ``places`` says in which cell a result or an entry stands, by its path (``direction.X.F_x[3]``, lists
     from 1); ``twin`` is the workbook built anew for the same inputs: the expected formulas, labels, formats
-    and names. ``unread`` says why the inputs cannot be read, where that is so: nothing else is known then.
+    and names. ``tables`` pairs the rows of tables; ``entries`` are the cells of the twin that the user fills
+    in, ``checks`` those that judge the workbook, ``cautions`` those that say what it may be used for.
+    ``unread`` says why the inputs cannot be read, where that is so: nothing else is known then.
     """
 
     inputs: Mapping[str, Any] = field(default_factory=dict)
@@ -34,4 +52,8 @@ class OwnTemplate:
     places: Mapping[str, Cell] = field(default_factory=dict)
     headlines: tuple[Headline, ...] = ()
     twin: Book | None = None
+    tables: tuple[TableRows, ...] = ()
+    entries: frozenset[Cell] = frozenset()
+    checks: frozenset[Cell] = frozenset()
+    cautions: frozenset[Cell] = frozenset()
     unread: str = ""

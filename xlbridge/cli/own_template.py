@@ -2,18 +2,17 @@
 
 from __future__ import annotations
 
-from collections.abc import Iterator, Mapping
-from typing import Any, Final
+from collections.abc import Iterator
+from typing import Final
 
 from engine.errors import EngineError
 from engine.units import symbol
 from workbook_templates import layout, places
-from workbook_templates.build import draw, draw_native
 from workbook_templates.draw import cover
 from workbook_templates.read import Reader, ReadError
 from xlbridge.audit.template import Headline, OwnTemplate
+from xlbridge.cli import twin
 from xlbridge.headless.book import Book
-from xlbridge.headless.compute import FUNCTIONS, Computed
 from xlbridge.headless.evaluate import Evaluator
 from xlbridge.headless.references import Cell
 
@@ -29,28 +28,20 @@ def own_template(evaluator: Evaluator) -> OwnTemplate | None:
     reader = Reader(evaluator.evaluate_text)
     try:
         inputs = reader.inputs()
+        made = twin.twin(reader, book, inputs)
         return OwnTemplate(
             inputs,
             reader.results(),
             {**places.entries(reader, book), **places.results(reader, book)},
             tuple(_headlines(reader, book)),
-            _twin(inputs, is_issue_copy(book)),
+            made,
+            tuple(twin.tables(reader, book)),
+            frozenset(twin.entries(made)),
+            frozenset(twin.checks(made)),
+            frozenset(twin.cautions(made)),
         )
     except (ReadError, EngineError) as error:
         return OwnTemplate(unread=str(error))
-
-
-def is_issue_copy(book: Book) -> bool:
-    """Whether a workbook of ours is written in built-in functions."""
-    return not any("ELF_" in f.text for formulas in book.formulas.values() for f in formulas.values())
-
-
-def _twin(inputs: Mapping[str, Any], issue: bool) -> Book:
-    drawn = Book.of(draw(inputs))
-    if not issue:
-        return drawn
-    evaluator = Evaluator(drawn, FUNCTIONS)
-    return Book.of(draw_native(inputs, Computed(evaluator, evaluator.evaluate_all()).values))
 
 
 def _headlines(reader: Reader, book: Book) -> Iterator[Headline]:
