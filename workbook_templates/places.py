@@ -3,23 +3,32 @@
 from __future__ import annotations
 
 from collections.abc import Iterator
+from typing import NamedTuple
 
-from workbook_templates.declare import DIRECTIONS
+from workbook_templates.declare import DIRECTIONS, Quantity
 from workbook_templates.layout import Column, Grid
 from workbook_templates.read import Reader
 from xlbridge.headless.book import Book
 from xlbridge.headless.references import Bounds, Cell, parse_bounds
 
-Place = tuple[str, Cell]
+
+class Place(NamedTuple):
+    """Where an entry or a result stands, and what it is."""
+
+    cell: Cell
+    quantity: Quantity
 
 
-def entries(reader: Reader, book: Book) -> dict[str, Cell]:
-    """Return the cell of each entry by its path in BUILDING.toml: ``site.S_DS``, ``level[2].weight``."""
+Found = tuple[str, Place]
+
+
+def entries(reader: Reader, book: Book) -> dict[str, Place]:
+    """Return the place of each entry by its path in BUILDING.toml: ``site.S_DS``, ``level[2].weight``."""
     return {**dict(_criteria(reader, book, True)), **dict(_rows(reader, book, True))}
 
 
-def results(reader: Reader, book: Book) -> dict[str, Cell]:
-    """Return the cell of each result by its path in the package: ``direction.X.F_x[3]``."""
+def results(reader: Reader, book: Book) -> dict[str, Place]:
+    """Return the place of each result by its path in the package: ``direction.X.F_x[3]``."""
     return {**dict(_criteria(reader, book, False)), **dict(_rows(reader, book, False))}
 
 
@@ -41,30 +50,30 @@ def column(reader: Reader, grid: Grid, book: Book, wanted: Column) -> Cell:
     return Cell(sheet, bounds.top, bounds.left + reader.column_number(grid, wanted))
 
 
-def _criteria(reader: Reader, book: Book, inputs: bool) -> Iterator[Place]:
+def _criteria(reader: Reader, book: Book, inputs: bool) -> Iterator[Found]:
     for block in reader.layout.criteria:
         for direction in DIRECTIONS if block.per_direction else (None,):
             for q in block.quantities:
                 if q.is_input is inputs:
                     home = _home(direction) or ("site." if inputs else "")
-                    yield f"{home}{q.key}", cell_of(book, reader.layout.name(q.key, direction))
+                    yield f"{home}{q.key}", Place(cell_of(book, reader.layout.name(q.key, direction)), q)
 
 
-def _rows(reader: Reader, book: Book, inputs: bool) -> Iterator[Place]:
+def _rows(reader: Reader, book: Book, inputs: bool) -> Iterator[Found]:
     for grid in reader.layout.grids:
         sheet, bounds = _area(book, grid.table.name)
         numbers = rows(reader, grid, book)
-        for path, place in _columns(reader, grid, inputs):
+        for path, place, q in _columns(reader, grid, inputs):
             for n, row in enumerate(numbers, 1):
-                yield path.format(n), Cell(sheet, row, bounds.left + place)
+                yield path.format(n), Place(Cell(sheet, row, bounds.left + place), q)
 
 
-def _columns(reader: Reader, grid: Grid, inputs: bool) -> Iterator[tuple[str, int]]:
+def _columns(reader: Reader, grid: Grid, inputs: bool) -> Iterator[tuple[str, int, Quantity]]:
     """The path of each column, with a place for the number of the row."""
     for c in (c for c in grid.columns if c.quantity.is_input is inputs):
         key = c.quantity.stored_key(c.direction)
         path = f"{grid.table.stored}[{{}}].{key}" if inputs else f"{_home(c.direction)}{c.quantity.key}[{{}}]"
-        yield path, reader.column_number(grid, c)
+        yield path, reader.column_number(grid, c), c.quantity
 
 
 def _home(direction: str | None) -> str:

@@ -35,7 +35,7 @@ def test_each_result_and_each_entry_stands_where_its_path_leads(tmp_path: Path, 
     reader = Reader(evaluator.evaluate_text)
     results, cells = dict(leaves(reader.results())), places.results(reader, evaluator.book)
     assert set(results) == set(cells)
-    assert {path: evaluator.value(*cell) for path, cell in cells.items()} == results
+    assert {path: evaluator.value(*place.cell) for path, place in cells.items()} == results
     assert len(results) > 1000
     inputs, cells = dict(leaves(reader.inputs())), places.entries(reader, evaluator.book)
     fixed = {"title", "edition", "units"}
@@ -43,8 +43,8 @@ def test_each_result_and_each_entry_stands_where_its_path_leads(tmp_path: Path, 
     entries = {p: v for p, v in inputs.items() if p not in fixed and not p.startswith(home)}
     assert set(entries) <= set(cells)
     words = {True: "yes", False: "no"}
-    assert {p: evaluator.value(*cells[p]) for p in entries} == {
+    assert {p: evaluator.value(*cells[p].cell) for p in entries} == {
         p: words[v] if isinstance(v, bool) else v for p, v in entries.items()
     }
-    blank = {evaluator.value(*cells[path]) for path in set(cells) - set(entries)}
+    blank = {evaluator.value(*cells[path].cell) for path in set(cells) - set(entries)}
     assert blank <= {None, ""}

@@ -2,11 +2,9 @@
 
 from __future__ import annotations
 
-from engine.building import from_mapping, solve
-from engine.errors import EngineError
 from xlbridge.audit.finding import Checked, NotChecked, Observation, Place
 from xlbridge.audit.routes import Difference, compare
-from xlbridge.audit.subject import Subject
+from xlbridge.audit.subject import NO_INPUTS, Subject, Unsolved
 from xlbridge.audit.template import OwnTemplate
 
 
@@ -14,15 +12,11 @@ def check(subject: Subject) -> Checked:
     """Solve the building of the workbook's inputs, and compare every result that both routes have."""
     own = subject.own
     if own is None:
-        why = "the workbook is not laid out as one of ours, so its inputs cannot be told from its results"
-        return Checked("model", 0, not_checked=(NotChecked("model route", why),))
-    if own.unread:
-        return _unreadable(own.unread)
+        return Checked("model", 0, not_checked=(NotChecked("model route", NO_INPUTS),))
     try:
-        model = solve(from_mapping(own.inputs)).to_json()
-    except EngineError as error:
+        agreement = compare(own.results, subject.model)
+    except Unsolved as error:
         return _unreadable(str(error))
-    agreement = compare(own.results, model)
     return Checked("model", agreement.compared, tuple(_observed(own, d) for d in agreement.differences))
 
 

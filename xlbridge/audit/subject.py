@@ -7,16 +7,26 @@ from collections.abc import Callable
 from dataclasses import dataclass
 from functools import cached_property
 from pathlib import Path
-from typing import TypeAlias
+from typing import Any, Final, TypeAlias
 
+from engine.building import from_mapping, solve
+from engine.errors import EngineError
 from xlbridge.audit.align import Alignment, align
 from xlbridge.audit.template import OwnTemplate
 from xlbridge.headless.book import Book
 from xlbridge.headless.compute import FUNCTIONS
 from xlbridge.headless.evaluate import Evaluator, Results
 
+NO_INPUTS: Final = (
+    "the workbook is not laid out as one of ours, so its inputs cannot be told from its results"
+)
+
 #: says what is known of a workbook of ours, and nothing of any other
 Knows: TypeAlias = Callable[[Evaluator], OwnTemplate | None]
+
+
+class Unsolved(ValueError):
+    """There is no package from the inputs alone; the message says why."""
 
 
 @dataclass(frozen=True)
@@ -47,6 +57,16 @@ class Subject:
     def alignment(self) -> Alignment:
         """Which of its cells is which of its twin's; empty for a workbook of another make."""
         return align(self.book, self.own) if self.own else Alignment(())
+
+    @cached_property
+    def model(self) -> dict[str, Any]:
+        """The package solved from the inputs alone; :class:`Unsolved` says why there is none."""
+        if self.own is None or self.own.unread:
+            raise Unsolved(self.own.unread if self.own else NO_INPUTS)
+        try:
+            return solve(from_mapping(self.own.inputs)).to_json()
+        except EngineError as error:
+            raise Unsolved(str(error)) from error
 
     @cached_property
     def sha256(self) -> str:

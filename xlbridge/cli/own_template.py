@@ -2,20 +2,24 @@
 
 from __future__ import annotations
 
-from collections.abc import Iterator
-from typing import Final
+import re
+from collections.abc import Iterator, Mapping
+from typing import Any, Final
 
 from engine.errors import EngineError
 from engine.units import symbol
 from workbook_templates import layout, places
+from workbook_templates.declare import Quantity
 from workbook_templates.draw import cover
 from workbook_templates.read import Reader, ReadError
-from xlbridge.audit.template import Headline, OwnTemplate
+from xlbridge.audit.template import Headline, Meaning, OwnTemplate
 from xlbridge.cli import twin
 from xlbridge.headless.book import Book
 from xlbridge.headless.evaluate import Evaluator
 from xlbridge.headless.references import Cell
 
+#: the path of an entry in a row of a table
+_ROW: Final = re.compile(r"(\w+)\[(\d+)\]\.")
 #: the names that every workbook of ours has
 MARKS: Final = ("edition", "units", layout.STORY_TABLE.name)
 
@@ -28,20 +32,32 @@ def own_template(evaluator: Evaluator) -> OwnTemplate | None:
     reader = Reader(evaluator.evaluate_text)
     try:
         inputs = reader.inputs()
+        entered = places.entries(reader, book)
+        known = {**entered, **places.results(reader, book)}
         made = twin.twin(reader, book, inputs)
         return OwnTemplate(
             inputs,
             reader.results(),
-            {**places.entries(reader, book), **places.results(reader, book)},
-            tuple(_headlines(reader, book)),
-            made,
-            tuple(twin.tables(reader, book)),
-            frozenset(twin.entries(made)),
-            frozenset(twin.checks(made)),
-            frozenset(twin.cautions(made)),
+            places={path: place.cell for path, place in known.items()},
+            meanings={path: _meaning(inputs, path, place.quantity) for path, place in known.items()},
+            entered=frozenset(entered),
+            headlines=tuple(_headlines(reader, book)),
+            twin=made,
+            tables=tuple(twin.tables(reader, book)),
+            entries=frozenset(twin.entries(made)),
+            checks=frozenset(twin.checks(made)),
+            cautions=frozenset(twin.cautions(made)),
         )
     except (ReadError, EngineError) as error:
         return OwnTemplate(unread=str(error))
+
+
+def _meaning(inputs: Mapping[str, Any], path: str, q: Quantity) -> Meaning:
+    """What a quantity is; a row of a table says once where its entries come from."""
+    unit = symbol(q.unit, inputs["units"]).replace("text", "")
+    row = _ROW.match(path)
+    source = inputs[row[1]][int(row[2]) - 1].get("source") if row else inputs.get("sources", {}).get(q.key)
+    return Meaning(q.text, q.shown_symbol, unit, str(source or ""))
 
 
 def _headlines(reader: Reader, book: Book) -> Iterator[Headline]:
