@@ -12,6 +12,7 @@ from xlbridge.audit import notation
 from xlbridge.audit.align import Alignment
 from xlbridge.audit.cells import agree
 from xlbridge.audit.finding import Checked, NotChecked, Observation, Place
+from xlbridge.audit.merged import swallowed
 from xlbridge.audit.rows import stray
 from xlbridge.audit.subject import Subject
 from xlbridge.audit.template import OwnTemplate
@@ -46,7 +47,10 @@ class _Map:
 
     @cached_property
     def cells(self) -> list[tuple[Cell, Cell]]:
-        """The formulas, fixed numbers and entries of the twin, each with its place in the workbook."""
+        """The formulas, fixed numbers and entries of the twin, each with its place in the workbook.
+
+        A cell that lies under merged ones is another finding.
+        """
         numbers = (
             Cell(sheet, *position)
             for sheet, cells in self.twin.constants.items()
@@ -54,7 +58,8 @@ class _Map:
             if isinstance(value, float) or Cell(sheet, *position) in self.own.entries
         )
         pairs = ((cell, self.alignment.from_twin(cell)) for cell in (*self.twin.formula_cells(), *numbers))
-        return [(cell, found) for cell, found in pairs if found]
+        gone = swallowed(self.subject.book)
+        return [(cell, found) for cell, found in pairs if found and found not in gone]
 
     @cached_property
     def filled_down(self) -> frozenset[tuple[str, int]]:

@@ -21,7 +21,8 @@ from xlbridge.headless.nodes import (
     render,
     walk,
 )
-from xlbridge.headless.references import Bounds, Cell, column_letters, quote_sheet
+from xlbridge.headless.references import Bounds, Cell, column_letters, column_number, quote_sheet
+from xlbridge.headless.shapes import parse
 
 #: what an area of a sheet has become
 Move: TypeAlias = Callable[[str, Bounds], tuple[str, Bounds]]
@@ -67,6 +68,19 @@ def moved(node: Node, home: str, move: Move) -> Node:
         return Reference(text, None if sheet == here else sheet, bounds, part.whole_lines)
 
     return transform(node, change)
+
+
+def filled(text: str, down: int, right: int) -> str:
+    """The text of a formula after it was filled so many rows down and columns to the right."""
+
+    def change(part: Node) -> Node:
+        if not isinstance(part, Reference) or part.whole_lines:
+            return part
+        prefix, mark, local = part.text.rpartition("!")
+        corners = (_shifted(corner, down, right) for corner in local.split(":"))
+        return replace(part, text=f"{prefix}{mark}{':'.join(corners)}")
+
+    return render(transform(parse(text), change))
 
 
 def canonical(node: Node, home: str) -> str:
@@ -151,6 +165,15 @@ def _written(text: str, bounds: Bounds) -> str:
     first, mark, last = text.partition(":")
     start = _corner(first, bounds.top, bounds.left)
     return f"{start}:{_corner(last, bounds.bottom, bounds.right)}" if mark else start
+
+
+def _shifted(corner: str, down: int, right: int) -> str:
+    found = _CORNER.match(corner)
+    if found is None:
+        return corner
+    row = int(found[4]) + (0 if found[3] else down)
+    column = column_number(found[2]) + (0 if found[1] else right)
+    return f"{found[1]}{column_letters(column)}{found[3]}{row}"
 
 
 def _corner(text: str, row: int, column: int) -> str:

@@ -21,8 +21,9 @@ from xlbridge.headless.references import Cell
 
 
 def is_issue_copy(book: Book) -> bool:
-    """Whether a workbook of ours is written in built-in functions."""
-    return not any("ELF_" in f.text for formulas in book.formulas.values() for f in formulas.values())
+    """Whether a workbook of ours is written in built-in functions; Calc writes ours in small letters."""
+    formulas = (f for of_sheet in book.formulas.values() for f in of_sheet.values())
+    return not any("ELF_" in f.text.upper() for f in formulas)
 
 
 def twin(reader: Reader, book: Book, inputs: Mapping[str, Any]) -> Book:

@@ -3,7 +3,6 @@
 from __future__ import annotations
 
 import re
-from collections.abc import Callable
 from pathlib import Path
 from shutil import copy
 
@@ -12,45 +11,8 @@ from openpyxl import Workbook
 from openpyxl.worksheet.formula import ArrayFormula
 
 from tests.support.audited import audited, changed, computed_book, kinds_at
-from workbook_templates.layout import FIRST_LEVEL, Layout
-from workbook_templates.parts import with_required
-
-COUNT = 6
-LAYOUT = Layout(COUNT, with_required(("drift",)))
-LAST = FIRST_LEVEL + COUNT - 1
-
-Change = Callable[[Workbook], object]
-
-
-def levels(key: str, direction: str | None = None, row: int = FIRST_LEVEL + 2) -> str:
-    return f"Levels!{LAYOUT.column(key, direction)}{row}"
-
-
-def criteria(key: str, direction: str | None = None) -> str:
-    return f"Criteria!{LAYOUT.criteria_cell(key, direction)}".replace("$", "")
-
-
-def put(place: str, value: object) -> Change:
-    sheet, address = place.split("!")
-    return lambda book: book[sheet].__setitem__(address, value)
-
-
-def rewrite(place: str, pattern: str, text: str) -> Change:
-    """Change the formula of a cell; a pattern that it does not have is a fault of the test."""
-    sheet, address = place.split("!")
-
-    def change(book: Workbook) -> None:
-        old = book[sheet][address].value
-        new, count = re.subn(pattern, text, old, count=1)
-        assert count == 1, (place, old)
-        book[sheet][address] = new
-
-    return change
-
-
-def both(*changes: Change) -> Change:
-    return lambda book: [change(book) for change in changes]
-
+from tests.support.story_cells import COUNT, LAST, LAYOUT, Change, both, criteria, levels, put, rewrite
+from workbook_templates.layout import FIRST_LEVEL
 
 F_X, C_VX, BELOW = levels("F_x", "X"), levels("C_vx", "X"), levels("F_x", "X", FIRST_LEVEL + 3)
 TOTAL, H_BASE = levels("F_x", "X", LAYOUT.levels.total_row), levels("h_x", row=LAYOUT.levels.base_row)

@@ -1,0 +1,78 @@
+"""How contents show: number formats against those of the twin, and text that cannot be seen."""
+
+from __future__ import annotations
+
+from collections.abc import Iterator
+from typing import Final
+
+from openpyxl.styles.colors import COLOR_INDEX, Color
+
+from xlbridge.audit.finding import Observation, Place
+from xlbridge.audit.manifest.number_formats import hides_text, is_coarser, misleads
+from xlbridge.audit.manifest.pairing import CellPair, Content, Pairing
+
+#: contrast of text against its fill below which it cannot be read
+UNSEEN: Final = 2.0
+_THEME: Final = {0: "FFFFFF", 1: "000000"}
+
+
+def check(pairing: Pairing) -> Iterator[Observation]:
+    """Compare the look of every filled cell with that of the twin."""
+    known: dict[tuple[int, int], bool] = {}
+    for pair in pairing.cells:
+        if pair.found is None or pair.found.value is None:
+            continue
+        if pair.found.number_format != pair.twin.number_format:
+            yield from _number_format(pairing, pair, pair.found)
+        style = pair.found._style.fontId, pair.found._style.fillId  # type: ignore[attr-defined]
+        if style not in known:
+            known[style] = contrast(*colours(pair.found)) < UNSEEN
+        if known[style]:
+            text, fill = colours(pair.found)
+            words = f"the text has the colour {text}, the cell {fill}"
+            yield Observation("text_unseen", Place.of(pair.place), words, found=text, cause=f"{text} {fill}")
+
+
+def _number_format(pairing: Pairing, pair: CellPair, content: Content) -> Iterator[Observation]:
+    expected, found = pair.twin.number_format, content.number_format
+    value = pairing.value(pair.place)
+    if isinstance(value, float) and not isinstance(value, bool):
+        how = misleads(found, expected)
+        kind = "format_misleads" if how else "format_coarse" if is_coarser(found, expected) else ""
+    else:
+        how, kind = ("it hides a text", "format_misleads") if hides_text(found) else ("", "")
+    if kind:
+        words = f"the number format is {found}, not {expected}: {how or 'it shows fewer digits'}"
+        cause = f"{pair.cell.sheet} {pair.cell.column} {found}"
+        yield Observation(kind, Place.of(pair.place), words, expected, found, stored=value, cause=cause)
+
+
+def colours(content: Content) -> tuple[str, str]:
+    """The colours of a cell's text and of its fill; black on white where they cannot be told."""
+    fill = content.fill
+    solid = fill is not None and fill.fill_type == "solid"
+    return _rgb(content.font.color, "000000"), _rgb(fill.fgColor, "FFFFFF") if solid else "FFFFFF"
+
+
+def _rgb(colour: Color | None, otherwise: str) -> str:
+    if colour is None:
+        return otherwise
+    if colour.type == "rgb" and isinstance(colour.rgb, str):
+        return colour.rgb[-6:].upper()
+    if colour.type == "theme" and not colour.tint:
+        return _THEME.get(colour.theme, otherwise)
+    if colour.type == "indexed" and colour.indexed < len(COLOR_INDEX):
+        return str(COLOR_INDEX[colour.indexed])[-6:].upper()
+    return otherwise
+
+
+def contrast(text: str, fill: str) -> float:
+    """The contrast of two colours by WCAG 2: 1 is none, 21 is black on white."""
+    light, dark = sorted((_luminance(text), _luminance(fill)), reverse=True)
+    return (light + 0.05) / (dark + 0.05)
+
+
+def _luminance(colour: str) -> float:
+    parts = (int(colour[n : n + 2], 16) / 255 for n in (0, 2, 4))
+    r, g, b = (p / 12.92 if p <= 0.04045 else ((p + 0.055) / 1.055) ** 2.4 for p in parts)
+    return 0.2126 * r + 0.7152 * g + 0.0722 * b
