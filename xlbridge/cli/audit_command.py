@@ -3,30 +3,66 @@
 from __future__ import annotations
 
 import json
-from collections.abc import Iterator
+from collections.abc import Callable, Iterator
 from pathlib import Path
+from typing import Final
 
 import click
 
 from xlbridge.audit.audit import Audit, audit
 from xlbridge.audit.kinds import Severity
+from xlbridge.audit.record import Record
 from xlbridge.audit.report import as_json
+from xlbridge.audit.report.page import page
 from xlbridge.audit.subject import Subject
-from xlbridge.cli.failure import CLEAN, FINDINGS, INCOMPLETE
+from xlbridge.cli.failure import CLEAN, FINDINGS, INCOMPLETE, Refusal
+from xlbridge.cli.files import refuse_existing, refuse_input, write_new
 from xlbridge.cli.own_template import own_template
 
 SHOWN = 6
 
 
+def _html(outcome: Audit, record: Record) -> bytes:
+    return page(outcome, record).encode()
+
+
+def _json(outcome: Audit, record: Record) -> bytes:
+    return json.dumps(as_json.record(outcome), indent=1, ensure_ascii=False).encode()
+
+
+FORMS: Final[dict[str, Callable[[Audit, Record], bytes]]] = {".html": _html, ".json": _json}
+
+
 @click.command("audit")
 @click.argument("book", type=click.Path(path_type=Path))
 @click.option("--json", "json_wanted", is_flag=True, help="Print the audit as JSON.")
-def command(book: Path, json_wanted: bool) -> int:
+@click.option(
+    "--report",
+    "reports",
+    multiple=True,
+    type=click.Path(path_type=Path),
+    help="F.html or F.json; repeatable.",
+)
+@click.option(
+    "--record", type=click.Path(path_type=Path), help="The check record saved from an earlier page."
+)
+@click.option("--force", is_flag=True, help="Replace existing reports.")
+def command(
+    book: Path, json_wanted: bool, reports: tuple[Path, ...], record: Path | None, force: bool
+) -> int:
     """Prove BOOK cell by cell and from its inputs alone, or name what is wrong.
 
     Exit code 1 says that there are errors or warnings, 2 that something could not be checked.
     """
+    for target in reports:
+        if target.suffix.lower() not in FORMS:
+            raise Refusal(f"{target}: a report ends in {' or '.join(FORMS)}")
+        refuse_input(target, book)
+        refuse_existing(target, force)
+    said = Record.read(record.read_text(encoding="utf-8")) if record else Record()
     outcome = audit(Subject.open(book, own_template))
+    for target in reports:
+        write_new(target, FORMS[target.suffix.lower()](outcome, said), force)
     if json_wanted:
         click.echo(json.dumps(as_json.record(outcome), indent=1, ensure_ascii=False))
     else:

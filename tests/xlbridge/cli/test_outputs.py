@@ -39,7 +39,9 @@ def workbook(path: Path, **cells: object) -> Path:
 
 class TestDemo:
     def test_leaves_inputs_workbook_and_results(self, demo: Path) -> None:
-        assert {p.name for p in demo.iterdir()} == {"building.toml", "story.xlsx", "results.json", "said.txt"}
+        left = {"building.toml", "story.xlsx", "results.json", "audit.html", "said.txt"}
+        assert {p.name for p in demo.iterdir()} == left
+        assert "✓ nothing found" in (demo / "audit.html").read_text(encoding="utf-8")
         assert (demo / "building.toml").read_text(encoding="utf-8") == building_text()
         package = solve(from_mapping(tomllib.loads(building_text())))
         assert json.loads((demo / "results.json").read_text(encoding="utf-8")) == json.loads(

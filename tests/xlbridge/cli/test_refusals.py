@@ -66,6 +66,11 @@ CALLS = {
     "inputs: over a folder": (["inputs", "{}/good.xlsx", "-o", "{}/folder.xlsx", "--force"], ["folder"]),
     "inputs: into no folder": (["inputs", "{}/good.xlsx", "-o", "{}/no/b.toml"], ["the folder", "not exist"]),
     "audit: words": (["audit", "{}/words.xlsx"], ["not a workbook"]),
+    "audit: a report of another kind": (
+        ["audit", "{}/good.xlsx", "--report", "{}/a.doc"],
+        ["a.doc", ".html"],
+    ),
+    "audit: no record": (["audit", "{}/good.xlsx", "--record", "{}/good.toml"], ["record is not JSON"]),
     "audit: no such file": (["audit", "{}/none.xlsx"], ["no such file"]),
     "inputs: words": (["inputs", "{}/words.xlsx"], ["not a workbook"]),
     "inputs: no such file": (["inputs", "{}/none.xlsx"], ["no such file"]),
@@ -119,12 +124,13 @@ OUTPUTS = {
     "calc-addin": (["calc-addin", "{}/taken.oxt"], "taken.oxt"),
     "names": (["names", "{}/good.xlsx", "--for", "calc"], "good-calc.xlsx"),
     "print": (["print", "{}/good.xlsx"], "good.pdf"),
+    "audit": (["audit", "{}/good.xlsx", "--report", "{}/audit.html"], "audit.html"),
     "demo": (["demo", "{}"], "story.xlsx"),
 }
 
 
 #: what a command writes besides
-BESIDE = {"demo": ("building.toml", "results.json"), "new with macros": ("storyledger.bas",)}
+BESIDE = {"demo": ("building.toml", "results.json", "audit.html"), "new with macros": ("storyledger.bas",)}
 
 
 @pytest.mark.parametrize("case", OUTPUTS)
