@@ -54,9 +54,10 @@ def _criteria(reader: Reader, book: Book, inputs: bool) -> Iterator[Found]:
     for block in reader.layout.criteria:
         for direction in DIRECTIONS if block.per_direction else (None,):
             for q in block.quantities:
-                if q.is_input is inputs:
+                name = reader.layout.name(q.key, direction)
+                if q.is_input is inputs and _is_area(book, name):
                     home = _home(direction) or ("site." if inputs else "")
-                    yield f"{home}{q.key}", Place(cell_of(book, reader.layout.name(q.key, direction)), q)
+                    yield f"{home}{q.key}", Place(cell_of(book, name), q)
 
 
 def _rows(reader: Reader, book: Book, inputs: bool) -> Iterator[Found]:
@@ -78,6 +79,15 @@ def _columns(reader: Reader, grid: Grid, inputs: bool) -> Iterator[tuple[str, in
 
 def _home(direction: str | None) -> str:
     return f"direction.{direction}." if direction else ""
+
+
+def _is_area(book: Book, name: str) -> bool:
+    """Whether a name leads to cells: one that was deleted or stands for a value does not."""
+    try:
+        _area(book, name)
+    except (KeyError, ValueError):
+        return False
+    return True
 
 
 def _area(book: Book, name: str) -> tuple[str, Bounds]:

@@ -32,9 +32,10 @@ class ReadError(ValueError):
 
 @dataclass(frozen=True)
 class Reader:
-    """Reads one story workbook."""
+    """Reads one story workbook; a lenient one passes over what cannot be read instead of refusing it."""
 
     ask: Ask
+    lenient: bool = False
 
     def inputs(self) -> dict[str, Any]:
         """Return the tables of a BUILDING.toml."""
@@ -68,11 +69,24 @@ class Reader:
         tables: dict[str, tuple[Row, ...]] = {}
         for name in {t.name for part in PARTS.values() for t in (STORY_TABLE, *part.tables)}:
             if self._defined(name):
-                found = self._value(name)
+                found = self._cells(name) if self.lenient else self._value(name)
                 if not isinstance(found, tuple) or len(found) <= HEADER_ROWS:
-                    raise ReadError(f"{name}: the name does not cover a table")
-                tables[name] = found
+                    self._refuse(f"{name}: the name does not cover a table")
+                else:
+                    tables[name] = found
         return tables
+
+    def _cells(self, name: str) -> tuple[Row, ...]:
+        """Return an area cell by cell, so that one without a value does not take the others with it."""
+        rows, columns = (int(self._number(f"{count}({name})")) for count in ("ROWS", "COLUMNS"))
+        return tuple(
+            tuple(self._cell(f"INDEX({name},{row},{column})") for column in range(1, columns + 1))
+            for row in range(1, rows + 1)
+        )
+
+    def _number(self, text: str) -> float:
+        value = self.ask(f"={text}")
+        return value if isinstance(value, float) else 0.0
 
     def _headings(self, table: Table) -> Row:
         if table.name not in self._tables:
@@ -116,17 +130,21 @@ class Reader:
 
     def _defined(self, name: str) -> bool:
         try:
-            self.ask(f"={name}")
+            self.ask(f"=ROWS({name})" if self.lenient else f"={name}")
         except NotEvaluated:
             return False
         return True
 
     def column_number(self, grid: Grid, column: Column) -> int:
-        """Return which column of a named table holds a quantity, from 0; it is found by its heading."""
+        """Return which column of a named table holds a quantity, from 0; it is found by its heading.
+
+        Without one, the lenient reader takes the column where it was when the workbook was made.
+        """
         headings = self._headings(grid.table)
-        if column.heading not in headings:
-            raise ReadError(f"the {grid.table.title.lower()} has no column headed {column.heading}")
-        return headings.index(column.heading)
+        if column.heading in headings:
+            return headings.index(column.heading)
+        self._refuse(f"the {grid.table.title.lower()} has no column headed {column.heading}")
+        return min(grid.columns.index(column), len(headings) - 1)
 
     def _quantities(self, direction: str | None, wanted: bool) -> Iterator[Quantity]:
         for block in self.layout.criteria:
@@ -140,7 +158,7 @@ class Reader:
             name = self.layout.name(q.key, direction)
             value = self._cell(name)
             if value in (None, "") and not q.may_be_blank:
-                raise ReadError(f"{name}: the cell is blank")
+                self._refuse(f"{name}: the cell is blank")
             values[q.key] = FLAGS.get(str(value), value) if q.is_flag else value
         return _filled(values)
 
@@ -155,7 +173,7 @@ class Reader:
         return [
             _filled(
                 {
-                    key: _read(f"{grid.table.stored} {row[0]}: {key}", row[i], key in words)
+                    key: self._read(f"{grid.table.stored} {row[0]}: {key}", row[i], key in words)
                     for key, i in keys.items()
                 }
             )
@@ -182,35 +200,37 @@ class Reader:
         try:
             return self.ask(f"={name}")
         except NotEvaluated as error:
+            if self.lenient:
+                return None
             raise ReadError(f"{name}: {error}") from error
 
     def _cell(self, name: str) -> Scalar:
         """Return the content of a named cell, ``None`` if it is blank."""
         value = self._value(name)
         if isinstance(value, tuple):
-            raise ReadError(f"{name}: the name covers more than one cell")
-        return None if self._value(f"ISBLANK({name})") is True else _sound(name, value)
+            self._refuse(f"{name}: the name covers more than one cell")
+            return None
+        return None if self._value(f"ISBLANK({name})") is True else self._sound(name, value)
+
+    def _sound(self, field: str, value: Scalar) -> Scalar:
+        if isinstance(value, CellError):
+            self._refuse(f"{field}: the cell holds {value.code}")
+            return None
+        return value
+
+    def _read(self, field: str, value: Scalar, is_text: bool) -> Scalar:
+        """Return a cell of a table; a level that is named 8 is called "8", as the cell shows it."""
+        sound = self._sound(field, value)
+        return f"{sound:g}" if is_text and isinstance(sound, float) else sound
+
+    def _refuse(self, message: str) -> None:
+        if not self.lenient:
+            raise ReadError(message)
 
 
 def _marks_a_row(q: Quantity) -> bool:
     """Whether a filled cell of the column makes its row one: a link filled down an empty row does not."""
     return q.role is Role.FIXED or (q.is_input and not q.linked)
-
-
-def _sound(field: str, value: Scalar) -> Scalar:
-    if isinstance(value, CellError):
-        raise ReadError(f"{field}: the cell holds {value.code}")
-    return value
-
-
-def _field(grid: Grid, row: Row, key: str) -> str:
-    return f"{grid.table.stored} {row[0]}: {key}"
-
-
-def _read(field: str, value: Scalar, is_text: bool) -> Scalar:
-    """Return a cell of a table; a level that is named 8 is called "8", as the cell shows it."""
-    sound = _sound(field, value)
-    return f"{sound:g}" if is_text and isinstance(sound, float) else sound
 
 
 def _filled(entries: dict[str, Any]) -> dict[str, Any]:

@@ -194,7 +194,7 @@ def first_cell(text: str) -> Cell | None:
 
 @dataclass(frozen=True)
 class _Likeness:
-    """How much two lines share: texts, and formulas without their references."""
+    """How much two lines share: texts, formulas without their references, fills of empty cells."""
 
     twin: Book
     mine: str
@@ -218,6 +218,9 @@ class _Likeness:
             found[position[self.axis]][str(value)] += 1
         for position, formula in book.formulas[sheet].items():
             found[position[self.axis]][REFERENCE.sub("", formula.text)] += 1
+        for position, cell in book.workbook[sheet]._cells.items() if book.workbook else ():
+            if cell.value is None and cell.fill.fill_type == "solid":
+                found[position[self.axis]][f"fill {str(cell.fill.fgColor.rgb)[-6:]}"] += 1
         return found
 
     def shared(self, line: int, found: int) -> int:

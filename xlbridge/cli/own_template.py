@@ -4,6 +4,7 @@ from __future__ import annotations
 
 import re
 from collections.abc import Iterator, Mapping
+from dataclasses import replace
 from typing import Any, Final
 
 from engine.errors import EngineError
@@ -11,7 +12,7 @@ from engine.units import symbol
 from workbook_templates import layout, places
 from workbook_templates.declare import Quantity
 from workbook_templates.draw import cover
-from workbook_templates.read import Reader, ReadError
+from workbook_templates.read import Reader
 from xlbridge.audit.template import Headline, Meaning, OwnTemplate
 from xlbridge.cli import twin
 from xlbridge.headless.book import Book
@@ -29,27 +30,44 @@ def own_template(evaluator: Evaluator) -> OwnTemplate | None:
     book = evaluator.book
     if not all((None, mark) in book.names for mark in MARKS):
         return None
-    reader = Reader(evaluator.evaluate_text)
     try:
-        inputs = reader.inputs()
-        entered = places.entries(reader, book)
-        known = {**entered, **places.results(reader, book)}
-        made = twin.twin(reader, book, inputs)
-        return OwnTemplate(
-            inputs,
-            reader.results(),
-            places={path: place.cell for path, place in known.items()},
-            meanings={path: _meaning(inputs, path, place.quantity) for path, place in known.items()},
-            entered=frozenset(entered),
-            headlines=tuple(_headlines(reader, book)),
-            twin=made,
-            tables=tuple(twin.tables(reader, book)),
-            entries=frozenset(twin.entries(made)),
-            checks=frozenset(twin.checks(made)),
-            cautions=frozenset(twin.cautions(made)),
-        )
-    except (ReadError, EngineError) as error:
-        return OwnTemplate(unread=str(error))
+        return _known(Reader(evaluator.evaluate_text), book)
+    except (EngineError, ValueError) as error:
+        return _unread(Reader(evaluator.evaluate_text, lenient=True), book, str(error))
+
+
+def _known(reader: Reader, book: Book) -> OwnTemplate:
+    inputs, results = reader.inputs(), reader.results()
+    entered = places.entries(reader, book)
+    known = {**entered, **places.results(reader, book)}
+    return replace(
+        _beside_twin(reader, book, inputs),
+        inputs=inputs,
+        results=results,
+        places={path: place.cell for path, place in known.items()},
+        meanings={path: _meaning(inputs, path, place.quantity) for path, place in known.items()},
+        entered=frozenset(entered),
+    )
+
+
+def _unread(reader: Reader, book: Book, why: str) -> OwnTemplate:
+    """What is known of a workbook whose inputs cannot be read: its twin, as far as it can be told."""
+    try:
+        return replace(_beside_twin(reader, book, reader.inputs()), unread=why)
+    except (EngineError, ValueError, KeyError, TypeError):
+        return OwnTemplate(unread=why)  # too little is left of it
+
+
+def _beside_twin(reader: Reader, book: Book, inputs: Mapping[str, Any]) -> OwnTemplate:
+    made = twin.twin(reader, book, inputs)
+    return OwnTemplate(
+        headlines=tuple(_headlines(reader, book)),
+        twin=made,
+        tables=tuple(twin.tables(reader, book)),
+        entries=frozenset(twin.entries(made)),
+        checks=frozenset(twin.checks(made)),
+        cautions=frozenset(twin.cautions(made)),
+    )
 
 
 def _meaning(inputs: Mapping[str, Any], path: str, q: Quantity) -> Meaning:

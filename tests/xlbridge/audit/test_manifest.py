@@ -13,10 +13,11 @@ from openpyxl.styles import Font, PatternFill
 from openpyxl.workbook.defined_name import DefinedName
 
 from tests.support.audited import audited, changed, computed_book
-from tests.support.story_cells import COUNT, Change, both, criteria, levels, put, style
-from workbook_templates.layout import BAND_ROW, FIRST_LEVEL, TEXT_ROW, UNIT_ROW
+from tests.support.story_cells import COUNT, LAST, Change, both, criteria, levels, put, style
+from workbook_templates.layout import BAND_ROW, FIRST_LEVEL, STORY_TABLE, SYMBOL_ROW, TEXT_ROW, UNIT_ROW
 from xlbridge.audit.manifest.number_formats import hides_text, is_coarser, misleads
 
+T_L_CLAUSE = "Criteria!G11"
 F_X, UNIT, HEADING = levels("F_x", "X"), levels("w_x", row=UNIT_ROW), levels("F_x", "X", TEXT_ROW)
 RATIO, STATUS = levels("drift_verdict", "X"), criteria("S_DS")
 
@@ -174,9 +175,25 @@ def test_what_misleads_is_found_at_its_place(story: Path, fault: str) -> None:
     assert not place or place in {str(p) for f in found for p in f.places}
 
 
-def test_a_name_that_no_formula_uses_is_missed_too(story: Path) -> None:
-    outcome = audited(changed(story, lambda book: book.defined_names.pop("source_S_DS")))
-    assert {"inputs_unreadable"} == {f.kind.key for f in outcome.findings}
+@pytest.mark.parametrize(
+    ("change", "kinds"),
+    [
+        (lambda book: book.defined_names.pop("source_S_DS"), {"name_missing"}),
+        (named("S_DS", "0.9"), {"name_moved", "differs_from_model"}),
+        (named(STORY_TABLE.name, f"Levels!$A$6:$AL${LAST}"), {"name_moved", "differs_from_model"}),
+        (put(levels("F_x", "X", SYMBOL_ROW), "F"), {"label_changed"}),
+        (put(criteria("S_DS"), None), set()),
+        (put(levels("w_x"), "5210 kN"), set()),
+        (put(F_X, f"={levels('V_x', 'X')[7:]}"), {"formula_differs"}),
+    ],
+)
+def test_what_cannot_be_read_is_named_and_the_rest_compared(
+    story: Path, change: Change, kinds: set[str]
+) -> None:
+    """Inputs that cannot be read do not leave the workbook unchecked; nothing else is held against it."""
+    outcome = audited(changed(story, both(change, put(T_L_CLAUSE, "12.8.9"))))
+    found = {f.kind.key for f in outcome.findings} - {"error_value", "no_stored_value", "stale_value"}
+    assert found - {"inputs_unreadable"} == kinds | {"label_changed"}
 
 
 def test_one_fault_down_a_column_is_one_finding(story: Path) -> None:
