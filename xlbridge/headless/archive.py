@@ -24,7 +24,7 @@ class StoreError(ValueError):
     """A workbook that cannot be read, a value that cannot be stored, a file that cannot be written."""
 
 
-def open_archive(source: Path) -> zipfile.ZipFile:
+def open_archive(source: Path | IO[bytes]) -> zipfile.ZipFile:
     """Open a workbook's archive (to be closed by the caller); say in one sentence why it is none."""
     try:
         archive = zipfile.ZipFile(source)
@@ -96,7 +96,7 @@ def rewrite(source: Path, target: Path, changed: Mapping[str, bytes], *, force: 
     temporary = target.with_name(f".{target.name}.{uuid.uuid4().hex[:12]}.tmp")
     try:
         with open_archive(source) as archive, open(temporary, "xb") as stream:
-            _copy(archive, stream, changed)
+            copy_archive(archive, stream, changed)
             stream.flush()
             os.fsync(stream.fileno())
         check_target(source, target, force=force)
@@ -123,7 +123,8 @@ def check_target(source: Path, target: Path, *, force: bool) -> None:
         raise StoreError(f"{target}: is read-only; lift the protection or choose another name")
 
 
-def _copy(archive: zipfile.ZipFile, stream: IO[bytes], changed: Mapping[str, bytes]) -> None:
+def copy_archive(archive: zipfile.ZipFile, stream: IO[bytes], changed: Mapping[str, bytes]) -> None:
+    """Copy an archive with the parts in ``changed`` replaced; those it has not yet stand at its end."""
     ends = _ends(archive)
     with zipfile.ZipFile(stream, "w") as out:
         out.comment = archive.comment
@@ -132,6 +133,10 @@ def _copy(archive: zipfile.ZipFile, stream: IO[bytes], changed: Mapping[str, byt
                 out.writestr(copy(info), changed[info.filename])
             else:
                 _copy_raw(archive, out, info, ends[info.header_offset])
+        for name in (name for name in changed if name not in archive.NameToInfo):
+            added = zipfile.ZipInfo(name)  # of the earliest day there is: two runs give the same bytes
+            added.compress_type = zipfile.ZIP_DEFLATED
+            out.writestr(added, changed[name])
 
 
 def _ends(archive: zipfile.ZipFile) -> dict[int, int]:

@@ -20,7 +20,7 @@ def office_document(archive: zipfile.ZipFile) -> str:
     """The workbook part, as the package's own relationships name it."""
     for relationship in parse_part("_rels/.rels", read_part(archive, "_rels/.rels")).getroot():
         if relationship.get("Type") in tuple(f"{base}/officeDocument" for base in _OFFICE_RELATIONSHIPS):
-            part = _resolved(archive, "", relationship.get("Target", ""))
+            part = resolved(archive, "", relationship.get("Target", ""))
             if part.lower().endswith(".bin"):
                 raise StoreError("a binary workbook (.xlsb); save it as .xlsx or .xlsm first")
             return part
@@ -36,11 +36,11 @@ def sheet_parts(archive: zipfile.ZipFile, workbook_part: str, root: etree._Eleme
     for sheet in root.iterfind(f"{{{etree.QName(root).namespace}}}sheets/*"):
         identifier = next((i for base in _OFFICE_RELATIONSHIPS if (i := sheet.get(f"{{{base}}}id"))), None)
         if identifier in targets and targets[identifier].get("Type", "").endswith("/worksheet"):
-            parts[sheet.get("name", "")] = _resolved(archive, folder, targets[identifier].get("Target", ""))
+            parts[sheet.get("name", "")] = resolved(archive, folder, targets[identifier].get("Target", ""))
     return parts
 
 
-def _resolved(archive: zipfile.ZipFile, folder: str, target: str) -> str:
+def resolved(archive: zipfile.ZipFile, folder: str, target: str) -> str:
     """A relationship's target, relative or absolute, as the archive spells it (names ignore case)."""
     wanted = posixpath.normpath(posixpath.join(folder, target)).lstrip("/")
     spelled = {name.lower(): name for name in archive.namelist()}

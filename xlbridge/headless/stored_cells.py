@@ -50,7 +50,7 @@ def encode(value: Scalar) -> tuple[str | None, str]:
     if isinstance(value, float | int):
         return None, _number(float(value))
     if isinstance(value, str):
-        return "str", _text(value)
+        return "str", encode_text(value)
     if isinstance(value, CellError) and value.code in ERROR_CODES:
         return "e", value.code
     raise StoreError(f"{value!r} is no value that a cell can store")
@@ -63,7 +63,7 @@ def _number(value: float) -> str:
     return str(int(value)) if whole else float.__repr__(value)
 
 
-def _text(value: str) -> str:
+def encode_text(value: str) -> str:
     """Escape what XML cannot hold as ``_xHHHH_`` (ST_Xstring, ECMA-376 part 1, 22.9.2.19)."""
     if len(value) > MAX_TEXT:
         raise StoreError(f"text of {len(value):,} characters; a cell holds at most {MAX_TEXT:,}")
