@@ -8,6 +8,7 @@ from enum import StrEnum
 from functools import cached_property
 
 from xlbridge.audit import group
+from xlbridge.audit.effects import with_effects
 from xlbridge.audit.finding import Checked, Finding, NotChecked
 from xlbridge.audit.kinds import Severity
 from xlbridge.audit.methods import METHODS
@@ -68,4 +69,5 @@ class Audit:
 def audit(subject: Subject) -> Audit:
     """Run every method on a workbook."""
     checks = tuple(method(subject) for method in METHODS)
-    return Audit(subject, checks, group.findings(o for check in checks for o in check.observations))
+    found = group.findings(o for check in checks for o in check.observations)
+    return Audit(subject, checks, with_effects(subject, found))
