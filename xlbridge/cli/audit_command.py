@@ -3,9 +3,9 @@
 from __future__ import annotations
 
 import json
-from collections.abc import Callable, Iterator
+from collections.abc import Callable, Iterator, Mapping
 from pathlib import Path
-from typing import Final
+from typing import Final, TypeAlias
 
 import click
 
@@ -13,6 +13,7 @@ from xlbridge.audit.audit import Audit, audit
 from xlbridge.audit.kinds import Severity
 from xlbridge.audit.record import Record
 from xlbridge.audit.report import as_json
+from xlbridge.audit.report.marked import marked
 from xlbridge.audit.report.page import page
 from xlbridge.audit.subject import Subject
 from xlbridge.cli.failure import CLEAN, FINDINGS, INCOMPLETE, Refusal
@@ -30,7 +31,14 @@ def _json(outcome: Audit, record: Record) -> bytes:
     return json.dumps(as_json.record(outcome), indent=1, ensure_ascii=False).encode()
 
 
-FORMS: Final[dict[str, Callable[[Audit, Record], bytes]]] = {".html": _html, ".json": _json}
+Form: TypeAlias = Callable[[Audit, Record], bytes]
+
+FORMS: Final[Mapping[str, Form]] = {".html": _html, ".json": _json}
+
+
+def forms(book: Path) -> dict[str, Form]:
+    """Return the forms of a report by ending; the marked copy of a workbook has its own ending."""
+    return {**FORMS, ".xlsm" if book.suffix.lower() == ".xlsm" else ".xlsx": marked}
 
 
 @click.command("audit")
@@ -41,7 +49,7 @@ FORMS: Final[dict[str, Callable[[Audit, Record], bytes]]] = {".html": _html, ".j
     "reports",
     multiple=True,
     type=click.Path(path_type=Path),
-    help="F.html or F.json; repeatable.",
+    help="F.html, F.json, or F.xlsx for a marked copy; repeatable.",
 )
 @click.option(
     "--record", type=click.Path(path_type=Path), help="The check record saved from an earlier page."
@@ -54,15 +62,16 @@ def command(
 
     Exit code 1 says that there are errors or warnings, 2 that something could not be checked.
     """
+    made_by = forms(book)
     for target in reports:
-        if target.suffix.lower() not in FORMS:
-            raise Refusal(f"{target}: a report ends in {' or '.join(FORMS)}")
+        if target.suffix.lower() not in made_by:
+            raise Refusal(f"{target}: a report of this workbook ends in {', '.join(made_by)}")
         refuse_input(target, book)
         refuse_existing(target, force)
     said = Record.read(record.read_text(encoding="utf-8")) if record else Record()
     outcome = audit(Subject.open(book, own_template))
     for target in reports:
-        write_new(target, FORMS[target.suffix.lower()](outcome, said), force)
+        write_new(target, made_by[target.suffix.lower()](outcome, said), force)
     if json_wanted:
         click.echo(json.dumps(as_json.record(outcome), indent=1, ensure_ascii=False))
     else:

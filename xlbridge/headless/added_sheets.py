@@ -10,7 +10,7 @@ from collections.abc import Mapping, Sequence
 from dataclasses import dataclass
 from enum import StrEnum
 from itertools import chain, count
-from typing import Final
+from typing import Final, TypeAlias
 
 from lxml import etree
 
@@ -44,16 +44,22 @@ class Look(StrEnum):
     """A cell of a table: framed, broken into lines."""
     STRONG = "strong"
     """The same, for what must not be overlooked."""
+    LINK = "link"
+    """The same, for what leads to another cell."""
 
 
-#: font (size, bold), whether filled, whether framed and broken into lines
-_LOOKS: Final[Mapping[Look, tuple[tuple[int, bool], bool, bool]]] = {
-    Look.TITLE: ((15, True), False, False),
-    Look.PLAIN: ((10, False), False, False),
-    Look.HEAD: ((10, True), True, True),
-    Look.BODY: ((10, False), False, True),
-    Look.STRONG: ((10, True), False, True),
+_BODY_SIZE: Final = 10
+#: marks of the font, its size, whether filled, whether framed and broken into lines
+_LOOKS: Final[Mapping[Look, tuple[str, int, bool, bool]]] = {
+    Look.TITLE: ("<b/>", 14, False, False),
+    Look.PLAIN: ("", _BODY_SIZE, False, False),
+    Look.HEAD: ("<b/>", _BODY_SIZE, True, True),
+    Look.BODY: ("", _BODY_SIZE, False, True),
+    Look.STRONG: ("<b/>", _BODY_SIZE, False, True),
+    Look.LINK: ("<u/>", _BODY_SIZE, False, True),
 }
+#: points of a line, the tallest row there is, and the part of a width that a line of words fills
+_LINE_HEIGHT, _TALLEST, _FIT = 13.5, 405.0, 1.1
 _FILL: Final = "FFE4E1EC"
 _SIDE: Final = '<{0} style="thin"><color rgb="FF7A7A7A"/></{0}>'
 
@@ -67,23 +73,30 @@ class Shown:
     to: Cell | None = None
 
 
+Row: TypeAlias = Sequence[Shown]
+
+
 @dataclass(frozen=True)
 class Sheet:
     """An added sheet: column widths, rows, and how many rows on top are repeated on each printed page."""
 
     title: str
     widths: Sequence[float]
-    rows: Sequence[Sequence[Shown]]
+    rows: Sequence[Row]
     repeated: int
     footer: str
 
 
-def add_sheet(package: Package, sheet: Sheet) -> str:
-    """Add a sheet after the others; return its title, numbered where the workbook has one of it."""
-    main = etree.QName(package.look(package.workbook_part)).namespace
-    styles = _styles(package, str(main))
+def add_sheets(package: Package, *sheets: Sheet) -> list[str]:
+    """Add sheets after the others; return their titles, numbered where the workbook has one of it."""
+    main = str(etree.QName(package.look(package.workbook_part)).namespace)
+    styles = _styles(package, main)
+    return [_add_sheet(package, sheet, main, styles) for sheet in sheets]
+
+
+def _add_sheet(package: Package, sheet: Sheet, main: str, styles: Mapping[Look, int]) -> str:
     part = package.fresh("xl/worksheets/sheet{}.xml")
-    package.write(part, _written(sheet, str(main), styles))
+    package.write(part, _written(sheet, main, styles))
     package.declare(part, _SHEET_TYPE)
     return _enlist(package, sheet, package.relate(package.workbook_part, "worksheet", part))
 
@@ -116,7 +129,7 @@ def _written(sheet: Sheet, main: str, styles: Mapping[Look, int]) -> bytes:
         _add(columns, "col", min=str(n), max=str(n), width=str(width), customWidth="1")
     data = _add(root, "sheetData")
     for n, row in enumerate(sheet.rows, 1):
-        element = _add(data, "row", r=str(n))
+        element = _add(data, "row", r=str(n), ht=str(_height(row, sheet.widths)), customHeight="1")
         for column, shown in enumerate(row, 1):
             _put(_add(element, "c", r=address_of(n, column), s=str(styles[shown.look])), shown.value)
     _link(root, sheet)
@@ -125,6 +138,17 @@ def _written(sheet: Sheet, main: str, styles: Mapping[Look, int]) -> bytes:
     footer = sheet.footer.replace("&", "&&")
     _add(_add(root, "headerFooter"), "oddFooter").text = f"&L&8{footer}&R&8&A, page &P of &N"
     return etree.tostring(root, encoding="UTF-8", xml_declaration=True, standalone=True)
+
+
+def _height(row: Row, widths: Sequence[float]) -> float:
+    """The points that a row takes: not every program fits rows to their texts when it opens a file."""
+    lines = [1]
+    for shown, width in zip(row, widths, strict=False):
+        size, framed = _LOOKS[shown.look][1], _LOOKS[shown.look][3]
+        if framed and isinstance(shown.value, str):
+            lines.append(sum(1 + int(len(line) / (width * _FIT)) for line in shown.value.split("\n")))
+        lines.append(2 if size > _BODY_SIZE else 1)
+    return min(max(lines) * _LINE_HEIGHT, _TALLEST)
 
 
 def _add(parent: etree._Element, name: str, **given: str) -> etree._Element:
@@ -140,12 +164,14 @@ def _link(root: etree._Element, sheet: Sheet) -> None:
 
 
 def _put(cell: etree._Element, value: Scalar) -> None:
+    if value in (None, ""):
+        return
     if isinstance(value, str):
         cell.set("t", "inlineStr")
         text = _add(_add(cell, "is"), "t")
         text.set("{http://www.w3.org/XML/1998/namespace}space", "preserve")
         text.text = encode_text(shortened(value, MAX_TEXT))
-    elif value is not None:
+    else:
         kind, written = encode(value)
         if kind:
             cell.set("t", kind)
@@ -164,15 +190,15 @@ def _styles(package: Package, main: str) -> dict[Look, int]:
     fill = f'<fill><patternFill patternType="solid"><fgColor rgb="{_FILL}"/></patternFill></fill>'
     frame, filled = _append(root, "borders", f"<border>{sides}</border>"), _append(root, "fills", fill)
     numbers = {}
-    for look, ((size, bold), is_filled, framed) in _LOOKS.items():
-        text = f'<font>{"<b/>" if bold else ""}<sz val="{size}"/><name val="Calibri"/></font>'
+    for look, (marks, size, is_filled, framed) in _LOOKS.items():
+        text = f'<font>{marks}<sz val="{size}"/><name val="Calibri"/></font>'
         numbers[look] = _append(
             root,
             "cellXfs",
             f'<xf numFmtId="0" fontId="{_append(root, "fonts", text)}" fillId="{filled if is_filled else 0}" '
             f'borderId="{frame if framed else 0}" xfId="0" quotePrefix="1" applyFont="1" applyFill="1" '
-            f'applyBorder="1" applyAlignment="1"><alignment horizontal="left" vertical="top"'
-            f"{' wrapText=' + chr(34) + '1' + chr(34) if framed else ''}/></xf>",
+            f'applyBorder="1" applyAlignment="1"><alignment horizontal="left" vertical="top" '
+            f'wrapText="{int(framed)}"/></xf>',
         )
     return numbers
 

@@ -15,7 +15,7 @@ from openpyxl.comments import Comment
 
 from tests.support.office import Office
 from tests.support.packages import MAIN, OFFICE, hand_made, parts_of, relationships
-from xlbridge.headless.added_sheets import Look, Sheet, Shown, add_sheet
+from xlbridge.headless.added_sheets import Look, Sheet, Shown, add_sheets
 from xlbridge.headless.archive import StoreError
 from xlbridge.headless.notes import put_notes
 from xlbridge.headless.package import Package
@@ -138,8 +138,7 @@ def test_a_text_too_long_for_a_note_ends_in_an_ellipsis(tmp_path: Path) -> None:
 def test_an_added_sheet_holds_texts_as_texts(tmp_path: Path) -> None:
     source = written(tmp_path)
     package = Package(source.read_bytes())
-    assert add_sheet(package, TABLE) == "Found"
-    assert add_sheet(package, TABLE) == "Found 2"
+    assert add_sheets(package, TABLE, TABLE) == ["Found", "Found 2"]
     book = openpyxl.load_workbook(BytesIO(package.to_bytes()))
     assert book.sheetnames == ["Two words", "Found", "Found 2"]
     cell = book["Found"]["B3"]
@@ -158,14 +157,14 @@ def test_a_package_without_styles_gets_some(tmp_path: Path) -> None:
         ("rId1", "worksheet", "/xl/worksheets/sheet1.xml"), ("rId3", "sharedStrings", "sharedStrings.xml")
     )
     package = Package(hand_made(tmp_path / "in.xlsx", rels=rels).read_bytes())
-    add_sheet(package, TABLE)
-    assert package.look("xl/styles1.xml").find(f"{{{MAIN}}}cellXfs").get("count") == "6"
+    add_sheets(package, TABLE)
+    assert package.look("xl/styles1.xml").find(f"{{{MAIN}}}cellXfs").get("count") == "7"
     assert package.look("xl/_rels/workbook.xml.rels")[-1].get("Type") == f"{OFFICE}/worksheet"
 
 
 def test_calc_reads_the_same_values_and_the_notes(tmp_path: Path, office: Office) -> None:
     package = Package(noted(written(tmp_path), {"A1": "more", "C1": "new"}).read_bytes())
-    add_sheet(package, TABLE)
+    add_sheets(package, TABLE)
     target = tmp_path / "both.xlsx"
     target.write_bytes(package.to_bytes())
     with office.open(target) as book:

@@ -76,7 +76,7 @@ def _content(audit: Audit, record: Record, made: datetime | None) -> dict[str, A
         "audit": audit,
         "version": __version__,
         "made": (made or datetime.now()).strftime("%Y-%m-%d %H:%M"),
-        "program": _program(audit),
+        "program": program(audit),
         "job": {"title": inputs.get("title", ""), "number": "", "revision": "", **inputs.get("job", {})},
         "edition": inputs.get("edition", ""),
         "verdict": verdict(audit),
@@ -89,7 +89,7 @@ def _content(audit: Audit, record: Record, made: datetime | None) -> dict[str, A
         "maps": [(m.sheet, m.counts, Markup(m.svg)) for m in sheet_maps(audit)],
         "works": list(works(audit.subject)),
         "state_of": audit.states,
-        "inputs": list(_inputs(audit)),
+        "inputs": list(filled_entries(audit)),
         "roles": ROLES,
         "marks": MARKS,
         "record": Markup(_in_script(record)),
@@ -105,7 +105,8 @@ def _in_script(record: Record) -> str:
     return json.dumps(json.loads(record.text())).replace("<", "\\u003c")
 
 
-def _program(audit: Audit) -> str:
+def program(audit: Audit) -> str:
+    """Return the program that wrote the file, as far as the file says."""
     workbook = audit.subject.book.workbook
     found = workbook.properties.creator if workbook else None
     return str(found or "not said")
@@ -130,7 +131,7 @@ def _finding(finding: Finding) -> dict[str, Any]:
     }
 
 
-def _inputs(audit: Audit) -> Iterator[dict[str, Any]]:
+def filled_entries(audit: Audit) -> Iterator[dict[str, Any]]:
     """Every entry that is filled in, with what it is and where it comes from."""
     own = audit.subject.own or OwnTemplate()
     for path in sorted(own.entered, key=lambda path: _place(own.places[path])):
