@@ -36,9 +36,9 @@ def changed(path: Path, change: Callable[[Workbook], object], recalculated: bool
     return saved
 
 
-def audited(path: Path) -> Audit:
-    """The audit of a workbook, as the command makes it."""
-    return audit(Subject.open(path, own_template))
+def audited(path: Path, against: Path | None = None) -> Audit:
+    """The audit of a workbook, as the command makes it; ``against`` is its checked issue."""
+    return audit(Subject.open(path, own_template, against))
 
 
 def kinds_at(outcome: Audit) -> dict[str, set[str]]:

@@ -5,7 +5,7 @@ from __future__ import annotations
 from collections.abc import Callable
 from typing import Final, TypeAlias
 
-from xlbridge.audit import cells, manifest, map, model
+from xlbridge.audit import against, cells, manifest, map, model
 from xlbridge.audit.finding import Checked
 from xlbridge.audit.subject import Subject
 
@@ -16,4 +16,5 @@ METHODS: Final[tuple[Method, ...]] = (
     model.check,
     map.check,
     manifest.check,
+    against.check,
 )

@@ -36,12 +36,14 @@ class Subject:
     path: Path
     evaluator: Evaluator
     own: OwnTemplate | None = None
+    checked: Subject | None = None
+    """The last issue of it that was checked."""
 
     @classmethod
-    def open(cls, path: Path, knows: Knows) -> Subject:
+    def open(cls, path: Path, knows: Knows, checked: Path | None = None) -> Subject:
         """Open a workbook file; ``knows`` tells whether it is one of ours."""
         evaluator = Evaluator(Book.open(path), FUNCTIONS)
-        return cls(path, evaluator, knows(evaluator))
+        return cls(path, evaluator, knows(evaluator), cls.open(checked, knows) if checked else None)
 
     @property
     def book(self) -> Book:

@@ -21,7 +21,7 @@ from xlbridge.cli.failure import BAD_INPUT, sentence
 
 COMMANDS: Final = (
     *("demo", "new", "calc", "solve", "inputs", "audit", "entries", "eval", "functions"),
-    *("print", "bridge-check", "calc-addin", "names"),
+    *("compare", "print", "bridge-check", "calc-addin", "names"),
 )
 CAUTION: Final = (
     "Results are an aid to a licensed engineer's judgement. Confirm every value against the standard adopted "

@@ -51,12 +51,18 @@ def forms(book: Path) -> dict[str, Form]:
     type=click.Path(path_type=Path),
     help="F.html, F.json, or F.xlsx for a marked copy; repeatable.",
 )
+@click.option("--against", type=click.Path(path_type=Path), help="The issue of BOOK that was checked last.")
 @click.option(
     "--record", type=click.Path(path_type=Path), help="The check record saved from an earlier page."
 )
 @click.option("--force", is_flag=True, help="Replace existing reports.")
 def command(
-    book: Path, json_wanted: bool, reports: tuple[Path, ...], record: Path | None, force: bool
+    book: Path,
+    json_wanted: bool,
+    reports: tuple[Path, ...],
+    against: Path | None,
+    record: Path | None,
+    force: bool,
 ) -> int:
     """Prove BOOK cell by cell and from its inputs alone, or name what is wrong.
 
@@ -69,7 +75,7 @@ def command(
         refuse_input(target, book)
         refuse_existing(target, force)
     said = Record.read(record.read_text(encoding="utf-8")) if record else Record()
-    outcome = audit(Subject.open(book, own_template))
+    outcome = audit(Subject.open(book, own_template, against))
     for target in reports:
         write_new(target, made_by[target.suffix.lower()](outcome, said), force)
     if json_wanted:

@@ -45,6 +45,7 @@ def test_a_pipe_gets_the_text_alone(tmp_path: Path) -> None:
         ["calc", "d/story.xlsx"],
         ["inputs", "d/story.xlsx"],
         ["audit", "d/story.xlsx"],
+        ["compare", "d/story.xlsx", "d/story.xlsx"],
         ["bridge-check", "check.xlsm"],
         ["calc-addin", "storyledger.oxt"],
         ["names", "d/story.xlsx", "--for", "calc"],

@@ -71,6 +71,7 @@ CALLS = {
         ["a.doc", ".html"],
     ),
     "audit: no record": (["audit", "{}/good.xlsx", "--record", "{}/good.toml"], ["record is not JSON"]),
+    "compare: words": (["compare", "{}/good.xlsx", "{}/words.xlsx"], ["words.xlsx", "not a workbook"]),
     "audit: no such file": (["audit", "{}/none.xlsx"], ["no such file"]),
     "inputs: words": (["inputs", "{}/words.xlsx"], ["not a workbook"]),
     "inputs: no such file": (["inputs", "{}/none.xlsx"], ["no such file"]),
