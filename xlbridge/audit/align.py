@@ -141,7 +141,7 @@ def align(book: Book, own: OwnTemplate) -> Alignment:
 
 def _sheets(book: Book, twin: Book) -> Iterator[tuple[str, str]]:
     """Sheets of the same title first, if they share a text at all, then those that share most."""
-    texts = {(which, s): set(_texts(b, s)) for which, b in enumerate((twin, book)) for s in b.sheets}
+    texts = {(which, s): _said(b, s) for which, b in enumerate((twin, book)) for s in b.sheets}
     shared = {(t, s): len(texts[0, t] & texts[1, s]) for t in twin.sheets for s in book.sheets}
     order = sorted(shared, key=lambda pair: (pair[0].casefold() != pair[1].casefold(), -shared[pair]))
     taken: set[tuple[int, str]] = set()
@@ -151,6 +151,11 @@ def _sheets(book: Book, twin: Book) -> Iterator[tuple[str, str]]:
             taken |= {(0, mine), (1, title)}
             found[mine] = title
     return ((mine, found[mine]) for mine in twin.sheets if mine in found)
+
+
+def _said(book: Book, sheet: str) -> set[str]:
+    """The texts of a sheet, and its formulas without their references."""
+    return {*_texts(book, sheet), *(REFERENCE.sub("", f.text) for f in book.formulas[sheet].values())}
 
 
 def _texts(book: Book, sheet: str) -> dict[str, list[Position]]:
