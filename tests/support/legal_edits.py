@@ -9,10 +9,13 @@ from openpyxl import Workbook
 from openpyxl.comments import Comment
 from openpyxl.formatting.rule import ColorScaleRule
 from openpyxl.styles import Font, PatternFill
+from openpyxl.utils import get_column_letter
 from openpyxl.workbook.defined_name import DefinedName
 
 from tests.support.office import Book
-from workbook_templates.layout import CHECKS, COVER, CRITERIA, FIRST_LEVEL, LEVELS, TOP_GUARD
+from workbook_templates.declare import Role
+from workbook_templates.draw import style
+from workbook_templates.layout import CHECKS, COVER, CRITERIA, FIRST_LEVEL, LEVELS, ROLE_ROW, TOP_GUARD
 
 Edit = Callable[[Workbook], object]
 OfficeEdit = Callable[[Book, int], object]
@@ -176,8 +179,14 @@ def level_added(book: Book, levels: int) -> None:
     book.insert_rows(LEVELS, row)
     book.fill_down(LEVELS, f"A{row - 1}:{LAST_COLUMN}{row}")
     book.set_value(LEVELS, f"A{row}", "Mezzanine")
-    above, below = (float(book.value(LEVELS, f"B{n}")) for n in (row - 1, row + 1))
-    book.set_value(LEVELS, f"B{row}", (above + below) / 2)
+    roles, above, _, below = (
+        book.read(LEVELS, f"A{n}:{LAST_COLUMN}{n}")[0] for n in (ROLE_ROW, row - 1, row, row + 1)
+    )
+    for column, (role, high, low) in enumerate(zip(roles, above, below, strict=True), 1):
+        address = f"{get_column_letter(column)}{row}"
+        typed = role == style.letter(Role.INPUT) and not book.formula(LEVELS, address).startswith("=")
+        if typed and isinstance(high, float) and isinstance(low, float):
+            book.set_value(LEVELS, address, (high + low) / 2)
 
 
 def level_removed(book: Book, levels: int) -> None:
@@ -186,7 +195,7 @@ def level_removed(book: Book, levels: int) -> None:
 
 
 #: far enough for every table
-LAST_COLUMN: Final = "CZ"
+LAST_COLUMN: Final = "IZ"
 
 OFFICE_EDITS: Final[tuple[OfficeEdit, ...]] = (
     saved,
