@@ -11,6 +11,8 @@ from typing import Any, Final
 from openpyxl import Workbook
 from openpyxl.reader.excel import ExcelReader
 
+from xlbridge.headless import guard
+
 _COMPOUND_FILE: Final = bytes.fromhex("d0cf11e0a1b11ae1")
 _ENCRYPTED: Final = "EncryptedPackage".encode("utf-16-le")
 _SAVE_AS: Final = "open it in the spreadsheet program and save it as .xlsx"
@@ -42,9 +44,8 @@ def read_file(path: Path) -> bytes:
         raise BookError(f"{path}: this is a folder; name the workbook in it") from None
     except OSError as error:
         raise BookError(f"{path}: cannot be read ({error.strerror or error})") from None
-    problem = _foreign(data)
-    if problem:
-        raise BookError(f"{path}: {problem}")
+    if refused := _foreign(data) or guard.problem(data):
+        raise BookError(f"{path}: {refused}")
     return data
 
 
