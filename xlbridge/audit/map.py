@@ -13,7 +13,7 @@ from xlbridge.audit.align import Alignment
 from xlbridge.audit.cells import agree
 from xlbridge.audit.finding import Checked, NotChecked, Observation, Place
 from xlbridge.audit.merged import swallowed
-from xlbridge.audit.rows import stray
+from xlbridge.audit.rows import missing, stray
 from xlbridge.audit.subject import Subject
 from xlbridge.audit.template import OwnTemplate
 from xlbridge.headless.book import Book, Formula
@@ -35,7 +35,11 @@ def check(subject: Subject) -> Checked:
         return Checked(METHOD, 0, not_checked=(NotChecked("expected formulas", why),))
     mapped = _Map(subject, subject.alignment, own, own.twin)
     seen = _by_cause([o for o in map(mapped.observed, mapped.cells) if o], mapped)
-    return Checked(METHOD, len(mapped.cells), (*seen, *stray(subject.book, subject.alignment, own, own.twin)))
+    further = (
+        *stray(subject.book, subject.alignment, own, own.twin),
+        *missing(subject.alignment, own, own.twin),
+    )
+    return Checked(METHOD, len(mapped.cells), (*seen, *further))
 
 
 @dataclass(frozen=True)

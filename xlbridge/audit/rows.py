@@ -1,4 +1,4 @@
-"""What stands in or beside a table without being a row of it."""
+"""What stands in or beside a table without being a row of it, and lines of the template that are gone."""
 
 from __future__ import annotations
 
@@ -22,6 +22,21 @@ def stray(book: Book, alignment: Alignment, own: OwnTemplate, twin: Book) -> Ite
         if pair is not None:
             yield from _inside(book, pair, table, twin)
             yield from _beside(book, pair, table, twin)
+
+
+def missing(alignment: Alignment, own: OwnTemplate, twin: Book) -> Iterator[Observation]:
+    """Rows and columns of the twin with any content that the workbook has no place for."""
+    for pair in alignment.pairs:
+        contents = {**twin.constants[pair.twin], **twin.formulas[pair.twin]}
+        for axis, what, known in ((0, "row", pair.rows.pairs), (1, "column", pair.columns.pairs)):
+            for line in sorted({position[axis] for position in contents} - set(known)):
+                cells = sorted(position for position in contents if position[axis] == line)
+                texts = [t for at in cells if isinstance(t := twin.constants[pair.twin].get(at), str) if t]
+                checked = any(Cell(pair.twin, *position) in own.checks for position in cells)
+                said = " / ".join(texts[:3]) or f"{what} {line}"
+                words = f"the {what} “{said}” of the template is not there"
+                kind = "check_disarmed" if checked and axis == 0 else "line_missing"
+                yield Observation(kind, Place(pair.title), words, said, cause=f"{pair.title} {what} {line}")
 
 
 def _inside(book: Book, pair: SheetPair, table: TableRows, twin: Book) -> Iterator[Observation]:

@@ -9,7 +9,7 @@ from shutil import copy
 import pytest
 from openpyxl import Workbook
 from openpyxl.formatting.rule import FormulaRule
-from openpyxl.styles import Font, PatternFill
+from openpyxl.styles import Alignment, Font, PatternFill, Protection
 from openpyxl.workbook.defined_name import DefinedName
 
 from tests.support.audited import audited, changed, computed_book
@@ -72,6 +72,11 @@ def without_rules(book: Workbook) -> None:
 def redraw(book: Workbook) -> None:
     series = book["Figures"]._charts[0].series[0]
     series.val.numRef.f = series.val.numRef.f.replace("$H$", "$G$")
+
+
+def hide_formula(book: Workbook) -> None:
+    book["Levels"].protection.sheet = True
+    book["Levels"][F_X[7:]].protection = Protection(hidden=True)
 
 
 def narrow(book: Workbook) -> None:
@@ -140,6 +145,10 @@ FAULTS: dict[str, tuple[Change, str, str]] = {
     "nothing shown": (style(F_X, number_format=";;;"), "format_misleads", F_X),
     "text not shown": (style(RATIO, number_format=";;;"), "format_misleads", RATIO),
     "digits": (style(levels("C_vx", "X"), number_format="0.0"), "format_coarse", levels("C_vx", "X")),
+    "name of a function": (named("ELF_FX", "Levels!$A$1"), "name_shadowed", "workbook"),
+    "tiny text": (style(F_X, font=Font(size=1)), "text_unseen", F_X),
+    "repeated digits": (style(F_X, alignment=Alignment(horizontal="fill")), "format_misleads", F_X),
+    "formula hidden": (hide_formula, "formula_hidden", F_X),
     "white text": (style(F_X, font=Font(color="FFFFFF"), fill=PatternFill()), "text_unseen", F_X),
     "marks gone": (unmark, "mark_changed", ""),
     "marks in white": (pale, "mark_changed", ""),

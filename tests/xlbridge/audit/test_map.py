@@ -121,6 +121,16 @@ def test_an_entry_linked_to_an_own_sheet_is_a_note(story: Path) -> None:
 
 
 @pytest.mark.parametrize(
+    ("sheet", "row", "kind"),
+    [("Checks", 14, "check_disarmed"), ("Functions", 9, "line_missing")],
+)
+def test_a_row_deleted_is_one_finding(story: Path, sheet: str, row: int, kind: str) -> None:
+    outcome = audited(changed(story, lambda book: book[sheet].delete_rows(row)))
+    found = [f for f in outcome.findings if f.kind.key == kind and "is not there" in f.words]
+    assert [[str(p) for p in f.places] for f in found] == [[sheet]]
+
+
+@pytest.mark.parametrize(
     ("pattern", "text"),
     [
         (r"^=", "=+ "),

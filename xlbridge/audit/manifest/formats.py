@@ -6,6 +6,7 @@ from collections.abc import Iterator
 from typing import Final
 
 from openpyxl.styles.colors import COLOR_INDEX, Color
+from openpyxl.worksheet.worksheet import Worksheet
 
 from xlbridge.audit.finding import Observation, Place
 from xlbridge.audit.manifest.number_formats import hides_text, is_coarser, misleads
@@ -13,6 +14,8 @@ from xlbridge.audit.manifest.pairing import CellPair, Content, Pairing
 
 #: contrast of text against its fill below which it cannot be read
 UNSEEN: Final = 2.0
+#: points below which a text cannot be read (common practice)
+SMALLEST: Final = 4
 _THEME: Final = {0: "FFFFFF", 1: "000000"}
 
 
@@ -31,6 +34,23 @@ def check(pairing: Pairing) -> Iterator[Observation]:
             text, fill = colours(pair.found)
             words = f"the text has the colour {text}, the cell {fill}"
             yield Observation("text_unseen", Place.of(pair.place), words, found=text, cause=f"{text} {fill}")
+        yield from _tricks(pairing, pair, pair.found)
+
+
+def _tricks(pairing: Pairing, pair: CellPair, content: Content) -> Iterator[Observation]:
+    """Settings of a cell that leave its content as it is, and yet show another or none."""
+    place, cause = Place.of(pair.place), f"{pair.cell.sheet} {pair.cell.column}"
+    size = content.font.sz
+    if size is not None and size < SMALLEST:
+        words = f"the text is {size:.3g} points high"
+        yield Observation("text_unseen", place, words, found=f"{size:.3g}", cause=f"{cause} small")
+    if content.alignment.horizontal == "fill" and pair.twin.alignment.horizontal != "fill":
+        words = "the alignment repeats the content until the cell is full: 12 shows as 121212"
+        yield Observation("format_misleads", place, words, found="fill", cause=f"{cause} fill")
+    hides = content.protection.hidden and pairing.book.formula(pair.place) is not None
+    if hides and isinstance(content.parent, Worksheet) and content.parent.protection.sheet:
+        words = "the sheet is protected, and the cell hides its formula"
+        yield Observation("formula_hidden", place, words, cause=pair.place.sheet)
 
 
 def _number_format(pairing: Pairing, pair: CellPair, content: Content) -> Iterator[Observation]:

@@ -7,6 +7,7 @@ from collections.abc import Iterator
 from xlbridge.audit import notation
 from xlbridge.audit.finding import Observation, Place
 from xlbridge.audit.manifest.pairing import Pairing
+from xlbridge.catalogue import CATALOGUE
 from xlbridge.headless.nodes import Node, Reference, render
 from xlbridge.headless.operands import NotEvaluated
 from xlbridge.headless.shapes import parse
@@ -24,12 +25,21 @@ def check(pairing: Pairing) -> Iterator[Observation]:
         elif not _same(node, found):
             words = f"the name {written} leads to {found}, not to {expected}"
             yield Observation("name_moved", _place(node), words, expected, found)
+    yield from _of_functions(pairing)
     for (sheet, name), text in pairing.book.names.items():
         if sheet is not None and (None, name) in pairing.twin.names:
             words = f"on sheet {sheet} the name {_written(pairing, name)} leads to {text}"
             yield Observation(
                 "name_shadowed", Place(sheet), words, pairing.book.names.get((None, name), ""), text
             )
+
+
+def _of_functions(pairing: Pairing) -> Iterator[Observation]:
+    """A name that is written as one of our functions may be called in its stead."""
+    for (sheet, name), text in pairing.book.names.items():
+        if name.upper() in CATALOGUE:
+            words = f"the name {name.upper()}, written as a function of ours, leads to {text}"
+            yield Observation("name_shadowed", Place(sheet or ""), words, "", text)
 
 
 def _same(expected: Node, found: str) -> bool:
