@@ -17,13 +17,17 @@ from xlbridge.calc import extension
 collect_ignore = ["support/office_jobs.py"]
 
 
-def require_office() -> None:
-    """Skip a test that needs LibreOffice where there is none, or fail it where one is demanded."""
-    reason = offices.missing()
-    if reason and os.environ.get(offices.REQUIRED) == "1":
-        pytest.fail(f"{reason}, and {offices.REQUIRED}=1 demands it")
+def demand(reason: str, variable: str) -> None:
+    """Skip a test for a reason, if there is one, or fail it where the variable demands it."""
+    if reason and os.environ.get(variable) == "1":
+        pytest.fail(f"{reason}, and {variable}=1 demands it")
     if reason:
         pytest.skip(reason)
+
+
+def require_office() -> None:
+    """Skip a test that needs LibreOffice where there is none, or fail it where one is demanded."""
+    demand(offices.missing(), offices.REQUIRED)
 
 
 @pytest.fixture(scope="session")

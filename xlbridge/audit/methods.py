@@ -2,6 +2,8 @@
 
 from __future__ import annotations
 
+import inspect
+import sys
 from collections.abc import Callable
 from typing import Final, TypeAlias
 
@@ -18,3 +20,9 @@ METHODS: Final[tuple[Method, ...]] = (
     manifest.check,
     against.check,
 )
+
+
+def summary(name: str) -> str:
+    """Return what a method does, as its own module says it."""
+    module = next(sys.modules[m.__module__] for m in METHODS if m.__module__.endswith(f".{name}"))
+    return (inspect.getdoc(module) or name).splitlines()[0]

@@ -15,6 +15,7 @@ from engine.version import __version__
 from xlbridge.audit.audit import Audit
 from xlbridge.audit.finding import Finding
 from xlbridge.audit.kinds import KINDS, Severity
+from xlbridge.audit.methods import summary
 from xlbridge.audit.record import MARKS, ROLES, Record, key_of
 from xlbridge.audit.report.figures import figures, sheet_maps
 from xlbridge.audit.template import OwnTemplate
@@ -97,6 +98,7 @@ def _content(audit: Audit, record: Record, made: datetime | None) -> dict[str, A
         "sha256": audit.subject.sha256,
         "cautions": CAUTIONS,
         "kinds": KINDS,
+        "summary": summary,
     }
 
 
