@@ -154,8 +154,9 @@ def _sheets(book: Book, twin: Book) -> Iterator[tuple[str, str]]:
 
 
 def _said(book: Book, sheet: str) -> set[str]:
-    """The texts of a sheet, and its formulas without their references."""
-    return {*_texts(book, sheet), *(REFERENCE.sub("", f.text) for f in book.formulas[sheet].values())}
+    """The texts of a sheet; of one without any its formulas without their references."""
+    formulas = book.formulas[sheet].values()
+    return set(_texts(book, sheet)) or {REFERENCE.sub("", formula.text) for formula in formulas}
 
 
 def _texts(book: Book, sheet: str) -> dict[str, list[Position]]:

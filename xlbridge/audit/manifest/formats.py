@@ -21,34 +21,42 @@ _THEME: Final = {0: "FFFFFF", 1: "000000"}
 
 def check(pairing: Pairing) -> Iterator[Observation]:
     """Compare the look of every filled cell with that of the twin."""
-    known: dict[tuple[int, int], bool] = {}
+    styles: dict[tuple[int, ...], bool] = {}
     for pair in pairing.cells:
         if pair.found is None or pair.found.value is None:
             continue
         if pair.found.number_format != pair.twin.number_format:
             yield from _number_format(pairing, pair, pair.found)
-        style = pair.found._style.fontId, pair.found._style.fillId  # type: ignore[attr-defined]
-        if style not in known:
-            known[style] = contrast(*colours(pair.found)) < UNSEEN
-        if known[style]:
-            text, fill = colours(pair.found)
-            words = f"the text has the colour {text}, the cell {fill}"
-            yield Observation("text_unseen", Place.of(pair.place), words, found=text, cause=f"{text} {fill}")
-        yield from _tricks(pairing, pair, pair.found)
+        style = pair.found._style  # type: ignore[attr-defined]
+        key = style.fontId, style.fillId, style.alignmentId, style.protectionId
+        if key not in styles:
+            styles[key] = any(_tricks(pairing, pair, pair.found, doubtful=True))
+        if styles[key]:
+            yield from _tricks(pairing, pair, pair.found)
 
 
-def _tricks(pairing: Pairing, pair: CellPair, content: Content) -> Iterator[Observation]:
-    """Settings of a cell that leave its content as it is, and yet show another or none."""
+def _tricks(
+    pairing: Pairing, pair: CellPair, content: Content, doubtful: bool = False
+) -> Iterator[Observation]:
+    """Settings of a cell that leave its content as it is, and yet show another or none.
+
+    ``doubtful`` asks whether they may, for any cell of the same style.
+    """
     place, cause = Place.of(pair.place), f"{pair.cell.sheet} {pair.cell.column}"
+    text, fill = colours(content)
+    if contrast(text, fill) < UNSEEN:
+        words = f"the text has the colour {text}, the cell {fill}"
+        yield Observation("text_unseen", place, words, found=text, cause=f"{text} {fill}")
     size = content.font.sz
     if size is not None and size < SMALLEST:
         words = f"the text is {size:.3g} points high"
         yield Observation("text_unseen", place, words, found=f"{size:.3g}", cause=f"{cause} small")
-    if content.alignment.horizontal == "fill" and pair.twin.alignment.horizontal != "fill":
+    if content.alignment.horizontal == "fill":
         words = "the alignment repeats the content until the cell is full: 12 shows as 121212"
         yield Observation("format_misleads", place, words, found="fill", cause=f"{cause} fill")
-    hides = content.protection.hidden and pairing.book.formula(pair.place) is not None
-    if hides and isinstance(content.parent, Worksheet) and content.parent.protection.sheet:
+    formula = doubtful or pairing.book.formula(pair.place) is not None
+    sheet = content.parent
+    if content.protection.hidden and formula and isinstance(sheet, Worksheet) and sheet.protection.sheet:
         words = "the sheet is protected, and the cell hides its formula"
         yield Observation("formula_hidden", place, words, cause=pair.place.sheet)
 

@@ -26,6 +26,8 @@ STANDARD_SIZE: Final = 11.0
 CUT: Final = 0.4
 #: of the size of its text: a row lower than this cuts it off
 LOW: Final = 0.75
+#: points; no text of the template is larger
+LARGEST: Final = 15.0
 _SIZE: Final = re.compile(r"&\d+")
 _LINES: Final = re.compile(r"\$?(\d+):\$?(\d+)")
 
@@ -95,11 +97,15 @@ def _needs(pairing: Pairing, pair: CellPair) -> float:
 
 
 def _squeezed_rows(sides: SheetSides, cells: list[CellPair]) -> Iterator[Observation]:
-    for pair in cells:
-        dimension = sides.found.row_dimensions.get(pair.place.row)
-        height = dimension.height if dimension is not None and not dimension.hidden else None
-        size = float(pair.found.font.sz or STANDARD_SIZE) if pair.found and pair.is_filled else 0.0
-        if height is not None and height < LOW * size:
+    low = {
+        row: dimension.height
+        for row, dimension in sides.found.row_dimensions.items()
+        if dimension.height is not None and dimension.height < LARGEST and not dimension.hidden
+    }
+    for pair in (pair for pair in cells if pair.place.row in low and pair.is_filled):
+        height = low[pair.place.row]
+        size = float(pair.found.font.sz or STANDARD_SIZE) if pair.found else 0.0
+        if height < LOW * size:
             words = f"row {pair.place.row} is {height:.3g} points high, its text {size:.3g}"
             cause = f"{pair.place.sheet} row {pair.place.row}"
             yield Observation("column_squeezed", Place.of(pair.place), words, cause=cause)
