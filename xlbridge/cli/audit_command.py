@@ -16,6 +16,7 @@ from xlbridge.audit.report import as_json
 from xlbridge.audit.report.marked import marked
 from xlbridge.audit.report.page import page
 from xlbridge.audit.subject import Subject
+from xlbridge.cli.audit_many import audit_many, workbooks
 from xlbridge.cli.failure import CLEAN, FINDINGS, INCOMPLETE, Refusal
 from xlbridge.cli.files import refuse_existing, refuse_input, write_new
 from xlbridge.cli.own_template import own_template
@@ -42,7 +43,7 @@ def forms(book: Path) -> dict[str, Form]:
 
 
 @click.command("audit")
-@click.argument("book", type=click.Path(path_type=Path))
+@click.argument("books", metavar="BOOK [MORE]...", nargs=-1, required=True, type=click.Path(path_type=Path))
 @click.option("--json", "json_wanted", is_flag=True, help="Print the audit as JSON.")
 @click.option(
     "--report",
@@ -56,7 +57,35 @@ def forms(book: Path) -> dict[str, Form]:
     "--record", type=click.Path(path_type=Path), help="The check record saved from an earlier page."
 )
 @click.option("--force", is_flag=True, help="Replace existing reports.")
+@click.option("--jobs", type=click.IntRange(1, 64), help="Of many: processes at a time [one a core].")
+@click.option("--summary", type=click.Path(path_type=Path), help="Of many: F.html, F.json or F.csv.")
+@click.option("--resume", type=click.Path(path_type=Path), help="Of many: a journal, F.jsonl, to go on from.")
 def command(
+    books: tuple[Path, ...],
+    json_wanted: bool,
+    reports: tuple[Path, ...],
+    against: Path | None,
+    record: Path | None,
+    force: bool,
+    jobs: int | None,
+    summary: Path | None,
+    resume: Path | None,
+) -> int:
+    """Prove BOOK cell by cell and from its inputs alone, or name what is wrong.
+
+    Exit code 1 says that there are errors or warnings, 2 that something could not be checked. Of several
+    files, or of a folder, several processes share the work, and a summary is given.
+    """
+    if len(books) > 1 or books[0].is_dir():
+        if reports or against or record:
+            raise Refusal("--report, --against and --record are of one workbook: give one")
+        return audit_many(workbooks(books), jobs, summary, resume, force, json_wanted)
+    if jobs or summary or resume:
+        raise Refusal("--jobs, --summary and --resume are of many workbooks: give several, or a folder")
+    return _audit_one(books[0], json_wanted, reports, against, record, force)
+
+
+def _audit_one(
     book: Path,
     json_wanted: bool,
     reports: tuple[Path, ...],
@@ -64,10 +93,6 @@ def command(
     record: Path | None,
     force: bool,
 ) -> int:
-    """Prove BOOK cell by cell and from its inputs alone, or name what is wrong.
-
-    Exit code 1 says that there are errors or warnings, 2 that something could not be checked.
-    """
     made_by = forms(book)
     for target in reports:
         if target.suffix.lower() not in made_by:
