@@ -1,4 +1,4 @@
-"""The audit as JSON."""
+"""The audit as JSON; ``schema.json`` says what stands in it."""
 
 from __future__ import annotations
 
@@ -7,6 +7,9 @@ from typing import Any
 from engine.version import __version__
 from xlbridge.audit.audit import Audit
 from xlbridge.audit.finding import Checked, Effect, Finding, NotChecked, Observation
+from xlbridge.audit.methods import summary
+from xlbridge.audit.record import key_of
+from xlbridge.audit.report.page import CAUTIONS, program
 from xlbridge.values import CellError, Scalar
 
 
@@ -16,11 +19,14 @@ def record(audit: Audit) -> dict[str, Any]:
         "storyledger": __version__,
         "file": audit.subject.path.name,
         "sha256": audit.subject.sha256,
+        "written_by": program(audit),
+        "edition": audit.subject.own.inputs.get("edition") if audit.subject.own else None,
         "formula_cells": audit.formula_cells,
         "checked_cells": audit.checked_cells,
         "methods": [_method(check) for check in audit.checks],
         "findings": [_finding(finding) for finding in audit.findings],
         "not_checked": [_not_checked(item) for item in audit.not_checked],
+        "cautions": list(CAUTIONS),
     }
 
 
@@ -28,6 +34,7 @@ def _method(check: Checked) -> dict[str, Any]:
     seen, missing = len(check.observations), len(check.not_checked)
     return {
         "method": check.method,
+        "summary": summary(check.method),
         "looked_at": check.looked_at,
         "observations": seen,
         "not_checked": missing,
@@ -38,11 +45,13 @@ def _finding(finding: Finding) -> dict[str, Any]:
     kind = finding.kind
     return {
         "number": finding.number,
+        "key": key_of(finding),
         "kind": kind.key,
         "method": kind.method,
         "severity": kind.severity,
         "title": kind.title,
         "words": finding.words,
+        "meaning": kind.meaning,
         "remedy": kind.remedy,
         "places": [_observation(o) for o in finding.observations],
         "effects": [_effect(effect) for effect in finding.effects],

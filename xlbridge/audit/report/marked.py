@@ -12,7 +12,7 @@ from engine.version import __version__
 from xlbridge.audit.audit import Audit
 from xlbridge.audit.finding import Finding, Observation, Place
 from xlbridge.audit.record import ROLES, Answer, Person, Record, key_of
-from xlbridge.audit.report.page import CAUTIONS, SIGNS, filled_entries, program, verdict
+from xlbridge.audit.report.page import CAUTIONS, SIGNS, filled_entries, program, shown, verdict
 from xlbridge.headless.added_sheets import Look, Row, Sheet, Shown, add_sheets
 from xlbridge.headless.notes import put_notes, shortened
 from xlbridge.headless.package import Package
@@ -28,7 +28,8 @@ _NOTE: Final = 900
 _LINE: Final = 140
 _FINDING_COLUMNS: Final = {
     "no.": 5, "severity": 10, "kind": 19, "cell": 13, "what": 28, "expected": 23, "found": 23, "stored": 11,
-    "recomputed": 12, "clause": 9, "what to do": 27, "response": 19, "closed (initials, date)": 11,
+    "recomputed": 12, "clause": 9, "what it does to the results": 27, "what to do": 27, "response": 19,
+    "closed (initials, date)": 11,
 }  # fmt: skip
 _RECORD_WIDTHS: Final = (28, 46, 17, 14, 28, 10, 24)
 
@@ -106,8 +107,21 @@ def _finding(finding: Finding, record: Record) -> Iterator[Row]:
             Shown(kind.title),
             Shown(str(seen.place), Look.LINK if _cell(seen.place) else Look.BODY, _cell(seen.place)),
             *_row((seen.words, seen.expected, seen.found, seen.stored, seen.recomputed, seen.clause)),
-            *_row((kind.remedy if n == 0 else "", said.words, said.closed)),
+            *_row((_effects(finding), kind.remedy) if n == 0 else ("", "")),
+            *_row((said.words, said.closed)),
         )
+
+
+def _effects(finding: Finding) -> str:
+    """The headline results that the finding moves, one a line."""
+    moved = [effect for effect in finding.effects if effect.change]
+    if finding.effects and not moved:
+        return "no headline result moves"
+    return "\n".join(
+        f"{e.headline}: {shown(e.value)} {e.unit}, {shown(e.without)} without it"
+        + ("" if e.per_cent is None else f" ({e.per_cent:+.2f} %)")
+        for e in moved
+    )
 
 
 def _record(audit: Audit, record: Record, made: datetime) -> Iterator[Row]:

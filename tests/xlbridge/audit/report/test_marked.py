@@ -5,6 +5,7 @@ from __future__ import annotations
 from datetime import datetime
 from io import BytesIO
 from pathlib import Path
+from typing import Any
 
 import openpyxl
 import pytest
@@ -47,7 +48,7 @@ def copy(spoiled: Audit, tmp_path_factory: pytest.TempPathFactory) -> Path:
     return path
 
 
-def column(path: Path, title: str, heading: str) -> list[object]:
+def column(path: Path, title: str, heading: str) -> list[Any]:
     """The cells under a heading of an added sheet."""
     sheet = openpyxl.load_workbook(path)[title]
     head = next(cell for row in sheet.iter_rows() for cell in row if cell.value == heading)
@@ -73,6 +74,13 @@ def test_the_sheet_of_findings_has_a_row_for_each_observation(spoiled: Audit, co
     assert column(copy, FINDINGS, "cell") == [str(o.place) for o in observations]
     assert column(copy, FINDINGS, "what") == [o.words for o in observations]
     assert column(copy, FINDINGS, "expected") == [o.expected or None for o in observations]
+    typed = next(f for f in spoiled.findings if f.kind.key == "constant_for_formula")
+    effects = [text for text in column(copy, FINDINGS, "what it does to the results") if text]
+    assert len(effects) == sum(bool(finding.effects) for finding in spoiled.findings) >= 2
+    moment = next(e for e in typed.effects if e.headline == "Overturning at the base, direction X")
+    assert moment.per_cent is not None
+    line = f"{moment.headline}: {moment.value:.7g} kip-ft, {moment.without:.7g} without it"
+    assert f"{line} ({moment.per_cent:+.2f} %)" in effects[-1].splitlines()
     sheet = openpyxl.load_workbook(copy)[FINDINGS]
     texts = [cell for row in sheet.iter_rows() for cell in row if str(cell.value).startswith("=")]
     assert {cell.data_type for cell in texts} == {"s"}
