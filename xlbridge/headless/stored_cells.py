@@ -22,7 +22,8 @@ MAX_TEXT: Final = 32_767
 _TAGS: Final = ("c", "row", "f", "v", "is", "cols", "sheetData")
 _TRUE: Final = ("1", "true")
 _EXACT_WHOLE: Final = 1e15
-_LITERAL_ESCAPE: Final = re.compile(r"_(?=x[0-9A-Fa-f]{4}_)")
+#: Calc takes one to four digits for a number where the standard has four
+_LITERAL_ESCAPE: Final = re.compile(r"_(?=x[0-9A-Fa-f]{1,4}_)")
 _ESCAPE: Final = re.compile("_x([0-9A-Fa-f]{4})_")
 _ILLEGAL: Final = re.compile("[\x00-\x08\x0b\x0c\x0d\x0e-\x1f\ud800-\udfff\ufffe\uffff]")
 

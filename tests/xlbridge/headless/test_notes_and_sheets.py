@@ -31,6 +31,7 @@ TABLE = Sheet(
         (Shown("no.", Look.HEAD), Shown("what", Look.HEAD), Shown("value", Look.HEAD)),
         (Shown(1.0), Shown("=1+1", to=Cell("Two words", 2, 2)), Shown(CellError("#N/A"))),
         (Shown(2.0, Look.STRONG), Shown("a\x07b _x0041_ & <c>"), Shown(True)),
+        (Shown(3.0), Shown("delta_xe_X")),
     ),
     2,
     "a footer",
@@ -173,3 +174,4 @@ def test_calc_reads_the_same_values_and_the_notes(tmp_path: Path, office: Office
         assert book.value("Found", "B3") == "=1+1"
         assert book.formula("Found", "B3") in ("=1+1", "'=1+1")
         assert book.value("Found", "A4") == 2.0
+        assert book.value("Found", "B5") == "delta_xe_X"
