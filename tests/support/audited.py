@@ -36,9 +36,14 @@ def changed(path: Path, change: Callable[[Workbook], object], recalculated: bool
     return saved
 
 
+def opened(path: Path, against: Path | None = None) -> Subject:
+    """A workbook as the command opens it for its audit; ``against`` is its checked issue."""
+    return Subject.open(path, own_template, against)
+
+
 def audited(path: Path, against: Path | None = None) -> Audit:
-    """The audit of a workbook, as the command makes it; ``against`` is its checked issue."""
-    return audit(Subject.open(path, own_template, against))
+    """The audit of a workbook, as the command makes it."""
+    return audit(opened(path, against))
 
 
 def kinds_at(outcome: Audit) -> dict[str, set[str]]:

@@ -190,12 +190,18 @@ def _named(book: Book, twin: Book, sheets: Mapping[str, str]) -> Iterator[tuple[
 
 def first_cell(text: str) -> Cell | None:
     """The first cell of an area as a defined name writes it; none for anything else."""
+    area = area_of(text)
+    return Cell(area[0], area[1].top, area[1].left) if area else None
+
+
+def area_of(text: str) -> tuple[str, Bounds] | None:
+    """Sheet and bounds of an area as a defined name writes it; none for anything else."""
     sheet, mark, area = text.removeprefix("=").rpartition("!")
     try:
         bounds = parse_bounds(area.replace("$", ""))
     except ValueError:
         return None
-    return Cell(sheet.strip("'").replace("''", "'"), bounds.top, bounds.left) if mark else None
+    return (sheet.strip("'").replace("''", "'"), bounds) if mark else None
 
 
 @dataclass(frozen=True)

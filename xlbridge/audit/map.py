@@ -83,7 +83,10 @@ class _Map:
         else:
             seen = self._formula(cell, place, expected, found)
         if seen and cell in self.own.checks:
-            return replace(seen, kind="check_disarmed", words=f"a check was changed: {seen.words}", cause="")
+            cause = f"{place.sheet} cells of row {place.row}"
+            return replace(
+                seen, kind="check_disarmed", words=f"a check was changed: {seen.words}", cause=cause
+            )
         return seen
 
     def _constant(self, cell: Cell, place: Cell, found: Formula | None) -> Observation | None:
@@ -164,7 +167,9 @@ def _difference(expected: Node, found: Node, home: str) -> tuple[str, str]:
     if notation.names(expected) != notation.names(found):
         return "other_reference", "the formula reads another name"
     known, there = notation.constants(expected), notation.constants(found)
-    changed = next(((a, b) for a, b in zip(known, there, strict=False) if a != b), ("", ""))
+    if known == there:
+        return "formula_differs", "the formula takes its arguments in another order"
+    changed = next((a, b) for a, b in zip(known, there, strict=False) if a != b)
     return "constant_changed", f"the formula has {changed[1]} for {changed[0]}"
 
 

@@ -6,6 +6,7 @@ from xlbridge.audit.finding import Checked, NotChecked, Observation, Place
 from xlbridge.audit.routes import Difference, compare
 from xlbridge.audit.subject import NO_INPUTS, Subject, Unsolved
 from xlbridge.audit.template import OwnTemplate
+from xlbridge.headless.references import Cell
 
 
 def check(subject: Subject) -> Checked:
@@ -16,15 +17,15 @@ def check(subject: Subject) -> Checked:
     try:
         agreement = compare(own.results, subject.model)
     except Unsolved as error:
-        return _unreadable(str(error))
+        return _unreadable(str(error), own.places.get(error.path))
     return Checked("model", agreement.compared, tuple(_observed(own, d) for d in agreement.differences))
 
 
-def _unreadable(why: str) -> Checked:
+def _unreadable(why: str, cell: Cell | None) -> Checked:
     return Checked(
         "model",
         0,
-        (Observation("inputs_unreadable", Place(), why),),
+        (Observation("inputs_unreadable", Place.of(cell) if cell else Place(), why),),
         (NotChecked("model route", f"the inputs cannot be solved: {why}"),),
     )
 

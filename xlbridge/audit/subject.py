@@ -3,6 +3,7 @@
 from __future__ import annotations
 
 import hashlib
+import re
 from collections.abc import Callable
 from dataclasses import dataclass
 from functools import cached_property
@@ -25,8 +26,16 @@ NO_INPUTS: Final = (
 Knows: TypeAlias = Callable[[Evaluator], OwnTemplate | None]
 
 
+#: how the engine names a row of a table
+_ROW: Final = re.compile(r'^(\w+) (\d+) \(".*"\): ')
+
+
 class Unsolved(ValueError):
-    """There is no package from the inputs alone; the message says why."""
+    """There is no package from the inputs alone; the message says why, ``path`` which entry is at fault."""
+
+    def __init__(self, why: str, path: str = "") -> None:
+        super().__init__(why)
+        self.path = path
 
 
 @dataclass(frozen=True)
@@ -68,9 +77,14 @@ class Subject:
         try:
             return solve(from_mapping(self.own.inputs)).to_json()
         except EngineError as error:
-            raise Unsolved(str(error)) from error
+            raise Unsolved(str(error), _path(error.argument)) from error
 
     @cached_property
     def sha256(self) -> str:
         """The hash of the file, in hexadecimal digits."""
         return hashlib.sha256(self.book.data).hexdigest()
+
+
+def _path(argument: str) -> str:
+    """The path of an entry that the engine refuses: ``level[3].weight`` of ``level 3 ("Roof"): weight``."""
+    return _ROW.sub(r"\1[\2].", argument)

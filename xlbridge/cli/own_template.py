@@ -12,12 +12,15 @@ from engine.units import symbol
 from workbook_templates import layout, places
 from workbook_templates.declare import Quantity
 from workbook_templates.draw import cover
-from workbook_templates.read import Reader
+from workbook_templates.read import Ask, Reader
+from xlbridge.audit.align import area_of
 from xlbridge.audit.template import Headline, Meaning, OwnTemplate
 from xlbridge.cli import twin
 from xlbridge.headless.book import Book
 from xlbridge.headless.evaluate import Evaluator
+from xlbridge.headless.operands import NotEvaluated
 from xlbridge.headless.references import Cell
+from xlbridge.values import CellError, Scalar, Value
 
 #: the path of an entry in a row of a table
 _ROW: Final = re.compile(r"(\w+)\[(\d+)\]\.")
@@ -31,9 +34,33 @@ def own_template(evaluator: Evaluator) -> OwnTemplate | None:
     if not all((None, mark) in book.names for mark in MARKS):
         return None
     try:
-        return _known(Reader(evaluator.evaluate_text), book)
+        return _known(Reader(_asking(evaluator)), book)
     except (EngineError, ValueError) as error:
         return _unread(Reader(evaluator.evaluate_text, lenient=True), book, str(error))
+
+
+def _asking(evaluator: Evaluator) -> Ask:
+    """Answers that give a named area cell by cell: one without a value does not take the others along."""
+
+    def held(sheet: str, row: int, column: int) -> Scalar:
+        try:
+            return evaluator.value(sheet, row, column)
+        except NotEvaluated as reason:
+            return CellError("#N/A", str(reason))
+
+    def ask(text: str) -> Value:
+        try:
+            return evaluator.evaluate_text(text)
+        except NotEvaluated:
+            area = area_of(evaluator.book.names.get((None, text.removeprefix("=").casefold()), ""))
+            if area is None:
+                raise
+        sheet, b = area
+        columns = range(b.left, b.right + 1)
+        grid = tuple(tuple(held(sheet, row, c) for c in columns) for row in range(b.top, b.bottom + 1))
+        return grid[0][0] if b.is_cell else grid
+
+    return ask
 
 
 def _known(reader: Reader, book: Book) -> OwnTemplate:

@@ -193,7 +193,7 @@ def test_what_misleads_is_found_at_its_place(story: Path, fault: str) -> None:
         (put(levels("F_x", "X", SYMBOL_ROW), "F"), {"label_changed"}),
         (put(criteria("S_DS"), None), set()),
         (put(levels("w_x"), "5210 kN"), set()),
-        (put(F_X, f"={levels('V_x', 'X')[7:]}"), {"formula_differs"}),
+        (put(F_X, f"={levels('V_x', 'X')[7:]}"), {"formula_differs", "differs_from_model"}),
     ],
 )
 def test_what_cannot_be_read_is_named_and_the_rest_compared(

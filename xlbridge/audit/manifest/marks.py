@@ -80,7 +80,7 @@ def _cells(pairing: Pairing, sides: SheetSides, mark: Mark, found: list[Mark]) -
         wanted = notation.canonical(node, place.sheet), look(mark.rule)
         here = [other for other in found if other.covers(place.row, place.column)]
         same = [o for o in here if o.rule.type == mark.rule.type and _same(o, place, wanted)]
-        cause = f"{sides.pair.twin} {column} {mark.rule.formula}"
+        cause = f"{sides.pair.twin} {column} {mark.rule.formula}" if found else sides.pair.twin
         if not same:
             words = f"the mark of {'; '.join(mark.rule.formula)} is missing or looks another way"
             yield Observation("mark_changed", Place.of(place), words, expected, cause=cause)

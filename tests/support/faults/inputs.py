@@ -1,0 +1,351 @@
+"""Faults in what the user enters: wrong, misplaced, mistaken in unit, or plausible and wrong all the same."""
+
+from __future__ import annotations
+
+from datetime import datetime
+from random import Random
+
+from tests.support.faults.catalogue import fault
+from tests.support.faults.scene import LEVELS, Scene
+from xlbridge.headless.references import Cell
+
+#: plausible: it can be told only from the issue that was checked before
+AGAINST = ("input_changed",)
+PHYSICAL = "no method looks at the size of entries yet"
+UNREADABLE = ("inputs_unreadable",)
+
+
+def _one(scene: Scene, key: str) -> Cell:
+    return scene.pick(scene.level_entries(key))
+
+
+def _two(scene: Scene, key: str) -> list[Cell]:
+    scene.need(len(scene.table.rows) > 1)
+    cells = scene.random.sample(scene.level_entries(key), 2)
+    scene.need(scene.value(cells[0]) != scene.value(cells[1]))
+    return cells
+
+
+def _exchange(scene: Scene, key: str) -> None:
+    first, second = _two(scene, key)
+    scene.write(first, scene.value(second))
+    scene.write(second, scene.value(first))
+
+
+def _all(scene: Scene, key: str, factor: float) -> None:
+    for cell in scene.level_entries(key):
+        scene.write(cell, round(scene.value(cell) * factor, 4))
+
+
+def _is_si(scene: Scene) -> bool:
+    return str(scene.own.inputs["units"]) == "si"
+
+
+# entries of the levels
+
+
+@fault("input", missed=PHYSICAL)
+def elevations_exchanged(scene: Scene) -> None:
+    """The elevations of two levels change places."""
+    _exchange(scene, "elevation")
+
+
+@fault("input", missed=PHYSICAL)
+def elevation_twice(scene: Scene) -> None:
+    """A level has the elevation of another."""
+    first, second = _two(scene, "elevation")
+    scene.write(first, scene.value(second))
+
+
+@fault("input", *UNREADABLE)
+def weight_blank(scene: Scene) -> None:
+    """The weight of a level is left out."""
+    scene.write(_one(scene, "weight"), None)
+
+
+@fault("input", *UNREADABLE)
+def weight_as_text(scene: Scene) -> None:
+    """The weight of a level is a text that looks like a number."""
+    cell = _one(scene, "weight")
+    scene.write(cell, f"{scene.value(cell):.0f}")
+
+
+@fault("input", *UNREADABLE)
+def weight_with_a_comma(scene: Scene) -> None:
+    """The weight of a level is typed with a decimal comma, and so is a text."""
+    cell = _one(scene, "weight")
+    scene.write(cell, f"{scene.value(cell):.1f}".replace(".", ","))
+
+
+@fault("input", *UNREADABLE)
+def minus_sign_of_the_printer(scene: Scene) -> None:
+    """An elevation is pasted with a typographic minus, and so is a text."""
+    cell = _one(scene, "elevation")
+    scene.write(cell, f"\N{MINUS SIGN}{scene.value(cell):.2f}")
+
+
+@fault("input", *UNREADABLE)
+def space_for_a_weight(scene: Scene) -> None:
+    """The weight of a level is one space: it looks empty, and is a text."""
+    scene.write(_one(scene, "weight"), " ")
+
+
+@fault("input", *UNREADABLE)
+def truth_for_a_weight(scene: Scene) -> None:
+    """The weight of a level is TRUE."""
+    scene.write(_one(scene, "weight"), True)
+
+
+@fault("input", missed=PHYSICAL)
+def date_for_a_displacement(scene: Scene) -> None:
+    """A displacement was taken for a date by the program that pasted it."""
+    cell = _one(scene, "delta_xe_X")
+    scene.write(cell, datetime(2026, 3, 1))
+
+
+@fault("input", *UNREADABLE)
+def negative_weight(scene: Scene) -> None:
+    """The weight of a level is negative."""
+    cell = _one(scene, "weight")
+    scene.write(cell, -scene.value(cell))
+
+
+@fault("input", missed=PHYSICAL)
+def zero_weight(scene: Scene) -> None:
+    """The weight of a level is 0."""
+    scene.write(_one(scene, "weight"), 0)
+
+
+@fault("input", missed=PHYSICAL)
+def small_unit_in_one_row(scene: Scene) -> None:
+    """One elevation is given in mm, or in inches."""
+    cell = _one(scene, "elevation")
+    scene.write(cell, scene.value(cell) * (1000 if _is_si(scene) else 12))
+
+
+@fault("input", missed=PHYSICAL)
+def small_unit_in_all_rows(scene: Scene) -> None:
+    """All elevations are given in mm, or in inches."""
+    _all(scene, "elevation", 1000 if _is_si(scene) else 12)
+
+
+@fault("input", missed=PHYSICAL)
+def other_length_unit(scene: Scene) -> None:
+    """All elevations are given in the other system's unit."""
+    _all(scene, "elevation", 1 / 0.3048 if _is_si(scene) else 0.3048)
+
+
+@fault("input", missed=PHYSICAL)
+def mass_for_weight(scene: Scene) -> None:
+    """All weights are masses."""
+    _all(scene, "weight", 1 / 9.80665 if _is_si(scene) else 1 / 32.174)
+
+
+@fault("input", missed=PHYSICAL)
+def pounds_for_kip(scene: Scene) -> None:
+    """All weights are given in the thousandth of their unit."""
+    _all(scene, "weight", 1000)
+
+
+@fault("input", missed=PHYSICAL)
+def displacements_in_the_large_unit(scene: Scene) -> None:
+    """The displacements of one direction are given in m, or in ft."""
+    _all(scene, scene.pick(["delta_xe_X", "delta_xe_Y"]), 0.001 if _is_si(scene) else 1 / 12)
+
+
+@fault("input", missed=PHYSICAL)
+def decimal_point_slipped(scene: Scene) -> None:
+    """The decimal point of a weight slips by a place."""
+    cell = _one(scene, "weight")
+    scene.write(cell, scene.value(cell) * scene.pick([10, 0.1]))
+
+
+@fault("input", *AGAINST)
+def weights_exchanged(scene: Scene) -> None:
+    """The weights of two levels change places."""
+    _exchange(scene, "weight")
+
+
+@fault("input", *AGAINST)
+def digits_transposed(scene: Scene) -> None:
+    """Two digits of a weight change places."""
+    cell = _one(scene, "weight")
+    scene.write(cell, _transposed(scene.value(cell), scene.random))
+
+
+def _transposed(value: float, random: Random) -> float:
+    digits = f"{value:.1f}"
+    places = [n for n in range(1, len(digits) - 2) if "." not in digits[n : n + 2]]
+    places = [n for n in places if digits[n] != digits[n + 1]]
+    if not places:
+        return value + 9
+    n = random.choice(places)
+    return float(digits[:n] + digits[n + 1] + digits[n] + digits[n + 2 :])
+
+
+@fault("input", *AGAINST)
+def column_sorted_alone(scene: Scene) -> None:
+    """The weights are sorted, and nothing else."""
+    cells = scene.level_entries("weight")
+    values = sorted(scene.value(cell) for cell in cells)
+    for cell, value in zip(cells, values, strict=True):
+        if scene.value(cell) != value:
+            scene.write(cell, value)
+    scene.need(scene.touched)
+
+
+@fault("input", missed=PHYSICAL)
+def displacements_upside_down(scene: Scene) -> None:
+    """The displacements of a direction stand in the order of another list."""
+    scene.need(len(scene.table.rows) > 1)
+    cells = scene.level_entries("delta_xe_Y")
+    for cell, other in zip(cells, reversed(cells), strict=True):
+        if cell != other:
+            scene.write(cell, scene.value(other))
+
+
+@fault("input", *AGAINST, missed="an entry that is a link to the changed one is named as changed too")
+def displacements_of_the_other_direction(scene: Scene) -> None:
+    """The displacements of X and of Y change columns."""
+    for first, second in zip(*(scene.level_entries(f"delta_xe_{d}") for d in "XY"), strict=True):
+        scene.write(first, scene.value(second))
+        scene.write(second, scene.value(first))
+
+
+@fault("input", missed=PHYSICAL)
+def displacement_sign(scene: Scene) -> None:
+    """The displacement of one level has the other sign."""
+    cell = _one(scene, "delta_xe_X")
+    scene.write(cell, -scene.value(cell))
+
+
+@fault("input", missed=PHYSICAL)
+def gravity_load_of_one_story(scene: Scene) -> None:
+    """P_x of the lowest level is the load of its own story, not what it carries."""
+    scene.need(len(scene.table.rows) > 2)
+    cells = scene.level_entries("P_x")
+    scene.write(cells[-1], scene.value(cells[0]))
+
+
+@fault("input", *UNREADABLE)
+def level_without_a_name(scene: Scene) -> None:
+    """A level loses its name: the row looks unused, and no longer counts."""
+    scene.write(_one(scene, "name"), None)
+
+
+@fault("input", missed=PHYSICAL)
+def name_twice(scene: Scene) -> None:
+    """A level has the name of another."""
+    first, second = _two(scene, "name")
+    scene.write(first, scene.value(second))
+
+
+@fault("input", missed=PHYSICAL)
+def name_with_a_space(scene: Scene) -> None:
+    """A level's name ends in a space: it will not be found by its name."""
+    cell = _one(scene, "name")
+    scene.write(cell, f"{scene.value(cell)} ")
+
+
+@fault("input", "row_outside_table")
+def level_below_the_table(scene: Scene) -> None:
+    """A level is typed below the totals, where nothing counts it."""
+    row = scene.levels.max_row + 1
+    for key, value in (("name", "Annex"), ("elevation", 9.0), ("weight", 500.0)):
+        scene.at(Cell(LEVELS, row, scene.level_entries(key)[0].column)).value = value
+    scene.touch_one_of(*(f"{LEVELS}!{letter}{row}" for letter in "ABC"))
+
+
+@fault("input", "stray_entry")
+def weight_in_a_guard_row(scene: Scene) -> None:
+    """A weight stands in a guard row, where the ranges count it."""
+    rows = scene.table.rows
+    row = scene.pick([min(rows) - 1, max(rows) + 1])
+    scene.write(Cell(LEVELS, row, scene.level_entries("weight")[0].column), 300.0)
+
+
+@fault("input", "entry_is_formula")
+def weight_taken_from_its_neighbour(scene: Scene) -> None:
+    """The weight of a level is a formula that repeats the level above it."""
+    cells = scene.level_entries("weight")
+    scene.need(len(cells) > 1)
+    n = scene.random.randrange(1, len(cells))
+    scene.write(cells[n], f"={cells[n - 1].address}")
+
+
+# criteria
+
+
+def _criterion(scene: Scene, path: str, value: object) -> None:
+    cell = scene.entry(path)
+    scene.need(scene.value(cell) != value)
+    scene.write(cell, value)
+
+
+@fault("input", *AGAINST)
+def response_modification_slip(scene: Scene) -> None:
+    """R of a direction is that of another system."""
+    _criterion(scene, scene.pick(["direction.X.R", "direction.Y.R"]), 8.0)
+
+
+@fault("input", missed=PHYSICAL)
+def per_cent_of_gravity(scene: Scene) -> None:
+    """S_DS is given in per cent of gravity."""
+    _criterion(scene, "site.S_DS", 92.0)
+
+
+@fault("input", missed=PHYSICAL)
+def spectrum_exchanged(scene: Scene) -> None:
+    """S_DS and S_D1 stand in each other's cells."""
+    cells = [scene.entry("site.S_DS"), scene.entry("site.S_D1")]
+    for cell, other in zip(cells, reversed(cells), strict=True):
+        scene.write(cell, scene.value(other))
+
+
+@fault("input", *AGAINST)
+def directions_exchanged(scene: Scene) -> None:
+    """R and C_d of the two directions change places."""
+    for key in ("R", "C_d"):
+        cells = [scene.entry(f"direction.{d}.{key}") for d in "XY"]
+        for cell, other in zip(cells, reversed(cells), strict=True):
+            scene.write(cell, scene.value(other))
+
+
+@fault("input", *AGAINST)
+def risk_category_lowered(scene: Scene) -> None:
+    """The risk category is a lower one."""
+    _criterion(scene, "site.risk_category", "II")
+
+
+@fault("input", *AGAINST)
+def period_row_of_another_system(scene: Scene) -> None:
+    """The approximate period is that of another system."""
+    _criterion(scene, "direction.X.period_system", "steel moment frame")
+
+
+@fault("input", *UNREADABLE)
+def choice_misspelt(scene: Scene) -> None:
+    """A choice is no word of its list, by one space."""
+    cell = scene.entry("direction.X.period_system")
+    scene.write(cell, f"{scene.value(cell)} ".replace(" ", "  "))
+
+
+@fault("input", missed=PHYSICAL)
+def computed_period_in_the_wrong_unit(scene: Scene) -> None:
+    """The computed period is a frequency, or given in milliseconds."""
+    _criterion(scene, "direction.X.T_computed", scene.pick([850.0, 62.0]))
+
+
+@fault("input", *AGAINST)
+def base_moved(scene: Scene) -> None:
+    """The base lies lower than the ground: the base of a basement."""
+    _criterion(scene, "site.base_elevation", -3.0)
+
+
+@fault("input", "content_changed")
+def source_claimed(scene: Scene) -> None:
+    """The source of an entry names something that it does not come from."""
+    names = sorted(k for (scope, k) in scene.before.book.names if scope is None and k.startswith("source_"))
+    sheet, _, address = scene.before.book.names[None, scene.pick(names)].replace("$", "").rpartition("!")
+    column, row = scene.book[sheet][address].column, scene.book[sheet][address].row
+    scene.write(Cell(sheet, row, column), "geotechnical report 7, table 2")
