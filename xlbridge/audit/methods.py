@@ -7,7 +7,7 @@ import sys
 from collections.abc import Callable
 from typing import Final, TypeAlias
 
-from xlbridge.audit import against, cells, manifest, map, model
+from xlbridge.audit import against, cells, hygiene, manifest, map, model
 from xlbridge.audit.finding import Checked
 from xlbridge.audit.subject import Subject
 
@@ -18,6 +18,7 @@ METHODS: Final[tuple[Method, ...]] = (
     model.check,
     map.check,
     manifest.check,
+    hygiene.check,
     against.check,
 )
 
