@@ -24,14 +24,15 @@ from xlbridge.values import CellError, Scalar, Value
 
 #: the path of an entry in a row of a table
 _ROW: Final = re.compile(r"(\w+)\[(\d+)\]\.")
-#: the names that every workbook of ours has
-MARKS: Final = ("edition", "units", layout.STORY_TABLE.name)
+#: names that every workbook of ours has; one that lost some of them is ours still
+MARKS: Final = ("edition", "units", layout.STORY_TABLE.name, "job_title", "workbook_status", "base_elevation")
+ENOUGH: Final = 4
 
 
 def own_template(evaluator: Evaluator) -> OwnTemplate | None:
     """Return what is known of a workbook of ours, or nothing where it is another's."""
     book = evaluator.book
-    if not all((None, mark) in book.names for mark in MARKS):
+    if sum((None, mark) in book.names for mark in MARKS) < ENOUGH:
         return None
     try:
         return _known(Reader(_asking(evaluator)), book)

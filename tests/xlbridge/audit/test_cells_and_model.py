@@ -11,6 +11,7 @@ from openpyxl import Workbook
 from engine.editions import EDITIONS
 from engine.units import SYSTEMS
 from tests.support.audited import audited, changed, computed_book, kinds_at
+from workbook_templates.layout import STORY_TABLE
 from workbook_templates.parts import together
 from xlbridge.audit.audit import State
 from xlbridge.audit.cells import TOLERANCE, agree
@@ -75,6 +76,16 @@ def test_an_entry_that_cannot_be_solved_is_named(tmp_path: Path) -> None:
     assert any(item.what == "model route" for item in outcome.not_checked)
     failing = next(f for f in outcome.findings if f.kind.key == "error_value")
     assert any(place.sheet == "Levels" for place in failing.places)
+
+
+def test_a_workbook_that_lost_the_name_of_its_table_is_ours_still(tmp_path: Path) -> None:
+    def lose(book: Workbook) -> None:
+        del book.defined_names[STORY_TABLE.name]
+
+    outcome = audited(changed(computed_book(tmp_path), lose))
+    assert [f.words for f in outcome.findings if f.kind.key == "inputs_unreadable"] == [
+        f"{STORY_TABLE.name}: the workbook has no such name"
+    ]
 
 
 def test_a_workbook_of_another_make_gets_its_cells_checked_and_says_what_is_not(tmp_path: Path) -> None:

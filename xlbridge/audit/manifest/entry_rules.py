@@ -53,7 +53,7 @@ def _cells(
         if place is None:
             continue
         here = [r for a, r in found if any(area.contains(place.row, place.column) for area in a)]
-        expected, cause = shown(rule), f"{cell.sheet} {cell.column} {rule.sqref}" if found else cell.sheet
+        expected, cause = shown(rule), f"{cell.sheet} {rule.sqref if here else ''}"
         if not here:
             words = f"the cell may hold anything; the template allows {expected}"
             yield Observation("entry_rule_missing", Place.of(place), words, expected, cause=cause)

@@ -77,10 +77,11 @@ def _cells(pairing: Pairing, sides: SheetSides, mark: Mark, found: list[Mark]) -
             continue
         expected = _written(mark, Cell(sides.pair.twin, row, column))
         node = notation.moved(parse(expected), sides.pair.twin, pairing.alignment.area_from_twin)
-        wanted = notation.canonical(node, place.sheet), look(mark.rule)
+        wanted = notation.canonical(node, place.sheet)
         here = [other for other in found if other.covers(place.row, place.column)]
-        same = [o for o in here if o.rule.type == mark.rule.type and _same(o, place, wanted)]
-        cause = f"{sides.pair.twin} {column} {mark.rule.formula}" if found else sides.pair.twin
+        alike = [o for o in here if o.rule.type == mark.rule.type and _formula(o, place) == wanted]
+        same = [o for o in alike if look(o.rule) == look(mark.rule)]
+        cause = "another look" if alike and not same else sides.pair.twin
         if not same:
             words = f"the mark of {'; '.join(mark.rule.formula)} is missing or looks another way"
             yield Observation("mark_changed", Place.of(place), words, expected, cause=cause)
@@ -89,12 +90,12 @@ def _cells(pairing: Pairing, sides: SheetSides, mark: Mark, found: list[Mark]) -
             yield Observation("mark_overlaid", Place.of(place), words, expected, cause=cause)
 
 
-def _same(mark: Mark, place: Cell, wanted: tuple[str, tuple[str, str, bool]]) -> bool:
+def _formula(mark: Mark, place: Cell) -> str:
+    """The formula of a rule for one cell, to be compared; nothing where it has none that can be read."""
     try:
-        formula = notation.canonical(parse(_written(mark, place)), place.sheet)
+        return notation.canonical(parse(_written(mark, place)), place.sheet)
     except (NotEvaluated, IndexError):
-        return False
-    return (formula, look(mark.rule)) == wanted
+        return ""
 
 
 def _written(mark: Mark, cell: Cell) -> str:
