@@ -1,4 +1,4 @@
-"""(c) The expected formula of every cell: that of the twin, where the workbook has it now."""
+"""(c) The expected formula of every cell: that of its twin, the workbook built anew for the same inputs."""
 
 from __future__ import annotations
 

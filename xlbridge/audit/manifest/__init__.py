@@ -1,4 +1,4 @@
-"""(d) What only a twin can tell besides formulas: labels, names, formats, marks, entry rules, pages."""
+"""(d) The rest of the workbook built anew: labels, names, formats, marks, entry rules, pages."""
 
 from __future__ import annotations
 

@@ -2,9 +2,10 @@
 
 from __future__ import annotations
 
-from collections.abc import Iterator, Mapping, Sequence
+from collections.abc import Iterable, Iterator, Mapping, Sequence
 from dataclasses import dataclass
 from html import escape
+from itertools import pairwise
 from math import floor, log10
 from typing import Any, Final
 
@@ -14,9 +15,13 @@ from xlbridge.headless.references import Cell
 
 WIDTH, HEIGHT, LEFT, RIGHT, TOP, BOTTOM = 380, 300, 78, 16, 30, 40
 LINES: Final = {"X": "", "Y": "7 4"}
+#: how large the map is drawn, and how many rows or columns without formulas it shows at most in a row
+SCALE, GAP = 1.4, 2
+#: the mark in a box, besides its fill
+MARKS: Final = {State.FINDING: "l4 4m0-4l-4 4", State.NOT_CHECKED: "m0 2h4"}
 CELL: Final = 7
 #: how a state looks in the map: a mark as well as a fill, so that it reads without colour
-FILLS: Final = {State.VERIFIED: "#ffffff", State.FINDING: "#7f1d1d", State.NOT_CHECKED: "#8c8c8c"}
+FILLS: Final = {State.VERIFIED: "#ffffff", State.FINDING: "#7f1d1d", State.NOT_CHECKED: "#9a9a9a"}
 
 
 @dataclass(frozen=True, slots=True)
@@ -145,18 +150,30 @@ def sheet_maps(audit: Audit) -> Iterator[SheetMap]:
 
 
 def _map(sheet: str, cells: Mapping[Cell, State]) -> str:
-    top, left = min(c.row for c in cells), min(c.column for c in cells)
-    high, wide = max(c.row for c in cells) - top + 1, max(c.column for c in cells) - left + 1
+    down, across = _packed(c.row for c in cells), _packed(c.column for c in cells)
     layers = []
     for state in State:
-        places = [(CELL * (c.column - left), CELL * (c.row - top)) for c, s in cells.items() if s is state]
+        places = [(CELL * across[c.column], CELL * down[c.row]) for c, s in cells.items() if s is state]
         boxes = "".join(f"M{x + 0.5} {y + 0.5}h6v6h-6z" for x, y in places)
         if boxes:
             layers.append(f'<path d="{boxes}" fill="{FILLS[state]}" class="box"/>')
-        if state is State.FINDING:
-            crosses = "".join(f"M{x + 1.5} {y + 1.5}l4 4m0-4l-4 4" for x, y in places)
-            layers.append(f'<path d="{crosses}" class="cross"/>')
+        if places and state in MARKS:
+            marks = "".join(f"M{x + 1.5} {y + 1.5}{MARKS[state]}" for x, y in places)
+            layers.append(f'<path d="{marks}" class="{state.replace(" ", "-")}-mark"/>')
     title = f"<title>{escape(sheet)}: formula cells and their state</title>"
-    width, height = CELL * wide + 1, CELL * high + 1
-    opening = f'<svg role="img" viewBox="0 0 {width} {height}" width="{width}" height="{height}" class="map">'
-    return f"{opening}{title}{''.join(layers)}</svg>"
+    width, height = CELL * (max(across.values()) + 1) + 1, CELL * (max(down.values()) + 1) + 1
+    size = f'width="{SCALE * width:g}" height="{SCALE * height:g}"'
+    return f'<svg role="img" viewBox="0 0 {width} {height}" {size} class="map">{title}{"".join(layers)}</svg>'
+
+
+def _packed(lines: Iterable[int]) -> dict[int, int]:
+    """Place rows or columns: those without formulas leave a gap of a few at most.
+
+    >>> _packed([5, 6, 8, 900])
+    {5: 0, 6: 1, 8: 3, 900: 6}
+    """
+    order = sorted(set(lines))
+    places = {order[0]: 0}
+    for before, line in pairwise(order):
+        places[line] = places[before] + min(line - before, GAP + 1)
+    return places

@@ -11,6 +11,7 @@ from typing import Any, Final
 from engine.version import __version__
 from xlbridge.audit.audit import Audit
 from xlbridge.audit.finding import Finding, Observation, Place
+from xlbridge.audit.methods import summary
 from xlbridge.audit.record import ROLES, Answer, Person, Record, key_of
 from xlbridge.audit.report.page import CAUTIONS, SIGNS, filled_entries, program, shown, verdict
 from xlbridge.headless.added_sheets import Look, Row, Sheet, Shown, add_sheets
@@ -128,8 +129,10 @@ def _record(audit: Audit, record: Record, made: datetime) -> Iterator[Row]:
     """What a check record has to say."""
     yield from _facts(audit, made)
     yield from _table("People", ("role", "name", "qualification", "date"), _people(record))
-    looked = ((c.method, float(c.looked_at), float(len(c.observations))) for c in audit.checks)
-    yield from _table("Methods", ("method", "things looked at", "of them not as expected"), looked)
+    seen = (
+        (c.method, summary(c.method), float(c.looked_at), float(len(c.observations))) for c in audit.checks
+    )
+    yield from _table("Methods", ("method", "what it does", "things looked at", "not as expected"), seen)
     missing = ((item.what, item.because, str(item.place)) for item in audit.not_checked)
     yield from _table("Not checked", ("what", "because", "where"), missing)
     columns = ("cell", "entry", "value", "unit", "source", "mark", "words")

@@ -11,11 +11,15 @@
   }
   const holds = (item, text) => item.textContent.toLowerCase().includes(text.trim().toLowerCase());
 
+  const answerOf = (item) => {
+    const said = (part) => item.querySelector(`[data-part="${part}"]`).value.trim();
+    return said("closed") ? "closed" : said("words") ? "answered" : "open";
+  };
   function filterFindings() {
-    const [text, severity, kind, sheet] = ["find-text", "find-severity", "find-kind", "find-sheet"].map((id) => one(`#${id}`).value);
+    const [text, severity, kind, sheet, answer] = ["text", "severity", "kind", "sheet", "answer"].map((id) => one(`#find-${id}`).value);
     filter(".finding", "#findings-said", (item) =>
       (!severity || item.dataset.severity === severity) && (!kind || item.dataset.kind === kind) &&
-      (!sheet || item.dataset.sheets.split("|").includes(sheet)) && holds(item, text));
+      (!sheet || item.dataset.sheets.split("|").includes(sheet)) && (!answer || answerOf(item) === answer) && holds(item, text));
   }
   function filterCells() {
     const [text, sheet, state] = ["cell-text", "cell-sheet", "cell-state"].map((id) => one(`#${id}`).value);

@@ -162,6 +162,11 @@ def test_filters_leave_what_matches_and_say_how_many(
     said = "return document.querySelector(arguments[0]).textContent"
     assert browser.run(said, "#findings-said") == f"{count} of {len(audit.findings)} shown"
     browser.run(choose, "#find-kind", "")
+    browser.type(".finding [data-part='words']", "put back")
+    for answer, left in (("answered", 1), ("open", len(audit.findings) - 1), ("closed", 0)):
+        browser.run(choose, "#find-answer", answer)
+        assert browser.run(shown, ".finding") == left
+    browser.run(choose, "#find-answer", "")
     browser.type("#find-text", "no finding says this")
     assert browser.run(shown, ".finding") == 0
     states = [state.value for state in audit.states.values()]

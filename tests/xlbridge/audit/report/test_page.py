@@ -147,6 +147,16 @@ class TestFigures:
         assert levels.svg.count("h6v6h-6z") == sum(levels.counts.values())
         assert levels.svg.count("l4 4m0-4l-4 4") == levels.counts["finding"] > 0
 
+    def test_formulas_far_apart_make_no_large_map(self, tmp_path: Path) -> None:
+        book = Workbook()
+        for address in ("A1", "B2", "XFD1048576"):
+            book.active[address] = "=TODAY()"
+        book.save(tmp_path / "far.xlsx")
+        (found,) = sheet_maps(audited(tmp_path / "far.xlsx"))
+        width, height = map(float, re.findall(r'(?:width|height)="([^"]+)"', found.svg))
+        assert width == height < 60
+        assert found.svg.count("m0 2h4") == found.counts["not checked"] == 3
+
 
 class TestCommand:
     def test_reports_are_written_beside(self, tmp_path: Path) -> None:
