@@ -85,11 +85,15 @@ def _draw_job(sheet: Worksheet, inputs: Inputs, row: int) -> int:
         style.dress(cell, Role.INPUT, "@")
         sheets.name(sheet, f"job_{key}", f"$B${row}")
         row += 1
-    standard = next(iter(rules(inputs.edition).values())).standard
-    units = f"{symbol('force', inputs.units)} and {symbol('length', inputs.units)}"
     style.write(sheet.cell(row, 1), "Made for", style.BOLD)
-    style.write(sheet.cell(row, 2), f"{standard}, {units}; template {__version__}")
+    style.write(sheet.cell(row, 2), f"{made_for(inputs.edition, inputs.units)}; template {__version__}")
     return row + 1
+
+
+def made_for(edition: str, units: str) -> str:
+    """Which edition and which units a workbook is made for, in the words of its cover."""
+    standard = next(iter(rules(edition).values())).standard
+    return f"{standard}, {symbol('force', units)} and {symbol('length', units)}"
 
 
 def _draw_headlines(sheet: Worksheet, layout: Layout, inputs: Inputs, row: int) -> int:

@@ -3,10 +3,14 @@
 from __future__ import annotations
 
 from collections.abc import Iterator, Mapping
+from itertools import product
 from typing import Any
 
 from openpyxl import Workbook
 
+from engine.editions import EDITIONS
+from engine.errors import EngineError
+from engine.units import SYSTEMS
 from workbook_templates import layout, places
 from workbook_templates.build import draw, draw_native
 from workbook_templates.declare import Role
@@ -28,12 +32,35 @@ def is_issue_copy(book: Book) -> bool:
 
 def twin(reader: Reader, book: Book, inputs: Mapping[str, Any]) -> Book:
     """Build the workbook anew, as an issue copy if it is one."""
+    inputs = _as_made(book, inputs)
     drawn = draw(inputs)
     if is_issue_copy(book):
         evaluator = Evaluator(Book.of(drawn), FUNCTIONS)
         drawn = draw_native(inputs, Computed(evaluator, evaluator.evaluate_all()).values)
     _link(drawn, reader, book)
     return Book.of(drawn)
+
+
+def _as_made(book: Book, inputs: Mapping[str, Any]) -> Mapping[str, Any]:
+    """The inputs, with the edition and units of the cover if more of the texts belong to them.
+
+    Both are fixed when a workbook is made; typed over, they would make all its texts look changed.
+    """
+    texts = {text for cells in book.constants.values() for text in cells.values() if isinstance(text, str)}
+    for pair in product(EDITIONS, SYSTEMS):
+        other = {**inputs, **dict(zip(("edition", "units"), pair, strict=True))}
+        if other != inputs and any(text.startswith(cover.made_for(*pair)) for text in texts):
+            return max(inputs, other, key=lambda given: len(texts & _texts(given)))
+    return inputs
+
+
+def _texts(inputs: Mapping[str, Any]) -> set[str]:
+    """The texts of a workbook built anew; none where the inputs do not fit each other."""
+    try:
+        sheets = Book.of(draw(inputs)).constants.values()
+    except EngineError:
+        return set()
+    return {text for cells in sheets for text in cells.values() if isinstance(text, str)}
 
 
 def tables(reader: Reader, book: Book) -> Iterator[TableRows]:

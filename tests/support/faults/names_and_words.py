@@ -208,14 +208,14 @@ def edition_on_the_cover(scene: Scene) -> None:
     scene.write(cell, text.replace("7-22", "7-16") if "7-22" in text else text.replace("7-16", "7-22"))
 
 
-@fault("structure", "label_changed", missed="one cause, but several findings")
+@fault("structure", "fixed_entry_changed")
 def edition_switched(scene: Scene) -> None:
     """The fixed edition of the criteria is typed over: the formulas stay those of the other."""
     cell = Cell(CRITERIA, 6, 4)
     scene.write(cell, "7-16" if scene.at(cell).value == "7-22" else "7-22")
 
 
-@fault("structure", "label_changed", missed="one cause, but several findings")
+@fault("structure", "fixed_entry_changed")
 def unit_system_switched(scene: Scene) -> None:
     """The fixed unit system is typed over: all numbers stay."""
     cell = Cell(CRITERIA, 7, 4)

@@ -6,12 +6,15 @@ import re
 from collections.abc import Iterator
 from typing import Final
 
+from engine.editions import EDITIONS
 from engine.units import SYSTEMS, UNITS, symbol
 from xlbridge.audit.finding import Observation, Place
 from xlbridge.audit.manifest.pairing import CellPair, Pairing
 from xlbridge.headless.nodes import render_value
 
 _VERSION: Final = re.compile(r"template [\w.+-]+$")
+#: what is fixed when a workbook is made
+FIXED: Final = frozenset({*EDITIONS, *SYSTEMS})
 UNIT_SYMBOLS: Final = frozenset(symbol(unit, system) for unit in UNITS for system in SYSTEMS) - {"", "text"}
 
 
@@ -57,6 +60,8 @@ def _observed(pairing: Pairing, pair: CellPair, expected: str, found: str, cause
     )
     if pair.cell in pairing.own.cautions:
         kind, cause = "caution_changed", "cautions"
+    elif expected in FIXED:
+        kind, cause = "fixed_entry_changed", ""
     elif expected in UNIT_SYMBOLS:
         kind, cause = "unit_changed", cause or f"{expected} > {found}"
     elif _VERSION.search(expected):
