@@ -1,12 +1,13 @@
 """The check record: who made the workbook and who checked it, and what they said of inputs and findings.
 
 It is a file of its own beside the workbook, in JSON, so that it outlives the report: the page loads and
-saves it, and the next audit takes it in again.
+saves it, and the next audit takes it in again. One written by hand may as well be TOML.
 """
 
 from __future__ import annotations
 
 import json
+import tomllib
 from collections.abc import Mapping
 from dataclasses import asdict, dataclass, field, fields
 from typing import Any, Final
@@ -49,11 +50,11 @@ class Record:
 
     @classmethod
     def read(cls, text: str) -> Record:
-        """Return the record of a file's text."""
+        """Return the record of a file's text: JSON, or TOML where it was written by hand."""
         try:
-            tables = json.loads(text)
-        except json.JSONDecodeError as error:
-            raise RecordError(f"the record is not JSON: {error}") from error
+            tables = json.loads(text) if text.lstrip().startswith("{") else tomllib.loads(text)
+        except (json.JSONDecodeError, tomllib.TOMLDecodeError) as error:
+            raise RecordError(f"the record is neither JSON nor TOML: {error}") from error
         _known("the record", tables, {f.name for f in fields(cls)})
         people = {role: _one(Person, f"people.{role}", given) for role, given in _table(tables, "people")}
         _known("people", people, set(ROLES))

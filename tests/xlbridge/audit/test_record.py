@@ -22,11 +22,19 @@ def test_a_record_comes_back_as_it_was() -> None:
     assert Record.read("{}") == Record()
 
 
+def test_a_record_by_hand_may_be_toml() -> None:
+    people = {"checker": Person("B. Checker", "PE")}
+    assert Record.read('people.checker = {name = "B. Checker", qualification = "PE"}') == Record(people)
+    assert Record.read('[people.checker]\nname = "B. Checker"\nqualification = "PE"') == Record(people)
+
+
 @pytest.mark.parametrize(
     ("tables", "words"),
     [
-        ("no json", "not JSON"),
-        ([], "not a table"),
+        ("{no json}", "neither JSON nor TOML"),
+        ("no toml", "neither JSON nor TOML"),
+        ([], "neither JSON nor TOML"),
+        ("[people.drawer]", "'drawer' is unknown"),
         ({"persons": {}}, "'persons' is unknown"),
         ({"people": {"drawer": {}}}, "'drawer' is unknown"),
         ({"people": []}, "people: not a table"),

@@ -12,6 +12,7 @@ from jinja2 import Environment, FunctionLoader, StrictUndefined
 from markupsafe import Markup
 
 from engine.version import __version__
+from xlbridge.audit import cells, routes
 from xlbridge.audit.audit import Audit
 from xlbridge.audit.finding import Finding
 from xlbridge.audit.kinds import KINDS, Severity
@@ -99,6 +100,7 @@ def _content(audit: Audit, record: Record, made: datetime | None) -> dict[str, A
         "cautions": CAUTIONS,
         "kinds": KINDS,
         "summary": summary,
+        "tolerances": (cells.TOLERANCE, routes.TOLERANCE),
     }
 
 

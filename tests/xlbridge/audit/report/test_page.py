@@ -73,6 +73,7 @@ def test_every_finding_and_every_cell_stands_in_it(faulty: Audit) -> None:
 def test_the_cautions_and_the_limits_are_on_it(clean: Audit) -> None:
     words = " ".join(read(page(clean)).text_content().split())
     assert all(caution in words for caution in CAUTIONS)
+    assert "agree within 1e-09 of their value, results by both routes within 1e-12" in words
     assert "authority having jurisdiction" in words
 
 
