@@ -69,24 +69,12 @@ class Reader:
         tables: dict[str, tuple[Row, ...]] = {}
         for name in {t.name for part in PARTS.values() for t in (STORY_TABLE, *part.tables)}:
             if self._defined(name):
-                found = self._cells(name) if self.lenient else self._value(name)
+                found = self._value(name)
                 if not isinstance(found, tuple) or len(found) <= HEADER_ROWS:
                     self._refuse(f"{name}: the name does not cover a table")
                 else:
                     tables[name] = found
         return tables
-
-    def _cells(self, name: str) -> tuple[Row, ...]:
-        """Return an area cell by cell, so that one without a value does not take the others with it."""
-        rows, columns = (int(self._number(f"{count}({name})")) for count in ("ROWS", "COLUMNS"))
-        return tuple(
-            tuple(self._cell(f"INDEX({name},{row},{column})") for column in range(1, columns + 1))
-            for row in range(1, rows + 1)
-        )
-
-    def _number(self, text: str) -> float:
-        value = self.ask(f"={text}")
-        return value if isinstance(value, float) else 0.0
 
     def _headings(self, table: Table) -> Row:
         if table.name not in self._tables:
@@ -130,7 +118,7 @@ class Reader:
 
     def _defined(self, name: str) -> bool:
         try:
-            self.ask(f"=ROWS({name})" if self.lenient else f"={name}")
+            self.ask(f"={name}")
         except NotEvaluated:
             return False
         return True

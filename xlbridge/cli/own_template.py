@@ -37,7 +37,7 @@ def own_template(evaluator: Evaluator) -> OwnTemplate | None:
     try:
         return _known(Reader(_asking(evaluator)), book)
     except (EngineError, ValueError) as error:
-        return _unread(Reader(evaluator.evaluate_text, lenient=True), book, str(error))
+        return _unread(Reader(_asking(evaluator), lenient=True), book, str(error))
 
 
 def _asking(evaluator: Evaluator) -> Ask:
