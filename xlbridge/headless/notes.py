@@ -29,6 +29,11 @@ _VML: Final = (
     'xmlns:v="urn:schemas-microsoft-com:vml" xmlns:o="urn:schemas-microsoft-com:office:office" '
     'xmlns:x="urn:schemas-microsoft-com:office:excel"'
 )
+#: shapes are numbered in blocks, which the drawing names
+_BLOCK: Final = 1024
+_EMPTY: Final = (
+    f'<xml {_VML}><o:shapelayout v:ext="edit"><o:idmap v:ext="edit" data="{{blocks}}"/></o:shapelayout></xml>'
+)
 _SHAPE_TYPE: Final = (
     f'<v:shapetype {_VML} id="_x0000_t202" coordsize="21600,21600" o:spt="202" '
     'path="m,l,21600r21600,l21600,xe"><v:stroke joinstyle="miter"/>'
@@ -132,12 +137,12 @@ def shortened(text: str, length: int) -> str:
 
 def _draw(package: Package, part: str, notes: Mapping[str, str]) -> None:
     """Add a shape for each new note at the end of the drawing; it is not always XML, so it is not parsed."""
-    name = _drawing(package, part)
+    name = _drawing(package, part, len(notes))
     old = package.read(name)
     end = old.rfind(b"</xml>")
     if end < 0:
         raise StoreError(f"part {name} is no drawing that notes can be added to")
-    number = max((int(found) for found in _NUMBER.findall(old)), default=1024)
+    number = max((int(found) for found in _NUMBER.findall(old)), default=_BLOCK)
     shapes = [] if b'"_x0000_t202"' in old else [_SHAPE_TYPE]
     for address, text in notes.items():
         number += 1
@@ -145,15 +150,16 @@ def _draw(package: Package, part: str, notes: Mapping[str, str]) -> None:
     package.write(name, old[:end] + "".join(shapes).encode() + old[end:])
 
 
-def _drawing(package: Package, part: str) -> str:
-    """The sheet's drawing of the old kind; made where there is none."""
+def _drawing(package: Package, part: str, count: int) -> str:
+    """The sheet's drawing of the old kind; made where there is none, with numbers for so many shapes."""
     sheet = package.look(part)
     main, ident = etree.QName(sheet).namespace, f"{{{package.office}}}id"
     legacy = sheet.find(f"{{{main}}}legacyDrawing")
     name = package.relation(part, legacy.get(ident, "")) if legacy is not None else None
     if name is None:
         name = package.fresh("xl/drawings/vmlDrawing{}.vml")
-        package.write(name, f"<xml {_VML}></xml>".encode())
+        blocks = ",".join(str(n) for n in range(1, 2 + count // _BLOCK))
+        package.write(name, _EMPTY.format(blocks=blocks).encode())
         package.declare(name, _VML_TYPE)
         sheet = package.edit(part)
         identifier = package.relate(part, "vmlDrawing", name)

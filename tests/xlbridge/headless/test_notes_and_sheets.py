@@ -87,7 +87,17 @@ def test_a_package_without_notes_gets_its_parts(tmp_path: Path) -> None:
     drawing = etree.fromstring(after["xl/drawings/vmlDrawing1.vml"])
     shapes = drawing.findall("{urn:schemas-microsoft-com:vml}shape")
     assert len({shape.get("id") for shape in shapes}) == len(shapes) == 2
+    assert drawing[0].find("{*}idmap").get("data") == "1"
+    assert all(1024 < int(shape.get("id").removeprefix("_x0000_s")) < 2048 for shape in shapes)
     assert [item.text for item in drawing.iter("{urn:schemas-microsoft-com:office:excel}Row")] == ["2", "0"]
+
+
+def test_a_sheet_full_of_notes_has_a_number_for_each(tmp_path: Path) -> None:
+    source = hand_made(tmp_path / "in.xlsx")
+    after = parts_of(noted(source, {f"A{row}": "note" for row in range(1, 1501)}, "Story & table"))
+    drawing = after["xl/drawings/vmlDrawing1.vml"]
+    assert b'data="1,2"' in drawing
+    assert len(set(re.findall(rb'"_x0000_s(\d+)"', drawing))) == 1500
 
 
 def test_a_second_round_adds_to_the_first(tmp_path: Path) -> None:

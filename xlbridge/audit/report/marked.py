@@ -43,7 +43,7 @@ def marked(audit: Audit, record: Record | None = None, made: datetime | None = N
             put_notes(package, sheet, notes, AUTHOR)
     footer = f"{shortened(audit.subject.path.name, 60)}, SHA-256 {audit.subject.sha256[:12]}…"
     top = [*_titled(FINDINGS, audit), _row(_FINDING_COLUMNS, Look.HEAD)]
-    rows = [*top, *(row for finding in audit.findings for row in _finding(finding, said))]
+    rows = [*top, *(row for finding in audit.findings for row in _finding(finding, said, audit))]
     found = Sheet(FINDINGS, tuple(_FINDING_COLUMNS.values()), rows, len(top), footer)
     top = [*_titled(RECORD, audit)]
     rows = [*top, *_record(audit, said, made or datetime.now())]
@@ -97,16 +97,17 @@ def _row(values: Iterable[Scalar], look: Look = Look.BODY) -> Row:
     return tuple(Shown(value, look) for value in values)
 
 
-def _finding(finding: Finding, record: Record) -> Iterator[Row]:
-    """One row an observation; the answer stands in the first."""
+def _finding(finding: Finding, record: Record, audit: Audit) -> Iterator[Row]:
+    """One row an observation; the answer stands in the first. What is gone cannot be led to."""
     kind, answer = finding.kind, record.findings.get(key_of(finding), Answer())
     for n, seen in enumerate(finding.observations):
         said = answer if n == 0 else Answer()
+        to = _cell(seen.place) if seen.place.sheet in audit.subject.book.sheets else None
         yield (
             Shown(float(finding.number)),
             Shown(f"{SIGNS[kind.severity]} {kind.severity}", Look.STRONG),
             Shown(kind.title),
-            Shown(str(seen.place), Look.LINK if _cell(seen.place) else Look.BODY, _cell(seen.place)),
+            Shown(str(seen.place), Look.LINK if to else Look.BODY, to),
             *_row((seen.words, seen.expected, seen.found, seen.stored, seen.recomputed, seen.clause)),
             *_row((_effects(finding), kind.remedy) if n == 0 else ("", "")),
             *_row((said.words, said.closed)),

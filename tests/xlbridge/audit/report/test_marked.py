@@ -2,6 +2,7 @@
 
 from __future__ import annotations
 
+from dataclasses import replace
 from datetime import datetime
 from io import BytesIO
 from pathlib import Path
@@ -18,6 +19,7 @@ from tests.support.command import assert_refused, run
 from tests.support.office import Office
 from tests.support.packages import parts_of
 from xlbridge.audit.audit import Audit
+from xlbridge.audit.finding import Place
 from xlbridge.audit.record import Answer, Person, Record, key_of
 from xlbridge.audit.report.marked import FINDINGS, RECORD, marked, notes_of
 from xlbridge.audit.report.page import CAUTIONS
@@ -138,6 +140,15 @@ def test_a_workbook_of_another_make_is_marked_too(tmp_path: Path) -> None:
     copy = openpyxl.load_workbook(BytesIO(marked(audited(changed(path, lambda book: None)))))
     assert "#DIV/0!" in copy["Sheet"]["C1"].comment.text
     assert copy.sheetnames == ["Sheet", "Picture", FINDINGS, RECORD]
+
+
+def test_a_finding_on_a_sheet_that_is_gone_leads_nowhere(spoiled: Audit) -> None:
+    seen = replace(spoiled.findings[0].observations[0], place=Place("Gone", "B2"))
+    audit = replace(spoiled, findings=(replace(spoiled.findings[0], observations=(seen,)),))
+    book = openpyxl.load_workbook(BytesIO(marked(audit)))
+    cells = [cell for row in book[FINDINGS].iter_rows() for cell in row]
+    assert "Gone!B2" in [cell.value for cell in cells]
+    assert not any(cell.hyperlink for cell in cells)
 
 
 def test_two_copies_are_the_same_bytes(spoiled: Audit) -> None:
