@@ -57,12 +57,20 @@ def shown(value: Any) -> str:
 
 def verdict(audit: Audit) -> str:
     """Return the outcome in words, with its sign."""
-    errors, warnings = audit.count(Severity.ERROR), audit.count(Severity.WARNING)
-    if errors or warnings:
-        return f"✗ {errors} errors and {warnings} warnings to be answered"
+    missing = _counted(len(audit.not_checked), "thing")
+    found = [_counted(audit.count(severity), severity) for severity in (Severity.ERROR, Severity.WARNING)]
+    if audit.count(Severity.ERROR) or audit.count(Severity.WARNING):
+        rest = f"; {missing} could not be checked" if audit.not_checked else ""
+        return f"✗ {' and '.join(found)} to be answered{rest}"
+    notes = audit.count(Severity.NOTE)
+    nothing = f"nothing to be answered, {_counted(notes, Severity.NOTE)}" if notes else "nothing found"
     if audit.not_checked:
-        return f"– nothing found, but {len(audit.not_checked)} things could not be checked"
-    return "✓ nothing found: every formula cell verified"
+        return f"– {nothing}, but {missing} could not be checked"
+    return f"✓ {nothing}: every formula cell verified"
+
+
+def _counted(number: int, thing: str) -> str:
+    return f"{number} {thing}{'' if number == 1 else 's'}"
 
 
 def _resource(name: str) -> str:

@@ -4,6 +4,7 @@ from __future__ import annotations
 
 import json
 import re
+from dataclasses import replace
 from datetime import datetime
 from pathlib import Path
 from typing import Any
@@ -15,6 +16,8 @@ from openpyxl import Workbook
 from tests.support.audited import audited, changed, computed_book
 from tests.support.command import assert_refused, run
 from xlbridge.audit.audit import Audit
+from xlbridge.audit.finding import Finding, NotChecked, Observation, Place
+from xlbridge.audit.kinds import KINDS, Severity
 from xlbridge.audit.record import Answer, Person, Record
 from xlbridge.audit.report.figures import figures, sheet_maps
 from xlbridge.audit.report.page import CAUTIONS, page, shown, verdict
@@ -68,6 +71,18 @@ def test_every_finding_and_every_cell_stands_in_it(faulty: Audit) -> None:
     printed = [cell for cell in cells if "copy" not in cell.get("class").split()]
     assert 40 < len(printed) < len(cells) / 2
     assert all("copy" not in c.get("class") for c in cells if c.get("data-state") == "finding")
+
+
+def test_the_verdict_counts_what_is_found_and_what_is_not_checked(faulty: Audit) -> None:
+    kinds = {f.kind.severity: f for f in faulty.findings}
+    one = replace(faulty, findings=(kinds[Severity.ERROR],), checks=faulty.checks[:1])
+    assert verdict(one) == "✗ 1 error and 0 warnings to be answered"
+    missing = replace(faulty.checks[0], not_checked=(NotChecked("formula", "a reason"),))
+    note = Observation("entry_is_formula", Place("Levels", "A1"), "words")
+    known = replace(one, findings=(Finding(1, KINDS[note.kind], (note,)),))
+    assert verdict(known) == "✓ nothing to be answered, 1 note: every formula cell verified"
+    some = replace(faulty, findings=(kinds[Severity.ERROR],) * 2, checks=(missing,))
+    assert verdict(some) == "✗ 2 errors and 0 warnings to be answered; 1 thing could not be checked"
 
 
 def test_the_cautions_and_the_limits_are_on_it(clean: Audit) -> None:
