@@ -2,7 +2,7 @@
 
 from __future__ import annotations
 
-from collections.abc import Callable
+from collections.abc import Callable, Sequence
 from pathlib import Path
 from typing import Any
 
@@ -10,6 +10,7 @@ import openpyxl
 from openpyxl import Workbook
 
 from tests.support.story_books import story_book
+from xlbridge.audit.acceptance import Acceptance
 from xlbridge.audit.audit import Audit, audit
 from xlbridge.audit.subject import Subject
 from xlbridge.cli.own_template import own_template
@@ -41,9 +42,9 @@ def opened(path: Path, against: Path | None = None) -> Subject:
     return Subject.open(path, own_template, against)
 
 
-def audited(path: Path, against: Path | None = None) -> Audit:
+def audited(path: Path, against: Path | None = None, acceptances: Sequence[Acceptance] = ()) -> Audit:
     """The audit of a workbook, as the command makes it."""
-    return audit(opened(path, against))
+    return audit(opened(path, against), acceptances)
 
 
 def kinds_at(outcome: Audit) -> dict[str, set[str]]:

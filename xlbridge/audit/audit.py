@@ -2,12 +2,13 @@
 
 from __future__ import annotations
 
-from collections.abc import Mapping
+from collections.abc import Mapping, Sequence
 from dataclasses import dataclass
 from enum import StrEnum
 from functools import cached_property
 
 from xlbridge.audit import group
+from xlbridge.audit.acceptance import Acceptance, accepted, unused
 from xlbridge.audit.effects import with_effects
 from xlbridge.audit.finding import Checked, Finding, NotChecked
 from xlbridge.audit.kinds import Severity
@@ -62,12 +63,13 @@ class Audit:
         return sum(state is not State.NOT_CHECKED for state in self.states.values())
 
     def count(self, severity: Severity) -> int:
-        """Return the number of findings of one severity."""
-        return sum(finding.kind.severity is severity for finding in self.findings)
+        """Return the number of findings of one severity that nobody has accepted."""
+        return sum(f.kind.severity is severity and not f.accepted for f in self.findings)
 
 
-def audit(subject: Subject) -> Audit:
-    """Run every method on a workbook."""
+def audit(subject: Subject, acceptances: Sequence[Acceptance] = ()) -> Audit:
+    """Run every method on a workbook; what was accepted with a reason is marked so."""
     checks = tuple(method(subject) for method in METHODS)
-    found = group.findings(o for check in checks for o in check.observations)
-    return Audit(subject, checks, with_effects(subject, found))
+    seen = [o for check in checks for o in check.observations]
+    found = group.findings((*seen, *unused(group.findings(seen), acceptances)))
+    return Audit(subject, checks, tuple(accepted(with_effects(subject, found), acceptances)))

@@ -97,6 +97,8 @@ class Finding:
     kind: Kind
     observations: tuple[Observation, ...]
     effects: tuple[Effect, ...] = field(default=())
+    accepted: str = ""
+    """Who accepted it, when and why; it is listed all the same."""
 
     @property
     def places(self) -> tuple[Place, ...]:

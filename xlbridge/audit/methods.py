@@ -7,7 +7,7 @@ import sys
 from collections.abc import Callable
 from typing import Final, TypeAlias
 
-from xlbridge.audit import against, cells, hygiene, manifest, map, model
+from xlbridge.audit import against, cells, hygiene, manifest, map, model, physical
 from xlbridge.audit.finding import Checked
 from xlbridge.audit.subject import Subject
 
@@ -19,6 +19,7 @@ METHODS: Final[tuple[Method, ...]] = (
     map.check,
     manifest.check,
     hygiene.check,
+    physical.check,
     against.check,
 )
 

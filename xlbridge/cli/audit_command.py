@@ -9,6 +9,7 @@ from typing import Final, TypeAlias
 
 import click
 
+from xlbridge.audit import acceptance
 from xlbridge.audit.audit import Audit, audit
 from xlbridge.audit.kinds import Severity
 from xlbridge.audit.record import Record
@@ -56,6 +57,7 @@ def forms(book: Path) -> dict[str, Form]:
 @click.option(
     "--record", type=click.Path(path_type=Path), help="The check record saved from an earlier page."
 )
+@click.option("--accept", type=click.Path(path_type=Path), help="A TOML file of findings that are right.")
 @click.option("--force", is_flag=True, help="Replace existing reports.")
 @click.option("--jobs", type=click.IntRange(1, 64), help="Of many: processes at a time [one a core].")
 @click.option("--summary", type=click.Path(path_type=Path), help="Of many: F.html, F.json or F.csv.")
@@ -66,6 +68,7 @@ def command(
     reports: tuple[Path, ...],
     against: Path | None,
     record: Path | None,
+    accept: Path | None,
     force: bool,
     jobs: int | None,
     summary: Path | None,
@@ -77,12 +80,12 @@ def command(
     files, or of a folder, several processes share the work, and a summary is given.
     """
     if len(books) > 1 or books[0].is_dir():
-        if reports or against or record:
-            raise Refusal("--report, --against and --record are of one workbook: give one")
+        if reports or against or record or accept:
+            raise Refusal("--report, --against, --record and --accept are of one workbook: give one")
         return audit_many(workbooks(books), jobs, summary, resume, force, json_wanted)
     if jobs or summary or resume:
         raise Refusal("--jobs, --summary and --resume are of many workbooks: give several, or a folder")
-    return _audit_one(books[0], json_wanted, reports, against, record, force)
+    return _audit_one(books[0], json_wanted, reports, against, record, accept, force)
 
 
 def _audit_one(
@@ -91,6 +94,7 @@ def _audit_one(
     reports: tuple[Path, ...],
     against: Path | None,
     record: Path | None,
+    accept: Path | None,
     force: bool,
 ) -> int:
     made_by = forms(book)
@@ -99,8 +103,9 @@ def _audit_one(
             raise Refusal(f"{target}: a report of this workbook ends in {', '.join(made_by)}")
         refuse_input(target, book)
         refuse_existing(target, force)
+    right = acceptance.read(accept.read_text(encoding="utf-8")) if accept else ()
     said = Record.read(record.read_text(encoding="utf-8")) if record else Record()
-    outcome = audit(Subject.open(book, own_template, against))
+    outcome = audit(Subject.open(book, own_template, against), right)
     for target in reports:
         write_new(target, made_by[target.suffix.lower()](outcome, said), force)
     if json_wanted:
@@ -127,6 +132,8 @@ def lines(outcome: Audit) -> Iterator[str]:
         yield f"{finding.number}  {finding.kind.severity}: {finding.kind.title}"
         yield f"   {', '.join(places[:SHOWN])}{more}"
         yield f"   {finding.words}"
+        if finding.accepted:
+            yield f"   {finding.accepted}"
     for missing in outcome.not_checked[:SHOWN]:
         yield f"not checked: {missing.what} {missing.place}, because {missing.because}"
     if len(outcome.not_checked) > SHOWN:

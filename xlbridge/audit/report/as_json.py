@@ -51,6 +51,7 @@ def _finding(finding: Finding) -> dict[str, Any]:
         "severity": kind.severity,
         "title": kind.title,
         "words": finding.words,
+        "accepted": finding.accepted,
         "meaning": kind.meaning,
         "remedy": kind.remedy,
         "places": [_observation(o) for o in finding.observations],

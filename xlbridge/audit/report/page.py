@@ -136,6 +136,7 @@ def _finding(finding: Finding) -> dict[str, Any]:
         "key": key_of(finding),
         "kind": finding.kind,
         "words": finding.words,
+        "accepted": finding.accepted,
         "places": [str(place) for place in finding.places],
         "sheets": sorted({place.sheet for place in finding.places if place.sheet}),
         "observations": finding.observations,
