@@ -14,7 +14,8 @@ from tests.support import hostile
 from tests.support.audited import audited, computed_book
 from xlbridge.audit.many import many
 from xlbridge.cli.own_template import own_template
-from xlbridge.headless.opening import BookError, read_file
+from xlbridge.headless.book import Book
+from xlbridge.headless.opening import BookError
 
 
 def test_one_workbook(full: bool, figure: Any, best: Any, tmp_path: Path) -> None:
@@ -59,7 +60,7 @@ def test_hostile_files(figure: Any, tmp_path: Path) -> None:
         path = hostile.write(tmp_path, name)
         start = perf_counter()
         try:
-            read_file(path)
+            Book.open(path)
         except BookError:
             times[name] = perf_counter() - start
         path.unlink()

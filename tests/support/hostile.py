@@ -3,6 +3,7 @@
 from __future__ import annotations
 
 import io
+import re
 import struct
 import zipfile
 from collections.abc import Callable, Mapping
@@ -112,6 +113,29 @@ def damaged() -> bytes:
     return bytes(data)
 
 
+def encoded(encoding: str) -> bytes:
+    """A sheet in another encoding, which says so."""
+    head = f'<?xml version="1.0" encoding="{encoding}"?>'.encode("ascii" if encoding == "utf-7" else encoding)
+    return changed(SHEET, lambda part: head + part.decode().split("?>", 1)[-1].encode(encoding))
+
+
+def sheet_called(name: str, change: Callable[[bytes], bytes]) -> bytes:
+    """A sheet in a part whose name does not say that it is XML."""
+    parts = good()
+    parts[f"xl/{name}"] = change(parts.pop(SHEET))
+    for part in ("xl/_rels/workbook.xml.rels", "[Content_Types].xml"):
+        parts[part] = parts[part].replace(b"worksheets/sheet1.xml", name.encode())
+    return packed(parts)
+
+
+def without(name: str) -> bytes:
+    return packed({part: data for part, data in good().items() if part != name})
+
+
+def merged(reference: bytes) -> bytes:
+    return after_data(b"<mergeCells><mergeCell %s/></mergeCells>" % reference)
+
+
 @dataclass(frozen=True)
 class Hostile:
     """One file: how it is made, and words of what is said of it."""
@@ -131,6 +155,7 @@ def numbered(count: int, text: bytes) -> bytes:
 
 NAMES = numbered(30_000, b'<definedName name="a">%d</definedName>')
 FORMATS = numbered(200_000, b'<xf numFmtId="%d"/>')
+MERGE: Final = b'<mergeCells><mergeCell ref="A1:XFD1048576"/></mergeCells>'
 HOSTILE: Final[Mapping[str, Hostile]] = {
     "no byte at all": Hostile(lambda: b"", "empty"),
     "a text": Hostile(lambda: b"level,weight\nRoof,400\n", "not a workbook"),
@@ -151,6 +176,12 @@ HOSTILE: Final[Mapping[str, Hostile]] = {
         lambda: changed(SHEET, lambda p: b'<!DOCTYPE x SYSTEM "file:///etc/passwd">' + p), "document type"
     ),
     "a part in UTF-16": Hostile(lambda: changed(SHEET, lambda p: p.decode().encode("utf-16")), "UTF-16"),
+    "a part in UTF-32": Hostile(lambda: encoded("utf-32-be"), "UTF-16 or is no XML"),
+    "a part in UTF-7": Hostile(lambda: encoded("utf-7"), "written in utf-7"),
+    "a part in EBCDIC": Hostile(lambda: encoded("cp037"), "is no XML"),
+    "entities in a sheet of another ending": Hostile(
+        lambda: sheet_called("sheet.dat", lambda p: ENTITY + p), "document type"
+    ),
     "one name twice": Hostile(lambda: twice("xl/long_name_c.xml", "xl/long_name_c.xml"), "same name"),
     "one name in two cases": Hostile(lambda: twice("xl/long_name_C.xml", "xl/long_name_c.xml"), "same name"),
     "an absolute name": Hostile(lambda: added("/etc/cron.d/x"), "outside"),
@@ -181,12 +212,21 @@ HOSTILE: Final[Mapping[str, Hostile]] = {
     "a million empty rows": Hostile(
         lambda: in_sheet(b"".join(b'<row r="%d"/>' % n for n in range(2, 1_000_050))), "cells and rows"
     ),
-    "a merge over the whole sheet": Hostile(
-        lambda: after_data(b'<mergeCells><mergeCell ref="A1:XFD1048576"/></mergeCells>'), "merges"
+    "a merge over the whole sheet": Hostile(lambda: merged(b'ref="A1:XFD1048576"'), "merges"),
+    "a merge over 1,000 by 1,000": Hostile(lambda: merged(b'ref="A1:ALL1000"'), "merges"),
+    "a merge in apostrophes": Hostile(lambda: merged(b"ref = 'A1:XFD1048576'"), "merges"),
+    "a merge in small letters": Hostile(lambda: merged(b'ref="$a$1:$xfd$1048576"'), "merges"),
+    "a merge in character references": Hostile(lambda: merged(b'ref="&#65;1:XFD1048576"'), "no range"),
+    "a merge in a sheet of another ending": Hostile(
+        lambda: sheet_called("s.dat", lambda p: p.replace(b"</sheetData>", b"</sheetData>" + MERGE)), "merges"
     ),
-    "merges over 1,000 by 1,000": Hostile(
-        lambda: after_data(b'<mergeCells><mergeCell ref="A1:ALL1000"/></mergeCells>'), "merges"
+    "a cell beyond the last row": Hostile(
+        lambda: in_sheet(b'<row r="99999999999"><c r="A99999999999"><v>1</v></c></row>'), "damaged"
     ),
+    "a cell beyond the last column": Hostile(
+        lambda: in_sheet(b'<row r="2"><c r="ZZZZ2"><v>1</v></c></row>'), "damaged"
+    ),
+    "300,000 tags that never end": Hostile(lambda: in_sheet(b"<t " * 300_000), "damaged"),
     "a text of 50,000 characters": Hostile(
         lambda: in_sheet(
             b'<row r="2"><c r="A2" t="inlineStr"><is><t>' + b"x" * 50_000 + b"</t></is></c></row>"
@@ -211,9 +251,20 @@ HOSTILE: Final[Mapping[str, Hostile]] = {
         ),
         "outside the package",
     ),
-    "a sheet that is not there": Hostile(
-        lambda: packed({name: data for name, data in good().items() if name != SHEET}), "has no part"
+    "a sheet that is not there": Hostile(lambda: without(SHEET), "has no part"),
+    "a sheet that nothing relates to": Hostile(
+        lambda: changed(BOOK, lambda p: p.replace(b"rId1", b"rId77")), "damaged"
     ),
+    "no sheet at all": Hostile(
+        lambda: changed(BOOK, lambda p: re.sub(rb"<sheets>.*</sheets>", b"<sheets/>", p)), "no sheet"
+    ),
+    "no relations": Hostile(lambda: without("_rels/.rels"), "not a workbook"),
+    "no list of content": Hostile(lambda: without("[Content_Types].xml"), "not a workbook"),
+    "the content of another program": Hostile(
+        lambda: changed("[Content_Types].xml", lambda p: p.replace(b"sheet.main+xml", b"document.main+xml")),
+        "no valid workbook",
+    ),
+    "a picture with a workbook behind it": Hostile(lambda: b"\x89PNG" + packed(good()), "not a workbook"),
 }
 
 

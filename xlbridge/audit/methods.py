@@ -7,7 +7,7 @@ import sys
 from collections.abc import Callable
 from typing import Final, TypeAlias
 
-from xlbridge.audit import against, cells, hygiene, manifest, map, model, physical
+from xlbridge.audit import against, cells, extent, hygiene, manifest, map, model, physical
 from xlbridge.audit.finding import Checked
 from xlbridge.audit.subject import Subject
 
@@ -15,6 +15,7 @@ Method: TypeAlias = Callable[[Subject], Checked]
 
 METHODS: Final[tuple[Method, ...]] = (
     cells.check,
+    extent.check,
     model.check,
     map.check,
     manifest.check,

@@ -15,7 +15,8 @@ from typing import IO, Final
 
 from lxml import etree
 
-MAX_PART_BYTES: Final = 256 * 2**20
+from xlbridge.headless import guard
+
 _NO_SPACE: Final = (errno.ENOSPC, errno.EDQUOT, errno.EFBIG)
 _DECLARATION: Final = b'<?xml version="1.0" encoding="UTF-8" standalone="yes"?>\r\n'
 
@@ -35,10 +36,9 @@ def open_archive(source: Path | IO[bytes]) -> zipfile.ZipFile:
         ) from error
     except OSError as error:
         raise StoreError(f"{source}: cannot be read ({error.strerror or error})") from error
-    names = {name.lower() for name in archive.namelist()}
-    if len(names) < len(archive.namelist()):
+    if found := guard.same_name(archive.infolist()):
         archive.close()
-        raise StoreError(f"{source}: two parts of the package have the same name")
+        raise StoreError(f"{source}: {found}")
     return archive
 
 
@@ -46,8 +46,8 @@ def read_part(archive: zipfile.ZipFile, name: str) -> bytes:
     """Return a part's bytes; refuse a missing, oversized, encrypted or damaged one."""
     try:
         info = archive.getinfo(name)
-        if info.file_size > MAX_PART_BYTES:
-            raise StoreError(f"part {name} is larger than {MAX_PART_BYTES // 2**20} MB when unpacked")
+        if info.file_size > guard.MAX_PART:
+            raise StoreError(f"part {name} is larger than {guard.MAX_PART // guard.MIB} MB when unpacked")
         return archive.read(info)
     except KeyError as error:
         raise StoreError(f"the package has no part {name}") from error

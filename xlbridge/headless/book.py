@@ -60,7 +60,11 @@ class Book:
         """Read a workbook file; :class:`BookError` says in one sentence why it cannot be read."""
         path = Path(path)
         data = read_file(path)
-        return cls.of(load(path, data), data)
+        workbook = load(path, data)
+        try:
+            return cls.of(workbook, data)
+        except ValueError as error:
+            raise BookError(f"{path}: the workbook is damaged ({error})") from error
 
     @classmethod
     def of(cls, workbook: Workbook, data: bytes = b"") -> Book:
@@ -124,7 +128,10 @@ class Book:
 
     @cached_property
     def _stored(self) -> Mapping[str, Stored]:
-        return read_stored_values(self.data) if self.data else {}
+        try:
+            return read_stored_values(self.data) if self.data else {}
+        except ValueError as error:
+            raise BookError(f"the stored values of the workbook are damaged ({error})") from error
 
 
 def _used(sheet: Worksheet) -> Iterable[tuple[Position, Any]]:

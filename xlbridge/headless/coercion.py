@@ -18,6 +18,8 @@ from xlbridge.values import CellError, Grid, Omitted, Scalar
 
 #: two numbers that agree to fifteen digits are equal to a spreadsheet, and their difference is zero.
 FIFTEEN_DIGITS: Final = 2.0**-48
+#: no cell holds a longer text.
+LONGEST: Final = 32767
 
 _NUMBER: Final = re.compile(
     r"\s*[-+]?(?:(?:\d{1,3}(?:,\d{3})+|\d+)(?:\.\d*)?|\.\d+)(?:E[-+]?\d+)?\s*%?\s*", re.IGNORECASE | re.ASCII
@@ -69,6 +71,13 @@ def text(value: Scalar) -> str:
     if isinstance(value, CellError):
         raise Fault(value)
     return "" if value is None else str(value).upper()
+
+
+def fitting(words: str) -> str:
+    """Return a text if a cell can hold it; a chain of doublings would fill the memory otherwise."""
+    if len(words) > LONGEST:
+        raise Fault("#VALUE!", f"the text would be longer than {LONGEST} characters")
+    return words
 
 
 def logical(value: Scalar) -> bool:

@@ -35,20 +35,32 @@ MAX_FORMULA: Final = 8_192
 _CHUNK: Final = 2**16
 
 _XML: Final = (".xml", ".rels", ".vml")
+_BYTE_ORDER: Final = b"\xef\xbb\xbf"
+_ENCODING: Final = re.compile(rb"""<\?xml[^<>]*?\sencoding\s*=\s*["']([^"'<>]*)""")
+_ENCODINGS: Final = (b"utf-8", b"us-ascii")
 _DECLARED: Final = re.compile(rb"<!(DOCTYPE|ENTITY)")
-_WIDE: Final = (b"\xff\xfe", b"\xfe\xff", b"\x00<", b"<\x00")
-_MERGED: Final = re.compile(rb'mergeCell\s[^>]*ref="([A-Z]+\d+(?::[A-Z]+\d+)?)"')
-_LONG: Final = re.compile(rb"<(?:\w+:)?([tf])(?:\s[^>]*)?>([^<]{%d,})" % (MAX_FORMULA + 1))
-_RELATION: Final = re.compile(rb"<(?:\w+:)?Relationship\s[^>]*>")
-_ATTRIBUTE: Final = re.compile(rb'\s(\w+)="([^"]*)"')
-#: how many there may be of what a workbook lists, by how each begins in the file
+#: no run goes past the next tag, so that the time grows with the size alone, whatever stands there
+_MERGED: Final = re.compile(rb"""<(?:\w+:)?mergeCell\s(?:[^<>]*?\s)?ref\s*=\s*["']([^"'<>]*)""")
+_LONG: Final = re.compile(rb"<(?:\w+:)?([tf])(?:\s[^<>]*)?>([^<]{%d,})" % (MAX_FORMULA + 1))
+_RELATION: Final = re.compile(rb"<(?:\w+:)?Relationship\s[^<>]*>")
+_ATTRIBUTE: Final = re.compile(rb"""\s(\w+)\s*=\s*["']([^"']*)""")
+
+
+def _openings(*names: bytes) -> tuple[bytes, ...]:
+    """How elements of these names begin in a file: counting bytes is quick, parsing them is not."""
+    return tuple(
+        b + name + end for b in (b"<", b":") for name in names for end in map(bytes, zip(b" >/\t\n\r"))
+    )
+
+
+#: how many there may be of what a workbook lists
 _COUNTED: Final[Mapping[str, tuple[int, tuple[bytes, ...]]]] = {
-    "defined names": (20_000, (b"definedName ",)),
-    "cell formats": (2 * 65_490, (b"xf ",)),
-    "rules of conditional formats": (20_000, (b"cfRule ",)),
-    "rules of entries": (20_000, (b"dataValidation ",)),
-    "sheets": (1_000, (b"sheetId=",)),
-    "cells and rows": (MAX_CELLS, (b"<c ", b"<c>", b"<c/", b"<row", b":c ", b":c>", b":c/", b":row")),
+    "defined names": (20_000, _openings(b"definedName")),
+    "cell formats": (2 * 65_490, _openings(b"xf")),
+    "rules of conditional formats": (20_000, _openings(b"cfRule")),
+    "rules of entries": (20_000, _openings(b"dataValidation")),
+    "sheets": (1_000, _openings(b"sheet")),
+    "cells and rows": (MAX_CELLS, _openings(b"c", b"row")),
 }
 
 
@@ -64,24 +76,29 @@ def problem(data: bytes) -> str:
         return f"the package is damaged ({error})"
 
 
+def same_name(entries: list[zipfile.ZipInfo]) -> str:
+    """Return what is said of two parts of one name, of which a reader may take either; names ignore case."""
+    seen: set[str] = set()
+    for entry in entries:
+        if entry.filename.casefold() in seen:
+            return f"two parts of the package have the same name, {entry.filename}"
+        seen.add(entry.filename.casefold())
+    return ""
+
+
 def _directory(entries: list[zipfile.ZipInfo]) -> str:
     """What is wrong with the list of the parts, before one is unpacked."""
     if len(entries) > MAX_ENTRIES:
         return f"the package has {len(entries):,} parts, more than {MAX_ENTRIES:,}"
-    seen: set[str] = set()
-    for entry in entries:
-        name = entry.filename
-        if name.casefold() in seen:
-            return f"two parts of the package have the same name, {name}"
-        seen.add(name.casefold())
-        if found := _entry(entry, name):
-            return found
+    if found := same_name(entries) or next(filter(None, map(_entry, entries)), ""):
+        return found
     if sum(entry.file_size for entry in entries) > MAX_TOTAL:
         return f"the package unpacks to more than {MAX_TOTAL // MIB} MB"
     return _overlap(entries)
 
 
-def _entry(entry: zipfile.ZipInfo, name: str) -> str:
+def _entry(entry: zipfile.ZipInfo) -> str:
+    name = entry.filename
     if name.startswith(("/", "\\")) or ":" in name or ".." in re.split(r"[/\\]", name):
         return f"a part of the package lies outside of it, {name}"
     if entry.flag_bits & 1:
@@ -109,7 +126,7 @@ def _contents(archive: zipfile.ZipFile, entries: list[zipfile.ZipInfo]) -> Itera
         part, found = _unpacked(archive, entry)
         if found:
             yield found
-        if not entry.filename.lower().endswith(_XML):
+        if not (entry.filename.lower().endswith(_XML) or _begins_as_xml(part)):
             continue
         yield from (found for rule in _RULES if (found := rule(entry.filename, part)))
         if entry.filename.endswith(".rels"):
@@ -134,15 +151,33 @@ def _unpacked(archive: zipfile.ZipFile, entry: zipfile.ZipInfo) -> tuple[bytes, 
     return b"".join(pieces), ""
 
 
+def _begins_as_xml(part: bytes) -> bool:
+    """Whether a part may be read as XML, whatever its name is."""
+    return part.removeprefix(_BYTE_ORDER).lstrip().startswith(b"<")
+
+
+def _encoded(name: str, part: bytes) -> str:
+    """Texts are looked for as they are in UTF-8; in another encoding they would be overlooked."""
+    if b"\0" in part:
+        return f"part {name} is written in UTF-16 or is no XML, which no spreadsheet program does"
+    if part and not _begins_as_xml(part):
+        return f"part {name} is no XML"
+    found = _ENCODING.match(part.removeprefix(_BYTE_ORDER))
+    if found and found[1].lower() not in _ENCODINGS:
+        return f"part {name} is written in {found[1].decode('ascii', 'replace')}; save it as .xlsx again"
+    return ""
+
+
 def _declares(name: str, part: bytes) -> str:
-    if part.startswith(_WIDE):
-        return f"part {name} is written in UTF-16, which no spreadsheet program does"
     found = _DECLARED.search(part)
     return f"part {name} declares a document type, which no spreadsheet program writes" if found else ""
 
 
 def _merges(name: str, part: bytes) -> str:
-    area = sum(parse_bounds(found[1].decode()).size for found in _MERGED.finditer(part))
+    try:
+        area = sum(parse_bounds(found[1].decode().upper()).size for found in _MERGED.finditer(part))
+    except ValueError as error:
+        return f"sheet part {name} merges what is no range ({error})"
     return f"sheet part {name} merges {area:,} cells, more than {MAX_MERGED:,}" if area > MAX_MERGED else ""
 
 
@@ -154,7 +189,7 @@ def _lengths(name: str, part: bytes) -> str:
     return ""
 
 
-_RULES: Final[tuple[Callable[[str, bytes], str], ...]] = (_declares, _merges, _lengths)
+_RULES: Final[tuple[Callable[[str, bytes], str], ...]] = (_encoded, _declares, _merges, _lengths)
 
 
 def _relations(name: str, part: bytes, names: set[str]) -> Iterator[str]:

@@ -15,6 +15,8 @@ from xlbridge.headless import guard
 
 _COMPOUND_FILE: Final = bytes.fromhex("d0cf11e0a1b11ae1")
 _ENCRYPTED: Final = "EncryptedPackage".encode("utf-16-le")
+_PACKAGE: Final = b"PK\x03\x04"
+_NEEDED: Final = {"[Content_Types].xml", "_rels/.rels"}
 _SAVE_AS: Final = "open it in the spreadsheet program and save it as .xlsx"
 
 
@@ -61,6 +63,8 @@ def load(path: Path, data: bytes) -> Workbook:
             f"{path}: the workbook is damaged or not a valid .xlsx ({_first_line(error)}); {_SAVE_AS} again"
         ) from error
     workbook: Workbook = reader.wb
+    if not workbook.worksheets:
+        raise BookError(f"{path}: the workbook has no sheet with cells; {_SAVE_AS} again")
     return workbook
 
 
@@ -72,7 +76,7 @@ def _foreign(data: bytes) -> str:
         return f"this is the old .xls format; {_SAVE_AS}"
     if not data:
         return "the file is empty"
-    if not zipfile.is_zipfile(io.BytesIO(data)):
+    if not data.startswith(_PACKAGE) or not zipfile.is_zipfile(io.BytesIO(data)):
         return f"this is not a workbook; give an .xlsx or .xlsm file, or {_SAVE_AS}"
     return _foreign_package(data)
 
@@ -84,11 +88,7 @@ def _foreign_package(data: bytes) -> str:
         return f"this is the binary .xlsb format; {_SAVE_AS}"
     if "content.xml" in names:
         return f"this is an OpenDocument file; {_SAVE_AS}"
-    return (
-        ""
-        if "[Content_Types].xml" in names
-        else "this archive is not a workbook; give an .xlsx or .xlsm file"
-    )
+    return "" if names >= _NEEDED else "this archive is not a workbook; give an .xlsx or .xlsm file"
 
 
 def _first_line(error: Exception) -> str:

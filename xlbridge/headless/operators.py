@@ -12,7 +12,7 @@ from collections.abc import Callable
 from typing import Final, TypeAlias
 
 from xlbridge.headless.broadcast import broadcast
-from xlbridge.headless.coercion import Fault, nearly_equal, number, plain, text
+from xlbridge.headless.coercion import Fault, fitting, nearly_equal, number, plain, text
 from xlbridge.headless.operands import Operand
 from xlbridge.values import CellError, Scalar, Value
 
@@ -101,7 +101,7 @@ def _comparison(holds: Callable[[int], bool]) -> _Operator:
 
 def _concatenate(left: Scalar, right: Scalar) -> Scalar:
     try:
-        return text(left) + text(right)
+        return fitting(text(left) + text(right))
     except Fault as fault:
         return fault.error
 

@@ -4,6 +4,7 @@ from __future__ import annotations
 
 import io
 import posixpath
+import re
 import zipfile
 from collections.abc import Iterator
 from typing import Final, TypeAlias
@@ -16,6 +17,9 @@ from xlbridge.values import CellError, Scalar
 Stored: TypeAlias = dict[tuple[int, int], Scalar]
 
 _RELATION: Final = "{*}Relationship"
+_EXTENT: Final = re.compile(rb"""<(?:\w+:)?dimension\s(?:[^<>]*?\s)?ref\s*=\s*["']([^"'<>]*)""")
+#: the extent stands before the rows
+_HEAD: Final = 2**16
 _BOOK: Final = "xl/workbook.xml"
 
 
@@ -26,6 +30,14 @@ def read_stored_values(data: bytes) -> dict[str, Stored]:
     """
     with zipfile.ZipFile(io.BytesIO(data)) as archive:
         return {sheet: _values(archive, part) for sheet, part in _sheet_parts(archive)}
+
+
+def read_extents(data: bytes) -> dict[str, str]:
+    """For each sheet by name, the range that the file says it uses, where it says so; nothing checks it."""
+    with zipfile.ZipFile(io.BytesIO(data)) as archive:
+        heads = {sheet: archive.open(part).read(_HEAD) for sheet, part in _sheet_parts(archive)}
+    found = {sheet: _EXTENT.search(head) for sheet, head in heads.items()}
+    return {sheet: match[1].decode("utf-8", "replace") for sheet, match in found.items() if match}
 
 
 def _sheet_parts(archive: zipfile.ZipFile) -> Iterator[tuple[str, str]]:

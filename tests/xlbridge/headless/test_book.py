@@ -170,8 +170,8 @@ def test_an_array_formula_over_a_whole_sheet_is_refused_not_filled(saved: Path) 
         ({"xl/workbook.bin": b""}, "binary .xlsb format"),
         ({"content.xml": b"<a/>"}, "OpenDocument"),
         ({"readme.txt": b"hello"}, "this archive is not a workbook"),
-        ({"[Content_Types].xml": b"<Types/>"}, "damaged"),
-        ({"[Content_Types].xml": b"<Types"}, "damaged"),
+        ({"[Content_Types].xml": b"<Types/>", "_rels/.rels": b"<Relationships/>"}, "damaged"),
+        ({"[Content_Types].xml": b"<Types", "_rels/.rels": b"<Relationships/>"}, "damaged"),
     ],
 )
 def test_a_file_that_is_no_workbook_is_refused_in_words(

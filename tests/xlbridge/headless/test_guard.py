@@ -2,15 +2,20 @@
 
 from __future__ import annotations
 
+import os
 from pathlib import Path
 
 import pytest
+from openpyxl import Workbook
 
 from tests.support import hostile
 from tests.support.command import assert_refused, run
 from workbook_templates.build import build
 from workbook_templates.parts import together
 from xlbridge.headless import guard
+from xlbridge.headless.book import Book
+from xlbridge.headless.compute import FUNCTIONS
+from xlbridge.headless.evaluate import Evaluator
 
 
 @pytest.mark.parametrize("name", hostile.HOSTILE)
@@ -55,6 +60,29 @@ def test_a_limit_is_the_limit(monkeypatch: pytest.MonkeyPatch, name: str, value:
     if name == "MAX_FORMULA":
         data = hostile.in_sheet(b'<row r="2"><c r="A2"><f>' + b"1+" * 4100 + b"1</f></c></row>")
     assert words in guard.problem(data)
+
+
+@pytest.mark.skipif(not hasattr(os, "geteuid") or os.geteuid() == 0, reason="root may read everything")
+def test_a_file_that_may_not_be_read(tmp_path: Path) -> None:
+    path = hostile.write(tmp_path, "a text")
+    path.chmod(0)
+    assert_refused(run("audit", path), "cannot be read")
+
+
+def test_what_is_no_file(tmp_path: Path) -> None:
+    assert_refused(run("calc", tmp_path), "folder")
+    assert_refused(run("audit", tmp_path / "none.xlsx"), "no such file")
+
+
+def test_a_text_that_doubles_from_cell_to_cell_ends_in_an_error() -> None:
+    book = Workbook()
+    book.active["A1"] = "x"
+    for row in range(2, 200):
+        book.active[f"A{row}"] = f"=A{row - 1}&A{row - 1}"
+    values = Evaluator(Book.of(book), FUNCTIONS).evaluate_all().values
+    title = book.active.title
+    assert len(str(values[title, "A15"])) == 2**14
+    assert {str(values[title, f"A{row}"]) for row in range(17, 200)} == {"#VALUE!"}
 
 
 def test_a_far_cell_is_no_danger(tmp_path: Path) -> None:

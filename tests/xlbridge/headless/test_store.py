@@ -42,7 +42,7 @@ from tests.support.packages import (
     relationships,
     without_values,
 )
-from xlbridge.headless import archive
+from xlbridge.headless import guard
 from xlbridge.headless.store import StoreError, store
 from xlbridge.headless.stored_cells import decode_text, encode
 from xlbridge.values import ERROR_CODES, CellError
@@ -417,7 +417,7 @@ def test_a_hostile_or_broken_package_is_one_sentence(
 
 
 def test_a_part_that_swells_is_refused(book: Path, out: Path, monkeypatch: pytest.MonkeyPatch) -> None:
-    monkeypatch.setattr(archive, "MAX_PART_BYTES", 1000)
+    monkeypatch.setattr(guard, "MAX_PART", 1000)
     with pytest.raises(StoreError, match=r"sheet1\.xml is larger than"):
         store(book, out, {(TITLE, "C1"): 1.0})
 

@@ -9,18 +9,9 @@ from xlbridge.headless.builtins.builtin import Builtin
 from xlbridge.headless.builtins.collect import cells
 from xlbridge.headless.builtins.criteria import wildcard
 from xlbridge.headless.builtins.formats import formatted
-from xlbridge.headless.coercion import Fault, number, text
+from xlbridge.headless.coercion import LONGEST, Fault, fitting, number, text
 from xlbridge.headless.operands import Operand
 from xlbridge.values import Scalar
-
-#: no cell holds a longer text.
-LONGEST: Final = 32767
-
-
-def _fitting(words: str) -> str:
-    if len(words) > LONGEST:
-        raise Fault("#VALUE!", f"the text would be longer than {LONGEST} characters")
-    return words
 
 
 def _size(count: float) -> int:
@@ -46,16 +37,16 @@ def _mid(words: str, start: float, count: float) -> str:
 
 def _replace(words: str, start: float, count: float, new: str) -> str:
     first = _place(start)
-    return _fitting(words[:first] + new + words[first + _size(count) :])
+    return fitting(words[:first] + new + words[first + _size(count) :])
 
 
 def _substitute(words: str, old: str, new: str, instance: float | None = None) -> str:
     if instance is None or not old:
-        return _fitting(words.replace(old, new) if old else words)
+        return fitting(words.replace(old, new) if old else words)
     pieces, which = words.split(old), _place(instance) + 1
     if which >= len(pieces):
         return words
-    return _fitting(old.join(pieces[:which]) + new + old.join(pieces[which:]))
+    return fitting(old.join(pieces[:which]) + new + old.join(pieces[which:]))
 
 
 def _find(wanted: str, words: str, start: float = 1.0) -> float:
@@ -87,7 +78,7 @@ def _joined(operands: tuple[Operand, ...]) -> list[str]:
 
 
 def _textjoin(separator: str, skip_empty: bool, *operands: Operand) -> str:
-    return _fitting(separator.join(words for words in _joined(operands) if words or not skip_empty))
+    return fitting(separator.join(words for words in _joined(operands) if words or not skip_empty))
 
 
 def _value(value: Scalar) -> float:
@@ -125,14 +116,14 @@ FUNCTIONS: Final = (
     Builtin("UPPER", "t", _upper),
     Builtin("LOWER", "t", str.lower),
     Builtin("PROPER", "t", _proper),
-    Builtin("CONCATENATE", "t*", lambda *words: _fitting("".join(words))),
-    Builtin("CONCAT", "g*", lambda *operands: _fitting("".join(_joined(operands)))),
+    Builtin("CONCATENATE", "t*", lambda *words: fitting("".join(words))),
+    Builtin("CONCAT", "g*", lambda *operands: fitting("".join(_joined(operands)))),
     Builtin("TEXTJOIN", "tbg*", _textjoin),
     Builtin("FIND", "ttn", _find, 2),
     Builtin("SEARCH", "ttn", _search, 2),
     Builtin("SUBSTITUTE", "tttn", _substitute, 3),
     Builtin("REPLACE", "tnnt", _replace),
-    Builtin("REPT", "tn", lambda words, count: _fitting(words * min(_size(count), LONGEST + 1))),
+    Builtin("REPT", "tn", lambda words, count: fitting(words * min(_size(count), LONGEST + 1))),
     Builtin("EXACT", "tt", lambda left, right: left == right),
     Builtin("VALUE", "s", _value),
     Builtin("T", "s", _t),
