@@ -75,6 +75,16 @@ def find(results: Mapping[str, Any], path: str) -> Any:
     return None if isinstance(found, Mapping | list) else found
 
 
+def from_inputs(subject: Subject, cell: Cell) -> Any:
+    """Return what the inputs alone give for the result that a cell shows; nothing where it shows none."""
+    if subject.own is None:
+        return None
+    shown = trace(subject.evaluator, cell.sheet, cell.address).precedents
+    places = {str(place): path for path, place in subject.own.places.items()}
+    paths = [places.get(precedent.address, "") for precedent in shown]
+    return find(_model(subject), paths[0]) if len(paths) == 1 else None
+
+
 def _model(subject: Subject) -> Mapping[str, Any]:
     try:
         return subject.model

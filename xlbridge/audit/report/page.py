@@ -20,7 +20,7 @@ from xlbridge.audit.methods import summary
 from xlbridge.audit.record import MARKS, ROLES, Record, key_of
 from xlbridge.audit.report.figures import figures, sheet_maps
 from xlbridge.audit.template import OwnTemplate
-from xlbridge.audit.work import works
+from xlbridge.audit.work import from_inputs, works
 from xlbridge.values import CellError
 
 CAUTIONS: Final = (
@@ -124,10 +124,11 @@ def program(audit: Audit) -> str:
     return str(found or "not said")
 
 
-def _headlines(audit: Audit) -> Iterator[tuple[str, str, Any]]:
+def _headlines(audit: Audit) -> Iterator[tuple[str, str, Any, Any]]:
     values = audit.subject.results.values
     for line in audit.subject.own.headlines if audit.subject.own else ():
-        yield line.name, line.unit, values.get((line.cell.sheet, line.cell.address))
+        value = values.get((line.cell.sheet, line.cell.address))
+        yield line.name, line.unit, value, from_inputs(audit.subject, line.cell)
 
 
 def _finding(finding: Finding) -> dict[str, Any]:

@@ -58,6 +58,15 @@ def test_a_clean_workbook_reads_as_clean(clean: Audit) -> None:
     assert "2026-01-05 09:30" in text
 
 
+def test_results_stand_beside_what_the_inputs_give(clean: Audit) -> None:
+    model = clean.subject.model["direction"]["X"]
+    rows = read(page(clean)).xpath("//section[@aria-labelledby='results']//tbody/tr")
+    found = {row[0].text_content(): [cell.text_content() for cell in row[1:]] for row in rows}
+    assert found["Base shear V, direction X"] == ["kip", shown(model["V"]), shown(model["V"])]
+    assert found["Period T, direction X"] == ["s", shown(model["T"]), shown(model["T"])]
+    assert found["Largest theta, direction X"] == ["-", shown(max(model["theta"])), "–"]
+
+
 def test_every_finding_and_every_cell_stands_in_it(faulty: Audit) -> None:
     tree = read(page(faulty))
     assert len(tree.find_class("finding")) == len(faulty.findings) >= 2
