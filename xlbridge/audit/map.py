@@ -34,7 +34,7 @@ def check(subject: Subject) -> Checked:
         why = own.unread if own else "the workbook is not laid out as one of ours"
         return Checked(METHOD, 0, not_checked=(NotChecked("expected formulas", why),))
     mapped = _Map(subject, subject.alignment, own, own.twin)
-    seen = _by_cause([o for o in map(mapped.observed, mapped.cells) if o], mapped)
+    seen = _by_cause([(o, pair[0]) for pair in mapped.cells if (o := mapped.observed(pair))], mapped)
     further = (
         *stray(subject.book, subject.alignment, own, own.twin),
         *missing(subject.alignment, own, own.twin),
@@ -78,7 +78,7 @@ class _Map:
         expected, found = self.twin.formula(cell), self.subject.book.formula(place)
         if expected is None:
             seen = self._constant(cell, place, found)
-        elif found is not None and found.text == expected.text and self.alignment.is_identity:
+        elif found is not None and self._as_written(cell, expected, found):
             return None
         else:
             seen = self._formula(cell, place, expected, found)
@@ -88,6 +88,21 @@ class _Map:
                 seen, kind="check_disarmed", words=f"a check was changed: {seen.words}", cause=cause
             )
         return seen
+
+    def _as_written(self, cell: Cell, expected: Formula, found: Formula) -> bool:
+        """Whether the texts are the same, but for the case where nothing is quoted."""
+        if not found.fills.is_cell:
+            return False
+        if self.alignment.is_identity:
+            return found.text == expected.text
+        known = self._references.setdefault(cell.sheet, {})
+        text = notation.moved_text(expected.text, cell.sheet, self.alignment.area_from_twin, known)
+        return found.text == text or ('"' not in text and found.text.casefold() == text.casefold())
+
+    @cached_property
+    def _references(self) -> dict[str, dict[str, str]]:
+        """The references of each sheet of the twin that were moved."""
+        return {}
 
     def _constant(self, cell: Cell, place: Cell, found: Formula | None) -> Observation | None:
         expected = self.twin.constants[cell.sheet][cell.row, cell.column]
@@ -183,15 +198,13 @@ def _moved_area(expected: notation.Area, found: notation.Area) -> tuple[str, str
     return "range_shorter" if inner else "range_longer" if outer else "other_reference", words
 
 
-def _by_cause(seen: list[Observation], mapped: _Map) -> Iterator[Observation]:
+def _by_cause(seen: list[tuple[Observation, Cell]], mapped: _Map) -> Iterator[Observation]:
     """One cause for cells emptied or pasted over along a row or down a column, or a row never filled."""
-    places = {o.place: cell for o, cell in _placed(seen, mapped)}
-    absent = [(o, places[o.place]) for o in seen if o.kind in ABSENT]
+    absent = [(o, cell) for o, cell in seen if o.kind in ABSENT]
     rows = Counter((o.kind, cell.sheet, cell.row) for o, cell in absent)
     columns = Counter((o.kind, cell.sheet, cell.column) for o, cell in absent)
-    formulas = Counter((cell.sheet, cell.row) for cell, _ in mapped.cells if mapped.twin.formula(cell))
-    for o in seen:
-        cell = places[o.place]
+    formulas = Counter((c.sheet, c.row) for c, _ in mapped.cells if absent and mapped.twin.formula(c))
+    for o, cell in seen:
         in_row, in_column = rows[o.kind, cell.sheet, cell.row], columns[o.kind, cell.sheet, cell.column]
         if o.kind not in ABSENT or max(in_row, in_column) == 1:
             yield o
@@ -202,8 +215,3 @@ def _by_cause(seen: list[Observation], mapped: _Map) -> Iterator[Observation]:
             yield replace(o, cause=f"{cell.sheet} row {cell.row}")
         else:
             yield replace(o, cause=f"{cell.sheet} column {cell.column}")
-
-
-def _placed(seen: list[Observation], mapped: _Map) -> Iterator[tuple[Observation, Cell]]:
-    cells = {Place.of(found): cell for cell, found in mapped.cells}
-    return ((o, cells[o.place]) for o in seen)

@@ -23,6 +23,7 @@ from xlbridge.headless.nodes import (
 )
 from xlbridge.headless.references import Bounds, Cell, column_letters, column_number, quote_sheet
 from xlbridge.headless.shapes import parse
+from xlbridge.headless.tokens import REFERENCE
 
 #: what an area of a sheet has become
 Move: TypeAlias = Callable[[str, Bounds], tuple[str, Bounds]]
@@ -68,6 +69,19 @@ def moved(node: Node, home: str, move: Move) -> Node:
         return Reference(text, None if sheet == here else sheet, bounds, part.whole_lines)
 
     return transform(node, change)
+
+
+def moved_text(text: str, home: str, move: Move, known: dict[str, str]) -> str:
+    """The same for a text, quickly; what looks like a reference in a quoted text is moved as well.
+
+    ``known`` keeps the references that were moved before.
+    """
+    parts = REFERENCE.split(text)
+    for number in range(1, len(parts), 2):
+        if parts[number] not in known:
+            known[parts[number]] = render(moved(parse(parts[number]), home, move))
+        parts[number] = known[parts[number]]
+    return "".join(parts)
 
 
 def filled(text: str, down: int, right: int) -> str:

@@ -25,9 +25,9 @@ def check(pairing: Pairing) -> Iterator[Observation]:
     for sides in pairing.sheets:
         found = list(rules(sides.found))
         keys = {(areas, _key(rule)) for areas, rule in found}
-        identical = sides.pair.rows.is_identity and sides.pair.columns.is_identity
         for areas, rule in rules(sides.twin):
-            if not (identical and (areas, _key(rule)) in keys):
+            moved = tuple(pairing.alignment.area_from_twin(sides.pair.twin, area)[1] for area in areas)
+            if (moved, _key(rule)) not in keys:
                 yield from _cells(pairing, sides, areas, rule, found)
 
 
@@ -38,7 +38,8 @@ def rules(sheet: Worksheet) -> Iterator[Ruled]:
 
 
 def _key(rule: DataValidation) -> tuple[object, ...]:
-    return rule.type, rule.operator, rule.formula1, rule.formula2, bool(rule.allow_blank), _refuses(rule)
+    """What must be the same for two rules to allow the same."""
+    return rule.type, _span(rule) if rule.type in NUMBERS else _listed(rule), _refuses(rule)
 
 
 def _cells(

@@ -12,6 +12,7 @@ from openpyxl.worksheet.worksheet import Worksheet
 from xlbridge.audit import notation
 from xlbridge.audit.finding import Observation, Place
 from xlbridge.audit.manifest.pairing import Pairing, SheetSides
+from xlbridge.headless.nodes import render
 from xlbridge.headless.operands import NotEvaluated
 from xlbridge.headless.references import Bounds, Cell
 from xlbridge.headless.shapes import parse
@@ -43,10 +44,9 @@ def check(pairing: Pairing) -> Iterator[Observation]:
     for sides in pairing.sheets:
         found = list(marks(sides.found))
         keys = {mark.key for mark in found}
-        identical = sides.pair.rows.is_identity and sides.pair.columns.is_identity
         stops = any(mark.rule.stopIfTrue for mark in found)
         for mark in marks(sides.twin):
-            if not (identical and not stops and mark.key in keys):
+            if stops or _moved(pairing, sides, mark) not in keys:
                 yield from _cells(pairing, sides, mark, found)
 
 
@@ -56,6 +56,14 @@ def marks(sheet: Worksheet) -> Iterator[Mark]:
         areas = tuple(Bounds(r.min_row, r.min_col, r.max_row, r.max_col) for r in formatting.sqref.ranges)
         for rule in formatting.rules if areas else ():
             yield Mark(areas, rule)
+
+
+def _moved(pairing: Pairing, sides: SheetSides, mark: Mark) -> tuple[object, ...]:
+    """The key of a rule of the twin where the workbook has its areas now."""
+    title, move = sides.pair.twin, pairing.alignment.area_from_twin
+    areas = tuple(move(title, area)[1] for area in mark.areas)
+    formulas = tuple(render(notation.moved(parse(text), title, move)) for text in mark.rule.formula)
+    return areas, mark.rule.type, formulas, look(mark.rule)
 
 
 def look(rule: Rule) -> tuple[str, str, bool]:
