@@ -23,6 +23,7 @@ from tests.support.legal_edits import EDITS, OFFICE_EDITS, Edit, OfficeEdit, lev
 from tests.support.packages import parts_of
 from workbook_templates.build import write_native
 from workbook_templates.parts import together
+from xlbridge.headless.book import Book
 from xlbridge.headless.compute import compute_into
 
 FULL = os.environ.get("STORYLEDGER_BENCH") == "1"
@@ -137,6 +138,11 @@ def test_a_package_as_excel_writes_it_raises_no_alarm(
     parts = parts_of(path)
     assert b't="shared"' in b"".join(parts.values())
     assert "xl/calcChain.xml" in parts
+    before, after = Book.open(made[base]), Book.open(path)
+    assert (before.constants, before.names) == (after.constants, after.names)
+    assert {s: {p: f.text for p, f in fs.items()} for s, fs in before.formulas.items()} == {
+        s: {p: f.text for p, f in fs.items()} for s, fs in after.formulas.items()
+    }
     assert alarms(path) == []
 
 
