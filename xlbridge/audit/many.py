@@ -91,7 +91,10 @@ def many(paths: Iterable[Path], knows: Knows, jobs: int) -> Generator[Outcome, N
 def sha256(path: Path) -> str:
     """Return the hash of a file; empty where it cannot be read."""
     try:
-        return hashlib.sha256(path.read_bytes()).hexdigest()
+        if not path.is_file():  # a pipe would be waited for
+            return ""
+        with path.open("rb") as file:
+            return hashlib.file_digest(file, "sha256").hexdigest()
     except OSError:
         return ""
 
@@ -108,7 +111,7 @@ class _Worker:
 
     def take(self, path: Path) -> None:
         """Give it a file."""
-        if self.taken >= FILES:
+        if self.taken >= FILES or not self.process.is_alive():
             self.stop()
             self._start()
         self.path, self.due, self.taken = path, monotonic() + SECONDS, self.taken + 1

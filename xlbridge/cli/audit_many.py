@@ -5,7 +5,7 @@ from __future__ import annotations
 import json
 import os
 from collections.abc import Callable, Iterator, Sequence
-from dataclasses import replace
+from dataclasses import asdict, replace
 from pathlib import Path
 from typing import Final
 
@@ -13,6 +13,7 @@ import click
 from rich.console import Console
 from rich.progress import track
 
+from engine.version import __version__
 from xlbridge.audit import many
 from xlbridge.audit.many import Outcome
 from xlbridge.audit.report import summary
@@ -20,6 +21,7 @@ from xlbridge.cli.failure import BAD_INPUT, CLEAN, FINDINGS, INCOMPLETE, Refusal
 from xlbridge.cli.files import refuse_existing, write_new
 from xlbridge.cli.own_template import own_template
 
+JOURNAL: Final = ".jsonl"
 ENDINGS: Final = (".xlsx", ".xlsm")
 FORMS: Final[dict[str, Callable[[Sequence[Outcome]], str]]] = {
     ".html": summary.as_html,
@@ -53,7 +55,7 @@ def audit_many(
     known = dict(_journal(journal)) if journal else {}
     found = {
         path: replace(known[digest], path=str(path))
-        for path in paths
+        for path in (paths if known else ())
         if (digest := many.sha256(path)) in known
     }
     left = [path for path in paths if path not in found]
@@ -85,19 +87,33 @@ def _inside(folder: Path) -> list[Path]:
 
 
 def _journal(path: Path) -> Iterator[tuple[str, Outcome]]:
-    """The outcomes of an earlier run by the hash of the file; a line that was cut off counts for nothing."""
-    for line in path.read_text(encoding="utf-8").splitlines() if path.exists() else ():
+    """The outcomes of an earlier run by the hash of the file.
+
+    A line that was cut off, or that another version wrote, counts for nothing.
+    """
+    if path.suffix.lower() != JOURNAL:
+        raise Refusal(f"{path}: a journal ends in {JOURNAL}")
+    if not path.parent.is_dir():
+        raise Refusal(f"{path}: the folder {path.parent} does not exist, make it first")
+    text = path.read_text(encoding="utf-8", errors="replace") if path.exists() else ""
+    for line in text.splitlines():
         try:
-            outcome = Outcome(**json.loads(line))
-        except (json.JSONDecodeError, TypeError):
+            record = json.loads(line)
+            version, outcome = record.pop("storyledger"), Outcome(**record)
+        except (ValueError, TypeError, AttributeError, KeyError):
             continue
-        yield outcome.sha256, outcome
+        if version == __version__:
+            yield outcome.sha256, outcome
 
 
 def _note(path: Path, outcome: Outcome) -> None:
-    record = {key: value for key, value in outcome.record().items() if key != "verdict"}
-    with path.open("a", encoding="utf-8") as lines:
-        lines.write(json.dumps(record, ensure_ascii=False) + "\n")
+    """Add a line; it begins with an end of line where the last one was cut off, so that neither is lost."""
+    record = {"storyledger": __version__, **asdict(outcome)}
+    with path.open("a+b") as lines:
+        size = lines.seek(0, os.SEEK_END)
+        lines.seek(max(0, size - 1))
+        cut = size and lines.read(1) != b"\n"
+        lines.write(b"\n" * bool(cut) + json.dumps(record, ensure_ascii=False).encode() + b"\n")
 
 
 def _lines(outcomes: list[Outcome]) -> Iterator[str]:

@@ -64,10 +64,13 @@ _COUNTED: Final[Mapping[str, tuple[int, tuple[bytes, ...]]]] = {
 }
 
 
+def oversize(data: bytes) -> str:
+    """Return what is said of a file that is too large, whatever it is."""
+    return f"the file is larger than {MAX_FILE // MIB} MB" if len(data) > MAX_FILE else ""
+
+
 def problem(data: bytes) -> str:
     """Return why a package must not be opened, or nothing. It is only unpacked, piece by piece."""
-    if len(data) > MAX_FILE:
-        return f"the file is larger than {MAX_FILE // MIB} MB"
     try:
         with zipfile.ZipFile(io.BytesIO(data)) as archive:
             entries = archive.infolist()

@@ -39,16 +39,24 @@ class _Reader(ExcelReader):
 def read_file(path: Path) -> bytes:
     """The file's bytes, once it is certain that they are a package of the .xlsx kind."""
     try:
-        data = path.read_bytes()
+        data = _bytes(path)
     except FileNotFoundError:
         raise BookError(f"{path}: there is no such file") from None
     except IsADirectoryError:
         raise BookError(f"{path}: this is a folder; name the workbook in it") from None
     except OSError as error:
         raise BookError(f"{path}: cannot be read ({error.strerror or error})") from None
-    if refused := _foreign(data) or guard.problem(data):
+    if refused := guard.oversize(data) or _foreign(data) or guard.problem(data):
         raise BookError(f"{path}: {refused}")
     return data
+
+
+def _bytes(path: Path) -> bytes:
+    """The content, read no further than its limit: a pipe or a device may never end."""
+    if path.exists() and not (path.is_file() or path.is_dir()):
+        raise BookError(f"{path}: this is no file; name a workbook")
+    with path.open("rb") as file:
+        return file.read(guard.MAX_FILE + 1)
 
 
 def load(path: Path, data: bytes) -> Workbook:

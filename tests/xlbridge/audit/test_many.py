@@ -100,12 +100,30 @@ class TestResume:
         assert run("audit", folder, "--resume", journal).code == 3
         lines = journal.read_text("utf-8").splitlines()
         assert len(lines) == CLEAN
-        known = json.loads(lines[0])
-        journal.write_text("\n".join([*lines, json.dumps({**known, "sha256": "x"}), '{"path": "cut o']))
-        start = time.process_time()
-        assert run("audit", folder, "--resume", journal).code == 3
-        assert len(journal.read_text("utf-8").splitlines()) == CLEAN + 2
-        assert time.process_time() - start < 5
+        told = json.dumps({**json.loads(lines[-1]), "checked": 77_777})
+        journal.write_text("\n".join([*lines, told, "[]", "\0", '{"path": "cut o']))
+        outcome = run("audit", folder, "--resume", journal)
+        assert outcome.out.count("checked 77777") == CLEAN
+        assert len(journal.read_text("utf-8").splitlines()) == CLEAN + 4
+
+    def test_the_journal_of_another_version_counts_for_nothing(self, folder: Path, tmp_path: Path) -> None:
+        journal = tmp_path / "journal.jsonl"
+        given = [folder / "tower-1.xlsx", folder / "tower-2.xlsx"]
+        run("audit", *given, "--jobs", 1, "--resume", journal)
+        lines = [json.loads(line) for line in journal.read_text("utf-8").splitlines()]
+        old = "\n".join(json.dumps({**line, "storyledger": "0.0.1"}) for line in lines)
+        journal.write_text(old + '\n{"path": "cut o')
+        assert run("audit", *given, "--jobs", 1, "--resume", journal).code == 0
+        text = journal.read_text("utf-8")
+        assert text.startswith(old + "\n")  # what was there stays
+        assert [json.loads(line) for line in text.splitlines()[3:]] == lines  # each on a line of its own
+
+    def test_only_a_journal_is_written_to(self, folder: Path, tmp_path: Path) -> None:
+        book = folder / "tower-1.xlsx"
+        before = book.read_bytes()
+        assert_refused(run("audit", folder, "--resume", book), "tower-1.xlsx", ".jsonl")
+        assert book.read_bytes() == before
+        assert_refused(run("audit", folder, "--resume", tmp_path / "no" / "a.jsonl"), "does not exist")
 
     @pytest.mark.skipif(sys.platform == "win32", reason="no such signal there")
     def test_an_interrupt_loses_nothing(self, folder: Path, tmp_path: Path) -> None:

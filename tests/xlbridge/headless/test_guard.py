@@ -46,7 +46,6 @@ def test_a_workbook_of_1000_levels_passes() -> None:
 @pytest.mark.parametrize(
     ("name", "value", "words"),
     [
-        ("MAX_FILE", 3000, "file is larger"),
         ("MAX_ENTRIES", 8, "parts, more than"),
         ("MAX_TOTAL", 10_000, "package unpacks"),
         ("MAX_PART", 2000, "part xl/"),
@@ -67,6 +66,23 @@ def test_a_file_that_may_not_be_read(tmp_path: Path) -> None:
     path = hostile.write(tmp_path, "a text")
     path.chmod(0)
     assert_refused(run("audit", path), "cannot be read")
+
+
+def test_a_file_is_read_no_further_than_its_limit(tmp_path: Path, monkeypatch: pytest.MonkeyPatch) -> None:
+    path = tmp_path / "large.xlsx"
+    with path.open("wb") as file:
+        file.truncate(20 * 2**30)  # takes no room on the disk
+    assert_refused(run("audit", path), "file is larger than 64 MB")
+    monkeypatch.setattr(guard, "MAX_FILE", len(hostile.packed(hostile.good())) - 1)
+    path.write_bytes(hostile.packed(hostile.good()))
+    assert_refused(run("calc", path), "file is larger")
+
+
+@pytest.mark.skipif(not hasattr(os, "mkfifo"), reason="no pipes with names there")
+def test_a_pipe_is_not_waited_for(tmp_path: Path) -> None:
+    os.mkfifo(tmp_path / "pipe.xlsx")
+    for command in ("audit", "calc", "inputs"):
+        assert_refused(run(command, tmp_path / "pipe.xlsx"), "no file")
 
 
 def test_what_is_no_file(tmp_path: Path) -> None:
