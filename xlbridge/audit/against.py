@@ -4,14 +4,20 @@ from __future__ import annotations
 
 from typing import Final
 
-from xlbridge.audit.compare.changes import Change, Issues, Of
+from xlbridge.audit.compare.change import Change, Of
+from xlbridge.audit.compare.changes import Issues
 from xlbridge.audit.finding import Checked, NotChecked, Observation, Place
 from xlbridge.audit.subject import Subject
 from xlbridge.headless.nodes import render_value
 from xlbridge.values import CellError
 
 METHOD: Final = "against"
-KINDS: Final = {Of.INPUT: "input_changed", Of.ROW: "row_changed"}
+KINDS: Final = {
+    Of.INPUT: "input_changed",
+    Of.ROW: "row_changed",
+    Of.FORMULA: "formula_changed",
+    Of.FORMAT: "format_changed",
+}
 
 
 def check(subject: Subject) -> Checked:
@@ -30,10 +36,10 @@ def check(subject: Subject) -> Checked:
 def _observed(change: Change) -> Observation:
     place = Place.of(change.cell) if change.cell else Place()
     kind = KINDS.get(change.of, "content_changed")
-    if change.of is Of.ROW:
-        return Observation(kind, place, change.words)
-    old, new = (_written(value) for value in (change.old, change.new))
-    return Observation(kind, place, change.words, old, new)
+    if change.of in (Of.ROW, Of.LINE):
+        return Observation(kind, place, change.words, cause=change.cause)
+    old, new = (_written(value) for value in (change.moved or change.old, change.new))
+    return Observation(kind, place, change.words, old, new, cause=change.cause)
 
 
 def _written(value: object) -> str:
@@ -42,6 +48,6 @@ def _written(value: object) -> str:
         return ""
     if isinstance(value, bool):
         return render_value("yes" if value else "no")
-    if isinstance(value, CellError) or (isinstance(value, str) and value.startswith("=")):
+    if isinstance(value, CellError | list) or (isinstance(value, str) and value.startswith("=")):
         return str(value)
     return render_value(float(value) if isinstance(value, int) else value)

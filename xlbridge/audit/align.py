@@ -140,17 +140,23 @@ def align(book: Book, own: OwnTemplate) -> Alignment:
 
 
 def _sheets(book: Book, twin: Book) -> Iterator[tuple[str, str]]:
-    """Sheets of the same title first, if they share a text at all, then those that share most."""
+    """Sheets of the same title first, if they share anything at all, then those that share most text."""
     texts = {(which, s): _said(b, s) for which, b in enumerate((twin, book)) for s in b.sheets}
     shared = {(t, s): len(texts[0, t] & texts[1, s]) for t in twin.sheets for s in book.sheets}
     order = sorted(shared, key=lambda pair: (pair[0].casefold() != pair[1].casefold(), -shared[pair]))
     taken: set[tuple[int, str]] = set()
     found = {}
-    for mine, title in (pair for pair in order if shared[pair]):
+    for mine, title in (pair for pair in order if shared[pair] or _same_numbers(twin, book, *pair)):
         if (0, mine) not in taken and (1, title) not in taken:
             taken |= {(0, mine), (1, title)}
             found[mine] = title
     return ((mine, found[mine]) for mine in twin.sheets if mine in found)
+
+
+def _same_numbers(twin: Book, book: Book, mine: str, title: str) -> bool:
+    """Whether two sheets of one title share a constant; sheets of numbers have no other sign."""
+    alike = mine.casefold() == title.casefold()
+    return alike and bool({*twin.constants[mine].values()} & {*book.constants[title].values()})
 
 
 def _said(book: Book, sheet: str) -> set[str]:

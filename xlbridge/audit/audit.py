@@ -9,7 +9,7 @@ from functools import cached_property
 
 from xlbridge.audit import group
 from xlbridge.audit.acceptance import Acceptance, accepted, unused
-from xlbridge.audit.effects import with_effects
+from xlbridge.audit.effects import not_weighed, with_effects
 from xlbridge.audit.finding import Checked, Finding, NotChecked
 from xlbridge.audit.kinds import Severity
 from xlbridge.audit.methods import METHODS
@@ -32,11 +32,13 @@ class Audit:
     subject: Subject
     checks: tuple[Checked, ...]
     findings: tuple[Finding, ...]
+    not_weighed: tuple[NotChecked, ...] = ()
+    """Findings whose effects are not known because there are too many of them."""
 
     @property
     def not_checked(self) -> tuple[NotChecked, ...]:
         """Everything that could not be checked, with the reason."""
-        return tuple(item for check in self.checks for item in check.not_checked)
+        return (*(item for check in self.checks for item in check.not_checked), *self.not_weighed)
 
     @cached_property
     def states(self) -> Mapping[Cell, State]:
@@ -72,4 +74,5 @@ def audit(subject: Subject, acceptances: Sequence[Acceptance] = ()) -> Audit:
     checks = tuple(method(subject) for method in METHODS)
     seen = [o for check in checks for o in check.observations]
     found = group.findings((*seen, *unused(group.findings(seen), acceptances)))
-    return Audit(subject, checks, tuple(accepted(with_effects(subject, found), acceptances)))
+    weighed = with_effects(subject, found)
+    return Audit(subject, checks, tuple(accepted(weighed, acceptances)), not_weighed(subject, found))

@@ -6,7 +6,7 @@ from collections.abc import Iterable, Iterator, Mapping
 from dataclasses import replace
 from typing import Final
 
-from xlbridge.audit.finding import Effect, Finding, Observation
+from xlbridge.audit.finding import Effect, Finding, NotChecked, Observation
 from xlbridge.audit.subject import Subject
 from xlbridge.audit.template import Headline
 from xlbridge.headless.book import Book, Formula
@@ -20,7 +20,8 @@ from xlbridge.values import Scalar
 RESTORED: Final = frozenset(
     {
         *("constant_for_formula", "formula_missing", "row_not_filled", "formula_differs", "constant_changed"),
-        *("other_reference", "range_shorter", "range_longer", "input_changed"),
+        *("other_reference", "range_shorter", "range_longer", "check_disarmed"),
+        *("input_changed", "formula_changed"),
     }
 )
 STALE: Final = "stale_value"
@@ -33,7 +34,7 @@ Values = Mapping[Cell, Scalar]
 def with_effects(subject: Subject, findings: tuple[Finding, ...]) -> tuple[Finding, ...]:
     """Return the findings with what each does to the headline results; only the first of very many."""
     headlines = subject.own.headlines if subject.own else ()
-    concerned = [f for f in findings if f.kind.key in RESTORED or f.kind.key == STALE][:AT_MOST]
+    concerned = weighed(findings)[:AT_MOST]
     if not headlines or not concerned:
         return findings
     now = _values(subject.evaluator, headlines)
@@ -41,18 +42,36 @@ def with_effects(subject: Subject, findings: tuple[Finding, ...]) -> tuple[Findi
     return tuple(replace(f, effects=found.get(f.number, ())) for f in findings)
 
 
+def weighed(findings: tuple[Finding, ...]) -> list[Finding]:
+    """The findings whose effect can be computed: what is expected is known, and the cell is still there."""
+    return [
+        f
+        for f in findings
+        if f.kind.key == STALE or (f.kind.key in RESTORED and all(p.address for p in f.places))
+    ]
+
+
+def not_weighed(subject: Subject, findings: tuple[Finding, ...]) -> tuple[NotChecked, ...]:
+    """Say so where there are more findings than are weighed."""
+    beyond = weighed(findings)[AT_MOST:] if subject.own and subject.own.headlines else []
+    if not beyond:
+        return ()
+    what = f"effects of {len(beyond)} findings, from number {beyond[0].number} on,"
+    return (NotChecked(what, f"only the first {AT_MOST} are weighed against the headline results"),)
+
+
 def restored(book: Book, observations: Iterable[Observation]) -> Book:
-    """Return the workbook with the expected content in the cells of these observations."""
+    """Return the workbook with the expected content in the cells of these observations, or none if empty."""
     formulas = {sheet: dict(cells) for sheet, cells in book.formulas.items()}
     constants = {sheet: dict(cells) for sheet, cells in book.constants.items()}
-    for o in (o for o in observations if o.expected):
+    for o in observations:
         bounds = parse_bounds(o.place.address)
         cell = Cell(o.place.sheet, bounds.top, bounds.left)
         formulas[cell.sheet].pop((cell.row, cell.column), None)
         constants[cell.sheet].pop((cell.row, cell.column), None)
         if o.expected.startswith("="):
             formulas[cell.sheet][cell.row, cell.column] = Formula(cell, o.expected, bounds)
-        elif (value := _literal(o.expected)) is not None:
+        elif o.expected and (value := _literal(o.expected)) is not None:
             constants[cell.sheet][cell.row, cell.column] = value
     return replace(book, formulas=formulas, constants=constants)
 
@@ -66,7 +85,10 @@ def _sides(
     """
     if finding.kind.key == STALE:
         return {h.cell: subject.book.stored(h.cell) for h in headlines}, now
-    mended = Evaluator(restored(subject.book, finding.observations), FUNCTIONS)
+    try:
+        mended = Evaluator(restored(subject.book, finding.observations), FUNCTIONS)
+    except NotEvaluated:
+        return now, {}  # what is expected is nothing that a cell can hold
     return now, _values(mended, headlines)
 
 

@@ -91,6 +91,9 @@ def test_of_very_many_findings_only_the_first_are_weighed(tmp_path: Path) -> Non
                 cell = sheet[level_cell(path, column, level)]
                 cell.value = f"{cell.value}*{1 + level / 100 + len(column) / 1000}"
 
-    findings = audited(changed(path, spoil)).findings
+    outcome = audited(changed(path, spoil))
+    findings = outcome.findings
     assert len(findings) > AT_MOST
     assert sum(bool(f.effects) for f in findings) == AT_MOST
+    (said,) = [item for item in outcome.not_checked if "effects" in item.what]
+    assert said.because == f"only the first {AT_MOST} are weighed against the headline results"

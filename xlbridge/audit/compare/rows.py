@@ -12,6 +12,8 @@ Row = Mapping[str, Any]
 #: the share of its entries that a row keeps under another name
 ALIKE: Final = 0.5
 NAME: Final = "name"
+#: what says nothing of which row it is
+SILENT: Final = frozenset({NAME, "source"})
 
 
 @dataclass(frozen=True, slots=True)
@@ -78,12 +80,12 @@ def _rest(count: int, taken: Iterable[int]) -> list[int]:
 
 
 def _content(row: Row) -> tuple[tuple[str, Any], ...]:
-    return tuple(sorted((key, value) for key, value in row.items() if key != NAME))
+    return tuple(sorted((key, value) for key, value in row.items() if key not in SILENT))
 
 
 def _share(a: Row, b: Row) -> float:
     """The share of the entries beside the name that two rows have in common."""
-    keys = (set(a) | set(b)) - {NAME}
+    keys = (set(a) | set(b)) - SILENT
     return sum(a.get(key) == b.get(key) for key in keys) / len(keys) if keys else 0.0
 
 

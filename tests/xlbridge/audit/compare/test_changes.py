@@ -3,36 +3,23 @@
 from __future__ import annotations
 
 import json
-import tomllib
-from collections.abc import Callable
 from pathlib import Path
-from typing import Any
+from random import Random
 
 import openpyxl
 import pytest
 from openpyxl import Workbook
 
-from engine.building import from_mapping, solve, to_mapping
-from tests.support.audited import audited, changed, computed_book, kinds_at
-from tests.support.command import assert_refused, run
-from workbook_templates.build import write_workbook
-from workbook_templates.demo import building_text
-from xlbridge.audit.compare.changes import Change, Issues, Of
-from xlbridge.audit.compare.influence import Influences, influences
+from engine.building import from_mapping, solve
+from tests.support.audited import changed
+from tests.support.command import run
+from tests.support.issues import BASE, Tables, issue, without_drift
+from xlbridge.audit.compare.change import Change, Of
+from xlbridge.audit.compare.changes import Issues
+from xlbridge.audit.compare.influence import Influences, influences, steps
 from xlbridge.audit.subject import Subject
 from xlbridge.cli.own_template import own_template
 from xlbridge.headless.compute import compute_into
-
-Tables = dict[str, Any]
-BASE: Tables = to_mapping(from_mapping(tomllib.loads(building_text())))
-
-
-def issue(folder: Path, name: str, change: Callable[[Tables], object] = lambda tables: None) -> Path:
-    """An issue of the demonstration building with some of its entries changed."""
-    tables = json.loads(json.dumps(BASE))
-    change(tables)
-    write_workbook(tables, folder / name)
-    return folder / name
 
 
 def compared(old: Path, new: Path) -> tuple[list[Change], Influences | None]:
@@ -113,6 +100,34 @@ def test_cells_that_are_no_entries_are_compared_where_they_are_now(tmp_path: Pat
     assert changes[-1].new == f"{changes[-1].old}*1.02"
 
 
+@pytest.mark.parametrize("seed", range(8))
+def test_planted_changes_of_our_workbooks_are_found_and_no_other(
+    tmp_path: Path, first: Path, seed: int
+) -> None:
+    chance = Random(seed)
+    expected: list[str] = []
+
+    def change(tables: Tables) -> None:
+        rows = tables["level"]
+        kept = list(range(len(rows)))
+        gone = chance.sample(kept[1:], chance.randrange(3))
+        renamed, heavier = chance.sample([n for n in kept if n not in gone], 2)
+        expected.extend(f"level {rows[n]['name']} was removed" for n in gone)
+        expected.append(f"{rows[renamed]['name']}, now Renamed")
+        expected.append(f"{rows[heavier]['weight']:g}, now {rows[heavier]['weight'] + 9:g} kip")
+        rows[renamed]["name"] = "Renamed"
+        rows[heavier]["weight"] += 9
+        after = chance.randrange(len(rows) - 1)
+        mean = (rows[after]["elevation"] + rows[after + 1]["elevation"]) / 2
+        tables["level"] = [row for n, row in enumerate(rows) if n not in gone]
+        added = {**rows[after], "name": "Added", "elevation": mean, "weight": 77.0, "P_x": 66.0}
+        tables["level"].insert(min(after + 1, len(tables["level"])), added)
+        expected.append("level Added was added")
+
+    changes, _ = compared(first, issue(tmp_path, "next.xlsx", change))
+    assert sorted(c.words.rpartition(": ")[2] for c in changes) == sorted(expected)
+
+
 def test_each_change_alone_and_what_they_do_together(tmp_path: Path, first: Path) -> None:
     def change(tables: Tables) -> None:
         tables["level"][0]["weight"] *= 1.5
@@ -133,14 +148,64 @@ def test_each_change_alone_and_what_they_do_together(tmp_path: Path, first: Path
     assert len(changes) == len(found.single) == 2
 
 
-def test_a_change_that_cannot_stand_alone_says_why(tmp_path: Path, first: Path) -> None:
+def test_numbers_in_other_units_are_not_compared(tmp_path: Path, first: Path) -> None:
     def change(tables: Tables) -> None:
         tables["units"] = "si"
 
-    _, found = compared(first, issue(tmp_path, "next.xlsx", change))
+    other = issue(tmp_path, "next.xlsx", change)
+    changes, found = compared(first, other)
+    assert "units" in {c.path for c in changes}
+    assert found is None
+    outcome = run("compare", first, other)
+    assert (outcome.code, outcome.err) == (1, "")
+    assert "results not compared: " in outcome.out
+
+
+def test_a_column_of_entries_that_came_is_one_step(tmp_path: Path, first: Path) -> None:
+    changes, found = compared(issue(tmp_path, "early.xlsx", without_drift), first)
     assert found is not None
-    (units,) = [one for one in found.single if "(units)" in one.words]
-    assert (units.moved, units.reason) == ({}, "numbers in other units cannot be compared")
+    came = [c for c in changes if c.of is Of.INPUT]
+    assert len(came) == 3 * len(BASE["level"])
+    assert [c.old for c in came] == [None] * len(came)
+    assert [one.words.partition(" of ")[0] for one in found.single] == [
+        "Vertical load at and above",
+        "Elastic displacement",
+        "Elastic displacement",
+    ]
+    assert all(one.words.endswith(", and 8 more like it") for one in found.single)
+
+
+def test_changes_that_stand_only_together_are_one_step(tmp_path: Path, first: Path) -> None:
+    def change(tables: Tables) -> None:
+        del tables["site"]["S_DS"], tables["site"]["S_D1"]
+        tables["site"] |= {"S_MS": 1.8, "S_M1": 1.0}
+
+    _, found = compared(first, issue(tmp_path, "late.xlsx", change))
+    assert found is not None
+    parts, one = found.single
+    assert parts.words.startswith("parts ")
+    assert one.words.startswith("what stands only together: ")
+    assert all(f"(site.{key})" in one.words for key in ("S_DS", "S_D1", "S_MS", "S_M1"))
+    assert one.moved["V X"] == pytest.approx(found.new["V X"] - found.old["V X"])
+    assert one.moved["V X"] != 0
+
+
+def test_what_is_gone_has_its_words_and_no_cell(tmp_path: Path, first: Path) -> None:
+    changes, _ = compared(first, issue(tmp_path, "late.xlsx", without_drift))
+    gone = [c for c in changes if c.of is Of.INPUT]
+    assert {c.cell for c in gone} == {None}
+    assert gone[0].words == "Vertical load at and above of Roof (level[1].P_x): 1390, now nothing"
+    assert gone[0].unit == "kip"
+    lines = [c.words for c in changes if c.of is Of.LINE and c.path.startswith("Levels ")]
+    assert "column T of Levels is gone: Design story drift" in lines
+    assert not [c for c in changes if c.of is Of.FORMULA and c.new is None]
+
+
+def test_of_very_many_entries_a_column_is_a_step() -> None:
+    some = [Change(Of.INPUT, f"level[{n}].weight", None, 1.0, 2.0, "") for n in range(1, 61)]
+    more = [Change(Of.INPUT, f"level[{n}].P_x", None, 1.0, 2.0, "") for n in range(1, 61)]
+    assert len(steps(some)) == 60
+    assert [len(step) for step in steps([*some, *more])] == [60, 60]
 
 
 def test_workbooks_of_another_make_are_compared_cell_by_cell(tmp_path: Path) -> None:
@@ -160,61 +225,27 @@ def test_workbooks_of_another_make_are_compared_cell_by_cell(tmp_path: Path) -> 
     changes, found = compared(tmp_path / "a2.xlsx", tmp_path / "b2.xlsx")
     assert found is None
     assert [(c.of, str(c.cell), c.old, c.new) for c in changes] == [
+        (Of.LINE, "Sheet!A2", None, "Mezzanine"),
         (Of.CONTENT, "Sheet!B4", 30.0, 31.0),
         (Of.FORMULA, "Sheet!C4", "=B3*2", "=B4*3"),
     ]
 
 
-class TestAgainst:
-    def test_a_plausible_wrong_entry_is_found_with_its_effect(self, tmp_path: Path, first: Path) -> None:
-        def change(tables: Tables) -> None:
-            tables["direction"]["X"]["R"] = 6.0
+def test_cells_filled_and_emptied_and_formats_that_mislead(tmp_path: Path, first: Path) -> None:
+    def change(book: Workbook) -> None:
+        sheet = book["Levels"]
+        sheet["C12"].number_format = '0.0,"k"'
+        sheet["I5"] = "Shear"
+        sheet["I13"] = None
+        book["Notes" if "Notes" in book else "Checks"]["A60"] = "a line below"
 
-        wrong = issue(tmp_path, "next.xlsx", change)
-        assert audited(wrong).findings == ()
-        (finding,) = audited(wrong, against=first).findings
-        assert finding.kind.key == "input_changed"
-        effect = next(e for e in finding.effects if e.headline == "Base shear V, direction X")
-        assert effect.without == pytest.approx(solve(from_mapping(BASE)).direction["X"].V)
-        assert effect.change > 0
-
-    def test_rows_and_contents_that_differ_are_findings_too(self, tmp_path: Path, first: Path) -> None:
-        def change(tables: Tables) -> None:
-            del tables["level"][3]
-
-        found = kinds_at(audited(issue(tmp_path, "next.xlsx", change), against=first))
-        assert "row_changed" in {kind for kinds in found.values() for kind in kinds}
-        path = computed_book(tmp_path)
-        other = changed(
-            path, lambda book: book["Notes"].append([1]) if "Notes" in book else book.create_sheet("N")
-        )
-        kinds = {f.kind.key for f in audited(other, against=path).findings}
-        assert kinds == {"content_changed"}
-
-    def test_the_same_issue_gives_nothing(self, first: Path) -> None:
-        outcome = audited(first, against=first)
-        assert outcome.findings == outcome.not_checked == ()
-
-
-class TestCommand:
-    def test_says_what_changed_and_what_it_did(self, tmp_path: Path, first: Path) -> None:
-        def change(tables: Tables) -> None:
-            tables["level"][0]["weight"] += 100.0
-
-        other = issue(tmp_path, "next.xlsx", change)
-        outcome = run("compare", first, other)
-        assert (outcome.code, outcome.err) == (1, "")
-        assert "changed inputs: 1\n" in outcome.out
-        assert "Seismic weight of Roof (level[1].weight)" in outcome.out
-        record = json.loads(run("compare", first, other, "--json").out)
-        assert [c["path"] for c in record["changes"]] == ["level[1].weight"]
-        assert record["influence"]["alone"][0]["moved"]["W"] == pytest.approx(100.0)
-
-    def test_two_equal_issues_are_clean(self, first: Path) -> None:
-        outcome = run("compare", first, first)
-        assert outcome.code == 0
-        assert "nothing changed" in outcome.out
-
-    def test_a_missing_issue_is_refused(self, first: Path) -> None:
-        assert_refused(run("compare", first, first.with_name("none.xlsx")), "none.xlsx", "no such file")
-        assert_refused(run("audit", first, "--against", first.with_name("none.xlsx")), "none.xlsx")
+    copy = tmp_path / "copy.xlsx"
+    copy.write_bytes(first.read_bytes())
+    changes, _ = compared(first, changed(copy, change))
+    heading = openpyxl.load_workbook(first)["Levels"]["I13"].value
+    assert {(c.of, str(c.cell), str(c.old), str(c.new)) for c in changes if c.of is not Of.LINE} == {
+        (Of.FORMAT, "Levels!C12", "#,##0.0", '0.0,"k"'),
+        (Of.CONTENT, "Levels!I5", "Story shear", "Shear"),
+        (Of.FORMULA, "Levels!I13", heading, "None"),
+    }
+    assert [c.words for c in changes if c.of is Of.LINE] == ["row 60 of Checks is new: a line below"]
