@@ -5,6 +5,7 @@ from __future__ import annotations
 from collections.abc import Callable
 from pathlib import Path
 from shutil import copy
+from typing import Any
 
 import pytest
 from openpyxl import Workbook
@@ -48,15 +49,18 @@ def unmark(book: Workbook) -> None:
     book["Checks"].conditional_formatting = type(book["Checks"].conditional_formatting)()
 
 
-def overlay(book: Workbook) -> None:
-    rule = FormulaRule(formula=["TRUE"], stopIfTrue=True, fill=PatternFill(bgColor="FFFFFF"))
-    sheet = book["Checks"]
-    for rules in sheet.conditional_formatting:
-        for known in rules.rules:
-            known.priority += 1
-    rule.priority = 1
-    sheet.conditional_formatting.add("I11:I99", rule)
-    rule.priority = 1
+def overlay(**look: Any) -> Change:
+    """Put a rule that always holds before those of the verdicts."""
+
+    def change(book: Workbook) -> None:
+        sheet, rule = book["Checks"], FormulaRule(formula=["TRUE"], **look)
+        for rules in sheet.conditional_formatting:
+            for known in rules.rules:
+                known.priority += 1
+        sheet.conditional_formatting.add("I11:I99", rule)
+        rule.priority = 1
+
+    return change
 
 
 def pale(book: Workbook) -> None:
@@ -153,7 +157,8 @@ FAULTS: dict[str, tuple[Change, str, str]] = {
     "white text": (style(F_X, font=Font(color="FFFFFF"), fill=PatternFill()), "text_unseen", F_X),
     "marks gone": (unmark, "mark_changed", ""),
     "marks in white": (pale, "mark_changed", ""),
-    "marks stopped": (overlay, "mark_overlaid", ""),
+    "marks stopped": (overlay(stopIfTrue=True), "mark_overlaid", "Checks!I12"),
+    "marks painted over": (overlay(font=Font(color="1B1B1B")), "mark_overlaid", "Checks!I12"),
     "rules gone": (without_rules, "entry_rule_missing", ""),
     "rule widened": (loosen("S_DS", operator="greaterThan", formula1="-5"), "entry_rule_widened", STATUS),
     "rule warns": (loosen("S_DS", errorStyle="warning"), "entry_rule_widened", STATUS),

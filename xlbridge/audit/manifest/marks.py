@@ -17,6 +17,8 @@ from xlbridge.headless.operands import NotEvaluated
 from xlbridge.headless.references import Bounds, Cell
 from xlbridge.headless.shapes import parse
 
+Key = tuple[tuple[Bounds, ...], str, tuple[str, ...], tuple[str, str, bool]]
+
 
 class Mark(NamedTuple):
     """A rule with its areas; its formula is written for the first cell of them."""
@@ -34,7 +36,7 @@ class Mark(NamedTuple):
         return any(area.contains(row, column) for area in self.areas)
 
     @property
-    def key(self) -> tuple[object, ...]:
+    def key(self) -> Key:
         """What must be the same for two rules to do the same to the same cells."""
         return self.areas, self.rule.type, tuple(self.rule.formula), look(self.rule)
 
@@ -42,12 +44,14 @@ class Mark(NamedTuple):
 def check(pairing: Pairing) -> Iterator[Observation]:
     """Look at every cell that the twin marks."""
     for sides in pairing.sheets:
-        found = list(marks(sides.found))
+        found, expected = list(marks(sides.found)), list(marks(sides.twin))
+        moved = [_moved(pairing, sides, mark) for mark in expected]
+        strange = [mark for mark in found if mark.key not in moved]
         keys = {mark.key for mark in found}
-        stops = any(mark.rule.stopIfTrue for mark in found)
-        for mark in marks(sides.twin):
-            if stops or _moved(pairing, sides, mark) not in keys:
-                yield from _cells(pairing, sides, mark, found)
+        for mark, key in zip(expected, moved, strict=True):
+            areas: tuple[Bounds, ...] = key[0]
+            if key not in keys or any(_meet(a, b) for o in strange for a in o.areas for b in areas):
+                yield from _cells(pairing, sides, mark, expected, found)
 
 
 def marks(sheet: Worksheet) -> Iterator[Mark]:
@@ -58,7 +62,7 @@ def marks(sheet: Worksheet) -> Iterator[Mark]:
             yield Mark(areas, rule)
 
 
-def _moved(pairing: Pairing, sides: SheetSides, mark: Mark) -> tuple[object, ...]:
+def _moved(pairing: Pairing, sides: SheetSides, mark: Mark) -> Key:
     """The key of a rule of the twin where the workbook has its areas now."""
     title, move = sides.pair.twin, pairing.alignment.area_from_twin
     areas = tuple(move(title, area)[1] for area in mark.areas)
@@ -77,25 +81,44 @@ def _six(colour: object) -> str:
     return colour[-6:].upper() if isinstance(colour, str) else ""
 
 
-def _cells(pairing: Pairing, sides: SheetSides, mark: Mark, found: list[Mark]) -> Iterator[Observation]:
-    formulas = pairing.twin.formulas[sides.pair.twin]
-    for row, column in formulas:
-        place = pairing.alignment.from_twin(Cell(sides.pair.twin, row, column))
+def _meet(one: Bounds, other: Bounds) -> bool:
+    across = one.left <= other.right and other.left <= one.right
+    return across and one.top <= other.bottom and other.top <= one.bottom
+
+
+def _cells(
+    pairing: Pairing, sides: SheetSides, mark: Mark, expected: list[Mark], found: list[Mark]
+) -> Iterator[Observation]:
+    for row, column in pairing.twin.formulas[sides.pair.twin]:
+        cell = Cell(sides.pair.twin, row, column)
+        place = pairing.alignment.from_twin(cell)
         if place is None or not mark.covers(row, column):
             continue
-        expected = _written(mark, Cell(sides.pair.twin, row, column))
-        node = notation.moved(parse(expected), sides.pair.twin, pairing.alignment.area_from_twin)
-        wanted = notation.canonical(node, place.sheet)
+        wanted = _expected(pairing, mark, cell, place)
+        ours = {_expected(pairing, m, cell, place) for m in expected if m.covers(row, column)}
         here = [other for other in found if other.covers(place.row, place.column)]
         alike = [o for o in here if o.rule.type == mark.rule.type and _formula(o, place) == wanted]
         same = [o for o in alike if look(o.rule) == look(mark.rule)]
-        cause = "another look" if alike and not same else sides.pair.twin
+        text = "; ".join(mark.rule.formula)
         if not same:
-            words = f"the mark of {'; '.join(mark.rule.formula)} is missing or looks another way"
-            yield Observation("mark_changed", Place.of(place), words, expected, cause=cause)
-        elif any(o.rule.stopIfTrue and o.rule.priority < same[0].rule.priority for o in here):
-            words = "a conditional format before that of the verdict ends the marking"
-            yield Observation("mark_overlaid", Place.of(place), words, expected, cause=cause)
+            cause = "another look" if alike else sides.pair.twin
+            words = f"the mark of {text} is missing or looks another way"
+            yield Observation("mark_changed", Place.of(place), words, text, cause=cause)
+            continue
+        strange = (o for o in here if _formula(o, place) not in ours)
+        if any(o.rule.priority < same[0].rule.priority and _covers_up(o.rule) for o in strange):
+            words = "a conditional format that comes before that of the verdict covers it up"
+            yield Observation("mark_overlaid", Place.of(place), words, text, cause=sides.pair.twin)
+
+
+def _covers_up(rule: Rule) -> bool:
+    """Whether a rule that comes first leaves nothing of the colours of those after it."""
+    return bool(rule.stopIfTrue) or look(rule)[:2] != ("", "")
+
+
+def _expected(pairing: Pairing, mark: Mark, cell: Cell, place: Cell) -> str:
+    node = notation.moved(parse(_written(mark, cell)), cell.sheet, pairing.alignment.area_from_twin)
+    return notation.canonical(node, place.sheet)
 
 
 def _formula(mark: Mark, place: Cell) -> str:
