@@ -19,7 +19,7 @@ from xlbridge.audit.subject import Knows, Subject
 from xlbridge.headless.opening import BookError
 
 #: what the audit of one file may take, beyond what the guard of files bounds already
-MEMORY: Final = 4 * 2**30
+MEMORY: Final = 2 * 2**30
 SECONDS: Final = 300.0
 #: a process starts afresh after so many files, so that no memory is kept for long
 FILES: Final = 50
@@ -166,6 +166,8 @@ def _serve(pipe: Connection, knows: Knows) -> None:
             found = one(path, knows)
         except KeyboardInterrupt:
             return
+        except MemoryError:
+            found = Outcome(str(path), failure=f"the audit needs more memory than {MEMORY // 2**30} GB")
         except Exception as error:  # whatever a hostile file provokes is said of that file
             found = Outcome(str(path), failure=f"the audit failed ({type(error).__name__}: {error})")
         pipe.send(found)

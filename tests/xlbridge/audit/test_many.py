@@ -49,6 +49,12 @@ def dies(evaluator: Evaluator) -> OwnTemplate | None:
     return own_template(evaluator)
 
 
+def hungry(evaluator: Evaluator) -> OwnTemplate | None:
+    """What a file does that takes more memory than there may be."""
+    bytearray(many.MEMORY)
+    return own_template(evaluator)
+
+
 class TestOutcomes:
     def test_every_file_of_a_folder_has_one(self, folder: Path) -> None:
         outcome = run("audit", folder, "--jobs", 2)
@@ -87,6 +93,11 @@ class TestOutcomes:
         found = {o.path: o for o in many.many(paths, dies, 2)}
         assert found[str(deadly)].failure.startswith("the process that audited it ended")
         assert [found[str(p)].verdict for p in paths if p != deadly] == ["✓ clean"] * 3
+
+    @pytest.mark.skipif(sys.platform == "win32", reason="memory is not bounded there")
+    def test_one_that_takes_too_much_memory_is_stopped(self, folder: Path) -> None:
+        (found,) = many.many([folder / "tower-1.xlsx"], hungry, 1)
+        assert found.failure == "the audit needs more memory than 2 GB"
 
     def test_one_that_takes_too_long_is_stopped(self, folder: Path, monkeypatch: pytest.MonkeyPatch) -> None:
         monkeypatch.setattr(many, "SECONDS", 0.0)
