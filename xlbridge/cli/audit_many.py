@@ -73,8 +73,9 @@ def audit_many(
         raise Refusal(f"interrupted, {len(found)} of {len(paths)} audited{ways}") from None
     ordered = [found[path] for path in paths]
     if wanted:
-        write_new(wanted, FORMS[wanted.suffix.lower()](ordered).encode(), force)
-    click.echo(summary.as_json(ordered) if as_json else "\n".join(_lines(ordered)))
+        write_new(wanted, _bytes(FORMS[wanted.suffix.lower()](ordered)), force)
+    text = summary.as_json(ordered) if as_json else "\n".join(map(_plain, _lines(ordered)))
+    click.echo(_bytes(text).decode())
     return max(CODES[outcome.verdict] for outcome in ordered)
 
 
@@ -113,7 +114,17 @@ def _note(path: Path, outcome: Outcome) -> None:
         size = lines.seek(0, os.SEEK_END)
         lines.seek(max(0, size - 1))
         cut = size and lines.read(1) != b"\n"
-        lines.write(b"\n" * bool(cut) + json.dumps(record, ensure_ascii=False).encode() + b"\n")
+        lines.write(b"\n" * bool(cut) + _bytes(json.dumps(record, ensure_ascii=False)) + b"\n")
+
+
+def _bytes(text: str) -> bytes:
+    """A text in UTF-8; a byte of a file's name that is none there is written as its escape."""
+    return text.encode("utf-8", "backslashreplace")
+
+
+def _plain(line: str) -> str:
+    """A line for a terminal: what would move its cursor, or begin another line, is written as its escape."""
+    return "".join(c if c.isprintable() else c.encode("unicode_escape").decode() for c in line)
 
 
 def _lines(outcomes: list[Outcome]) -> Iterator[str]:

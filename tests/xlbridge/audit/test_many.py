@@ -6,6 +6,7 @@ import csv
 import io
 import json
 import os
+import re
 import signal
 import subprocess
 import sys
@@ -179,7 +180,20 @@ class TestSummaries:
         assert rows[0] == list(summary.COLUMNS.values())
         assert [row[0] for row in rows[1:]] == ["a.xlsx", "'=HYPERLINK(1).xlsx", "<b>.xlsx"]
         assert rows[3][8] == "'-the file is damaged"
-        assert not [f for row in rows for f in row if f.startswith(summary.RISKY)]
+
+    @pytest.mark.parametrize("begins", ["=", "+", "-", "@", "\t", "\r", "\n", "\0", "＝", " =", "\t@"])
+    @pytest.mark.parametrize("before", ["", "a;", "a\n"])
+    def test_no_field_begins_as_a_formula(self, begins: str, before: str) -> None:
+        (_, row) = csv.reader(io.StringIO(summary.as_csv([Outcome(f"{before}{begins}1+1")]), newline=""))
+        assert not row[0].startswith(("\t", "\r", "\n", "\0", " "))
+        pieces = re.split(r"[;\t\r\n]", row[0])
+        assert not [piece for piece in pieces if piece.strip(" \0").startswith(tuple("=+-@＝"))]
+        assert row[0].replace("'", "") == f"{before}{begins}1+1"
+
+    @pytest.mark.parametrize("name", ["a-b;c=d, e.xlsx", "Turm Süd @2.xlsx", "1e5"])
+    def test_other_fields_stay_as_they_are(self, name: str) -> None:
+        (_, row) = csv.reader(io.StringIO(summary.as_csv([Outcome(name, checked=-5)])))
+        assert (row[0], row[2]) == (name, "-5")
 
     def test_the_page_lists_every_file_and_acts_on_none(self) -> None:
         tree = html.document_fromstring(summary.as_html(self.OUTCOMES))
@@ -197,6 +211,23 @@ class TestSummaries:
         assert run("audit", *given, "--summary", target).code == 0
         assert "tower-2.xlsx" in target.read_text("utf-8")
         assert_refused(run("audit", *given, "--summary", target), target.name, "--force")
+
+
+@pytest.mark.skipif(sys.platform != "linux", reason="such names are not allowed there")
+def test_names_of_files_act_on_nothing(folder: Path, tmp_path: Path) -> None:
+    data = (folder / "tower-1.xlsx").read_bytes()
+    for name in (b"\xff.xlsx", b"a\x1b[2J\n\xe2\x9c\x93 clean b.xlsx"):
+        (tmp_path / os.fsdecode(name)).write_bytes(data)
+    for form in ("html", "json", "csv"):
+        call = ("audit", tmp_path, "--jobs", 1, "--resume", tmp_path / "j.jsonl")
+        outcome = run(*call, "--summary", tmp_path / f"all.{form}", "--force")
+        assert outcome.code == 0
+        assert len(outcome.out.splitlines()) == 3
+        assert "\\udcff.xlsx" in outcome.out
+        assert "\x1b" not in outcome.out
+    names = [Path(f["path"]).name for f in json.loads((tmp_path / "all.json").read_text("utf-8"))["files"]]
+    assert names == [os.fsdecode(b"a\x1b[2J\n\xe2\x9c\x93 clean b.xlsx"), os.fsdecode(b"\xff.xlsx")]
+    assert len((tmp_path / "j.jsonl").read_bytes().splitlines()) == 2
 
 
 class TestRefusals:

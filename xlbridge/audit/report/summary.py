@@ -5,6 +5,7 @@ from __future__ import annotations
 import csv
 import io
 import json
+import re
 from collections import Counter
 from collections.abc import Sequence
 from importlib.resources import files
@@ -29,8 +30,8 @@ COLUMNS: Final = {
     "failure": "why it was not audited",
     "sha256": "SHA-256",
 }
-#: a field that begins so can be taken for a formula
-RISKY: Final = ("=", "+", "-", "@", "\t", "\r", "\n", "\0", "＝", "＋", "－", "＠")
+#: a field that begins so can be taken for a formula, also where a program takes a semicolon for its end
+_RISKY: Final = re.compile("^(?=[\\s\\0])|(?:^|(?<=[;\\t\\r\\n]))(?=[\\s\\0]*[-=+@＝＋－＠])")
 
 
 def as_json(outcomes: Sequence[Outcome]) -> str:
@@ -68,4 +69,4 @@ def as_html(outcomes: Sequence[Outcome]) -> str:
 
 
 def _field(value: object) -> object:
-    return f"'{value}" if isinstance(value, str) and value.startswith(RISKY) else value
+    return _RISKY.sub("'", value) if isinstance(value, str) else value
