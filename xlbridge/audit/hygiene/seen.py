@@ -37,7 +37,8 @@ def _lines(book: Book, sheet: Worksheet) -> Iterator[Observation]:
     hidden_rows = [n for n, line in sheet.row_dimensions.items() if n in rows and _gone(line, NO_HEIGHT)]
     for first, last in _runs(hidden_rows):
         place = Place(sheet.title, f"{first}:{last}")
-        yield Observation("line_hidden", place, f"rows {first} to {last} of {sheet.title} are hidden")
+        which = f"row {first}" if first == last else f"rows {first} to {last}"
+        yield Observation("line_hidden", place, f"hidden in {sheet.title}: {which}")
     hidden_columns = [
         n
         for line in sheet.column_dimensions.values()
@@ -47,7 +48,9 @@ def _lines(book: Book, sheet: Worksheet) -> Iterator[Observation]:
     ]
     for first, last in _runs(hidden_columns):
         area = f"{column_letters(first)}:{column_letters(last)}"
-        words = f"columns {area.replace(':', ' to ')} of {sheet.title} are hidden"
+        letters = [column_letters(n) for n in (first, last)]
+        which = f"column {letters[0]}" if first == last else f"columns {letters[0]} to {letters[1]}"
+        words = f"hidden in {sheet.title}: {which}"
         yield Observation("line_hidden", Place(sheet.title, area), words)
 
 
