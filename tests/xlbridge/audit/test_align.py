@@ -5,13 +5,14 @@ from __future__ import annotations
 from pathlib import Path
 
 import pytest
+from openpyxl import Workbook
 
 from tests.support import office as offices
 from tests.support.audited import changed, computed_book
 from tests.support.legal_edits import OFFICE_EDITS, OfficeEdit
 from tests.support.story_cells import COUNT, LAYOUT, Change, both, levels, put
-from workbook_templates.layout import FIRST_LEVEL, SYMBOL_ROW, TEXT_ROW
-from xlbridge.audit.align import Alignment, first_cell
+from workbook_templates.layout import FIRST_LEVEL, STORY_TABLE, SYMBOL_ROW, TEXT_ROW
+from xlbridge.audit.align import Alignment, area_of, first_cell
 from xlbridge.audit.subject import Subject
 from xlbridge.cli.own_template import own_template
 from xlbridge.headless.compute import compute_into
@@ -56,6 +57,10 @@ def test_each_cell_is_found_again_after_an_edit_in_calc(
             assert alignment.to_twin(place) == Cell(sheet, *position)
             seen += 1
     assert seen > 500
+    name = STORY_TABLE.name.casefold()
+    mine, there = area_of(own.twin.names[None, name]), area_of(subject.book.names[None, name])
+    assert mine
+    assert alignment.area_from_twin(*mine) == there  # from its headings to the guard row below
     assert all(alignment.from_twin(cell) for cell in own.twin.formula_cells())
 
 
@@ -77,6 +82,23 @@ def test_what_was_spoilt_does_not_move_cells(story: Path, tmp_path: Path, change
     copy = tmp_path / "story.xlsx"
     copy.write_bytes(story.read_bytes())
     assert opened(changed(copy, change)).alignment.is_identity
+
+
+def test_rows_that_nothing_names_are_told_by_their_count(story: Path, tmp_path: Path) -> None:
+    """Levels without any text, and between them a row of formulas without entries, which is none."""
+
+    def change(book: Workbook) -> None:
+        for row in range(FIRST_LEVEL, FIRST_LEVEL + COUNT):
+            book["Levels"].cell(row, 1).value = float(row)
+            book["Levels"][levels("source", row=row)[7:]] = None
+        for cell in (c for c in book["Levels"][FIRST_LEVEL + 2] if c.data_type != "f"):
+            cell.value = None
+
+    copy = tmp_path / "story.xlsx"
+    copy.write_bytes(story.read_bytes())
+    alignment = opened(changed(copy, change)).alignment
+    rows = [alignment.from_twin(Cell("Levels", FIRST_LEVEL + n, 2)) for n in range(COUNT - 1)]
+    assert [cell and cell.row - FIRST_LEVEL for cell in rows] == [0, 1, 3, 4, 5]
 
 
 def test_ranges_follow_their_corners(story: Path) -> None:

@@ -12,7 +12,8 @@ from openpyxl.worksheet.formula import ArrayFormula
 
 from tests.support.audited import audited, changed, computed_book, kinds_at
 from tests.support.story_cells import COUNT, LAST, LAYOUT, Change, both, criteria, levels, put, rewrite
-from workbook_templates.layout import FIRST_LEVEL
+from workbook_templates.layout import FIRST_LEVEL, Layout
+from workbook_templates.parts import with_required
 
 F_X, C_VX, BELOW = levels("F_x", "X"), levels("C_vx", "X"), levels("F_x", "X", FIRST_LEVEL + 3)
 TOTAL, H_BASE = levels("F_x", "X", LAYOUT.levels.total_row), levels("h_x", row=LAYOUT.levels.base_row)
@@ -105,6 +106,15 @@ def test_a_level_typed_below_the_table_is_not_picked_up(story: Path) -> None:
             book["Levels"][f"{LAYOUT.column(key, None)}{row}"] = value
 
     assert kinds_at(audited(changed(story, add))) == {f"Levels!A{row}": {"row_outside_table"}}
+
+
+def test_an_entry_that_the_template_links_is_checked_as_a_formula(tmp_path: Path) -> None:
+    path = computed_book(tmp_path, {"parts": ["diaphragm"]}, 3)
+    layout = Layout(3, with_required(("diaphragm",)))
+    place = f"Levels!{layout.column('w_px', None)}{FIRST_LEVEL}"
+    assert audited(path).findings == ()
+    found = kinds_at(audited(changed(path, rewrite(place, r"$", "*0.5"))))
+    assert found[place] == {"formula_differs"}
 
 
 def test_an_entry_linked_to_an_own_sheet_is_a_note(story: Path) -> None:
