@@ -15,7 +15,7 @@ from openpyxl.worksheet.formula import ArrayFormula, DataTableFormula
 from openpyxl.worksheet.worksheet import Worksheet
 
 from xlbridge.headless.opening import BookError, load, read_file
-from xlbridge.headless.references import Bounds, Cell, parse_bounds
+from xlbridge.headless.references import MAX_COLUMNS, MAX_ROWS, Bounds, Cell, parse_bounds
 from xlbridge.headless.stored_values import Stored, read_stored_values
 from xlbridge.headless.structured import Table
 from xlbridge.values import CellError, Scalar
@@ -62,9 +62,14 @@ class Book:
         data = read_file(path)
         workbook = load(path, data)
         try:
-            return cls.of(workbook, data)
+            book = cls.of(workbook, data)
         except ValueError as error:
             raise BookError(f"{path}: the workbook is damaged ({error})") from error
+        if book.extent[0] > MAX_ROWS or book.extent[1] > MAX_COLUMNS:
+            raise BookError(
+                f"{path}: the workbook is damaged (it has cells outside of what a sheet can hold)"
+            )
+        return book
 
     @classmethod
     def of(cls, workbook: Workbook, data: bytes = b"") -> Book:
