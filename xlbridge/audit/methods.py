@@ -7,7 +7,7 @@ import sys
 from collections.abc import Callable
 from typing import Final, TypeAlias
 
-from xlbridge.audit import against, cells, extent, hygiene, manifest, map, model, physical
+from xlbridge.audit import against, cells, columns, extent, hygiene, manifest, map, model, physical
 from xlbridge.audit.finding import Checked
 from xlbridge.audit.subject import Subject
 
@@ -20,6 +20,7 @@ METHODS: Final[tuple[Method, ...]] = (
     map.check,
     manifest.check,
     hygiene.check,
+    columns.check,
     physical.check,
     against.check,
 )
