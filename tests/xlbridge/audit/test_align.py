@@ -84,7 +84,7 @@ def test_what_was_spoilt_does_not_move_cells(story: Path, tmp_path: Path, change
     assert opened(changed(copy, change)).alignment.is_identity
 
 
-def test_rows_that_nothing_names_are_told_by_their_count(story: Path, tmp_path: Path) -> None:
+def test_rows_that_nothing_names_are_told_by_what_they_hold(story: Path, tmp_path: Path) -> None:
     """Levels without any text, and between them a row of formulas without entries, which is none."""
 
     def change(book: Workbook) -> None:
