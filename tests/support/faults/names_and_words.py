@@ -200,7 +200,7 @@ def note_of_doubt_removed(scene: Scene) -> None:
     scene.write(Cell(CRITERIA, scene.pick(rows), 9), None)
 
 
-@fault("structure", "label_changed", "constant_changed", "check_disarmed")
+@fault("structure", "made_for_changed")
 def edition_on_the_cover(scene: Scene) -> None:
     """The cover names the other edition."""
     cell = next(Cell(COVER, n, 2) for n in range(4, 12) if "ASCE" in str(scene.book[COVER].cell(n, 2).value))
@@ -208,14 +208,14 @@ def edition_on_the_cover(scene: Scene) -> None:
     scene.write(cell, text.replace("7-22", "7-16") if "7-22" in text else text.replace("7-16", "7-22"))
 
 
-@fault("structure", "fixed_entry_changed")
+@fault("structure", "made_for_changed")
 def edition_switched(scene: Scene) -> None:
     """The fixed edition of the criteria is typed over: the formulas stay those of the other."""
     cell = Cell(CRITERIA, 6, 4)
     scene.write(cell, "7-16" if scene.at(cell).value == "7-22" else "7-22")
 
 
-@fault("structure", "fixed_entry_changed")
+@fault("structure", "made_for_changed")
 def unit_system_switched(scene: Scene) -> None:
     """The fixed unit system is typed over: all numbers stay."""
     cell = Cell(CRITERIA, 7, 4)

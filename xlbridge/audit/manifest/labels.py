@@ -22,13 +22,12 @@ def check(pairing: Pairing) -> Iterator[Observation]:
     """Compare every text that is neither an entry nor a formula; name the sheets that are gone."""
     for sheet in (s for s in pairing.twin.sheets if s not in pairing.alignment.by_twin):
         yield Observation("sheet_missing", Place(), f"there is no sheet {sheet}", sheet, cause=sheet)
-    cause = _made_for_another(pairing)
     for pair in pairing.cells:
         expected = pairing.twin.constants[pair.cell.sheet].get((pair.cell.row, pair.cell.column))
         if isinstance(expected, str) and pair.cell not in pairing.own.entries:
             found = _found(pairing, pair)
             if plain(found) != plain(expected):
-                yield _observed(pairing, pair, expected, found, cause)
+                yield _observed(pairing, pair, expected, found)
 
 
 def plain(text: str) -> str:
@@ -44,30 +43,20 @@ def _found(pairing: Pairing, pair: CellPair) -> str:
     return value if isinstance(value, str) else "" if value is None else render_value(value)
 
 
-def _made_for_another(pairing: Pairing) -> str:
-    """The cause of all differences where the cover names another edition or other units; else nothing."""
-    for pair in pairing.cells:
-        expected = pairing.twin.constants[pair.cell.sheet].get((pair.cell.row, pair.cell.column))
-        if isinstance(expected, str) and _VERSION.search(expected):
-            found = _VERSION.sub("", _found(pairing, pair))
-            return "" if plain(found) == plain(_VERSION.sub("", expected)) else "made for another"
-    return ""
-
-
-def _observed(pairing: Pairing, pair: CellPair, expected: str, found: str, cause: str) -> Observation:
+def _observed(pairing: Pairing, pair: CellPair, expected: str, found: str) -> Observation:
     words = f"the template says “{_short(expected)}” here, the workbook " + (
         f"“{_short(found)}”" if found else "nothing"
     )
     if pair.cell in pairing.own.cautions:
         kind, cause = "caution_changed", "cautions"
-    elif expected in FIXED:
-        kind, cause = "fixed_entry_changed", ""
     elif expected in UNIT_SYMBOLS:
-        kind, cause = "unit_changed", cause or f"{expected} > {found}"
-    elif _VERSION.search(expected):
-        kind, cause = ("made_for_changed", "") if cause else ("other_version", "")
+        kind, cause = "unit_changed", f"{expected} > {found}"
+    elif _VERSION.search(expected) and _VERSION.sub("", expected) == _VERSION.sub("", found):
+        kind, cause = "other_version", ""
+    elif _VERSION.search(expected) or expected in FIXED:
+        kind, cause = "made_for_changed", ""
     else:
-        kind = "label_changed"
+        kind, cause = "label_changed", ""
     return Observation(kind, Place.of(pair.place), words, expected, found, cause=cause)
 
 
