@@ -14,6 +14,7 @@ from xlbridge.audit.compare.change import TOLERANCE, Change, Of, Result, shown
 from xlbridge.audit.compare.changes import Issues
 from xlbridge.audit.compare.influence import Influences, influences
 from xlbridge.audit.report.as_json import plain
+from xlbridge.audit.report.page import CAUTIONS
 from xlbridge.audit.subject import Subject
 from xlbridge.cli.failure import CLEAN, FINDINGS
 from xlbridge.cli.own_template import own_template
@@ -138,6 +139,7 @@ def _change(by: float, of: float) -> str:
 
 def _record(found: Comparison) -> dict[str, Any]:
     return {
+        "cautions": list(CAUTIONS),
         "changes": [_change_record(change) for change in found.changes],
         "results": [_result_record(result) for result in found.results],
         "influence": _influence_record(found.influences) if found.influences else None,

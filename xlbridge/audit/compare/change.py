@@ -47,7 +47,7 @@ class Change:
 
 @dataclass(frozen=True, slots=True)
 class Result:
-    """One result; ``path`` is that of the later issue, and a side that does not have it has nothing."""
+    """One result; ``path`` is that of the later issue, or of the earlier one where the result is gone."""
 
     path: str
     old: Any

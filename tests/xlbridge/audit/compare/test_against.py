@@ -5,6 +5,7 @@ from __future__ import annotations
 import json
 from pathlib import Path
 
+import openpyxl
 import pytest
 from openpyxl import Workbook
 
@@ -67,6 +68,20 @@ class TestAgainst:
             "format_changed",
         }
 
+    def test_the_expected_formula_stands_where_the_cell_is_now(self, tmp_path: Path, first: Path) -> None:
+        def remove(tables: Tables) -> None:
+            del tables["level"][1]
+
+        def change(book: Workbook) -> None:
+            book["Levels"]["H15"].value += "*1.1"
+
+        clean = issue(tmp_path, "next.xlsx", remove)
+        formula = openpyxl.load_workbook(clean)["Levels"]["H15"].value
+        found = audited(changed(clean, change), against=first).findings
+        (finding,) = [f for f in found if f.kind.key == "formula_changed"]
+        (seen,) = finding.observations
+        assert (str(seen.place), seen.expected, seen.found) == ("Levels!H15", formula, f"{formula}*1.1")
+
     def test_entries_that_came_or_went_are_findings(self, tmp_path: Path, first: Path) -> None:
         early = issue(tmp_path, "early.xlsx", without_drift)
         for now, before in ((early, first), (first, early)):
@@ -94,6 +109,7 @@ class TestCommand:
         assert "Seismic weight of Roof (level[1].weight)" in outcome.out
         record = json.loads(run("compare", first, other, "--json").out)
         assert [c["path"] for c in record["changes"]] == ["level[1].weight"]
+        assert "licensed engineer" in " ".join(record["cautions"])
         assert record["influence"]["alone"][0]["moved"]["W"] == pytest.approx(100.0)
 
     def test_two_equal_issues_are_clean(self, first: Path) -> None:

@@ -128,6 +128,25 @@ def test_planted_changes_of_our_workbooks_are_found_and_no_other(
     assert sorted(c.words.rpartition(": ")[2] for c in changes) == sorted(expected)
 
 
+def test_results_are_those_of_the_same_level(tmp_path: Path, first: Path) -> None:
+    def change(tables: Tables) -> None:
+        del tables["level"][1]
+
+    other = issue(tmp_path, "next.xlsx", change)
+    issues = Issues.of(Subject.open(first, own_template), Subject.open(other, own_template))
+    results = list(issues.results())
+    found = {result.path: result for result in results if result.new is not None}
+    heights = [row["elevation"] - BASE["site"]["base_elevation"] for row in BASE["level"]]
+    lower = found["direction.X.C_vx[3]"]
+    assert lower.old == pytest.approx(solve(from_mapping(BASE)).direction["X"].C_vx[3])
+    assert lower.per_cent == pytest.approx(100 * (lower.new - lower.old) / lower.old)
+    assert [found[f"h_x[{n}]"].old for n in (1, 2, 3)] == pytest.approx([heights[n] for n in (0, 2, 3)])
+    assert not found["h_x[3]"].differs
+    assert (found["h_x[2]"].change, found["h_x[2]"].per_cent) == (0.0, 0.0)
+    gone = [r for r in results if r.new is None and r.path.startswith("h_x")]
+    assert [(r.path, r.old, r.differs, r.change) for r in gone] == [("h_x[2]", heights[1], True, None)]
+
+
 def test_each_change_alone_and_what_they_do_together(tmp_path: Path, first: Path) -> None:
     def change(tables: Tables) -> None:
         tables["level"][0]["weight"] *= 1.5
