@@ -16,6 +16,7 @@ from importlib.resources import files
 from itertools import pairwise
 from typing import Any, Final
 
+from xlbridge.audit.arguments import Given, given
 from xlbridge.audit.finding import Checked, NotChecked, Observation, Place
 from xlbridge.audit.subject import NO_INPUTS, Subject
 from xlbridge.audit.template import OwnTemplate
@@ -83,18 +84,60 @@ class _Numbers:
 
 
 def check(subject: Subject) -> Checked:
-    """Compare the numbers of one of our workbooks with what buildings are."""
+    """Compare the numbers of a workbook with what buildings are."""
     own = subject.own
-    if own is None or own.unread:
-        why = own.unread if own else NO_INPUTS
-        return Checked(METHOD, 0, not_checked=(NotChecked("physical plausibility", why),))
+    if own is None:
+        return _of_another_make(subject)
+    if own.unread:
+        return Checked(METHOD, 0, not_checked=(NotChecked("physical plausibility", own.unread),))
     numbers = _Numbers.of(own)
     units = "us" if own.inputs["units"] == "us" else "si"
-    seen = tuple(
-        o for kind, rules in RULES.items() for rule in rules for o in _CHECKS[kind](numbers, rule, units)
+    rules = [(_CHECKS[kind], rule) for kind, of_kind in RULES.items() for rule in of_kind]
+    looked_at = sum(1 for _, rule in rules for _ in numbers.matching(rule["path"]))
+    return Checked(METHOD, looked_at, tuple(o for look, rule in rules for o in look(numbers, rule, units)))
+
+
+def _of_another_make(subject: Subject) -> Checked:
+    """Judge what worksheet functions are given; nothing else says what the numbers of such a workbook are."""
+    found = list(given(subject))
+    ranges = {rule["argument"]: rule for rule in RULES["range"] if "argument" in rule}
+    steps = {rule["argument"]: rule for rule in RULES["step"] if "argument" in rule}
+    seen = [o for one in found if (rule := ranges.get(one.argument)) for o in _given_range(one, rule)]
+    seen += [o for one in found if (rule := steps.get(one.argument)) for o in _given_steps(one, rule)]
+    looked_at = sum(one.argument in ranges or one.argument in steps for one in found)
+    why = "only what worksheet functions are given is known; of the other numbers nobody says what they are"
+    missing = NotChecked("physical plausibility", why if looked_at else NO_INPUTS)
+    return Checked(METHOD, looked_at, tuple(seen), (missing,))
+
+
+def _given_range(one: Given, rule: Mapping[str, Any]) -> Iterator[Observation]:
+    low, high = rule["any"]
+    if isinstance(one.value, float) and not low <= one.value <= high:
+        words = f"{rule['what']} {one.value:.4g} ({one.written}), usually {low:g} to {high:g} ({SOURCE})"
+        words += _slip(rule, one.value, low, high)
+        yield Observation("implausible_value", one.place, words, stored=one.value, cause=one.written)
+
+
+def _given_steps(one: Given, rule: Mapping[str, Any]) -> Iterator[Observation]:
+    """The levels of a call from the top down, those at one height left out."""
+    low, high = rule["any"]
+    levels = sorted(zip(_column(one.heights), _column(one.value), strict=False), reverse=True)
+    if len({height for height, _ in levels}) < len(levels):
+        return
+    for n, ((height, value), (_, below)) in enumerate(pairwise(levels)):
+        ratio = value / below if below else 1.0
+        if ratio > high or (ratio < low and n > 0):
+            words = (
+                f"{rule['what']} at height {height:g} ({one.written}) is {ratio:.3g} times that of the level "
+            )
+            words += f"below, usually {low:g} to {high:g} ({SOURCE}){_slip(rule, ratio, low, high)}"
+            yield Observation("implausible_step", one.place, words, stored=value, cause=one.written)
+
+
+def _column(value: object) -> list[float]:
+    return (
+        [cell for row in value for cell in row if isinstance(cell, float)] if isinstance(value, tuple) else []
     )
-    looked_at = sum(1 for rules in RULES.values() for rule in rules for _ in numbers.matching(rule["path"]))
-    return Checked(METHOD, looked_at, seen)
 
 
 def _range(numbers: _Numbers, rule: Mapping[str, Any], units: str) -> Iterator[Observation]:

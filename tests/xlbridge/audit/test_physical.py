@@ -8,6 +8,7 @@ from pathlib import Path
 from typing import Any
 
 import pytest
+from openpyxl import Workbook
 
 from engine.building import from_mapping, to_mapping
 from tests.support.audited import audited, computed_book
@@ -18,6 +19,7 @@ from xlbridge.audit import physical
 from xlbridge.audit.acceptance import AcceptanceError, read
 from xlbridge.audit.finding import Finding
 from xlbridge.audit.physical import RULES, SOURCE
+from xlbridge.headless.compute import compute_into
 
 BASE: dict[str, Any] = to_mapping(from_mapping(tomllib.loads(building_text())))
 
@@ -119,12 +121,44 @@ def test_every_rule_names_what_it_looks_at(tmp_path: Path, kind: str) -> None:
 
 
 def test_a_workbook_of_another_make_is_not_judged(tmp_path: Path) -> None:
-    from openpyxl import Workbook
-
     Workbook().save(tmp_path / "own.xlsx")
     outcome = audited(tmp_path / "own.xlsx")
     assert "physical plausibility" in {item.what for item in outcome.not_checked}
     assert next(c for c in outcome.checks if c.method == physical.METHOD).looked_at == 0
+
+
+class TestAnotherMake:
+    """A workbook with its own layout: what the worksheet functions are given says what its numbers are."""
+
+    def book(self, folder: Path, S_DS: float = 1.0, third: float = 420.0) -> tuple[Finding, ...]:
+        book = Workbook()
+        sheet = book.active
+        sheet["F1"], sheet["F2"] = S_DS, '=ELF_CS(F1,0.5,0.4,0.6,8,8,1,"7-22")'
+        for row, weight in enumerate((300.0, 400.0, third, 450.0), 1):
+            sheet.cell(row, 1, 12.0 * (5 - row))
+            sheet.cell(row, 2, weight)
+            sheet.cell(row, 3, f"=ELF_CVX(B{row},A{row},B$1:B$4,A$1:A$4,1)")
+        book.save(folder / "own.xlsx")
+        compute_into(folder / "own.xlsx", folder / "computed.xlsx", force=True)
+        return tuple(f for f in audited(folder / "computed.xlsx").findings if f.kind.method == "physical")
+
+    def test_plausible_ones_give_nothing(self, tmp_path: Path) -> None:
+        assert self.book(tmp_path) == ()
+        outcome = audited(tmp_path / "computed.xlsx")
+        looked_at = next(c for c in outcome.checks if c.method == physical.METHOD).looked_at
+        assert looked_at >= 5
+        assert any("nobody says" in item.because for item in outcome.not_checked)
+
+    def test_a_weight_in_another_unit_is_one_finding(self, tmp_path: Path) -> None:
+        (found,) = self.book(tmp_path, third=420_000.0)
+        assert found.kind.key == "implausible_step"
+        assert "B$1:B$4" in found.words
+        assert "1000" in found.words
+
+    def test_a_spectrum_in_per_cent_is_one_finding(self, tmp_path: Path) -> None:
+        (found,) = self.book(tmp_path, S_DS=105.0)
+        assert found.kind.key == "implausible_value"
+        assert str(found.places[0]) == "Sheet!F2"
 
 
 class TestAcceptance:
