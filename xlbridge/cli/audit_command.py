@@ -11,7 +11,7 @@ import click
 
 from xlbridge.audit import acceptance
 from xlbridge.audit.audit import Audit, audit
-from xlbridge.audit.kinds import Severity
+from xlbridge.audit.kinds import KINDS, Severity
 from xlbridge.audit.record import Record
 from xlbridge.audit.report import as_json
 from xlbridge.audit.report.marked import marked
@@ -43,8 +43,26 @@ def forms(book: Path) -> dict[str, Form]:
     return {**FORMS, ".xlsm" if book.suffix.lower() == ".xlsm" else ".xlsx": marked}
 
 
+def _print_kinds(context: click.Context, _: click.Parameter, wanted: bool) -> None:
+    """Print the closed catalogue of what can be found."""
+    if not wanted or context.resilient_parsing:
+        return
+    for kind in KINDS.values():
+        click.echo(f"{kind.key} ({kind.severity}, {kind.method}): {kind.title}")
+        click.echo(f"   {kind.meaning} {kind.remedy}")
+    context.exit()
+
+
 @click.command("audit")
 @click.argument("books", metavar="BOOK [MORE]...", nargs=-1, required=True, type=click.Path(path_type=Path))
+@click.option(
+    "--kinds",
+    is_flag=True,
+    expose_value=False,
+    is_eager=True,
+    callback=_print_kinds,
+    help="List what can be found, with meaning and remedy.",
+)
 @click.option("--json", "json_wanted", is_flag=True, help="Print the audit as JSON.")
 @click.option(
     "--report",

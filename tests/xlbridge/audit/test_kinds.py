@@ -7,6 +7,7 @@ from pathlib import Path
 
 import pytest
 
+from tests.support.command import run
 from xlbridge.audit.finding import Observation, Place
 from xlbridge.audit.kinds import KINDS, Kind
 
@@ -33,3 +34,11 @@ def test_every_kind_says_what_it_means_and_what_to_do(kind: Kind) -> None:
 def test_an_unknown_kind_is_refused() -> None:
     with pytest.raises(ValueError, match="no kind"):
         Observation("anything", Place(), "words")
+
+
+def test_the_command_lists_them_all() -> None:
+    outcome = run("audit", "--kinds")
+    assert (outcome.code, outcome.err) == (0, "")
+    for kind in KINDS.values():
+        assert f"{kind.key} ({kind.severity}, {kind.method}): {kind.title}" in outcome.out
+        assert kind.remedy in outcome.out
