@@ -125,7 +125,7 @@ def rounding_inserted(scene: Scene) -> None:
     _wrapped(scene, "=ROUND({},1)")
 
 
-@fault("formula", *FORM)
+@fault("formula", *FORM, "error_hidden")
 def failure_hidden(scene: Scene) -> None:
     """A failure is turned into a zero: nobody sees that a level is missing."""
     _wrapped(scene, "=IFERROR({},0)")
@@ -155,13 +155,13 @@ def per_cent_sign(scene: Scene) -> None:
     _wrapped(scene, "=({})%")
 
 
-@fault("formula", *FORM)
+@fault("formula", *FORM, "volatile_function")
 def chance_added(scene: Scene) -> None:
     """A random number times zero: nothing changes, but the workbook is never calculated to the end."""
     _appended(scene, "+0*RAND()")
 
 
-@fault("formula", *FORM)
+@fault("formula", *FORM, "volatile_function")
 def date_switch(scene: Scene) -> None:
     """A formula gives something else after a date far ahead."""
     _wrapped(scene, "=IF(TODAY()>73050,0,{0})")

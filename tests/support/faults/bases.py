@@ -46,8 +46,9 @@ MORE: Final = ("drift", "periods", "separation")
 
 #: two of these meet each operator by default
 SMALL: Final = (
-    Base("7-22", "us", 3),
+    Base("7-22", "us", 3, ()),
     Base("7-16", "si", 3, ()),
+    Base("7-22", "us", 3),
     Base("7-16", "us", 4, MORE),
     Base("7-22", "si", 2, native=True),
     Base("7-16", "us", 2, (), native=True),

@@ -246,7 +246,7 @@ def circular_reference(scene: Scene) -> None:
     scene.write(cell, f"{scene.text(cell)}+0*{cell.address}")
 
 
-@fault("formula", *FORM)
+@fault("formula", *FORM, "external_link")
 def external_link(scene: Scene) -> None:
     """A formula takes its value from another workbook."""
     scene.write(scene.pick(scene.rows), "=[1]Take_off!$C$14")
@@ -268,7 +268,7 @@ def far_cell_added(scene: Scene) -> None:
     scene.write(cell, f"{scene.text(cell)}+$ZZ$900")
 
 
-@fault("formula", *FORM)
+@fault("formula", *FORM, "volatile_function")
 def reference_made_of_text(scene: Scene) -> None:
     """A formula is wrapped in INDIRECT: the same value, but no level inserted moves it along."""
     cell = scene.pick(scene.column(scene.pick(scene.level_rows)))

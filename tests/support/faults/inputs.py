@@ -63,21 +63,21 @@ def weight_blank(scene: Scene) -> None:
     scene.write(_one(scene, "weight"), None)
 
 
-@fault("input", *UNREADABLE)
+@fault("input", *UNREADABLE, "number_as_text")
 def weight_as_text(scene: Scene) -> None:
     """The weight of a level is a text that looks like a number."""
     cell = _one(scene, "weight")
     scene.write(cell, f"{scene.value(cell):.0f}")
 
 
-@fault("input", *UNREADABLE)
+@fault("input", *UNREADABLE, "number_as_text")
 def weight_with_a_comma(scene: Scene) -> None:
     """The weight of a level is typed with a decimal comma, and so is a text."""
     cell = _one(scene, "weight")
     scene.write(cell, f"{scene.value(cell):.1f}".replace(".", ","))
 
 
-@fault("input", *UNREADABLE)
+@fault("input", *UNREADABLE, "number_as_text")
 def minus_sign_of_the_printer(scene: Scene) -> None:
     """An elevation is pasted with a typographic minus, and so is a text."""
     cell = _one(scene, "elevation")

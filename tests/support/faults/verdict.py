@@ -2,6 +2,7 @@
 
 from __future__ import annotations
 
+from collections import Counter
 from dataclasses import dataclass
 from typing import Final
 
@@ -52,9 +53,10 @@ class Verdict:
 
     @property
     def single(self) -> bool:
-        """Whether each cause is one finding, and what else is found follows from it."""
+        """Whether each cause is one finding of a kind, and what else is found follows from it."""
         others = {f.kind.key for f in self.findings if f not in self.right}
-        return 0 < len(self.right) <= self.planted.causes and others <= CONSEQUENCES
+        kinds = Counter(finding.kind.key for finding in self.right)
+        return 0 < max(kinds.values(), default=0) <= self.planted.causes and others <= CONSEQUENCES
 
     @property
     def good(self) -> bool:

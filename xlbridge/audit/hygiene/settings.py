@@ -29,7 +29,7 @@ def check(subject: Subject) -> Iterator[Observation]:
             words = f"the calculation is set to {calculation.calcMode}"
             yield Observation("calculation_manual", Place(), words, "auto", str(calculation.calcMode))
         if calculation.iterate:
-            words = f"iterative calculation is on, up to {calculation.iterateCount} steps"
+            words = f"iterative calculation is on, up to {calculation.iterateCount or 100} steps"
             yield Observation("iteration_on", Place(), words, "off", "on")
         if calculation.fullPrecision is False:
             yield Observation("precision_as_displayed", Place(), "precision as displayed is on", "off", "on")
