@@ -5,7 +5,7 @@ from __future__ import annotations
 from tests.support.faults.catalogue import fault
 from tests.support.faults.inputs import AGAINST, PHYSICAL, UNREADABLE
 from tests.support.faults.scene import Scene
-from xlbridge.headless.references import Cell
+from xlbridge.audit.align import first_cell
 
 
 def _criterion(scene: Scene, path: str, value: object) -> None:
@@ -77,7 +77,6 @@ def base_moved(scene: Scene) -> None:
 @fault("input", "content_changed")
 def source_claimed(scene: Scene) -> None:
     """The source of an entry names something that it does not come from."""
-    names = sorted(k for (scope, k) in scene.before.book.names if scope is None and k.startswith("source_"))
-    sheet, _, address = scene.before.book.names[None, scene.pick(names)].replace("$", "").rpartition("!")
-    column, row = scene.book[sheet][address].column, scene.book[sheet][address].row
-    scene.write(Cell(sheet, row, column), "geotechnical report 7, table 2")
+    places = [text for (_, name), text in scene.before.book.names.items() if name.startswith("source_")]
+    named = [found for text in sorted(set(places)) if (found := first_cell(text))]
+    scene.write(scene.pick(c for c in named if scene.value(c)), "geotechnical report 7, table 2")

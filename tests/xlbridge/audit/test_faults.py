@@ -111,7 +111,7 @@ def test_a_finding_elsewhere_or_of_another_kind_is_not_good(folder: Path) -> Non
 def test_a_thousand_faults(folder: Path, capsys: pytest.CaptureFixture[str]) -> None:
     verdicts: list[Verdict] = []
     for number, base in enumerate(MANY):
-        for fault in FAULTS[number % 2 :: 2]:
+        for fault in (f for n, f in enumerate(FAULTS) if (n + number) % 5 < 2):
             found = plant(fault, made(base, folder), 2, folder / "spoilt.xlsx")
             if found:
                 verdicts.append(verdict(found, audit_of(found)))
