@@ -20,18 +20,19 @@ def response_modification_slip(scene: Scene) -> None:
     _criterion(scene, scene.pick(["direction.X.R", "direction.Y.R"]), 8.0)
 
 
-@fault("input", missed=PHYSICAL)
+@fault("input", *PHYSICAL, missed="one cause, but a finding for each value computed from it too")
 def per_cent_of_gravity(scene: Scene) -> None:
     """S_DS is given in per cent of gravity."""
     _criterion(scene, "site.S_DS", 92.0)
 
 
-@fault("input", missed=PHYSICAL)
+@fault("input", *PHYSICAL)
 def spectrum_exchanged(scene: Scene) -> None:
     """S_DS and S_D1 stand in each other's cells."""
     cells = [scene.entry("site.S_DS"), scene.entry("site.S_D1")]
     for cell, other in zip(cells, reversed(cells), strict=True):
-        scene.write(cell, scene.value(other))
+        scene.at(cell).value = scene.value(other)
+    scene.touch_one_of(*map(str, cells))
 
 
 @fault("input", *AGAINST)
@@ -62,7 +63,7 @@ def choice_misspelt(scene: Scene) -> None:
     scene.write(cell, f"{scene.value(cell)} ".replace(" ", "  "))
 
 
-@fault("input", missed=PHYSICAL)
+@fault("input", *PHYSICAL)
 def computed_period_in_the_wrong_unit(scene: Scene) -> None:
     """The computed period is a frequency, or given in milliseconds."""
     _criterion(scene, "direction.X.T_computed", scene.pick([850.0, 62.0]))

@@ -11,8 +11,20 @@ from xlbridge.headless.references import Cell
 
 #: plausible: it can be told only from the issue that was checked before
 AGAINST = ("input_changed",)
-PHYSICAL = "no method looks at the size of entries yet"
+#: out of the bounds of its quantity
+PHYSICAL = ("implausible_value", "implausible_step", "implausible_order")
 UNREADABLE = ("inputs_unreadable",)
+
+
+def _beside(scene: Scene, cell: Cell) -> tuple[str, ...]:
+    """The cells of the row of an entry and of the row above it: what follows directly from it stands there."""
+    return str(cell), f"{cell.sheet}!A{cell.row - 1}:ZZ{cell.row}"
+
+
+def _put(scene: Scene, cell: Cell, content: object) -> None:
+    """Change an entry by which a value computed beside it becomes implausible."""
+    scene.at(cell).value = content  # type: ignore[assignment]
+    scene.touch_one_of(*_beside(scene, cell))
 
 
 def _one(scene: Scene, key: str) -> Cell:
@@ -34,7 +46,7 @@ def _exchange(scene: Scene, key: str) -> None:
 
 def _all(scene: Scene, key: str, factor: float) -> None:
     for cell in scene.level_entries(key):
-        scene.write(cell, round(scene.value(cell) * factor, 4))
+        _put(scene, cell, round(scene.value(cell) * factor, 4))
 
 
 def _is_si(scene: Scene) -> bool:
@@ -44,13 +56,13 @@ def _is_si(scene: Scene) -> bool:
 # entries of the levels
 
 
-@fault("input", missed=PHYSICAL)
+@fault("input", *AGAINST)
 def elevations_exchanged(scene: Scene) -> None:
     """The elevations of two levels change places."""
     _exchange(scene, "elevation")
 
 
-@fault("input", missed=PHYSICAL)
+@fault("input", *AGAINST)
 def elevation_twice(scene: Scene) -> None:
     """A level has the elevation of another."""
     first, second = _two(scene, "elevation")
@@ -96,68 +108,68 @@ def truth_for_a_weight(scene: Scene) -> None:
     scene.write(_one(scene, "weight"), True)
 
 
-@fault("input", missed=PHYSICAL)
+@fault("input", "format_misleads", *PHYSICAL)
 def date_for_a_displacement(scene: Scene) -> None:
     """A displacement was taken for a date by the program that pasted it."""
     cell = _one(scene, "delta_xe_X")
-    scene.write(cell, datetime(2026, 3, 1))
+    _put(scene, cell, datetime(2026, 3, 1))
 
 
-@fault("input", *UNREADABLE)
+@fault("input", *UNREADABLE, *PHYSICAL)
 def negative_weight(scene: Scene) -> None:
     """The weight of a level is negative."""
     cell = _one(scene, "weight")
-    scene.write(cell, -scene.value(cell))
+    _put(scene, cell, -scene.value(cell))
 
 
-@fault("input", missed=PHYSICAL)
+@fault("input", *PHYSICAL)
 def zero_weight(scene: Scene) -> None:
     """The weight of a level is 0."""
-    scene.write(_one(scene, "weight"), 0)
+    _put(scene, _one(scene, "weight"), 0)
 
 
-@fault("input", missed=PHYSICAL)
+@fault("input", *PHYSICAL)
 def small_unit_in_one_row(scene: Scene) -> None:
     """One elevation is given in mm, or in inches."""
     cell = _one(scene, "elevation")
-    scene.write(cell, scene.value(cell) * (1000 if _is_si(scene) else 12))
+    _put(scene, cell, scene.value(cell) * (1000 if _is_si(scene) else 12))
 
 
-@fault("input", missed=PHYSICAL)
+@fault("input", *PHYSICAL)
 def small_unit_in_all_rows(scene: Scene) -> None:
     """All elevations are given in mm, or in inches."""
     _all(scene, "elevation", 1000 if _is_si(scene) else 12)
 
 
-@fault("input", missed=PHYSICAL)
+@fault("input", *PHYSICAL)
 def other_length_unit(scene: Scene) -> None:
     """All elevations are given in the other system's unit."""
     _all(scene, "elevation", 1 / 0.3048 if _is_si(scene) else 0.3048)
 
 
-@fault("input", missed=PHYSICAL)
+@fault("input", *AGAINST)
 def mass_for_weight(scene: Scene) -> None:
     """All weights are masses."""
     _all(scene, "weight", 1 / 9.80665 if _is_si(scene) else 1 / 32.174)
 
 
-@fault("input", missed=PHYSICAL)
+@fault("input", *PHYSICAL)
 def pounds_for_kip(scene: Scene) -> None:
     """All weights are given in the thousandth of their unit."""
     _all(scene, "weight", 1000)
 
 
-@fault("input", missed=PHYSICAL)
+@fault("input", *AGAINST, *PHYSICAL)
 def displacements_in_the_large_unit(scene: Scene) -> None:
     """The displacements of one direction are given in m, or in ft."""
     _all(scene, scene.pick(["delta_xe_X", "delta_xe_Y"]), 0.001 if _is_si(scene) else 1 / 12)
 
 
-@fault("input", missed=PHYSICAL)
+@fault("input", *AGAINST, *PHYSICAL)
 def decimal_point_slipped(scene: Scene) -> None:
     """The decimal point of a weight slips by a place."""
     cell = _one(scene, "weight")
-    scene.write(cell, scene.value(cell) * scene.pick([10, 0.1]))
+    _put(scene, cell, scene.value(cell) * scene.pick([10, 0.1]))
 
 
 @fault("input", *AGAINST)
@@ -194,14 +206,14 @@ def column_sorted_alone(scene: Scene) -> None:
     scene.need(scene.touched)
 
 
-@fault("input", missed=PHYSICAL)
+@fault("input", *PHYSICAL)
 def displacements_upside_down(scene: Scene) -> None:
     """The displacements of a direction stand in the order of another list."""
     scene.need(len(scene.table.rows) > 1)
     cells = scene.level_entries("delta_xe_Y")
     for cell, other in zip(cells, reversed(cells), strict=True):
         if cell != other:
-            scene.write(cell, scene.value(other))
+            _put(scene, cell, scene.value(other))
 
 
 @fault("input", *AGAINST, missed="an entry that is a link to the changed one is named as changed too")
@@ -212,19 +224,19 @@ def displacements_of_the_other_direction(scene: Scene) -> None:
         scene.write(second, scene.value(first))
 
 
-@fault("input", missed=PHYSICAL)
+@fault("input", *AGAINST, *PHYSICAL)
 def displacement_sign(scene: Scene) -> None:
     """The displacement of one level has the other sign."""
     cell = _one(scene, "delta_xe_X")
-    scene.write(cell, -scene.value(cell))
+    _put(scene, cell, -scene.value(cell))
 
 
-@fault("input", missed=PHYSICAL)
+@fault("input", *PHYSICAL)
 def gravity_load_of_one_story(scene: Scene) -> None:
     """P_x of the lowest level is the load of its own story, not what it carries."""
     scene.need(len(scene.table.rows) > 2)
     cells = scene.level_entries("P_x")
-    scene.write(cells[-1], scene.value(cells[0]))
+    _put(scene, cells[-1], scene.value(cells[0]))
 
 
 @fault("input", *UNREADABLE)
@@ -233,14 +245,14 @@ def level_without_a_name(scene: Scene) -> None:
     scene.write(_one(scene, "name"), None)
 
 
-@fault("input", missed=PHYSICAL)
+@fault("input", *AGAINST, "row_changed")
 def name_twice(scene: Scene) -> None:
     """A level has the name of another."""
     first, second = _two(scene, "name")
     scene.write(first, scene.value(second))
 
 
-@fault("input", missed=PHYSICAL)
+@fault("input", *AGAINST, "row_changed")
 def name_with_a_space(scene: Scene) -> None:
     """A level's name ends in a space: it will not be found by its name."""
     cell = _one(scene, "name")
