@@ -20,7 +20,7 @@ def response_modification_slip(scene: Scene) -> None:
     _criterion(scene, scene.pick(["direction.X.R", "direction.Y.R"]), 8.0)
 
 
-@fault("input", *PHYSICAL, missed="one cause, but a finding for each value computed from it too")
+@fault("input", *PHYSICAL)
 def per_cent_of_gravity(scene: Scene) -> None:
     """S_DS is given in per cent of gravity."""
     _criterion(scene, "site.S_DS", 92.0)

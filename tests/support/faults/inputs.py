@@ -17,7 +17,7 @@ UNREADABLE = ("inputs_unreadable",)
 
 
 def _beside(scene: Scene, cell: Cell) -> tuple[str, ...]:
-    """The cells of the row of an entry and of the row above it: what follows directly from it stands there."""
+    """An entry, or its row and the row above it: what follows directly from it stands there."""
     return str(cell), f"{cell.sheet}!A{cell.row - 1}:ZZ{cell.row}"
 
 

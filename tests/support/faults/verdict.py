@@ -15,7 +15,10 @@ from xlbridge.audit.finding import Finding, Place
 
 MOST: Final = 2**21
 #: what follows from a fault elsewhere: results that the inputs do not give, errors passed on
-CONSEQUENCES: Final = frozenset({"differs_from_model", "error_value", "inputs_unreadable"})
+CONSEQUENCES: Final = frozenset(
+    {"differs_from_model", "error_value", "inputs_unreadable"}
+    | {"implausible_value", "implausible_step", "implausible_order"}
+)
 
 
 @dataclass(frozen=True)
@@ -77,8 +80,15 @@ class Verdict:
 
 def verdict(planted: Planted, outcome: Audit) -> Verdict:
     """Judge the audit of a spoilt workbook."""
-    right = tuple(f for f in outcome.findings if f.kind.key in planted.fault.kinds)
+    fitting = (f for f in outcome.findings if f.kind.key in planted.fault.kinds)
+    right = tuple(f for f in fitting if f.kind.key not in CONSEQUENCES or _is_there(f, planted))
     return Verdict(planted, outcome.findings, right)
+
+
+def _is_there(finding: Finding, planted: Planted) -> bool:
+    """Whether a finding names a place of the fault: elsewhere the same kind may follow from it."""
+    touched = [_place(text) for group in planted.places for text in group]
+    return any(_names(place, fault) for place in finding.places for fault in touched)
 
 
 def _place(text: str) -> Place:
