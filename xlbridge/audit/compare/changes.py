@@ -45,7 +45,7 @@ class Issues:
 
     def inputs(self) -> Iterator[Change]:
         """Yield every entry that differs, and every row that came, went, moved or has another name."""
-        if self.old.own and self.new.own:
+        if self.readable and self.old.own and self.new.own:
             yield from self._entries("", self.old.own.inputs, self.new.own.inputs)
 
     def cells(self) -> Iterator[Change]:
@@ -54,7 +54,7 @@ class Issues:
 
     def _side(self, subject: Subject, issue: str) -> Side:
         """One issue, with the entries and the rows of tables that :meth:`inputs` speaks of."""
-        own = subject.own or OwnTemplate()
+        own = (subject.own if self.readable else None) or OwnTemplate()
         entered = {cell for path, cell in own.places.items() if path in own.entered or path in FIXED}
         return Side(subject.book, frozenset(entered), frozenset(self._said(own, issue)))
 
@@ -66,10 +66,15 @@ class Issues:
                     yield _sheet(own, table), table.rows[number]
 
     @property
+    def readable(self) -> bool:
+        """Whether the entries of both can be read; if not, they are cells like all others."""
+        return all(side.own is not None and not side.own.unread for side in (self.old, self.new))
+
+    @property
     def comparable(self) -> bool:
         """Whether both are ours, read, and in the same units, so that their numbers can be compared."""
-        sides = [side.own.inputs if side.own else {} for side in (self.old, self.new)]
-        return all(sides) and sides[0]["units"] == sides[1]["units"]
+        sides = [side.own.inputs for side in (self.old, self.new) if side.own]
+        return self.readable and sides[0]["units"] == sides[1]["units"]
 
     def results(self) -> Iterator[Result]:
         """Yield every result of either issue, each with what it was and what it is now."""

@@ -147,6 +147,25 @@ def test_results_are_those_of_the_same_level(tmp_path: Path, first: Path) -> Non
     assert [(r.path, r.old, r.differs, r.change) for r in gone] == [("h_x[2]", heights[1], True, None)]
 
 
+def test_entries_that_cannot_be_read_are_compared_as_cells(tmp_path: Path, first: Path) -> None:
+    def change(book: Workbook) -> None:
+        book["Criteria"]["D22"] = 7.0
+        book["Levels"]["C12"] = "#N/A"
+
+    copy = tmp_path / "copy.xlsx"
+    copy.write_bytes(first.read_bytes())
+    other = changed(copy, change)
+    for old, new in ((first, other), (other, first)):
+        changes, found = compared(old, new)
+        assert found is None
+        assert [(c.of, str(c.cell)) for c in changes] == [
+            (Of.CONTENT, "Criteria!D22"),
+            (Of.CONTENT, "Levels!C12"),
+        ]
+    outcome = run("compare", first, other)
+    assert "not compared: the inputs of the new issue, because " in outcome.out
+
+
 def test_each_change_alone_and_what_they_do_together(tmp_path: Path, first: Path) -> None:
     def change(tables: Tables) -> None:
         tables["level"][0]["weight"] *= 1.5
