@@ -116,14 +116,21 @@ def _overlap(entries: list[zipfile.ZipInfo]) -> str:
 def _contents(archive: zipfile.ZipFile, entries: list[zipfile.ZipInfo]) -> Iterator[str]:
     """Yield what is wrong with the parts, one after the other; counts run over all sheets."""
     names = {entry.filename for entry in entries}
-    counts = dict.fromkeys(_COUNTED, 0)
+    size = sum(entry.file_size for entry in entries)
+    # a list that could not be too long if nothing else were in the file needs no counting
+    counted = {
+        what: (most, elements)
+        for what, (most, elements) in _COUNTED.items()
+        if size // (2 + min(map(len, elements))) > most
+    }
+    counts = dict.fromkeys(counted, 0)
     for entry in entries:
         part, found = _unpacked(archive, entry)
         if found:
             yield found
         if not (entry.filename.lower().endswith(_XML) or _begins_as_xml(part)):
             continue
-        for what, (most, elements) in _COUNTED.items():
+        for what, (most, elements) in counted.items():
             counts[what] += sum(_elements(part, element) for element in elements)
             if counts[what] > most:
                 yield f"the workbook has more than {most:,} {what}"
