@@ -70,7 +70,10 @@ CALLS = {
         ["audit", "{}/good.xlsx", "--report", "{}/a.doc"],
         ["a.doc", ".html"],
     ),
-    "audit: no record": (["audit", "{}/good.xlsx", "--record", "{}/good.toml"], ["record is not JSON"]),
+    "audit: no record": (
+        ["audit", "{}/good.xlsx", "--record", "{}/good.toml"],
+        ["the record", "'title' is unknown"],
+    ),
     "compare: words": (["compare", "{}/good.xlsx", "{}/words.xlsx"], ["words.xlsx", "not a workbook"]),
     "audit: no such file": (["audit", "{}/none.xlsx"], ["no such file"]),
     "inputs: words": (["inputs", "{}/words.xlsx"], ["not a workbook"]),
