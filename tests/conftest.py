@@ -13,8 +13,8 @@ from tests.support import conformance
 from tests.support import office as offices
 from xlbridge.calc import extension
 
-#: imports what only LibreOffice's Python has.
-collect_ignore = ["support/office_jobs.py"]
+#: one imports what only LibreOffice's Python has; the others register operators, once
+collect_ignore = ["support/office_jobs.py", "support/faults"]
 
 
 def demand(reason: str, variable: str) -> None:

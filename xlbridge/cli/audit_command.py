@@ -11,6 +11,7 @@ import click
 
 from xlbridge.audit import acceptance
 from xlbridge.audit.audit import Audit, audit
+from xlbridge.audit.finding import Effect
 from xlbridge.audit.kinds import KINDS, Severity
 from xlbridge.audit.record import Record
 from xlbridge.audit.report import as_json
@@ -133,6 +134,13 @@ def _audit_one(
     return exit_code(outcome)
 
 
+def _moved(effect: Effect) -> str:
+    """What a finding does to one result, in words."""
+    by = "" if effect.per_cent is None else f" ({effect.per_cent:+.2f} %)"
+    unit = "" if effect.unit == "-" else f" {effect.unit}"
+    return f"{effect.headline}: {effect.value:.6g}{unit}, without it {effect.without:.6g}{by}"
+
+
 def exit_code(outcome: Audit) -> int:
     """Return the exit code of one audit."""
     if outcome.count(Severity.ERROR) or outcome.count(Severity.WARNING):
@@ -150,6 +158,7 @@ def lines(outcome: Audit) -> Iterator[str]:
         yield f"{finding.number}  {finding.kind.severity}: {finding.kind.title}"
         yield f"   {', '.join(places[:SHOWN])}{more}"
         yield f"   {finding.words}"
+        yield from (f"   {_moved(effect)}" for effect in finding.effects if effect.change)
         if finding.accepted:
             yield f"   {finding.accepted}"
     for missing in outcome.not_checked[:SHOWN]:

@@ -10,6 +10,7 @@ import pytest
 from openpyxl import Workbook
 
 from tests.support.audited import audited, changed, computed_book
+from tests.support.command import run
 from xlbridge.audit.effects import AT_MOST
 from xlbridge.audit.finding import Effect, Finding
 from xlbridge.headless.compute import compute
@@ -97,3 +98,19 @@ def test_of_very_many_findings_only_the_first_are_weighed(tmp_path: Path) -> Non
     assert sum(bool(f.effects) for f in findings) == AT_MOST
     (said,) = [item for item in outcome.not_checked if "effects" in item.what]
     assert said.because == f"only the first {AT_MOST} are weighed against the headline results"
+
+
+def test_the_command_says_what_a_finding_moves(tmp_path: Path) -> None:
+    path = computed_book(tmp_path)
+
+    def spoil(book: Workbook) -> None:
+        cell = book[SHEET][level_cell(path, "F_x X", 0)]
+        cell.value = f"{cell.value}*1.1"
+
+    outcome = run("audit", changed(path, spoil))
+    assert outcome.code == 1
+    moved = [line for line in outcome.out.splitlines() if "without it" in line]
+    assert len(moved) == 2
+    assert moved[0].startswith("   Overturning at the base, direction X: ")
+    assert " kip-ft, without it " in moved[0]
+    assert moved[0].endswith("%)")
