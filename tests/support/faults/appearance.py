@@ -130,7 +130,7 @@ def failures_marked_as_held(scene: Scene) -> None:
     scene.touch_one_of(CHECKS, f"{CHECKS}!A1:Z999")
 
 
-@fault("structure", missed="conditional formats of the user are not compared")
+@fault("structure", "mark_hides")
 def mark_that_hides(scene: Scene) -> None:
     """A rule of the user's turns a column of results white where a limit is exceeded."""
     cell = scene.pick(scene.numeric(scene.level_rows))

@@ -13,7 +13,6 @@ from xlbridge.headless.references import Cell
 AGAINST = ("input_changed",)
 #: out of the bounds of its quantity
 PHYSICAL = ("implausible_value", "implausible_step", "implausible_order")
-LINKED = "an entry that is a link to the changed one is named as changed too"
 UNREADABLE = ("inputs_unreadable",)
 
 
@@ -160,7 +159,7 @@ def pounds_for_kip(scene: Scene) -> None:
     _all(scene, "weight", 1000)
 
 
-@fault("input", *AGAINST, *PHYSICAL, missed=LINKED)
+@fault("input", *AGAINST, *PHYSICAL)
 def displacements_in_the_large_unit(scene: Scene) -> None:
     """The displacements of one direction are given in m, or in ft."""
     _all(scene, scene.pick(["delta_xe_X", "delta_xe_Y"]), 0.001 if _is_si(scene) else 1 / 12)
@@ -217,7 +216,7 @@ def displacements_upside_down(scene: Scene) -> None:
             _put(scene, cell, scene.value(other))
 
 
-@fault("input", *AGAINST, missed=LINKED)
+@fault("input", *AGAINST)
 def displacements_of_the_other_direction(scene: Scene) -> None:
     """The displacements of X and of Y change columns."""
     for first, second in zip(*(scene.level_entries(f"delta_xe_{d}") for d in "XY"), strict=True):

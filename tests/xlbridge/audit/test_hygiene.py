@@ -9,6 +9,10 @@ import openpyxl
 import pytest
 from openpyxl import Workbook
 from openpyxl.chart import BarChart
+from openpyxl.formatting.rule import FormulaRule, Rule
+from openpyxl.styles import Font, PatternFill
+from openpyxl.styles.differential import DifferentialStyle
+from openpyxl.styles.numbers import NumberFormat
 from openpyxl.utils.datetime import CALENDAR_MAC_1904
 from openpyxl.workbook.defined_name import DefinedName
 
@@ -41,6 +45,11 @@ def freeze(book: Workbook) -> None:
 
 def cover(book: Workbook) -> None:
     book.worksheets[1].add_chart(BarChart(), "A4")
+
+
+def whiten(book: Workbook) -> None:
+    rule = FormulaRule(formula=["D6>0"], font=Font(color="FFFFFFFF"))
+    book.worksheets[1].conditional_formatting.add("D6:D9", rule)
 
 
 def calculate(setting: str, value: object) -> Change:
@@ -78,6 +87,7 @@ PLANTED: dict[str, tuple[Change, str]] = {
     "sheet_hidden": (hide, "Functions"),
     "line_hidden": (hide_row, "Criteria!5:6"),
     "view_blocked": (freeze, "Criteria"),
+    "mark_hides": (whiten, "Criteria!D6:D9"),
     "drawing_over_cells": (cover, "Criteria!A4:"),
     "calculation_manual": (calculate("calcMode", "manual"), "workbook"),
     "iteration_on": (calculate("iterate", True), "workbook"),
@@ -113,6 +123,28 @@ def test_it_is_found_at_its_place(tmp_path: Path, ours: Path, kind: str) -> None
 
 def test_a_clean_workbook_has_none(ours: Path) -> None:
     assert seen(ours) == []
+
+
+@pytest.mark.parametrize(
+    ("look", "hides"),
+    [
+        ({"font": Font(color="FFFFFFFF")}, True),
+        ({"font": Font(color="FFB00020")}, False),
+        ({"font": Font(color="FFFFFFFF"), "fill": PatternFill(bgColor="FF000000")}, False),
+        ({"font": Font(color="FF202020"), "fill": PatternFill(bgColor="FF000000")}, True),
+        ({"numFmt": NumberFormat(numFmtId=170, formatCode=";;;")}, True),
+        ({"numFmt": NumberFormat(numFmtId=170, formatCode="0.0")}, False),
+    ],
+)
+def test_a_mark_hides_only_if_nothing_can_be_read(
+    tmp_path: Path, look: dict[str, object], hides: bool
+) -> None:
+    book = Workbook()
+    book.active["A1"] = 1.0
+    rule = Rule(type="expression", formula=["A1>0"], dxf=DifferentialStyle(**look))  # type: ignore[arg-type]
+    book.active.conditional_formatting.add("A1:A3", rule)
+    book.save(tmp_path / "own.xlsx")
+    assert ([o.kind for o in seen(tmp_path / "own.xlsx")] == ["mark_hides"]) is hides
 
 
 def test_a_filled_column_is_missed_and_an_empty_one_is_not(tmp_path: Path, ours: Path) -> None:

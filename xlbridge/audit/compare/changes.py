@@ -2,8 +2,10 @@
 
 from __future__ import annotations
 
+import re
 from collections.abc import Iterator, Mapping, Sequence
 from dataclasses import dataclass, replace
+from functools import cached_property
 from typing import Any, Final
 
 from xlbridge.audit.align import Alignment, align
@@ -20,6 +22,15 @@ from xlbridge.headless.references import Cell
 FIXED: Final = ("edition", "units")
 #: what is no entry of the calculation
 NO_ENTRIES: Final = ("title", "job", "sources", "source")
+_ROW: Final = re.compile(r"(\w+)\[(\d+)\]")
+
+
+@dataclass(frozen=True, slots=True)
+class Link:
+    """An entry that is a formula, in the earlier issue and in the later one."""
+
+    old: Cell
+    new: Cell
 
 
 @dataclass(frozen=True)
@@ -55,8 +66,32 @@ class Issues:
     def _side(self, subject: Subject, issue: str) -> Side:
         """One issue, with the entries and the rows of tables that :meth:`inputs` speaks of."""
         own = (subject.own if self.readable else None) or OwnTemplate()
-        entered = {cell for path, cell in own.places.items() if path in own.entered or path in FIXED}
+        links = {getattr(link, issue) for link in self._links}
+        entered = {
+            cell
+            for path, cell in own.places.items()
+            if (path in own.entered and cell not in links) or path in FIXED
+        }
         return Side(subject.book, frozenset(entered), frozenset(self._said(own, issue)))
+
+    @cached_property
+    def _links(self) -> frozenset[Link]:
+        """The entries that are formulas in both issues: what they read changed, or the formula did."""
+        mine, theirs = (side.own or OwnTemplate() for side in (self.old, self.new))
+        found = ((mine.places.get(self._entry_before(path)), theirs.places[path]) for path in theirs.entered)
+        return frozenset(
+            Link(old, new)
+            for old, new in found
+            if old and self.old.book.formula(old) and self.new.book.formula(new)
+        )
+
+    def _entry_before(self, path: str) -> str:
+        """The path that an entry had in the earlier issue."""
+        row = _ROW.match(path)
+        if row is None or row[1] not in self.rows:
+            return path
+        before = next((r.old for r in self.rows[row[1]] if r.new == int(row[2]) - 1), None)
+        return "" if before is None else f"{row[1]}[{before + 1}]{path[row.end() :]}"
 
     def _said(self, own: OwnTemplate, issue: str) -> Iterator[Line]:
         for table in own.tables:
@@ -108,7 +143,7 @@ class Issues:
                 yield from self._entries(path, before or {}, after or {})
             elif key in self.rows:
                 yield from self._rows(key, before or [], after or [])
-            elif not same(before, after):
+            elif not same(before, after) and self._place(path) not in {link.new for link in self._links}:
                 yield self._input(path, before, after)
 
     def _rows(self, name: str, old: Sequence[Any], new: Sequence[Any]) -> Iterator[Change]:
@@ -130,7 +165,8 @@ class Issues:
                 yield Change(Of.ROW, path, place, found.old + 1, found.new + 1, words)
             before = old[found.old]
             for key in (key for key in dict.fromkeys((*before, *row)) if key not in NO_ENTRIES):
-                if not same(before.get(key), row.get(key)):
+                linked = self._place(f"{path}.{key}") in {link.new for link in self._links}
+                if not linked and not same(before.get(key), row.get(key)):
                     change = self._input(f"{path}.{key}", before.get(key), row.get(key), found)
                     came_or_went = None in (change.old, change.new)
                     yield replace(change, cause=f"{name} {key}" if came_or_went else "")

@@ -5,11 +5,11 @@ from __future__ import annotations
 from typing import Final
 
 from xlbridge.audit.finding import Checked
-from xlbridge.audit.hygiene import contents, drawings, formulas, seen, settings
+from xlbridge.audit.hygiene import contents, drawings, formulas, marks, seen, settings
 from xlbridge.audit.subject import Subject
 
 METHOD: Final = "hygiene"
-RULES: Final = (settings.check, seen.check, drawings.check, formulas.check, contents.check)
+RULES: Final = (settings.check, seen.check, marks.check, drawings.check, formulas.check, contents.check)
 
 
 def check(subject: Subject) -> Checked:

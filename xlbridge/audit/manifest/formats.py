@@ -79,10 +79,11 @@ def colours(content: Content) -> tuple[str, str]:
     """The colours of a cell's text and of its fill; black on white where they cannot be told."""
     fill = content.fill
     solid = fill is not None and fill.fill_type == "solid"
-    return _rgb(content.font.color, "000000"), _rgb(fill.fgColor, "FFFFFF") if solid else "FFFFFF"
+    return rgb(content.font.color, "000000"), rgb(fill.fgColor, "FFFFFF") if solid else "FFFFFF"
 
 
-def _rgb(colour: Color | None, otherwise: str) -> str:
+def rgb(colour: Color | None, otherwise: str) -> str:
+    """Return a colour as six digits, another where it cannot be told."""
     if colour is None:
         return otherwise
     if colour.type == "rgb" and isinstance(colour.rgb, str):
