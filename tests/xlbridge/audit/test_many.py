@@ -27,6 +27,11 @@ from xlbridge.cli.own_template import own_template
 from xlbridge.headless.evaluate import Evaluator
 
 CLEAN = 5
+#: the command; a process that is started in the background may have been told to ignore interrupts
+HEEDS_INTERRUPTS = (
+    "import signal; signal.signal(signal.SIGINT, signal.default_int_handler); "
+    "from xlbridge.cli import main; main()"
+)
 
 
 @pytest.fixture(scope="module")
@@ -144,7 +149,7 @@ class TestResume:
         data = (folder / "tower-1.xlsx").read_bytes()
         for path in paths:
             path.write_bytes(data)
-        call = [sys.executable, "-m", "xlbridge.cli", "audit", *map(str, paths), "--jobs", "1"]
+        call = [sys.executable, "-c", HEEDS_INTERRUPTS, "audit", *map(str, paths), "--jobs", "1"]
         process = subprocess.Popen(
             [*call, "--resume", str(journal)],
             cwd=ROOT,
