@@ -18,6 +18,7 @@ from typing import Any, Final
 
 from xlbridge.audit.arguments import Given, given
 from xlbridge.audit.finding import Checked, NotChecked, Observation, Place
+from xlbridge.audit.paths import leaves
 from xlbridge.audit.subject import NO_INPUTS, Subject
 from xlbridge.audit.template import OwnTemplate
 
@@ -46,7 +47,10 @@ class _Numbers:
 
     @classmethod
     def of(cls, own: OwnTemplate) -> _Numbers:
-        return cls(own, dict(_leaves("", {**own.inputs, **own.results, "direction": _directions(own)})))
+        found = leaves({**own.inputs, **own.results, "direction": _directions(own)})
+        return cls(
+            own, {p: float(v) for p, v in found if isinstance(v, float | int) and not isinstance(v, bool)}
+        )
 
     @cached_property
     def _by_pattern(self) -> Mapping[str, list[str]]:
@@ -203,17 +207,6 @@ def _slip(rule: Mapping[str, Any], value: float, low: float, high: float) -> str
 def _directions(own: OwnTemplate) -> dict[str, Any]:
     entries, results = own.inputs.get("direction", {}), own.results.get("direction", {})
     return {d: {**entries.get(d, {}), **results.get(d, {})} for d in {*entries, *results}}
-
-
-def _leaves(path: str, value: Any) -> Iterator[tuple[str, float]]:
-    if isinstance(value, Mapping):
-        for key, inner in value.items():
-            yield from _leaves(f"{path}.{key}" if path else key, inner)
-    elif isinstance(value, list):
-        for n, inner in enumerate(value, 1):
-            yield from _leaves(f"{path}[{n}]", inner)
-    elif isinstance(value, float | int) and not isinstance(value, bool):
-        yield path, float(value)
 
 
 _CHECKS: Final = {"range": _range, "ratio": _ratio, "step": _step, "order": _order}

@@ -2,7 +2,6 @@
 
 from __future__ import annotations
 
-import re
 from collections.abc import Iterator, Mapping
 from dataclasses import dataclass
 from typing import Any, Final
@@ -10,6 +9,7 @@ from typing import Any, Final
 from openpyxl.formula.translate import Translator
 
 from xlbridge import work
+from xlbridge.audit.paths import find
 from xlbridge.audit.subject import Subject, Unsolved
 from xlbridge.catalogue import CATALOGUE
 from xlbridge.headless.references import Cell
@@ -18,7 +18,6 @@ from xlbridge.values import CellError, Scalar
 
 #: a place far from every edge: formulas written there are equal where they are copies of each other
 FAR: Final = "AZZ500000"
-_STEP: Final = re.compile(r"(\w+)(?:\[(\d+)\])?")
 
 
 @dataclass(frozen=True, slots=True)
@@ -57,22 +56,6 @@ def works(subject: Subject) -> Iterator[Work]:
         path = paths.get(cell, "")
         yield _work(subject, cell, path, edition, find(model, path), shape not in seen)
         seen.add(shape)
-
-
-def find(results: Mapping[str, Any], path: str) -> Any:
-    """Return a result by its path, ``direction.X.F_x[3]``; nothing where there is none.
-
-    >>> find({"direction": {"X": {"F_x": [1.0, 2.0]}}}, "direction.X.F_x[2]")
-    2.0
-    """
-    found: Any = results
-    for key, place in _STEP.findall(path):
-        if not isinstance(found, Mapping) or key not in found:
-            return None
-        found = found[key]
-        if place:
-            found = found[int(place) - 1] if isinstance(found, list) and len(found) >= int(place) else None
-    return None if isinstance(found, Mapping | list) else found
 
 
 def from_inputs(subject: Subject, cell: Cell) -> Any:

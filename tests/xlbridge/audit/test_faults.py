@@ -71,12 +71,7 @@ def test_the_catalogue_has_every_group_and_names_known_kinds() -> None:
 
 @pytest.mark.parametrize(
     "fault",
-    [
-        pytest.param(
-            f, id=f.name, marks=[pytest.mark.xfail(reason=f.missed, strict=True)] if f.missed else []
-        )
-        for f in FAULTS
-    ],
+    [pytest.param(f, id=f.name, marks=known_miss(f)) for f in FAULTS],
 )
 def test_a_planted_fault_is_found(fault: Fault, folder: Path) -> None:
     for one in planted(fault, folder):

@@ -9,8 +9,9 @@ import pytest
 from openpyxl import Workbook
 
 from tests.support.audited import computed_book
+from xlbridge.audit.paths import find
 from xlbridge.audit.subject import Subject
-from xlbridge.audit.work import find, works
+from xlbridge.audit.work import works
 from xlbridge.cli.own_template import own_template
 from xlbridge.headless.compute import compute_into
 

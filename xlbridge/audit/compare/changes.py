@@ -13,6 +13,7 @@ from xlbridge.audit.compare.cells import Cells, Line, Side
 from xlbridge.audit.compare.change import Change, Of, Result, same, shown
 from xlbridge.audit.compare.rows import RowPair, pair
 from xlbridge.audit.compare.signature import equal_rows
+from xlbridge.audit.paths import leaves
 from xlbridge.audit.subject import Subject
 from xlbridge.audit.template import OwnTemplate, TableRows
 from xlbridge.headless.book import Book
@@ -115,8 +116,8 @@ class Issues:
         """Yield every result of either issue, each with what it was and what it is now."""
         if not (self.comparable and self.old.own and self.new.own):
             return
-        old = {path: value for path, value in _leaves("", self.old.own.results) if value is not None}
-        for path, value in _leaves("", self.new.own.results):
+        old = {path: value for path, value in leaves(self.old.own.results) if value is not None}
+        for path, value in leaves(self.new.own.results):
             before = old.pop(self._path_before(self.new.own, path), None)
             if (before, value) != (None, None):
                 yield Result(path, before, value)
@@ -232,14 +233,3 @@ def _row_pairs(
             if found.old is not None and found.new is not None and table.name in there:
                 row = there[table.name][found.new]
                 yield TableRows(_sheet(mine, table), table.name, table.rows[found.old], (row,))
-
-
-def _leaves(path: str, value: Any) -> Iterator[tuple[str, Any]]:
-    if isinstance(value, Mapping):
-        for key, inner in value.items():
-            yield from _leaves(f"{path}.{key}" if path else key, inner)
-    elif isinstance(value, list):
-        for n, inner in enumerate(value, 1):
-            yield from _leaves(f"{path}[{n}]", inner)
-    else:
-        yield path, value
