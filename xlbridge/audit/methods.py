@@ -16,9 +16,9 @@ Method: TypeAlias = Callable[[Subject], Checked]
 METHODS: Final[tuple[Method, ...]] = (
     cells.check,
     extent.check,
-    model.check,
     map.check,
     manifest.check,
+    model.check,
     hygiene.check,
     columns.check,
     physical.check,
